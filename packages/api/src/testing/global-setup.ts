@@ -1,0 +1,25 @@
+import type { TestProject } from 'vitest/node';
+
+import { openTestCluster } from '../../bin/lib/postgres.mjs';
+import { migrate } from '../db/migrate.ts';
+import { dropLeftovers, ensureTemplate, newRun, templateName, type TestPostgres } from './database.ts';
+
+declare module 'vitest' {
+  export interface ProvidedContext {
+    testPostgres: TestPostgres;
+  }
+}
+
+/**
+ * Once per test run: a throw-away PostgreSQL (that of `npm test`, else one of its own) and in it the
+ * migrated template each test file's database is copied from.
+ * @returns what ends it again
+ */
+export async function setup(project: TestProject): Promise<() => Promise<void>> {
+  const given = Number(process.env.DRIPRAIL_TEST_PG_PORT);
+  const cluster = given ? { port: given, close: () => Promise.resolve() } : await openTestCluster();
+  await dropLeftovers(cluster.port);
+  await ensureTemplate(cluster.port, templateName(), ({ ownerUrl }) => migrate(ownerUrl, 'driprail_app'));
+  project.provide('testPostgres', { port: cluster.port, run: newRun() });
+  return cluster.close;
+}
