@@ -1,0 +1,222 @@
+/**
+ * What the pay engine takes and gives. Amounts are integer US cents, rates and percents decimal strings,
+ * hours exact fractions written as "n/d" or "n", instants ISO 8601 UTC strings, dates "YYYY-MM-DD" in the company's zone.
+ */
+
+/** All kinds are worked time but a meal break that is long enough and free of duty. */
+export type ClockKind = 'job' | 'travel' | 'waiting' | 'shop' | 'training' | 'rest_break' | 'meal_break';
+
+export interface PayEntry {
+  id: string;
+  kind: ClockKind;
+  visitId: string | null;
+  startedAt: string;
+  /** null while the person is still on the clock: an error to settle before "checked". */
+  endedAt: string | null;
+  /** A meal break during which the person had to work counts as worked. */
+  interrupted: boolean;
+}
+
+export type RateKind = 'hourly' | 'commission_percent' | 'flat_service';
+
+/** One dated rate. The most exact one that has started applies: person and service, person, company and service, company. */
+export interface DatedRate {
+  id: string;
+  kind: RateKind;
+  personId: string | null;
+  serviceId: string | null;
+  /** Only for hourly rates: a kind of work paid at its own rate. */
+  clockKind: ClockKind | null;
+  /** Dollars an hour, percent (6 is 6 %), or dollars a finished line; a decimal string. */
+  value: string;
+  startsOn: string;
+}
+
+export type CrewSplit = 'equal' | 'weights' | 'minutes';
+
+export interface CrewShare {
+  personId: string;
+  /** Crew order settles ties of a cent. */
+  position: number;
+  weight: number;
+  isTrainee: boolean;
+  /** Whole minutes on this visit, for the split by minutes. */
+  minutes: number;
+}
+
+/** A finished job line on a done or part-done visit. */
+export interface DoneLine {
+  lineId: string;
+  jobId: string;
+  jobNumber: number;
+  visitId: string;
+  serviceId: string;
+  serviceName: string;
+  customerName: string;
+  /** After discounts, before tax, tips and deposits. */
+  commissionableCents: number;
+  doneAt: string;
+  crew: CrewShare[];
+}
+
+export interface PayTip {
+  id: string;
+  jobId: string;
+  jobNumber: number;
+  amountCents: number;
+  method: 'card' | 'cash' | 'invoice';
+  receivedAt: string;
+  /** Cash kept on the spot: shown, adds nothing to what is to be paid. */
+  alreadyReceived: boolean;
+  /** Only people who may share tips, in crew order. */
+  crew: CrewShare[];
+}
+
+export type AdjustmentKind =
+  | 'bonus' // promised or measured: inside the regular rate (29 CFR 778.208-.211)
+  | 'discretionary_bonus' // 29 CFR 778.211: outside
+  | 'reimbursement' // 29 CFR 778.217: outside
+  | 'paid_time_off' // 29 CFR 778.218: outside
+  | 'deduction' // negative; never below the minimum wage or into overtime (29 CFR 531.35, .37)
+  | 'correction'; // names a line of a locked week: outside this week's regular rate
+
+export interface PayAdjustment {
+  id: string;
+  personId: string;
+  kind: AdjustmentKind;
+  /** Signed. */
+  amountCents: number;
+  reason: string;
+  correctsLineId: string | null;
+}
+
+export interface PayPerson {
+  id: string;
+  name: string;
+}
+
+export interface PayRules {
+  /** Key into the overtime rule sets, `us_federal` to begin with. */
+  overtimeRuleSet: string;
+  /** Dollars an hour. */
+  minimumWage: string;
+  crewSplit: CrewSplit;
+  /** A meal break at least this long, free of duty, is not worked (29 CFR 785.19). */
+  mealBreakMinutes: number;
+}
+
+export interface PayWeekInput {
+  startsAt: string;
+  endsAt: string;
+  zone: string;
+  rules: PayRules;
+  people: PayPerson[];
+  entries: (PayEntry & { personId: string })[];
+  rates: DatedRate[];
+  doneLines: DoneLine[];
+  tips: PayTip[];
+  adjustments: PayAdjustment[];
+  /** The instant that open entries are measured to, for a draft of the running week. */
+  asOf: string;
+}
+
+export type PayLineKind =
+  | 'hourly'
+  | 'flat'
+  | 'commission'
+  | 'overtime_premium'
+  | 'minimum_wage_make_up'
+  | 'tip'
+  | 'tip_already_received'
+  | AdjustmentKind;
+
+/** One step of how an amount was worked, in the order a person would do it by hand. */
+export interface WorkingStep {
+  label: string;
+  /** Plain words for where it comes from: a rule, a dated rate, a list of days. */
+  note: string;
+  /** The arithmetic as read: "42.25 h × 19.50". */
+  arithmetic: string;
+  result: string;
+  sources: SourceRef[];
+}
+
+export interface SourceRef {
+  kind: 'clock_entry' | 'job' | 'visit' | 'rate' | 'rule' | 'tip' | 'adjustment' | 'pay_line';
+  id: string;
+  label: string;
+}
+
+export interface PayLine {
+  /** Stable within a computation: "hourly:<rateId>:<kind>", "commission:<lineId>" ... */
+  key: string;
+  personId: string;
+  kind: PayLineKind;
+  label: string;
+  /** Company-zone date of the work, where one line has one date. */
+  workedOn: string | null;
+  /** Exact hours as a fraction, where the line is paid by time. */
+  hours: string | null;
+  /** Dollars an hour or percent, decimal or "n/d" for the exact regular rate. */
+  rate: string | null;
+  amountCents: number;
+  /** False for what is shown but not handed over again (cash tips already received). */
+  isPayable: boolean;
+  inRegularRate: boolean;
+  jobId: string | null;
+  jobNumber: number | null;
+  visitId: string | null;
+  correctsLineId: string | null;
+  working: WorkingStep[];
+  /** The law or house rule, in words: "29 CFR 778.110(b)". */
+  rule: string;
+}
+
+export type PayWarningCode =
+  | 'open_entry'
+  | 'overlapping_entries'
+  | 'short_meal_break'
+  | 'done_without_clock'
+  | 'no_hourly_rate'
+  | 'under_minimum_wage'
+  | 'deduction_refused';
+
+export interface PayWarning {
+  code: PayWarningCode;
+  personId: string;
+  /** Blocks "checked" until settled. */
+  isBlocking: boolean;
+  message: string;
+  entryId: string | null;
+  jobId: string | null;
+}
+
+export interface PersonWeek {
+  personId: string;
+  name: string;
+  /** Exact worked hours per company-zone day, "YYYY-MM-DD" to fraction. */
+  hoursByDay: Record<string, string>;
+  hoursWorked: string;
+  overtimeHours: string;
+  /** Exact quotient in dollars an hour, null without hours. */
+  regularRate: string | null;
+  lines: PayLine[];
+  warnings: PayWarning[];
+  /** Sums of payable lines by group, cents. */
+  totals: {
+    hourly: number;
+    flat: number;
+    commission: number;
+    overtimePremium: number;
+    makeUp: number;
+    tips: number;
+    tipsAlreadyReceived: number;
+    adjustments: number;
+    gross: number;
+  };
+}
+
+export interface PayWeekResult {
+  engineVersion: string;
+  people: PersonWeek[];
+}

@@ -1,0 +1,63 @@
+import type { DoneLine, PayAdjustment, PayEntry, PayTip, PayWeekInput } from './pay-week.types.ts';
+import { entrySpan, secondsOf, type WeekGrid } from './work-spans.ts';
+
+/** One person's part of the week's input, in an order that does not depend on the order it came in. */
+export interface PersonInput {
+  entries: PayEntry[];
+  doneLines: DoneLine[];
+  tips: PayTip[];
+  adjustments: PayAdjustment[];
+}
+
+/**
+ * Sorts the week's input by person once, so that a week's cost grows with its people and not with their square.
+ * Entries that do not touch the week and lines done outside it fall away: commission lands in the workweek of Done.
+ */
+export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: string) => PersonInput {
+  const groups = new Map<string, PersonInput>();
+  const of = (personId: string): PersonInput => {
+    const group = groups.get(personId) ?? { entries: [], doneLines: [], tips: [], adjustments: [] };
+    groups.set(personId, group);
+    return group;
+  };
+  for (const entry of [...input.entries].sort(
+    by(
+      (item) => item.startedAt,
+      (item) => item.id,
+    ),
+  )) {
+    const { from, to } = entrySpan(entry, grid);
+    if (from < grid.to && (to > grid.from || from >= grid.from)) of(entry.personId).entries.push(entry);
+  }
+  for (const line of [...input.doneLines].sort(
+    by(
+      (item) => item.doneAt,
+      (item) => item.lineId,
+    ),
+  )) {
+    const done = secondsOf(line.doneAt);
+    if (done >= grid.from && done < grid.to) for (const personId of crewOf(line)) of(personId).doneLines.push(line);
+  }
+  for (const tip of [...input.tips].sort(
+    by(
+      (item) => item.receivedAt,
+      (item) => item.id,
+    ),
+  )) {
+    for (const personId of crewOf(tip)) of(personId).tips.push(tip);
+  }
+  for (const item of [...input.adjustments].sort(by((adjustment) => adjustment.id)))
+    of(item.personId).adjustments.push(item);
+  return of;
+}
+
+function crewOf({ crew }: Pick<DoneLine, 'crew'>): Set<string> {
+  return new Set(crew.map((member) => member.personId));
+}
+
+function by<T>(...keys: ((item: T) => string)[]): (a: T, b: T) => number {
+  return (a, b) => {
+    for (const key of keys) if (key(a) !== key(b)) return key(a) < key(b) ? -1 : 1;
+    return 0;
+  };
+}

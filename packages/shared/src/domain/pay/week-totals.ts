@@ -1,0 +1,27 @@
+import type { PayLine, PayLineKind, PersonWeek } from './pay-week.types.ts';
+import { totalCents } from './pay-line.ts';
+
+const ADJUSTMENTS: readonly PayLineKind[] = [
+  'bonus',
+  'discretionary_bonus',
+  'reimbursement',
+  'paid_time_off',
+  'deduction',
+  'correction',
+];
+
+/** Integer cents by group. Payable lines add up to the gross, always. */
+export function weekTotals(lines: readonly PayLine[]): PersonWeek['totals'] {
+  const of = (...kinds: PayLineKind[]): number => totalCents(lines.filter((line) => kinds.includes(line.kind)));
+  return {
+    hourly: of('hourly'),
+    flat: of('flat'),
+    commission: of('commission'),
+    overtimePremium: of('overtime_premium'),
+    makeUp: of('minimum_wage_make_up'),
+    tips: of('tip'),
+    tipsAlreadyReceived: of('tip_already_received'),
+    adjustments: of(...ADJUSTMENTS),
+    gross: totalCents(lines.filter((line) => line.isPayable)),
+  };
+}
