@@ -26,7 +26,11 @@ export async function startServer(server, lastPort) {
     dropStalePidFile(server.data);
     const from = logSize(server.log);
     const child = launch(server, port);
-    if (await becomesReady(server.data, child)) return { port, child };
+    const ready = await becomesReady(server.data, child).catch((error) => {
+      child.kill('SIGINT'); // Nobody would end it later.
+      throw error;
+    });
+    if (ready) return { port, child };
     const words = readFileSync(server.log, 'utf8').slice(from);
     // A killed server's workers take a moment to notice; a port may have been taken meanwhile.
     const passing = /shared memory block|still in use|already in use|could not bind/i.test(words);

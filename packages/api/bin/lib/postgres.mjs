@@ -50,7 +50,14 @@ async function open({ folder, durable }) {
       await starting(port);
     });
 
-  const port = await withLock(lock, async () => {
+  const close = () => {
+    closing = true;
+    return withLock(lock, async () => {
+      rmSync(me, { force: true });
+      if (!others(join(folder, 'users'))) await stopServer(place.data);
+    });
+  };
+  const opening = withLock(lock, async () => {
     mkdirSync(join(folder, 'users'), { recursive: true });
     if (!existsSync(join(place.data, 'PG_VERSION'))) {
       say('Making the database (some seconds, once).');
@@ -59,17 +66,14 @@ async function open({ folder, durable }) {
     writeFileSync(me, '');
     return (await waitForRunning(place.data)) ?? starting(readPort(portFile));
   });
-
+  const port = await opening.catch(async (error) => {
+    await close().catch(() => {}); // The first failure is the one to tell.
+    throw error;
+  });
   return {
     port,
     urls: { app: url('app', place.passwords, port), owner: url('owner', place.passwords, port) },
-    close: () => {
-      closing = true;
-      return withLock(lock, async () => {
-        rmSync(me, { force: true });
-        if (!others(join(folder, 'users'))) await stopServer(place.data);
-      });
-    },
+    close,
   };
 }
 

@@ -22,6 +22,8 @@ const byCode = {
   ENOSPC: 'The disk is full. Free some space and start again; nothing that was saved is lost.',
   EDQUOT: 'This user’s disk quota is used up. Free some space and start again.',
   EROFS: 'The folder is on a read-only disk. Set DRIPRAIL_DATA to a folder that can be written.',
+  EADDRINUSE:
+    'The port has just been taken by another program: stop it, or choose another one with PORT=4601 npm start.',
   EMFILE: 'Too many files are open. Raise the limit (ulimit -n) and start again.',
 };
 
@@ -32,13 +34,13 @@ const byCode = {
  */
 export function sentenceFor(error) {
   if (error instanceof PlainError || error instanceof Stopped) return error.message;
-  const { code, path, message } = /** @type {NodeJS.ErrnoException} */ (error ?? {});
+  const { code, path, message, log } = /** @type {NodeJS.ErrnoException & { log?: string }} */ (error ?? {});
   if (code && byCode[code]) return byCode[code];
   if (code === 'EACCES' || code === 'EPERM') {
     return `This user may not use ${path ?? 'a file Driprail needs'}. Start Driprail as the user who owns it, or set DRIPRAIL_DATA to another folder.`;
   }
   const first = String(message ?? error).split('\n')[0];
-  return `Something unexpected went wrong: ${first} (DRIPRAIL_DEBUG=1 shows where).`;
+  return `Something unexpected went wrong: ${first} (${log ? `details are in ${log}` : 'DRIPRAIL_DEBUG=1 shows where'}).`;
 }
 
 /** True when a program's own words mean that the disk is full. */

@@ -1,0 +1,55 @@
+// npm start: everything from a bare checkout to a running Driprail.
+import { switches } from './lib/arguments.mjs';
+import { apiBundle, buildApi, buildWeb, webDist } from './lib/build.mjs';
+import { openDatabase } from './lib/database.mjs';
+import { dataFolder } from './lib/paths.mjs';
+import { portFrom, requirePort } from './lib/ports.mjs';
+import { continueUnlessStopped, stopOnSignals } from './lib/run.mjs';
+import { serve } from './lib/serve.mjs';
+import { command, PlainError, say } from './lib/words.mjs';
+
+let server;
+let stopping = false;
+
+await command(async () => {
+  stopOnSignals(() => {
+    stopping = true;
+    server?.stop();
+  });
+  const { empty, demo } = switches(process.argv.slice(2), ['empty', 'demo']);
+  if (empty && demo) throw new PlainError('Choose --empty or --demo, not both.');
+  const host = process.env.HOST || '127.0.0.1';
+  const port = portFrom(process.env.PORT, 4600);
+  await requirePort(port, host);
+
+  const database = await openDatabase();
+  try {
+    await buildWeb();
+    await buildApi();
+    continueUnlessStopped();
+    // Known passwords belong only where nobody else can come in.
+    const withDemo = demo || (!empty && database.isPrivate && isLoopback(host));
+    server = serve({
+      entry: apiBundle,
+      env: {
+        DATABASE_URL: database.urls.app,
+        DATABASE_MIGRATION_URL: database.urls.owner,
+        PORT: String(port),
+        HOST: host,
+        DRIPRAIL_DATA: dataFolder(),
+        DRIPRAIL_DEMO: withDemo ? '1' : '0',
+        DRIPRAIL_WEB_DIST: webDist,
+        NODE_ENV: process.env.NODE_ENV || 'production',
+      },
+    });
+    const code = await server.exit;
+    if (stopping) say('Driprail has stopped.');
+    return stopping ? 0 : code;
+  } finally {
+    await database.close();
+  }
+});
+
+function isLoopback(host) {
+  return host === 'localhost' || host === '::1' || /^127(\.\d{1,3}){3}$/.test(host);
+}
