@@ -24,7 +24,7 @@ export async function ensureInstalled({ quiet = false, root: base = root } = {})
       tell('Installing the pinned packages (about a minute the first time).');
       rmSync(stampFile(base), { force: true });
       await pnpmInstall(base, quiet);
-      writeFileSync(stampFile(base), wantedStamp(base));
+      markInstalled(base);
     },
     () => tell('Another command is installing the packages; waiting for it.'),
   );
@@ -69,6 +69,11 @@ export function isCurrent(base = root) {
     if (error.code === 'ENOENT') return false;
     throw error;
   }
+}
+
+/** Notes that node_modules fits the lock and the package files as they are now. */
+export function markInstalled(base = root) {
+  writeFileSync(stampFile(base), wantedStamp(base));
 }
 
 function wantedStamp(base) {

@@ -1,5 +1,6 @@
 import { spawn } from 'node:child_process';
 
+import { root } from './paths.mjs';
 import { Stopped } from './words.mjs';
 
 /** @typedef {{ code: number, output: string }} Ended exit code (128 when a signal ended it) and what was printed */
@@ -9,32 +10,58 @@ const running = new Map();
 let stoppedBy;
 
 /**
- * Runs a program to its end. What it prints goes to stderr (unless `quiet`) and is kept as well, so
- * that a failure can be turned into a sentence. Each program has a process group of its own: Ctrl-C
- * in the terminal reaches only this process, which passes it on - but not to a program run with
- * `finish`, such as a package installation that must not stop half-way.
+ * Runs a program to its end. What it prints is passed on and kept as well, so that a failure can be
+ * turned into a sentence. Each program has a process group of its own: Ctrl-C in the terminal reaches
+ * only this process, which passes it on - but not to a program run with `finish`, such as a package
+ * installation that must not stop half-way.
  * @param {string} program
  * @param {string[]} args
- * @param {{ quiet?: boolean, finish?: boolean, input?: string, cwd?: string, env?: NodeJS.ProcessEnv, uid?: number, gid?: number }} [options]
+ * @param {{ quiet?: boolean, finish?: boolean, input?: string, to?: NodeJS.WriteStream, cwd?: string, env?: NodeJS.ProcessEnv, uid?: number, gid?: number }} [options]
+ *   `to` gets what is printed, by default stderr; `quiet` passes nothing on
  * @returns {Promise<Ended>}
  */
 export async function run(program, args, options = {}) {
-  const { quiet = false, finish = false, input, ...spawnOptions } = options;
-  if (stoppedBy) throw new Stopped(stoppedBy);
-  const child = spawn(program, args, { ...spawnOptions, detached: true, stdio: ['pipe', 'pipe', 'pipe'] });
-  running.set(child, finish);
+  const { quiet = false, finish = false, input = '', to = process.stderr, ...spawnOptions } = options;
+  const child = start(program, args, { ...spawnOptions, stdio: 'pipe' }, finish);
   child.stdin.on('error', () => {}); // The program may end before it has read everything.
-  child.stdin.end(input ?? '');
+  child.stdin.end(input);
   let output = '';
   for (const stream of [child.stdout, child.stderr]) {
     stream.setEncoding('utf8').on('data', (text) => {
       output = (output + text).slice(-100_000);
-      if (!quiet) process.stderr.write(text);
+      if (!quiet) to.write(text);
     });
   }
-  const code = await ended(child).finally(() => running.delete(child));
+  const code = await ended(child);
   if (stoppedBy) throw new Stopped(stoppedBy);
   return { code, output };
+}
+
+/**
+ * Runs one of the project's TypeScript programs as if it were this command: its output is this one's.
+ * @param {string} file path from the checkout's top
+ * @param {string[]} args
+ * @param {NodeJS.ProcessEnv} [env] added to this process's
+ * @returns {Promise<number>} its exit code
+ */
+export async function runProgram(file, args, env = {}) {
+  const all = ['--import', 'tsx', file, ...args];
+  const child = start(process.execPath, all, {
+    cwd: root,
+    env: { ...process.env, ...env },
+    stdio: ['ignore', 'inherit', 'inherit'],
+  });
+  const code = await ended(child);
+  if (stoppedBy) throw new Stopped(stoppedBy);
+  return code;
+}
+
+function start(program, args, options, finish = false) {
+  if (stoppedBy) throw new Stopped(stoppedBy);
+  const child = spawn(program, args, { ...options, detached: true });
+  running.set(child, finish);
+  for (const event of ['error', 'close']) child.once(event, () => running.delete(child));
+  return child;
 }
 
 /**
@@ -57,6 +84,15 @@ export function signalGroup(child, signal) {
   }
 }
 
+/** Asks every program started here to end, except those that must finish; insists after ten seconds. */
+export function endRunning() {
+  const endable = [...running].filter(([, finish]) => !finish).map(([child]) => child);
+  for (const child of endable) signalGroup(child, 'SIGTERM');
+  setTimeout(() => {
+    for (const child of endable) if (running.has(child)) signalGroup(child, 'SIGKILL');
+  }, 10_000).unref();
+}
+
 /**
  * From now on SIGINT, SIGTERM and SIGHUP stop the step at work and make `run` throw `Stopped`.
  * @param {(signal: NodeJS.Signals) => void} [onStop] called at each such signal
@@ -65,7 +101,7 @@ export function stopOnSignals(onStop) {
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
     process.on(signal, () => {
       stoppedBy ??= signal;
-      for (const [child, finish] of running) if (!finish) signalGroup(child, 'SIGTERM');
+      endRunning();
       onStop?.(signal);
     });
   }

@@ -5,6 +5,7 @@ import pg from 'pg';
 
 import { isRunning, ownIdentity } from '../../bin/lib/process-identity.mjs';
 import { filesBelow, hashFiles } from '../../bin/lib/source-hash.mjs';
+import { migrate } from '../db/migrate.ts';
 
 const { Client, escapeIdentifier } = pg;
 const packages = fileURLToPath(new URL('../../../', import.meta.url));
@@ -20,6 +21,16 @@ export interface TestDatabase {
   name: string;
   appUrl: string;
   ownerUrl: string;
+}
+
+/**
+ * The throw-away cluster for programs outside Vitest, such as the one that takes the pictures.
+ * @throws Error when it was not started by its npm command
+ */
+export function testPostgresFromEnvironment(): TestPostgres {
+  const port = Number(process.env.DRIPRAIL_TEST_PG_PORT);
+  if (!port) throw new Error('DRIPRAIL_TEST_PG_PORT is not set: start this with its npm command.');
+  return { port, run: newRun() };
 }
 
 /** A name for this test run that tells later runs whether it is still going on. */
@@ -62,6 +73,11 @@ export async function ensureTemplate(
     // Whoever still hangs on it would make every copy fail.
     await client.query('SELECT pg_terminate_backend(pid) FROM pg_stat_activity WHERE datname = $1', [name]);
   });
+}
+
+/** Makes the migrated, empty template unless it is there. */
+export function ensureMigratedTemplate(port: number): Promise<void> {
+  return ensureTemplate(port, templateName(), ({ ownerUrl }) => migrate(ownerUrl, 'driprail_app'));
 }
 
 /** The migrated, empty template's name: another schema is another template. */

@@ -1,8 +1,7 @@
 import type { TestProject } from 'vitest/node';
 
 import { openTestCluster } from '../../bin/lib/postgres.mjs';
-import { migrate } from '../db/migrate.ts';
-import { dropLeftovers, ensureTemplate, newRun, templateName, type TestPostgres } from './database.ts';
+import { dropLeftovers, ensureMigratedTemplate, newRun, type TestPostgres } from './database.ts';
 
 declare module 'vitest' {
   export interface ProvidedContext {
@@ -19,7 +18,7 @@ export async function setup(project: TestProject): Promise<() => Promise<void>> 
   const given = Number(process.env.DRIPRAIL_TEST_PG_PORT);
   const cluster = given ? { port: given, close: () => Promise.resolve() } : await openTestCluster();
   await dropLeftovers(cluster.port);
-  await ensureTemplate(cluster.port, templateName(), ({ ownerUrl }) => migrate(ownerUrl, 'driprail_app'));
+  await ensureMigratedTemplate(cluster.port);
   project.provide('testPostgres', { port: cluster.port, run: newRun() });
   return cluster.close;
 }

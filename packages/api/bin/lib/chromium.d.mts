@@ -1,0 +1,1 @@
+export function ensureChromium(): Promise<string>;
