@@ -23,9 +23,14 @@ export function buildWeb() {
   return unlessBuilt({ folder: web, result: join(webDist, 'index.html'), sources, what: 'the web app' }, async () => {
     const vite = join(web, 'node_modules/vite/bin/vite.js');
     const env = { ...process.env, NODE_ENV: 'production' };
-    const { code, output } = await run(process.execPath, [vite, 'build', '--logLevel', 'warn'], { cwd: web, env });
+    const { code, output } = await run(process.execPath, [vite, 'build', '--logLevel', 'warn'], {
+      cwd: web,
+      env,
+      show: 'beat',
+    });
     if (code === 0) return;
     if (meansFullDisk(output)) throw new PlainError('The disk is full: the web app could not be built.');
+    process.stderr.write(output);
     throw new PlainError('The web app could not be built; the reason stands above.');
   });
 }

@@ -45,7 +45,7 @@ export async function runChecks() {
 async function firstProblem(programs) {
   const problems = [];
   for (const program of programs) {
-    const { code, output } = await run(process.execPath, program, { cwd: root, quiet: true });
+    const { code, output } = await run(process.execPath, program, { cwd: root, show: 'nothing' });
     if (code !== 0) problems.push(output.endsWith('\n') ? output : `${output}\n`);
   }
   return problems.length ? problems.join('') : undefined;

@@ -30,15 +30,15 @@ export async function makeCluster({ bin, data, user, durable, passwords }) {
   try {
     const common = ['-D', fresh, '-U', 'postgres', '--encoding=UTF8', '--locale=C.UTF-8', '--no-instructions'];
     await need(
-      run(join(bin, 'initdb'), [...common, ...access, ...(durable ? [] : ['--no-sync'])], { ...user, quiet: true }),
+      run(join(bin, 'initdb'), [...common, ...access, ...(durable ? [] : ['--no-sync'])], { ...user, show: 'nothing' }),
     );
     // Single-user mode speaks to the files themselves: no port, no password, no client program.
     const single = ['--single', '-D', fresh, '-c', 'exit_on_error=on', ...(durable ? [] : ['-F']), 'postgres'];
-    await need(run(join(bin, 'postgres'), single, { ...user, quiet: true, input: rolesAndDatabase(passwords) }));
+    await need(run(join(bin, 'postgres'), single, { ...user, show: 'nothing', input: rolesAndDatabase(passwords) }));
+    renameSync(fresh, data);
   } finally {
-    rmSync(passwordFile, { force: true });
+    for (const path of [fresh, passwordFile]) rmSync(path, { recursive: true, force: true });
   }
-  renameSync(fresh, data);
 }
 
 function own(path, { uid, gid }) {

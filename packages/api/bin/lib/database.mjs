@@ -1,6 +1,7 @@
 import { givenDatabase, requireAnswer } from './given-database.mjs';
 import { ensureInstalled } from './install.mjs';
 import { openPrivateCluster } from './postgres.mjs';
+import { endRunning } from './run.mjs';
 
 /**
  * Installs the packages and opens the company's database: the server DATABASE_URL names, else the
@@ -15,7 +16,11 @@ export async function openDatabase() {
     return { urls, isPrivate: false, close: () => Promise.resolve() };
   }
   // Both take a while the first time, on different things: packages wait for the network, PostgreSQL for the disk.
-  const [cluster, installed] = await Promise.allSettled([openPrivateCluster(), ensureInstalled()]);
+  const opening = openPrivateCluster().catch((error) => {
+    endRunning(); // Without a database the packages are of no use: the sentence need not wait for them.
+    throw error;
+  });
+  const [cluster, installed] = await Promise.allSettled([opening, ensureInstalled()]);
   if (cluster.status === 'rejected') throw cluster.reason;
   if (installed.status === 'fulfilled') return { ...cluster.value, isPrivate: true };
   await cluster.value.close();

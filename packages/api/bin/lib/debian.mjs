@@ -42,7 +42,10 @@ export async function installPackages({ packages, what, instead, before = ':', a
     async () => {
       // Without "set -e" an old or incomplete package list would stop what the cache could still give.
       const script = `apt-get update -q; ${before} && apt-get install -q -y --no-install-recommends ${packages.join(' ')}; code=$?; ${after}; exit $code`;
-      const { code, output } = await run(asRoot[0], [...asRoot.slice(1), 'sh', '-c', script], { finish: true });
+      const { code, output } = await run(asRoot[0], [...asRoot.slice(1), 'sh', '-c', script], {
+        finish: true,
+        show: 'beat',
+      });
       if (code === 0) return;
       if (meansFullDisk(output))
         throw new PlainError(`The disk is full: ${what} could not be installed. Free some space and try again.`);

@@ -31,13 +31,23 @@ export async function ensureInstalled({ quiet = false, root: base = root } = {})
 }
 
 async function pnpmInstall(base, quiet) {
-  const args = ['-y', pinnedPnpm(base), 'install', '--frozen-lockfile', '--prefer-offline', '--prod=false'];
+  const args = [
+    '-y',
+    pinnedPnpm(base),
+    'install',
+    '--frozen-lockfile',
+    '--prefer-offline',
+    '--prod=false',
+    '--reporter=append-only',
+  ];
   // CI: pnpm asks nothing. NODE_ENV=production would leave out the tools the build needs.
   const env = { ...process.env, CI: 'true', NODE_ENV: 'development' };
-  const { code, output } = await run('npx', args, { cwd: base, env, quiet }).catch((error) => {
-    if (error.code !== 'ENOENT') throw error;
-    throw new PlainError('The program npx was not found. Install npm 10 or newer, which brings it.');
-  });
+  const { code, output } = await run('npx', args, { cwd: base, env, show: quiet ? 'nothing' : 'beat' }).catch(
+    (error) => {
+      if (error.code !== 'ENOENT') throw error;
+      throw new PlainError('The program npx was not found. Install npm 10 or newer, which brings it.');
+    },
+  );
   if (code === 0) return;
   if (meansFullDisk(output))
     throw new PlainError('The disk is full: the packages could not be installed. Free about 1 GB and try again.');

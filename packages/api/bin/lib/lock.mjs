@@ -31,8 +31,8 @@ export async function withLock(file, body, onWait) {
 /** The file appears whole or not at all (a link to a finished one), so nobody reads half a name. */
 function take(file) {
   const mine = `${file}.${process.pid}`;
-  writeFileSync(mine, ownIdentity());
   try {
+    writeFileSync(mine, ownIdentity());
     linkSync(mine, file);
     return true;
   } catch (error) {

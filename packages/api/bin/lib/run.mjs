@@ -16,12 +16,12 @@ let stoppedBy;
  * installation that must not stop half-way.
  * @param {string} program
  * @param {string[]} args
- * @param {{ quiet?: boolean, finish?: boolean, input?: string, to?: NodeJS.WriteStream, cwd?: string, env?: NodeJS.ProcessEnv, uid?: number, gid?: number }} [options]
- *   `to` gets what is printed, by default stderr; `quiet` passes nothing on
+ * @param {{ show?: 'all' | 'beat' | 'nothing', finish?: boolean, input?: string, to?: NodeJS.WriteStream, cwd?: string, env?: NodeJS.ProcessEnv, uid?: number, gid?: number }} [options]
+ *   `show: 'beat'` tells its last line every five seconds; `to` gets what is shown, by default stderr
  * @returns {Promise<Ended>}
  */
 export async function run(program, args, options = {}) {
-  const { quiet = false, finish = false, input = '', to = process.stderr, ...spawnOptions } = options;
+  const { show = 'all', finish = false, input = '', to = process.stderr, ...spawnOptions } = options;
   const child = start(program, args, { ...spawnOptions, stdio: 'pipe' }, finish);
   child.stdin.on('error', () => {}); // The program may end before it has read everything.
   child.stdin.end(input);
@@ -29,12 +29,26 @@ export async function run(program, args, options = {}) {
   for (const stream of [child.stdout, child.stderr]) {
     stream.setEncoding('utf8').on('data', (text) => {
       output = (output + text).slice(-100_000);
-      if (!quiet) to.write(text);
+      if (show === 'all') to.write(text);
     });
   }
-  const code = await ended(child);
+  const beat = show === 'beat' ? tellNowAndThen(() => output, to) : undefined;
+  const code = await ended(child).finally(() => clearInterval(beat));
   if (stoppedBy) throw new Stopped(stoppedBy);
   return { code, output };
+}
+
+function tellNowAndThen(output, to) {
+  const started = Date.now();
+  return setInterval(() => {
+    const last = output()
+      .trimEnd()
+      .split(/[\r\n]+/)
+      .at(-1)
+      .trim()
+      .slice(0, 100);
+    to.write(`  ${Math.round((Date.now() - started) / 1000)} s  ${last}\n`);
+  }, 5000);
 }
 
 /**

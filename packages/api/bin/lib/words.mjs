@@ -45,7 +45,7 @@ export function sentenceFor(error) {
 
 /** True when a program's own words mean that the disk is full. */
 export function meansFullDisk(output) {
-  return /ENOSPC|No space left on device|disk quota exceeded/i.test(output);
+  return /ENOSPC|No space left on device|disk quota exceeded|wrote only \d+ of \d+ bytes/i.test(output);
 }
 
 /**
