@@ -22,7 +22,7 @@ export async function runVitest(project, filters, env) {
     ...(filters.length ? ['--passWithNoTests', ...filters] : []),
   ];
   try {
-    const colour = process.stdout.isTTY ? { FORCE_COLOR: '1' } : {};
+    const colour = process.stdout.isTTY ? { FORCE_COLOR: '1' } : { NO_COLOR: '1' };
     const childEnv = { ...process.env, ...colour, ...env };
     // Tests have databases of their own, whatever server the person uses.
     delete childEnv.DATABASE_URL;
