@@ -1,3 +1,4 @@
+import { isOffDuty } from './breaks.ts';
 import type { PayEntry } from './pay-week.types.ts';
 import { entrySpan, type CountedSpan, type WeekGrid } from './work-spans.ts';
 
@@ -20,7 +21,7 @@ export function countEntries(entries: readonly PayEntry[], grid: WeekGrid, mealB
   for (const entry of entries) {
     const span = entrySpan(entry, grid);
     const joined = lengths.get(entry);
-    if (joined !== undefined && joined >= mealBreakMinutes * 60) continue;
+    if (joined !== undefined && isOffDuty(joined, true, mealBreakMinutes)) continue;
     if (joined !== undefined && entry.endedAt !== null && span.to > grid.from && span.from < grid.to)
       shortMeals.push(entry);
     counted.push({ entryId: entry.id, kind: entry.kind, ...span });

@@ -97,6 +97,26 @@ export const OVERTIME_RULE_SETS: readonly OvertimeRuleSet[] = [
     source: 'KRS 337.050',
     certainty: 'from memory',
   },
+  {
+    ...weekly,
+    key: 'us_pr',
+    jurisdiction: 'US-PR',
+    name: 'Puerto Rico: over 8 hours a day, 40 a week',
+    effectiveFrom: null,
+    dailyHours: '8',
+    source: 'Local law',
+    certainty: 'from memory',
+  },
+  {
+    ...weekly,
+    key: 'us_vi',
+    jurisdiction: 'US-VI',
+    name: 'US Virgin Islands: over 8 hours a day, 40 a week',
+    effectiveFrom: null,
+    dailyHours: '8',
+    source: 'Local law',
+    certainty: 'from memory',
+  },
 ];
 
 /** The rule set a company's setting names. @throws {RangeError} for an unknown key. */
