@@ -19,20 +19,20 @@ await command(async () => {
   const wanted = only ? [only] : parts;
 
   // What may be missing on this machine is fetched before anything long begins.
-  const chromium = wanted.includes('browser') ? await ensureChromium() : undefined;
   const needsDatabase = wanted.includes('api') || wanted.includes('browser');
-  const cluster = needsDatabase ? await openTestCluster() : undefined;
+  const [chromium, cluster] = await Promise.all([
+    wanted.includes('browser') ? outcome(ensureChromium()) : undefined,
+    needsDatabase ? outcome(openTestCluster()) : undefined,
+    ensureInstalled(),
+  ]);
   try {
-    await ensureInstalled();
-    const env = {
-      ...(cluster && { DRIPRAIL_TEST_PG_PORT: String(cluster.port) }),
-      ...(chromium && { CHROMIUM: chromium, DRIPRAIL_API_ENTRY: apiBundle }),
-    };
+    const database = () => ({ DRIPRAIL_TEST_PG_PORT: String(cluster.value().port) });
     const run = {
       checks: runChecks,
-      unit: () => runVitest('unit', filters, env),
-      api: () => runVitest('api', filters, env),
+      unit: () => runVitest('unit', filters, {}),
+      api: async () => runVitest('api', filters, database()),
       browser: async () => {
+        const env = { ...database(), CHROMIUM: chromium.value(), DRIPRAIL_API_ENTRY: apiBundle };
         await buildWeb();
         await buildApi();
         return runVitest('browser', filters, env);
@@ -52,6 +52,20 @@ await command(async () => {
     throw error;
   }
 });
+
+/** Keeps a sentence about something missing for the parts that need it; the others can do without. */
+async function outcome(promise) {
+  try {
+    const got = await promise;
+    return { value: () => got, close: () => got.close() };
+  } catch (error) {
+    if (!(error instanceof PlainError)) throw error;
+    const value = () => {
+      throw error;
+    };
+    return { value, close: () => Promise.resolve() };
+  }
+}
 
 /** A part that cannot run is one failure; the others still get their turn. */
 function asFailure(error) {

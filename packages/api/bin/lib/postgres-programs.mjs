@@ -10,11 +10,12 @@ const oldestMajor = 15;
 
 /**
  * Finds PostgreSQL's server programs, installing Debian's package when there are none.
+ * @param {string} instead what a person can do who may not install, for the sentence
  * @param {number} [major] only this release will do (a data folder belongs to one)
  * @returns {Promise<{ bin: string, major: number }>} the folder that holds initdb and postgres
  * @throws {PlainError}
  */
-export async function postgresPrograms(major) {
+export async function postgresPrograms(instead, major) {
   const found = find(major);
   if (found) return found;
   if (major) {
@@ -25,16 +26,14 @@ export async function postgresPrograms(major) {
   await installPackages({
     packages: ['postgresql'],
     what: `PostgreSQL ${oldestMajor} or newer`,
-    instead: 'set DATABASE_URL to a PostgreSQL server that runs already',
+    instead,
     // Or Debian would make and start a cluster of its own, on the usual port.
     before: `mkdir -p ${dirname(noMainCluster)} && echo 'create_main_cluster = false' > ${noMainCluster}`,
     after: `rm -f ${noMainCluster}`,
   });
   const installed = find();
   if (!installed)
-    throw new PlainError(
-      `The distribution brings no PostgreSQL ${oldestMajor} or newer: install one, or set DATABASE_URL.`,
-    );
+    throw new PlainError(`The distribution brings no PostgreSQL ${oldestMajor} or newer: install one, or ${instead}.`);
   return installed;
 }
 

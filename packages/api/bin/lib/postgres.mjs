@@ -79,20 +79,16 @@ async function open({ folder, durable }) {
 
 async function prepare(folder, durable) {
   mkdirSync(folder, { recursive: true });
-  const user = await userOnceInstalled();
-  if (user.uid !== undefined) chmodSync(folder, 0o711); // The server's user walks through, and reads nothing here.
+  const instead = durable ? 'set DATABASE_URL to a server that runs already' : 'run the tests where it is installed';
+  const newest = await postgresPrograms(instead);
+  const user = serverUser(); // Looked for only now: the package makes the user `postgres`.
+  if (user.uid !== undefined) chmodSync(folder, 0o711); // That user walks through, and reads nothing here.
   const data = dataPlace(folder, user);
   const versionFile = join(data, 'PG_VERSION');
   const made = existsSync(versionFile);
-  const { bin } = await postgresPrograms(made ? Number(readFileSync(versionFile, 'utf8')) : undefined);
+  const { bin } = made ? await postgresPrograms(instead, Number(readFileSync(versionFile, 'utf8'))) : newest;
   const passwords = durable ? clusterPasswords(join(folder, 'passwords.json'), made) : undefined;
   return { bin, data, user, durable, passwords, log: join(folder, 'server.log') };
-}
-
-/** The package makes the user `postgres`, so it is looked for first. */
-async function userOnceInstalled() {
-  await postgresPrograms();
-  return serverUser();
 }
 
 /** Whether another command still uses the server; names of killed ones are cleared away. */
