@@ -2,6 +2,7 @@
 import { switches } from './lib/arguments.mjs';
 import { apiBundle, buildApi, buildWeb, webDist } from './lib/build.mjs';
 import { openDatabase } from './lib/database.mjs';
+import { wantsDemo } from './lib/demo.mjs';
 import { dataFolder } from './lib/paths.mjs';
 import { portFrom, requirePort } from './lib/ports.mjs';
 import { continueUnlessStopped, stopOnSignals } from './lib/run.mjs';
@@ -27,8 +28,6 @@ await command(async () => {
     await buildWeb();
     await buildApi();
     continueUnlessStopped();
-    // Known passwords belong only where nobody else can come in.
-    const withDemo = demo || (!empty && database.isPrivate && isLoopback(host));
     server = serve({
       entry: apiBundle,
       env: {
@@ -37,7 +36,7 @@ await command(async () => {
         PORT: String(port),
         HOST: host,
         DRIPRAIL_DATA: dataFolder(),
-        DRIPRAIL_DEMO: withDemo ? '1' : '0',
+        DRIPRAIL_DEMO: wantsDemo({ demo, empty, host, isPrivate: database.isPrivate }) ? '1' : '0',
         DRIPRAIL_WEB_DIST: webDist,
         NODE_ENV: process.env.NODE_ENV || 'production',
       },
@@ -49,7 +48,3 @@ await command(async () => {
     await database.close();
   }
 });
-
-function isLoopback(host) {
-  return host === 'localhost' || host === '::1' || /^127(\.\d{1,3}){3}$/.test(host);
-}

@@ -13,6 +13,7 @@ import { meansFullDisk, PlainError, say } from './words.mjs';
  * @throws {PlainError} when the packages cannot be fetched or written
  */
 export async function ensureInstalled({ quiet = false, root: base = root } = {}) {
+  requireNode(process.versions.node);
   const modules = join(base, 'node_modules');
   if (isCurrent(base)) return;
   mkdirSync(modules, { recursive: true });
@@ -28,6 +29,16 @@ export async function ensureInstalled({ quiet = false, root: base = root } = {})
     },
     () => tell('Another command is installing the packages; waiting for it.'),
   );
+}
+
+/**
+ * @param {string} version of Node.js, such as `20.19.0`
+ * @throws {PlainError} when it is older than package.json's `engines` asks for
+ */
+export function requireNode(version) {
+  const [major, minor] = version.split('.').map(Number);
+  if (major > 20 || (major === 20 && minor >= 19)) return;
+  throw new PlainError(`This is Node.js ${version}; Driprail needs 20.19 or newer.`);
 }
 
 async function pnpmInstall(base, quiet) {

@@ -4,7 +4,7 @@ import { join } from 'node:path';
 
 import { afterEach, beforeEach, describe, expect, it } from 'vitest';
 
-import { isCurrent, markInstalled, pinnedPnpm } from './install.mjs';
+import { isCurrent, markInstalled, pinnedPnpm, requireNode } from './install.mjs';
 
 let base;
 const write = (name, text) => writeFileSync(join(base, name), text);
@@ -46,5 +46,15 @@ describe('the installation', () => {
     markInstalled(base);
     rmSync(join(base, 'node_modules'), { recursive: true });
     expect(isCurrent(base)).toBe(false);
+  });
+});
+
+describe('Node.js', () => {
+  it.each(['20.19.0', '20.20.2', '22.1.0'])('may be %s', (version) => {
+    expect(() => requireNode(version)).not.toThrow();
+  });
+
+  it.each(['20.18.3', '18.20.0'])('may not be %s', (version) => {
+    expect(() => requireNode(version)).toThrow('20.19 or newer');
   });
 });
