@@ -1,0 +1,27 @@
+import { DataTypes, Model } from 'sequelize';
+import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+
+export class Customer extends Model<InferAttributes<Customer>, InferCreationAttributes<Customer>> {
+  declare id: string;
+  declare name: string;
+  declare isCompany: CreationOptional<boolean>;
+  declare phone: CreationOptional<string>;
+  declare email: CreationOptional<string>;
+  declare notes: CreationOptional<string>;
+  declare version: CreationOptional<number>;
+}
+
+export function initCustomer(sequelize: Sequelize): void {
+  Customer.init(
+    {
+      id: { type: DataTypes.UUID, primaryKey: true },
+      name: { type: DataTypes.TEXT, allowNull: false },
+      isCompany: { type: DataTypes.BOOLEAN },
+      phone: { type: DataTypes.TEXT },
+      email: { type: DataTypes.TEXT },
+      notes: { type: DataTypes.TEXT },
+      version: { type: DataTypes.INTEGER },
+    },
+    { sequelize, modelName: 'Customer', tableName: 'customers', underscored: true, timestamps: false },
+  );
+}

@@ -1,0 +1,32 @@
+import { DataTypes, Model } from 'sequelize';
+import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { CrewSplit } from '@driprail/shared/domain/pay/pay-week.types';
+
+export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreationAttributes<PayRuleSet>> {
+  declare id: string;
+  declare startsOn: string;
+  declare overtimeRuleSet: string;
+  declare minimumWage: string;
+  declare crewSplit: CrewSplit;
+  declare mealBreakMinutes: CreationOptional<number>;
+  declare workweekStartsOn: number;
+  declare workweekStartsAt: CreationOptional<string>;
+  declare setBy: CreationOptional<string | null>;
+}
+
+export function initPayRuleSet(sequelize: Sequelize): void {
+  PayRuleSet.init(
+    {
+      id: { type: DataTypes.UUID, primaryKey: true },
+      startsOn: { type: DataTypes.DATEONLY, allowNull: false },
+      overtimeRuleSet: { type: DataTypes.TEXT, allowNull: false },
+      minimumWage: { type: DataTypes.DECIMAL(14, 6), allowNull: false },
+      crewSplit: { type: DataTypes.TEXT, allowNull: false },
+      mealBreakMinutes: { type: DataTypes.INTEGER },
+      workweekStartsOn: { type: DataTypes.INTEGER, allowNull: false },
+      workweekStartsAt: { type: DataTypes.TEXT },
+      setBy: { type: DataTypes.UUID, allowNull: true },
+    },
+    { sequelize, modelName: 'PayRuleSet', tableName: 'pay_rules', underscored: true, timestamps: false },
+  );
+}

@@ -1,0 +1,32 @@
+import { DataTypes, Model } from 'sequelize';
+import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { SizeClass } from '@driprail/shared/contracts/fields';
+
+export class Vehicle extends Model<InferAttributes<Vehicle>, InferCreationAttributes<Vehicle>> {
+  declare id: string;
+  declare customerId: string;
+  declare label: string;
+  declare color: CreationOptional<string>;
+  declare plate: CreationOptional<string>;
+  declare sizeClass: SizeClass;
+  declare notes: CreationOptional<string>;
+  declare position: CreationOptional<number>;
+  declare isActive: CreationOptional<boolean>;
+}
+
+export function initVehicle(sequelize: Sequelize): void {
+  Vehicle.init(
+    {
+      id: { type: DataTypes.UUID, primaryKey: true },
+      customerId: { type: DataTypes.UUID, allowNull: false },
+      label: { type: DataTypes.TEXT, allowNull: false },
+      color: { type: DataTypes.TEXT },
+      plate: { type: DataTypes.TEXT },
+      sizeClass: { type: DataTypes.TEXT, allowNull: false },
+      notes: { type: DataTypes.TEXT },
+      position: { type: DataTypes.INTEGER },
+      isActive: { type: DataTypes.BOOLEAN },
+    },
+    { sequelize, modelName: 'Vehicle', tableName: 'vehicles', underscored: true, timestamps: false },
+  );
+}

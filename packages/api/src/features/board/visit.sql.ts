@@ -1,0 +1,38 @@
+/** The columns of a visit as the board shows it, from `visits v`; built in the database, checked by the contract. */
+const iso = (expression: string) => `to_json(${expression}) #>> '{}'`;
+
+export const visitJson = `json_build_object(
+  'id', v.id, 'jobId', v.job_id, 'jobNumber', j.number, 'part', v.part,
+  'parts', (SELECT count(*) FROM visits other WHERE other.job_id = v.job_id),
+  'stopId', v.stop_id, 'vanId', v.van_id, 'from', ${iso('lower(v.planned)')}, 'to', ${iso('upper(v.planned)')},
+  'minutes', v.minutes, 'progress', v.progress, 'since', ${iso('v.progress_since')}, 'reason', v.reason,
+  'planVersion', v.plan_version, 'version', v.version,
+  'customerId', c.id, 'customerName', c.name, 'phone', c.phone,
+  'addressId', a.id, 'address', concat_ws(', ', a.line, nullif(a.city, '')), 'area', a.area, 'lat', a.lat, 'lng', a.lng,
+  'hasGateCode', a.gate_code <> '', 'hasWater', a.has_water, 'hasPower', a.has_power,
+  'windowFrom', ${iso('j.window_from')}, 'windowTo', ${iso('j.window_to')}, 'notes', j.notes,
+  'lines', lines.list, 'skills', needs.skills, 'equipment', needs.equipment,
+  'crew', coalesce(worked.list, riding.list, '[]'::json), 'accepted', v.accepted
+)`;
+
+export const visitFrom = `visits v
+  JOIN jobs j ON j.id = v.job_id JOIN customers c ON c.id = j.customer_id JOIN addresses a ON a.id = j.address_id
+  CROSS JOIN LATERAL (
+    SELECT coalesce(json_agg(json_build_object('id', l.id, 'serviceId', s.id, 'serviceName', s.name, 'vehicleId', l.vehicle_id,
+             'vehicle', concat_ws(' ', nullif(w.color, ''), w.label), 'sizeClass', l.size_class, 'minutes', l.minutes,
+             'priceCents', l.price_cents, 'isFinished', l.finished_at IS NOT NULL) ORDER BY l.position), '[]'::json) AS list
+      FROM visit_lines vl JOIN job_lines l ON l.id = vl.job_line_id JOIN services s ON s.id = l.service_id
+      LEFT JOIN vehicles w ON w.id = l.vehicle_id
+     WHERE vl.visit_id = v.id) lines
+  CROSS JOIN LATERAL (
+    SELECT coalesce(json_agg(DISTINCT need.name) FILTER (WHERE need.kind = 'skill'), '[]'::json) AS skills,
+           coalesce(json_agg(DISTINCT need.name) FILTER (WHERE need.kind = 'tool'), '[]'::json) AS equipment
+      FROM visit_lines vl JOIN job_lines l ON l.id = vl.job_line_id JOIN services s ON s.id = l.service_id
+      CROSS JOIN LATERAL (SELECT 'skill' AS kind, unnest(s.skills) AS name UNION ALL SELECT 'tool', unnest(s.equipment)) need
+     WHERE vl.visit_id = v.id AND l.finished_at IS NULL) needs
+  LEFT JOIN LATERAL (
+    SELECT json_agg(json_build_object('personId', p.id, 'name', p.name) ORDER BY vc.position) AS list
+      FROM visit_crew vc JOIN people p ON p.id = vc.person_id WHERE vc.visit_id = v.id) worked ON true
+  LEFT JOIN LATERAL (
+    SELECT json_agg(json_build_object('personId', p.id, 'name', p.name) ORDER BY r.position) AS list
+      FROM van_crew r JOIN people p ON p.id = r.person_id WHERE r.van_id = v.van_id AND r.span && v.planned) riding ON true`;

@@ -1,0 +1,27 @@
+import * as api from '@driprail/shared/contracts/jobs.contract';
+import { notFound } from '../../http/errors.ts';
+import type { RouteTable } from '../../http/route.ts';
+import { okay, route } from '../../http/route.ts';
+import { findJobs, readJob } from './jobs.queries.ts';
+import { addVisit, callOffJob, copyJob, createJob, updateJob } from './jobs.service.ts';
+import { recordTip } from './tips.service.ts';
+
+export function jobsRoutes(table: RouteTable): void {
+  route(table, api.findJobs, async ({ query }) => ({ jobs: await findJobs(query.find) }));
+  route(table, api.getJob, async ({ params }) => {
+    const job = await readJob(params.id);
+    if (!job) throw notFound('That job');
+    return { job };
+  });
+  route(table, api.createJob, async ({ body }, ctx) => ({ job: await createJob(ctx, body) }));
+  route(table, api.updateJob, async ({ params, body }, ctx) => ({ job: await updateJob(ctx, params.id, body) }));
+  route(table, api.copyJob, async ({ params }, ctx) => ({ job: await copyJob(ctx, params.id) }));
+  route(table, api.callOffJob, async ({ params, body }, ctx) => ({
+    job: await callOffJob(ctx, params.id, body.version, body.reason),
+  }));
+  route(table, api.addVisit, async ({ params, body }, ctx) => ({ job: await addVisit(ctx, params.id, body) }));
+  route(table, api.recordTip, async ({ params, body }, ctx) => {
+    await recordTip(ctx, params.id, body);
+    return okay;
+  });
+}

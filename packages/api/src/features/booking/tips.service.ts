@@ -1,0 +1,44 @@
+import { v7 as uuid } from 'uuid';
+import { tag } from '@driprail/shared/authz/ability';
+import { authorize } from '../../authz/authorize.ts';
+import { audit } from '../../db/audit.ts';
+import { Job, Tip } from '../../db/models/index.ts';
+import { select } from '../../db/sequelize.ts';
+import type { Ctx } from '../../http/context.ts';
+import { notFound, unprocessable } from '../../http/errors.ts';
+import { takeOnce } from '../../http/once.ts';
+import { hintAfterCommit } from '../../realtime/hints.ts';
+
+export interface TipFields {
+  key: string;
+  amountCents: number;
+  method: 'card' | 'cash' | 'invoice';
+  alreadyReceived: boolean;
+}
+
+/** Records a tip once; it belongs to the crew of the job's visits. */
+export async function recordTip(ctx: Ctx, jobId: string, tip: TipFields): Promise<void> {
+  if (tip.alreadyReceived && tip.method !== 'cash')
+    throw unprocessable('not_cash', 'Only cash can be kept on the spot.');
+  await takeOnce(ctx, tip.key, { jobId, ...tip }, async (tx) => {
+    const job = await Job.findByPk(jobId, { transaction: tx });
+    const crew = await select<{ personId: string }>(
+      `SELECT DISTINCT vc.person_id AS "personId" FROM visit_crew vc JOIN visits v ON v.id = vc.visit_id WHERE v.job_id = :jobId`,
+      { jobId },
+      tx,
+    );
+    const crewPersonIds = crew.map((member) => member.personId);
+    const subject = tag('Job', { id: jobId, crewPersonIds });
+    if (!job || (ctx.actor.role === 'technician' && ctx.ability.cannot('tip', subject))) throw notFound('That job');
+    authorize(ctx.ability, 'tip', subject);
+    const { key: _key, ...fields } = tip;
+    const id = uuid();
+    await Tip.create({ id, jobId, ...fields, receivedAt: ctx.now(), userId: ctx.actor.userId }, { transaction: tx });
+    await audit(tx, { userId: ctx.actor.userId, at: ctx.now() }, 'tip', id, 'recorded', {
+      jobNumber: job.number,
+      ...fields,
+    });
+    hintAfterCommit(tx, ['desk', { personIds: crewPersonIds }], 'job', jobId, job.version);
+    return { answer: { ok: true } };
+  });
+}

@@ -1,0 +1,79 @@
+import { v7 as uuid } from 'uuid';
+import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
+import type { AdjustmentKind } from '@driprail/shared/domain/pay/pay-week.types';
+import { audit } from '../../db/audit.ts';
+import { PayAdjustment, PayLineRow, PayWeek, Person } from '../../db/models/index.ts';
+import { inTransaction } from '../../db/sequelize.ts';
+import type { Ctx } from '../../http/context.ts';
+import { notFound, unprocessable } from '../../http/errors.ts';
+import { hintAfterCommit } from '../../realtime/hints.ts';
+import { readPayWeek } from './pay-week.queries.ts';
+import { weekOf } from './weeks.service.ts';
+
+export interface AdjustmentFields {
+  personId: string;
+  kind: AdjustmentKind;
+  amountCents: number;
+  reason: string;
+  correctsLineId: string | null;
+}
+
+/** Adds an amount with its reason to an open week; what was checked must be checked again. */
+export function addAdjustment({ actor, now }: Ctx, day: string, fields: AdjustmentFields): Promise<PayWeekDto> {
+  return inTransaction(async (tx) => {
+    const found = await weekOf(day, tx);
+    const week = await PayWeek.findByPk(found.id, { transaction: tx, lock: tx.LOCK.UPDATE, rejectOnEmpty: true });
+    refuseLocked(week);
+    if (!(await Person.findByPk(fields.personId, { transaction: tx }))) throw notFound('That person');
+    if (fields.correctsLineId) await refuseForeignLine(fields, week.id, tx);
+    const row = await PayAdjustment.create(
+      { id: uuid(), payWeekId: week.id, ...fields, userId: actor.userId, at: now() },
+      { transaction: tx },
+    );
+    await week.update(
+      { state: 'draft', checkedAt: null, checkedBy: null, version: week.version + 1 },
+      { transaction: tx },
+    );
+    await audit(tx, { userId: actor.userId, at: now() }, 'pay_adjustment', row.id, 'added', {
+      ...fields,
+      week: week.startsOn,
+    });
+    hintAfterCommit(tx, ['owners'], 'pay', week.id, week.version);
+    return readPayWeek(week, now(), tx);
+  });
+}
+
+export function removeAdjustment({ actor, now }: Ctx, id: string): Promise<void> {
+  return inTransaction(async (tx) => {
+    const row = await PayAdjustment.findByPk(id, { transaction: tx });
+    if (!row) throw notFound('That adjustment');
+    const week = await PayWeek.findByPk(row.payWeekId, { transaction: tx, lock: tx.LOCK.UPDATE, rejectOnEmpty: true });
+    refuseLocked(week);
+    await row.destroy({ transaction: tx });
+    await week.update(
+      { state: 'draft', checkedAt: null, checkedBy: null, version: week.version + 1 },
+      { transaction: tx },
+    );
+    await audit(tx, { userId: actor.userId, at: now() }, 'pay_adjustment', id, 'removed', {
+      amountCents: row.amountCents,
+      reason: row.reason,
+    });
+    hintAfterCommit(tx, ['owners'], 'pay', week.id, week.version);
+  });
+}
+
+function refuseLocked(week: PayWeek): void {
+  if (week.state === 'locked')
+    throw unprocessable('locked_week', 'A locked week never changes. Add a correction to an open week.');
+}
+
+async function refuseForeignLine(
+  { correctsLineId, personId }: AdjustmentFields,
+  weekId: string,
+  tx: import('sequelize').Transaction,
+): Promise<void> {
+  const line = await PayLineRow.findByPk(correctsLineId ?? '', { transaction: tx });
+  if (line?.personId === personId && line.payWeekId !== weekId) return;
+  const message = 'Choose a line of this person in a locked week.';
+  throw unprocessable('foreign_line', message, { fields: { correctsLineId: message } });
+}

@@ -1,0 +1,3 @@
+export { payRoutes } from './pay.routes.ts';
+export { addRate, addRules } from './rates.service.ts';
+export { setWeekState } from './lock.service.ts';

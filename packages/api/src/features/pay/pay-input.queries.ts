@@ -1,0 +1,102 @@
+import type { Transaction } from 'sequelize';
+import { splitByLargestRemainder } from '@driprail/shared/domain/money/largest-remainder';
+import { exact } from '@driprail/shared/domain/money/exact';
+import type { CrewShare, DoneLine, PayWeekInput } from '@driprail/shared/domain/pay/pay-week.types';
+import { companyOf } from '../../db/company.ts';
+import type { PayWeek } from '../../db/models/index.ts';
+import { select } from '../../db/sequelize.ts';
+import { rulesOn } from './weeks.service.ts';
+
+interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
+  priceCents: number;
+  jobPrices: { lineId: string; priceCents: number }[];
+  discountCents: number;
+  crew: CrewShare[];
+}
+
+type Gathered = Pick<PayWeekInput, 'people' | 'entries' | 'rates' | 'tips' | 'adjustments'> & { lines: GatheredLine[] };
+
+const crewJson = `json_build_object('personId', vc.person_id, 'position', vc.position, 'weight', vc.weight, 'isTrainee', vc.is_trainee,
+  'minutes', coalesce((SELECT floor(sum(extract(epoch FROM e.ended_at - e.started_at)) / 60)::int FROM clock_entries e
+     WHERE e.visit_id = vc.visit_id AND e.person_id = vc.person_id AND e.kind = 'job'), 0))`;
+
+/** Everything that a week is paid from, in one statement; shares rest on who worked the visit. */
+const gatherSql = `
+WITH entry AS (
+  SELECT e.* FROM clock_entries e WHERE e.started_at < :endsAt AND coalesce(e.ended_at, :asOf::timestamptz) > :startsAt
+), line AS (
+  SELECT l.* FROM job_lines l WHERE l.finished_at >= :startsAt AND l.finished_at < :endsAt
+), tip AS (
+  SELECT t.* FROM tips t WHERE t.received_at >= :startsAt AND t.received_at < :endsAt
+), paid AS (
+  SELECT person_id FROM entry UNION SELECT vc.person_id FROM visit_crew vc JOIN line l ON l.finished_visit_id = vc.visit_id
+  UNION SELECT vc.person_id FROM visit_crew vc JOIN visits v ON v.id = vc.visit_id JOIN tip t ON t.job_id = v.job_id
+  UNION SELECT person_id FROM pay_adjustments WHERE pay_week_id = :weekId
+)
+SELECT json_build_object(
+  'people', coalesce((SELECT json_agg(json_build_object('id', p.id, 'name', p.name) ORDER BY p.name, p.id)
+     FROM people p WHERE p.id IN (SELECT person_id FROM paid)), '[]'::json),
+  'entries', coalesce((SELECT json_agg(json_build_object('id', e.id, 'personId', e.person_id, 'kind', e.kind, 'visitId', e.visit_id,
+      'startedAt', to_json(e.started_at) #>> '{}', 'endedAt', to_json(e.ended_at) #>> '{}', 'interrupted', e.is_interrupted)
+      ORDER BY e.started_at, e.id) FROM entry e), '[]'::json),
+  'rates', coalesce((SELECT json_agg(json_build_object('id', r.id, 'kind', r.kind, 'personId', r.person_id, 'serviceId', r.service_id,
+      'clockKind', r.clock_kind, 'value', r.value::text, 'startsOn', r.starts_on) ORDER BY r.starts_on, r.id) FROM pay_rates r), '[]'::json),
+  'lines', coalesce((SELECT json_agg(json_build_object('lineId', l.id, 'jobId', j.id, 'jobNumber', j.number, 'visitId', l.finished_visit_id,
+      'serviceId', s.id, 'serviceName', s.name, 'customerName', c.name, 'priceCents', l.price_cents, 'discountCents', j.discount_cents,
+      'jobPrices', (SELECT json_agg(json_build_object('lineId', o.id, 'priceCents', o.price_cents) ORDER BY o.position, o.id)
+         FROM job_lines o WHERE o.job_id = j.id),
+      'doneAt', to_json(l.finished_at) #>> '{}',
+      'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position) FROM visit_crew vc WHERE vc.visit_id = l.finished_visit_id), '[]'::json))
+      ORDER BY l.finished_at, j.number, l.position)
+     FROM line l JOIN jobs j ON j.id = l.job_id JOIN services s ON s.id = l.service_id JOIN customers c ON c.id = j.customer_id), '[]'::json),
+  'tips', coalesce((SELECT json_agg(json_build_object('id', t.id, 'jobId', j.id, 'jobNumber', j.number, 'amountCents', t.amount_cents,
+      'method', t.method, 'receivedAt', to_json(t.received_at) #>> '{}', 'alreadyReceived', t.already_received,
+      'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position)
+         FROM (SELECT DISTINCT ON (vc.person_id) vc.* FROM visit_crew vc JOIN visits v ON v.id = vc.visit_id WHERE v.job_id = t.job_id
+                ORDER BY vc.person_id, v.part) vc
+        WHERE coalesce((SELECT st.shares_tips FROM tip_standings st WHERE st.person_id = vc.person_id
+                AND st.starts_on <= (t.received_at AT TIME ZONE :zone)::date ORDER BY st.starts_on DESC LIMIT 1), true)), '[]'::json))
+      ORDER BY t.received_at, t.id) FROM tip t JOIN jobs j ON j.id = t.job_id), '[]'::json),
+  'adjustments', coalesce((SELECT json_agg(json_build_object('id', x.id, 'personId', x.person_id, 'kind', x.kind,
+      'amountCents', x.amount_cents, 'reason', x.reason, 'correctsLineId', x.corrects_line_id) ORDER BY x.at, x.id)
+     FROM pay_adjustments x WHERE x.pay_week_id = :weekId), '[]'::json)
+) AS gathered`;
+
+/** The engine's input for a week as the records stand at `asOf`. */
+export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): Promise<PayWeekInput> {
+  const { zone } = await companyOf(tx);
+  const rules = await rulesOn(week.startsOn, tx);
+  const startsAt = week.startsAt.toISOString();
+  const endsAt = week.endsAt.toISOString();
+  const [row] = await select<{ gathered: Gathered }>(
+    gatherSql,
+    { weekId: week.id, startsAt, endsAt, asOf: asOf.toISOString(), zone },
+    tx,
+  );
+  if (!row) throw new Error('a pay week gathers one row');
+  const { lines, ...gathered } = row.gathered;
+  return {
+    startsAt,
+    endsAt,
+    zone,
+    rules: {
+      overtimeRuleSet: rules.overtimeRuleSet,
+      minimumWage: rules.minimumWage,
+      crewSplit: rules.crewSplit,
+      mealBreakMinutes: rules.mealBreakMinutes ?? 30,
+    },
+    ...gathered,
+    doneLines: lines.map(toDoneLine),
+    asOf: asOf.toISOString(),
+  };
+}
+
+/** A discount lowers each line of the job by its share of the price, to the cent. */
+function toDoneLine({ priceCents, jobPrices, discountCents, ...line }: GatheredLine): DoneLine {
+  const shares = splitByLargestRemainder(
+    discountCents,
+    jobPrices.map((other) => exact(other.priceCents)),
+  );
+  const own = shares[jobPrices.findIndex((other) => other.lineId === line.lineId)] ?? 0;
+  return { ...line, commissionableCents: priceCents - own };
+}

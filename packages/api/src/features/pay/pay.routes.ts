@@ -1,0 +1,47 @@
+import * as api from '@driprail/shared/contracts/pay.contract';
+import { todayOf } from '../../db/company.ts';
+import { PayWeek } from '../../db/models/index.ts';
+import { inTransaction } from '../../db/sequelize.ts';
+import type { RouteTable } from '../../http/route.ts';
+import { okay, route } from '../../http/route.ts';
+import { addAdjustment, removeAdjustment } from './adjustments.service.ts';
+import { payWeekCsv } from './export.ts';
+import { setWeekState } from './lock.service.ts';
+import { listWeekFigures, readPayWeek } from './pay-week.queries.ts';
+import { addRate, addRules, listRates, listRules } from './rates.service.ts';
+import { listStatements, readStatement } from './statements.queries.ts';
+import { headOf, weekOf } from './weeks.service.ts';
+
+export function payRoutes(table: RouteTable): void {
+  const read = (day: string, now: Date) => inTransaction(async (tx) => readPayWeek(await weekOf(day, tx), now, tx));
+
+  route(table, api.listRates, async () => ({ rates: await listRates() }));
+  route(table, api.addRate, async ({ body }, ctx) => ({ rate: await addRate(ctx, body) }));
+  route(table, api.listPayRules, async () => ({ rules: await listRules() }));
+  route(table, api.addPayRules, async ({ body }, ctx) => ({ rules: await addRules(ctx, body) }));
+  route(table, api.listPayWeeks, async (_input, { now }) => {
+    await inTransaction(async (tx) => weekOf(await todayOf(now(), tx), tx));
+    const figures = await listWeekFigures();
+    const weeks = await PayWeek.findAll({ where: { id: figures.map((f) => f.id) }, order: [['startsOn', 'DESC']] });
+    return {
+      weeks: await Promise.all(
+        weeks.map(async (week) => {
+          const { grossCents = null, salesCents = 0 } = figures.find((f) => f.id === week.id) ?? {};
+          return { ...(await headOf(week)), grossCents, salesCents };
+        }),
+      ),
+    };
+  });
+  route(table, api.getPayWeek, ({ params }, { now }) => read(params.startsOn, now()));
+  route(table, api.setPayWeekState, ({ params, body }, ctx) =>
+    setWeekState(ctx, params.startsOn, body.to, body.version),
+  );
+  route(table, api.addAdjustment, ({ params, body }, ctx) => addAdjustment(ctx, params.startsOn, body));
+  route(table, api.removeAdjustment, async ({ params }, ctx) => {
+    await removeAdjustment(ctx, params.id);
+    return okay;
+  });
+  route(table, api.exportPayWeek, async ({ params }, { now }) => payWeekCsv(await read(params.startsOn, now())));
+  route(table, api.listStatements, async (_input, ctx) => ({ statements: await listStatements(ctx) }));
+  route(table, api.getStatement, ({ params }, ctx) => readStatement(ctx, params.startsOn, params.personId));
+}

@@ -1,0 +1,2 @@
+export { runSheetRoutes } from './run-sheet.routes.ts';
+export { actOnVisit } from './visit-actions.service.ts';

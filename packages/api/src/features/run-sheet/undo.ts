@@ -1,0 +1,56 @@
+import type { Transaction } from 'sequelize';
+import { v7 as uuid } from 'uuid';
+import { progressActions } from '@driprail/shared/domain/board/progress';
+import type { StampedTimes } from '@driprail/shared/domain/time/device';
+import type { Visit } from '../../db/models/index.ts';
+import { VisitEvent } from '../../db/models/index.ts';
+import type { Ctx } from '../../http/context.ts';
+import { clearCrew, takeFinishBack } from './visit-steps.ts';
+
+/** Takes the last mark back while it is fresh. @returns a sentence when it can't be, null when it was */
+export async function undoLast(
+  tx: Transaction,
+  ctx: Ctx,
+  visit: Visit,
+  times: StampedTimes,
+  undoSeconds: number,
+): Promise<string | null> {
+  const last = await VisitEvent.findOne({
+    where: { visitId: visit.id, isUndone: false, kind: [...progressActions] },
+    order: [
+      ['receivedAt', 'DESC'],
+      ['id', 'DESC'],
+    ],
+    transaction: tx,
+  });
+  if (!last || last.toProgress !== visit.progress) return 'There is nothing to take back.';
+  if (Date.parse(times.receivedAt) - last.receivedAt.getTime() > undoSeconds * 1000)
+    return 'It is too late to take that back. Call dispatch.';
+  const isEnd = last.kind === 'finish' || last.kind === 'part_done';
+  if (isEnd && !(await takeFinishBack(tx, visit, last.kind === 'part_done'))) {
+    return 'Dispatch has placed the rest already. Call dispatch.';
+  }
+  if (last.kind === 'arrive') await clearCrew(tx, visit);
+  await last.update({ isUndone: true }, { transaction: tx });
+  await VisitEvent.create(
+    {
+      id: uuid(),
+      visitId: visit.id,
+      kind: 'undo',
+      fromProgress: visit.progress,
+      toProgress: last.fromProgress,
+      userId: ctx.actor.userId,
+      personId: ctx.actor.personId,
+      deviceAt: new Date(times.deviceAt),
+      receivedAt: new Date(times.receivedAt),
+      occurredAt: new Date(times.occurredAt),
+      isCorrected: times.isCorrected,
+    },
+    { transaction: tx },
+  );
+  await visit.update(
+    { progress: last.fromProgress, progressSince: new Date(times.occurredAt), reason: '', version: visit.version + 1 },
+    { transaction: tx },
+  );
+  return null;
+}

@@ -1,0 +1,170 @@
+import type { Transaction } from 'sequelize';
+import { v7 as uuid } from 'uuid';
+import type { z } from 'zod';
+import { tag } from '@driprail/shared/authz/ability';
+import type { RunVisitDto, visitActionBody } from '@driprail/shared/contracts/run-sheet.contract';
+import type { Progress, ProgressAction } from '@driprail/shared/domain/board/progress';
+import { takeStep } from '@driprail/shared/domain/board/progress';
+import { stamp } from '@driprail/shared/domain/time/device';
+import type { StampedTimes } from '@driprail/shared/domain/time/device';
+import { dayOf } from '@driprail/shared/domain/time/zone';
+import { authorize } from '../../authz/authorize.ts';
+import { companyOf } from '../../db/company.ts';
+import type { CompanySettings, Visit } from '../../db/models/index.ts';
+import { VisitEvent } from '../../db/models/index.ts';
+import type { Ctx } from '../../http/context.ts';
+import { AppError, notFound, unprocessable } from '../../http/errors.ts';
+import type { Outcome } from '../../http/once.ts';
+import { takeOnce } from '../../http/once.ts';
+import { hintAfterCommit } from '../../realtime/hints.ts';
+import { lockVisit } from '../board/index.ts';
+import { followProgress } from '../clock/index.ts';
+import { readRunRows, toRunVisit } from './run-visits.queries.ts';
+import type { RunRow } from './run-visits.queries.ts';
+import { undoLast } from './undo.ts';
+import { clearCrew, finishLines, openLineIds, recordCrew, recordPresser, splitRest } from './visit-steps.ts';
+
+export type VisitAction = z.infer<typeof visitActionBody>;
+
+/**
+ * One press on a visit, taken once: progress, undo, or a report of trouble.
+ * @throws 404 for what one may not know, 403 by row, 409 with the newer state when the step can't follow, 422 for a missing reason
+ */
+export async function actOnVisit(
+  ctx: Ctx,
+  visitId: string,
+  action: VisitAction,
+): Promise<{ visit: RunVisitDto; isRepeat: boolean }> {
+  const company = await companyOf();
+  refuseUnreasoned(action);
+  const { answer, isRepeat } = await takeOnce<{ visit: RunVisitDto }>(
+    ctx,
+    action.key,
+    { visitId, ...action },
+    async (tx) => {
+      const visit = await lockVisit(tx, visitId);
+      const row = (await readRunRows({ visitId }, tx))[0];
+      if (!visit || !row) throw notFound('That visit');
+      authorizeMark(ctx, row, company.zone);
+      return perform(tx, ctx, company, visit, row, action);
+    },
+  );
+  return { visit: answer.visit, isRepeat };
+}
+
+function refuseUnreasoned(action: VisitAction): void {
+  const needs = action.kind === 'part_done' || action.kind === 'call_off';
+  if (needs && action.reason === '') {
+    const message = action.kind === 'part_done' ? 'Say why the rest is left.' : 'Say why it is called off.';
+    throw unprocessable('reason_needed', message, { fields: { reason: message } });
+  }
+  if (action.kind === 'trouble' && !action.trouble)
+    throw unprocessable('trouble_needed', 'Say what is wrong.', { fields: { trouble: 'Say what is wrong.' } });
+}
+
+/** A visit of another crew is not there for a technician, rather than forbidden. */
+function authorizeMark({ ability, actor, now }: Ctx, { visit }: RunRow, zone: string): void {
+  const day = visit.from ? dayOf(visit.from, zone) : null;
+  const daysFromToday = day
+    ? Math.round((Date.parse(day) - Date.parse(dayOf(now().toISOString(), zone))) / 86_400_000)
+    : 0;
+  const subject = tag('Visit', { id: visit.id, crewPersonIds: visit.crew.map((p) => p.personId), day, daysFromToday });
+  if (actor.role === 'technician' && ability.cannot('read', subject)) throw notFound('That visit');
+  authorize(ability, 'mark', subject);
+}
+
+async function perform(
+  tx: Transaction,
+  ctx: Ctx,
+  company: CompanySettings,
+  visit: Visit,
+  row: RunRow,
+  action: VisitAction,
+): Promise<Outcome<{ visit: RunVisitDto }>> {
+  const times = stamp(action.deviceAt, action.offsetMs, ctx.now());
+  const shown = async () => {
+    const after = (await readRunRows({ visitId: visit.id }, tx))[0] ?? row;
+    return { visit: toRunVisit(after, { now: ctx.now(), zone: company.zone, undoSeconds: company.undoSeconds }) };
+  };
+  const clash = async (message: string) => ({
+    refused: new AppError(409, 'clash', message, { hint: { current: (await shown()).visit } }),
+  });
+
+  if (action.kind === 'undo') {
+    const refusal = await undoLast(tx, ctx, visit, times, company.undoSeconds);
+    if (refusal) return clash(refusal);
+  } else if (action.kind === 'trouble') {
+    await record(tx, ctx, visit, action, times, visit.progress);
+  } else {
+    const step = takeStep(visit.progress, action.kind);
+    if (!step.ok) return clash(step.message);
+    await takeEffect(tx, ctx, visit, action.kind, action, times);
+    await record(tx, ctx, visit, action, times, step.to);
+    await setProgress(tx, visit, step.to, times.occurredAt, action.reason);
+  }
+  const answer = await shown();
+  const personIds = answer.visit.crew.map((p) => p.personId);
+  if (action.kind !== 'trouble')
+    await followProgress(tx, personIds, answer.visit.progress, visit.id, new Date(times.occurredAt));
+  hintAfterCommit(tx, ['desk', { personIds }], 'visit', visit.id, visit.version);
+  return { answer };
+}
+
+async function takeEffect(
+  tx: Transaction,
+  ctx: Ctx,
+  visit: Visit,
+  kind: ProgressAction,
+  action: VisitAction,
+  { occurredAt }: StampedTimes,
+): Promise<void> {
+  if (kind === 'arrive') {
+    await clearCrew(tx, visit);
+    await recordCrew(tx, visit, occurredAt);
+    await recordPresser(tx, visit, ctx.actor.personId);
+  }
+  if (kind === 'finish') await finishLines(tx, visit.id, await openLineIds(tx, visit.id), occurredAt);
+  if (kind === 'part_done') {
+    const open = await openLineIds(tx, visit.id);
+    const finished = open.filter((id) => action.finishedLineIds?.includes(id));
+    const rest = open.filter((id) => !finished.includes(id));
+    if (rest.length === 0) throw unprocessable('nothing_left', 'Nothing is left. Mark the visit as done instead.');
+    await finishLines(tx, visit.id, finished, occurredAt);
+    await splitRest(tx, visit, rest, action.remainingMinutes ?? visit.minutes);
+  }
+}
+
+async function setProgress(tx: Transaction, visit: Visit, to: Progress, at: string, reason: string): Promise<void> {
+  await visit.update(
+    { progress: to, progressSince: new Date(at), reason, version: visit.version + 1 },
+    { transaction: tx },
+  );
+}
+
+async function record(
+  tx: Transaction,
+  ctx: Ctx,
+  visit: Visit,
+  action: VisitAction,
+  times: StampedTimes,
+  to: Progress,
+): Promise<void> {
+  await VisitEvent.create(
+    {
+      id: uuid(),
+      visitId: visit.id,
+      kind: action.kind,
+      fromProgress: visit.progress,
+      toProgress: to,
+      userId: ctx.actor.userId,
+      personId: ctx.actor.personId,
+      deviceAt: new Date(times.deviceAt),
+      receivedAt: new Date(times.receivedAt),
+      occurredAt: new Date(times.occurredAt),
+      isCorrected: times.isCorrected,
+      trouble: action.trouble ?? null,
+      reason: action.reason,
+    },
+    { transaction: tx },
+  );
+}

@@ -1,0 +1,3 @@
+export { servicesRoutes } from './services.routes.ts';
+export { createService } from './services.service.ts';
+export type { PriceFields, ServiceFields } from './services.service.ts';

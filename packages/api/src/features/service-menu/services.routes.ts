@@ -1,0 +1,19 @@
+import * as api from '@driprail/shared/contracts/services.contract';
+import { todayOf } from '../../db/company.ts';
+import type { RouteTable } from '../../http/route.ts';
+import { route } from '../../http/route.ts';
+import { listServices } from './services.queries.ts';
+import { createService, setServicePrices, updateService } from './services.service.ts';
+
+export function servicesRoutes(table: RouteTable): void {
+  route(table, api.listServices, async ({ query }, { now }) => ({
+    services: await listServices(query.on ?? (await todayOf(now()))),
+  }));
+  route(table, api.createService, async ({ body }, ctx) => ({ service: await createService(ctx, body) }));
+  route(table, api.updateService, async ({ params, body }, ctx) => ({
+    service: await updateService(ctx, params.id, body),
+  }));
+  route(table, api.setServicePrices, async ({ params, body }, ctx) => ({
+    service: await setServicePrices(ctx, params.id, body.startsOn, body.prices),
+  }));
+}

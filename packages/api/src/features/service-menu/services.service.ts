@@ -1,0 +1,75 @@
+import type { Transaction } from 'sequelize';
+import { v7 as uuid } from 'uuid';
+import type { SizeClass } from '@driprail/shared/contracts/fields';
+import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import { audit } from '../../db/audit.ts';
+import { todayOf } from '../../db/company.ts';
+import { Service, ServicePrice } from '../../db/models/index.ts';
+import { inTransaction } from '../../db/sequelize.ts';
+import type { Ctx } from '../../http/context.ts';
+import { conflict, notFound } from '../../http/errors.ts';
+import { hintAfterCommit } from '../../realtime/hints.ts';
+import { listServices } from './services.queries.ts';
+
+export type ServiceFields = Pick<
+  ServiceDto,
+  'name' | 'kind' | 'description' | 'skills' | 'equipment' | 'isActive' | 'position'
+>;
+export interface PriceFields {
+  sizeClass: SizeClass;
+  priceCents: number;
+  minutes: number;
+}
+
+export function createService(
+  ctx: Ctx,
+  { prices, startsOn, ...fields }: ServiceFields & { prices: PriceFields[]; startsOn: string },
+  id = uuid(),
+): Promise<ServiceDto> {
+  return inTransaction(async (tx) => {
+    await Service.create({ id, ...fields }, { transaction: tx });
+    await putPrices(tx, id, startsOn, prices);
+    return saved(tx, ctx, id, 'added');
+  });
+}
+
+export function updateService(
+  ctx: Ctx,
+  id: string,
+  { version, ...fields }: ServiceFields & { version: number },
+): Promise<ServiceDto> {
+  return inTransaction(async (tx) => {
+    const service = await Service.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
+    if (!service) throw notFound('That service');
+    if (service.version !== version)
+      throw conflict('stale', `Somebody changed ${service.name} meanwhile. Reload and try again.`);
+    await service.update({ ...fields, version: version + 1 }, { transaction: tx });
+    return saved(tx, ctx, id, 'changed');
+  });
+}
+
+/** New prices from a date on; jobs keep the price they were quoted. */
+export function setServicePrices(ctx: Ctx, id: string, startsOn: string, prices: PriceFields[]): Promise<ServiceDto> {
+  return inTransaction(async (tx) => {
+    const service = await Service.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
+    if (!service) throw notFound('That service');
+    await putPrices(tx, id, startsOn, prices);
+    await service.update({ version: service.version + 1 }, { transaction: tx });
+    return saved(tx, ctx, id, 'prices set');
+  });
+}
+
+async function putPrices(tx: Transaction, serviceId: string, startsOn: string, prices: PriceFields[]): Promise<void> {
+  await ServicePrice.bulkCreate(
+    prices.map((price) => ({ serviceId, startsOn, ...price })),
+    { transaction: tx, updateOnDuplicate: ['priceCents', 'minutes'] },
+  );
+}
+
+async function saved(tx: Transaction, { actor, now }: Ctx, id: string, action: string): Promise<ServiceDto> {
+  await audit(tx, { userId: actor.userId, at: now() }, 'service', id, action);
+  const [service] = await listServices(await todayOf(now(), tx), id, tx);
+  if (!service) throw notFound('That service');
+  hintAfterCommit(tx, ['desk'], 'service', id, service.version);
+  return service;
+}

@@ -1,0 +1,94 @@
+import { createApp } from './app.ts';
+import { createClock } from './clock.ts';
+import { readConfig } from './config.ts';
+import { migrate } from './db/migrate.ts';
+import { connect, disconnect } from './db/sequelize.ts';
+import { printLinks, useCheapHashes } from './features/access/index.ts';
+import { SetUpCode, isSetUpNeeded } from './features/settings/index.ts';
+import { every } from './jobs/every.ts';
+import { createLogger } from './log.ts';
+import { localMail, smtpMail } from './mail/transport.ts';
+import { sendWaitingMails } from './outbox/send-mails.ts';
+import { sessionSecret } from './secret.ts';
+
+async function main(): Promise<void> {
+  const config = readConfig(process.env);
+  const log = createLogger(config.isTest ? 'error' : 'warn');
+  const now = createClock(config.startAt);
+  if (config.isTest) useCheapHashes();
+
+  await migrate(config.migrationUrl, decodeURIComponent(new URL(config.databaseUrl).username));
+  connect(config.databaseUrl);
+  const isNew = await isSetUpNeeded();
+  const seedsDemo = config.seedsDemo && isNew;
+  if (seedsDemo) {
+    process.stderr.write('Making the demo company …\n');
+    const { seedDemo } = await import('../../../seed/src/seed-demo.ts');
+    await seedDemo({ now: now() });
+  }
+
+  const setUpCode = new SetUpCode();
+  const mail = config.smtpUrl ? null : localMail(config.mailFrom, now);
+  const send = mail?.send ?? smtpMail(config.smtpUrl ?? '', config.mailFrom);
+  if (mail && config.isLoopback) printLinks((line) => process.stderr.write(`${line}\n`));
+  const secret = await sessionSecret(config.sessionSecret, config.dataDir);
+  const app = createApp({
+    config,
+    now,
+    log,
+    secret,
+    setUpCode,
+    localMail: config.hasLocalMail && mail ? mail.taken : null,
+  });
+  const outbox = every(
+    5,
+    () => sendWaitingMails(send, now),
+    (error) => log.warn({ err: error }, 'mail outbox'),
+  );
+
+  await listen(app.server, config.port, config.host);
+  const address = app.server.address();
+  const port = typeof address === 'object' && address ? address.port : config.port;
+  process.stdout.write(`Driprail is ready at http://${config.host}:${port}\n`);
+  if (await isSetUpNeeded()) process.stdout.write(`Set up the company with this one-time code: ${setUpCode.make()}\n`);
+
+  let isStopping = false;
+  const stop = (): void => {
+    if (isStopping) return;
+    isStopping = true;
+    void outbox
+      .stop()
+      .then(() => app.close())
+      .then(() => disconnect())
+      .then(() => process.exit(0));
+  };
+  process.once('SIGTERM', stop);
+  process.once('SIGINT', stop);
+  process.once('disconnect', stop);
+}
+
+function listen(server: import('node:http').Server, port: number, host: string): Promise<void> {
+  return new Promise((resolve, reject) => {
+    server.once('error', reject);
+    server.listen(port, host, () => resolve());
+  });
+}
+
+/** What a person can mend is said in one sentence; the rest is a fault and keeps its trace. */
+function sentenceFor(error: unknown): string {
+  const { code, name, message } = error as { code?: string; name?: string; message?: string };
+  if (code === 'EADDRINUSE')
+    return `Port ${process.env['PORT'] ?? '4600'} is in use. Stop what uses it, or choose another with PORT=4700 npm start.`;
+  if (code === 'EACCES')
+    return `Port ${process.env['PORT'] ?? ''} may not be used by this account. Choose one above 1023 with PORT.`;
+  if (code === 'ENOSPC') return 'The disk is full. Make room and start again.';
+  if (name?.startsWith('SequelizeConnection') || name === 'SequelizeHostNotFoundError') {
+    return `The database can’t be reached: ${message ?? ''}. Check DATABASE_URL.`;
+  }
+  return `Driprail could not start: ${message ?? String(error)}`;
+}
+
+main().catch((error: unknown) => {
+  process.stderr.write(`${sentenceFor(error)}\n`);
+  process.exit(1);
+});

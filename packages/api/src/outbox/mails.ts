@@ -1,0 +1,17 @@
+import type { Transaction } from 'sequelize';
+import { v7 as uuid } from 'uuid';
+import { OutboxMail } from '../db/models/index.ts';
+
+export interface Mail {
+  to: string;
+  subject: string;
+  body: string;
+}
+
+/** A promise to send: a row in the change's own transaction, sent by the outbox's job with retries. */
+export async function queueMail(tx: Transaction, mail: Mail): Promise<void> {
+  await OutboxMail.create(
+    { id: uuid(), recipient: mail.to, subject: mail.subject, body: mail.body },
+    { transaction: tx },
+  );
+}

@@ -1,0 +1,55 @@
+import { afterAll, beforeAll } from 'vitest';
+import supertest from 'supertest';
+import type TestAgent from 'supertest/lib/agent.js';
+import { createApp } from '../app.ts';
+import type { App } from '../app.ts';
+import { readConfig } from '../config.ts';
+import { connect, disconnect } from '../db/sequelize.ts';
+import { useCheapHashes } from '../features/access/index.ts';
+import { SetUpCode } from '../features/settings/index.ts';
+import { createLogger } from '../log.ts';
+import { localMail } from '../mail/transport.ts';
+import type { TakenMail } from '../mail/transport.ts';
+
+/** 11:00 on a Thursday in New York, which is the demo company's zone. */
+export const NOON = '2026-05-14T15:00:00.000Z';
+
+export interface TestApp {
+  app: App;
+  setUpCode: string;
+  taken: () => TakenMail[];
+  send: ReturnType<typeof localMail>['send'];
+  /** The app's clock; set it to move time. */
+  time: { now: string };
+  anonymous: () => TestAgent;
+}
+
+/** One app on this test file's own database, closed at its end. */
+export function useApp(): TestApp {
+  const test = { time: { now: NOON } } as TestApp;
+  beforeAll(() => {
+    useCheapHashes();
+    const config = { ...readConfig(process.env), isTest: true };
+    connect(config.databaseUrl, 8);
+    const now = () => new Date(test.time.now);
+    const code = new SetUpCode();
+    const mail = localMail(config.mailFrom, now);
+    test.app = createApp({
+      config,
+      now,
+      log: createLogger('error'),
+      secret: 'only for tests',
+      setUpCode: code,
+      localMail: mail.taken,
+    });
+    test.setUpCode = code.make();
+    test.taken = mail.taken;
+    test.send = mail.send;
+    test.anonymous = () => supertest.agent(test.app.server);
+  });
+  afterAll(async () => {
+    await test.app.close();
+    await disconnect();
+  });
+  return test;
+}

@@ -1,0 +1,49 @@
+import { describe, expect, test } from 'vitest';
+import type { Actor } from './actor.ts';
+import { abilityFor, tag } from './ability.ts';
+
+const owner: Actor = { userId: 'o', personId: null, role: 'owner' };
+const dispatcher: Actor = { userId: 'd', personId: 'pd', role: 'dispatcher' };
+const technician: Actor = { userId: 't', personId: 'pt', role: 'technician' };
+const visit = (crewPersonIds: string[], daysFromToday: number | null) =>
+  tag('Visit', { id: 'v', crewPersonIds, day: '2026-05-14', daysFromToday });
+
+describe('the pay wall', () => {
+  test.each([
+    ['owner', owner, true],
+    ['dispatcher', dispatcher, false],
+    ['technician', technician, false],
+  ] as const)('%s and rates, weeks, logins', (_name, actor, isAllowed) => {
+    const ability = abilityFor(actor);
+    expect(ability.can('read', 'Rate')).toBe(isAllowed);
+    expect(ability.can('read', 'PayWeek')).toBe(isAllowed);
+    expect(ability.can('update', 'Login')).toBe(isAllowed);
+  });
+
+  test('statements are one’s own, and only when locked', () => {
+    for (const actor of [dispatcher, technician]) {
+      const ability = abilityFor(actor);
+      const personId = actor.personId ?? '';
+      expect(ability.can('read', tag('Statement', { personId, state: 'locked' }))).toBe(true);
+      expect(ability.can('read', tag('Statement', { personId, state: 'checked' }))).toBe(false);
+      expect(ability.can('read', tag('Statement', { personId: 'other', state: 'locked' }))).toBe(false);
+    }
+    expect(abilityFor(owner).can('read', tag('Statement', { personId: 'other', state: 'draft' }))).toBe(true);
+  });
+});
+
+describe('a technician', () => {
+  const ability = abilityFor(technician);
+  test('reads and marks visits of the own crew on near days only', () => {
+    expect(ability.can('read', visit(['pt'], 0))).toBe(true);
+    expect(ability.can('mark', visit(['pt'], 0))).toBe(true);
+    expect(ability.can('read', visit(['pt'], 3))).toBe(false);
+    expect(ability.can('mark', visit(['pt'], 1))).toBe(false);
+    expect(ability.can('read', visit(['other'], 0))).toBe(false);
+    expect(ability.can('read', visit(['pt'], null))).toBe(false);
+  });
+  test('plans nothing and reads no customer list', () => {
+    expect(ability.can('plan', 'Visit')).toBe(false);
+    expect(ability.can('read', 'Customer')).toBe(false);
+  });
+});

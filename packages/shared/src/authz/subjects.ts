@@ -1,0 +1,18 @@
+/** What each rule may look at. Authorise complete records only: an absent field would be allowed by CASL. */
+export interface SubjectFields {
+  Visit: { id: string; crewPersonIds: string[]; day: string | null; daysFromToday: number | null };
+  Job: { id: string; crewPersonIds: string[] };
+  Customer: { id: string };
+  Person: { id: string };
+  Van: { id: string };
+  Service: { id: string };
+  ClockEntry: { id: string; personId: string };
+  Settings: { id: number };
+  Rate: { id: string };
+  PayWeek: { id: string };
+  Statement: { personId: string; state: 'draft' | 'checked' | 'locked' };
+  Login: { id: string };
+  LocalMail: { id: string };
+}
+export type SubjectName = keyof SubjectFields;
+export type Action = 'read' | 'create' | 'update' | 'remove' | 'plan' | 'mark' | 'tip';

@@ -1,0 +1,243 @@
+import { z } from 'zod';
+import { endpoint } from './endpoint.ts';
+import { clockKinds } from './clock.contract.ts';
+import { cents, clockTime, day, decimal, done, id, instant, shortText } from './fields.ts';
+import { everyone } from '../authz/actor.ts';
+import type { PayLine, PayWarning, PersonWeek } from '../domain/pay/pay-week.types.ts';
+
+export const rateKinds = ['hourly', 'commission_percent', 'flat_service'] as const;
+export const rateDto = z.object({
+  id,
+  kind: z.enum(rateKinds),
+  personId: id.nullable(),
+  personName: z.string().nullable(),
+  serviceId: id.nullable(),
+  serviceName: z.string().nullable(),
+  clockKind: z.enum(clockKinds).nullable(),
+  value: z.string(),
+  startsOn: day,
+  setBy: z.string(),
+});
+export type RateDto = z.infer<typeof rateDto>;
+const owner = ['owner'] as const;
+
+export const listRates = endpoint({
+  method: 'get',
+  path: '/api/pay/rates',
+  roles: owner,
+  summary: 'Every dated rate: hourly, flat per service, commission percent.',
+  response: z.object({ rates: z.array(rateDto) }),
+});
+export const addRate = endpoint({
+  method: 'post',
+  path: '/api/pay/rates',
+  roles: owner,
+  summary: 'A new rate from a date on; earlier ones stay.',
+  body: z
+    .strictObject({
+      kind: z.enum(rateKinds),
+      personId: id.nullable(),
+      serviceId: id.nullable(),
+      clockKind: z.enum(clockKinds).nullable(),
+      value: decimal,
+      startsOn: day,
+    })
+    .refine((r) => r.kind !== 'commission_percent' || Number(r.value) <= 100, {
+      path: ['value'],
+      message: 'A percent is at most 100.',
+    })
+    .refine((r) => r.kind === 'hourly' || r.clockKind === null, {
+      path: ['clockKind'],
+      message: 'Only an hourly rate goes by kind of work.',
+    })
+    .refine((r) => r.kind !== 'hourly' || r.serviceId === null, {
+      path: ['serviceId'],
+      message: 'An hourly rate does not go by service.',
+    })
+    .refine((r) => r.kind !== 'flat_service' || r.serviceId !== null, {
+      path: ['serviceId'],
+      message: 'Choose the service that the flat rate pays for.',
+    }),
+  response: z.object({ rate: rateDto }),
+});
+
+export const payRulesDto = z.object({
+  id,
+  startsOn: day,
+  overtimeRuleSet: z.enum(['us_federal']),
+  minimumWage: z.string(),
+  crewSplit: z.enum(['equal', 'weights', 'minutes']),
+  mealBreakMinutes: z.int(),
+  /** ISO weekday, 1 Monday to 7 Sunday, and the clock time at which the workweek starts. */
+  workweekStartsOn: z.int(),
+  workweekStartsAt: clockTime,
+  setBy: z.string(),
+});
+export type PayRulesDto = z.infer<typeof payRulesDto>;
+export const listPayRules = endpoint({
+  method: 'get',
+  path: '/api/pay/rules',
+  roles: owner,
+  summary: 'The dated rules of pay: overtime, minimum wage, crew split, workweek.',
+  response: z.object({ rules: z.array(payRulesDto) }),
+});
+export const addPayRules = endpoint({
+  method: 'post',
+  path: '/api/pay/rules',
+  roles: owner,
+  summary: 'New rules from a date on; a locked week keeps those it was paid by.',
+  body: z.strictObject({
+    startsOn: day,
+    overtimeRuleSet: z.enum(['us_federal']),
+    minimumWage: decimal.refine((v) => Number(v) >= 7.25, 'The federal minimum wage is 7.25 (29 USC 206).'),
+    crewSplit: z.enum(['equal', 'weights', 'minutes']),
+    mealBreakMinutes: z.int().min(20).max(120),
+    workweekStartsOn: z.int().min(1).max(7),
+    workweekStartsAt: clockTime,
+  }),
+  response: z.object({ rules: payRulesDto }),
+});
+
+export const payWeekStates = ['draft', 'checked', 'locked'] as const;
+export const payWeekHead = z.object({
+  id,
+  startsOn: day,
+  /** Last day inside the week. */
+  endsOn: day,
+  startsAt: instant,
+  endsAt: instant,
+  number: z.int(),
+  state: z.enum(payWeekStates),
+  checkedAt: instant.nullable(),
+  checkedBy: z.string().nullable(),
+  lockedAt: instant.nullable(),
+  lockedBy: z.string().nullable(),
+  version: z.int(),
+});
+export type PayWeekHead = z.infer<typeof payWeekHead>;
+
+/** The engine's own types are the description; the shape is checked where it is computed. */
+const personWeek = z.custom<PersonWeek>((value) => typeof value === 'object' && value !== null);
+export const payLineDto = z.custom<PayLine & { id?: string }>((value) => typeof value === 'object' && value !== null);
+export type { PayLine, PayWarning, PersonWeek };
+
+export const adjustmentKinds = [
+  'bonus',
+  'discretionary_bonus',
+  'reimbursement',
+  'paid_time_off',
+  'deduction',
+  'correction',
+] as const;
+export const adjustmentDto = z.object({
+  id,
+  personId: id,
+  kind: z.enum(adjustmentKinds),
+  amountCents: cents,
+  reason: z.string(),
+  correctsLineId: id.nullable(),
+  by: z.string(),
+});
+export const listPayWeeks = endpoint({
+  method: 'get',
+  path: '/api/pay/weeks',
+  roles: owner,
+  summary: 'The pay weeks, newest first, with gross and hours.',
+  response: z.object({ weeks: z.array(payWeekHead.extend({ grossCents: z.int().nullable(), salesCents: z.int() })) }),
+});
+export const payWeekDto = z.object({
+  week: payWeekHead,
+  people: z.array(personWeek),
+  adjustments: z.array(adjustmentDto),
+  salesCents: z.int(),
+  /** What stored lines are called in the database, by person and key; only for a locked week. */
+  lineIds: z.record(z.string(), id),
+  engineVersion: z.string(),
+  /** For a locked week: what today's records would pay instead, where that differs. Paid by a correction in an open week. */
+  lateDifferences: z.array(z.object({ personId: id, name: z.string(), lockedCents: z.int(), nowCents: z.int() })),
+});
+export type PayWeekDto = z.infer<typeof payWeekDto>;
+const weekParam = z.object({ startsOn: day });
+export const getPayWeek = endpoint({
+  method: 'get',
+  path: '/api/pay/weeks/:startsOn',
+  roles: owner,
+  summary: 'The pay week that holds a day: per person hours, lines and warnings, each line with its working.',
+  params: weekParam,
+  response: payWeekDto,
+});
+export const setPayWeekState = endpoint({
+  method: 'post',
+  path: '/api/pay/weeks/:startsOn/state',
+  roles: owner,
+  summary: 'Mark as checked, back to draft, or lock. A locked week never changes.',
+  params: weekParam,
+  body: z.strictObject({ to: z.enum(payWeekStates), version: z.int() }),
+  response: payWeekDto,
+});
+export const addAdjustment = endpoint({
+  method: 'post',
+  path: '/api/pay/weeks/:startsOn/adjustments',
+  roles: owner,
+  summary: 'Add an amount with its reason to an open week; a correction names the locked line.',
+  params: weekParam,
+  body: z
+    .strictObject({
+      personId: id,
+      kind: z.enum(adjustmentKinds),
+      amountCents: cents.refine((v) => v !== 0, 'Give an amount.'),
+      reason: shortText.min(1, 'Say what it is for.'),
+      correctsLineId: id.nullable(),
+    })
+    .refine((a) => (a.kind === 'deduction' ? a.amountCents < 0 : a.kind === 'correction' || a.amountCents > 0), {
+      path: ['amountCents'],
+      message: 'A deduction is below zero, everything else but a correction above.',
+    })
+    .refine((a) => a.kind !== 'correction' || a.correctsLineId !== null, {
+      path: ['correctsLineId'],
+      message: 'Choose the locked line that this corrects.',
+    }),
+  response: payWeekDto,
+});
+export const removeAdjustment = endpoint({
+  method: 'delete',
+  path: '/api/pay/adjustments/:id',
+  roles: owner,
+  summary: 'Take an adjustment out of an open week.',
+  params: z.object({ id }),
+  response: done,
+});
+export const exportPayWeek = endpoint({
+  method: 'get',
+  path: '/api/pay/weeks/:startsOn/export.csv',
+  roles: owner,
+  summary: 'The week for a payroll processor: a row per person and line (RFC 4180).',
+  params: weekParam,
+  response: z.string(),
+  format: 'csv',
+});
+
+export const statementHead = z.object({
+  weekId: id,
+  startsOn: day,
+  endsOn: day,
+  number: z.int(),
+  lockedAt: instant,
+  grossCents: z.int(),
+});
+export const listStatements = endpoint({
+  method: 'get',
+  path: '/api/pay/statements',
+  roles: everyone,
+  summary: 'One’s own statements of locked weeks.',
+  response: z.object({ statements: z.array(statementHead) }),
+});
+export const getStatement = endpoint({
+  method: 'get',
+  path: '/api/pay/statements/:startsOn/:personId',
+  roles: everyone,
+  summary: 'One person’s statement of a week: one’s own when locked, anybody’s for the owner.',
+  params: weekParam.extend({ personId: id }),
+  response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string() }),
+});
+export type StatementDto = z.infer<(typeof getStatement)['response']>;

@@ -1,0 +1,60 @@
+import { z } from 'zod';
+import { endpoint } from './endpoint.ts';
+import { clockTime, email, name, password, phone, zone } from './fields.ts';
+import { sessionDto } from './session.contract.ts';
+import { everyone } from '../authz/actor.ts';
+import { warningCodes } from '../domain/board/findings.ts';
+
+export const settingsDto = z.object({
+  name,
+  phone,
+  email: email.or(z.literal('')),
+  zone,
+  clock: z.enum(['12', '24']),
+  units: z.enum(['us', 'metric']),
+  dayStartsAt: clockTime,
+  dayEndsAt: clockTime,
+  undoSeconds: z.int().min(0).max(600),
+  /** Kinds of warning that are only saved with a reason. */
+  reasonKinds: z.array(z.enum(warningCodes)),
+  version: z.int(),
+});
+export type SettingsDto = z.infer<typeof settingsDto>;
+
+export const getSettings = endpoint({
+  method: 'get',
+  path: '/api/settings',
+  roles: everyone,
+  summary: 'The company’s settings.',
+  response: z.object({ settings: settingsDto }),
+});
+export const updateSettings = endpoint({
+  method: 'put',
+  path: '/api/settings',
+  roles: ['owner'],
+  summary: 'Change the company’s settings.',
+  body: settingsDto.strict(),
+  response: z.object({ settings: settingsDto }),
+});
+export const getSetUp = endpoint({
+  method: 'get',
+  path: '/api/set-up',
+  roles: 'public',
+  summary: 'Whether this company still waits to be set up.',
+  response: z.object({ isNeeded: z.boolean() }),
+});
+export const completeSetUp = endpoint({
+  method: 'post',
+  path: '/api/set-up',
+  roles: 'public',
+  summary: 'Set up the company and its owner with the one-time code printed in the terminal; signs the owner in.',
+  body: z.strictObject({
+    code: z.string().trim().min(1, 'Give the code that the terminal shows.').max(40),
+    companyName: name,
+    zone,
+    ownerName: name,
+    email,
+    password,
+  }),
+  response: sessionDto,
+});

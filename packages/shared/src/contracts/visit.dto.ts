@@ -1,0 +1,60 @@
+import { z } from 'zod';
+import { id, instant, planVersion, sizeClass } from './fields.ts';
+import { progressStates } from '../domain/board/progress.ts';
+
+export const visitLineDto = z.object({
+  id,
+  serviceId: id,
+  serviceName: z.string(),
+  vehicleId: id.nullable(),
+  vehicle: z.string(),
+  sizeClass,
+  minutes: z.int(),
+  priceCents: z.int(),
+  isFinished: z.boolean(),
+});
+export type VisitLineDto = z.infer<typeof visitLineDto>;
+
+export const visitCrewDto = z.object({ personId: id, name: z.string() });
+
+/** A visit as the board shows it. */
+export const visitDto = z.object({
+  id,
+  jobId: id,
+  jobNumber: z.int(),
+  /** This visit's place among the job's visits, "2 of 3". */
+  part: z.int(),
+  parts: z.int(),
+  stopId: id,
+  vanId: id.nullable(),
+  from: instant.nullable(),
+  to: instant.nullable(),
+  minutes: z.int(),
+  progress: z.enum(progressStates),
+  /** When the present progress began. */
+  since: instant.nullable(),
+  reason: z.string(),
+  planVersion,
+  version: z.int(),
+  customerId: id,
+  customerName: z.string(),
+  phone: z.string(),
+  addressId: id,
+  address: z.string(),
+  area: z.string(),
+  lat: z.number().nullable(),
+  lng: z.number().nullable(),
+  hasGateCode: z.boolean(),
+  hasWater: z.boolean(),
+  hasPower: z.boolean(),
+  windowFrom: instant.nullable(),
+  windowTo: instant.nullable(),
+  notes: z.string(),
+  lines: z.array(visitLineDto),
+  skills: z.array(z.string()),
+  equipment: z.array(z.string()),
+  crew: z.array(visitCrewDto),
+  /** Reasons given for warnings, by the key of the facts. */
+  accepted: z.array(z.object({ key: z.string(), code: z.string(), reason: z.string(), by: z.string(), at: instant })),
+});
+export type VisitDto = z.infer<typeof visitDto>;

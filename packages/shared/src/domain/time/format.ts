@@ -1,0 +1,37 @@
+import { DateTime } from 'luxon';
+
+export type ClockStyle = '12' | '24';
+
+/** "10:42 am" or "10:42". */
+export function formatClock(instant: string, zone: string, style: ClockStyle): string {
+  const time = DateTime.fromISO(instant, { zone, locale: 'en-US' });
+  return style === '24' ? time.toFormat('HH:mm') : time.toFormat('h:mm a').toLowerCase();
+}
+
+/** "10:00 to 11:30 am", the shared half of the day said once. */
+export function formatSpan(from: string, to: string, zone: string, style: ClockStyle): string {
+  const start = formatClock(from, zone, style);
+  const end = formatClock(to, zone, style);
+  const half = start.slice(-3);
+  return style === '12' && end.endsWith(half) ? `${start.slice(0, -3)} to ${end}` : `${start} to ${end}`;
+}
+
+/** "Thu 14 May" is the look's word order; a US company reads "Thu May 14". */
+export function formatDay(day: string): string {
+  return DateTime.fromISO(day, { zone: 'utc', locale: 'en-US' }).toFormat('ccc LLL d');
+}
+
+/** "May 14, 2026". */
+export function formatDate(day: string): string {
+  return DateTime.fromISO(day, { zone: 'utc', locale: 'en-US' }).toFormat('LLL d, yyyy');
+}
+
+/** "2 h 15", "45 min". */
+export function formatMinutes(total: number): string {
+  const sign = total < 0 ? '−' : '';
+  const minutes = Math.abs(Math.round(total));
+  const hours = Math.floor(minutes / 60);
+  const rest = minutes % 60;
+  if (hours === 0) return `${sign}${rest} min`;
+  return rest === 0 ? `${sign}${hours} h` : `${sign}${hours} h ${String(rest).padStart(2, '0')}`;
+}
