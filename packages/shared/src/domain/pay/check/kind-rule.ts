@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import type { Exact } from '../../money/exact.ts';
 import { decimalText } from '../../money/rounding.ts';
 
