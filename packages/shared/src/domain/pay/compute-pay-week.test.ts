@@ -71,7 +71,7 @@ describe('a week by the hour with commission', () => {
       ['By the hour', '42.25 h times 19.50', '823.88'],
       ['Commission of this week counts', '14.40 + 25.20 + 33.60 + 15.90', '89.10'],
       ['Does not count', '72.00 tips, 7.95 corrections', ''],
-      ['Together', '823.88 + 14.40 + 25.20 + 33.60 + 15.90', '912.98'],
+      ['Together', '823.88 + 89.10', '912.98'],
       ['The regular rate', '912.98 divided by 42.25 h', '21.6090'],
       ['Half of it, for the hours over 40', 'half of 21.6090 times 2.25 h', '24.31'],
     ]);
@@ -135,6 +135,17 @@ describe('published weeks through the clock', () => {
       ada(aWeek({ rules, entries: aWorkedWeek([600, 600, 600, 600, 600]), rates: [aRate('hourly', '20.00')] })).totals
         .gross,
     ).toBe(110000);
+  });
+
+  it('Alvarado v. Dart Container (Cal. 2018), figures ours: a flat-sum bonus brings overtime of its own', () => {
+    const rules = { ...aWeek().rules, overtimeRuleSet: 'us_ca', minimumWage: '9.00' };
+    const entries = aWorkedWeek([480, 480, 480, 480, 480, 360]);
+    const bonus = [anAdjustment('bonus', 1500)];
+    const person = ada(aWeek({ rules, entries, rates: [aRate('hourly', '10.00')], adjustments: bonus }));
+    expect(person.totals.gross).toBe(50838);
+    expect(line(person, 'overtime_premium')?.working.at(-1)?.arithmetic).toBe(
+      'half of 10.0000 times 6 h + 3.3750 on the bonus',
+    );
   });
 
   it('Alaska Statutes 23.10.060, figures ours: a 10-hour day in a short week still has 2 hours of overtime', () => {

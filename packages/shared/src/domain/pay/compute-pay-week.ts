@@ -60,7 +60,13 @@ function personWeek(person: PayPerson, own: PersonInput, input: PayWeekInput, gr
   const premium =
     rate === null
       ? null
-      : weekPremium({ ruleSetKey: rules.overtimeRuleSet, rate, hoursByWorkday: byWorkday(spans), minimumWage });
+      : weekPremium({
+          ruleSetKey: rules.overtimeRuleSet,
+          rate,
+          hoursByWorkday: byWorkday(spans),
+          minimumWage,
+          bonusCents: totalCents(included.filter((line) => line.kind === 'bonus')),
+        });
   const overtime =
     rate === null || premium === null ? null : premiumLine({ person, spans, hours, rate, premium, included, excluded });
   const takings = takingLines(

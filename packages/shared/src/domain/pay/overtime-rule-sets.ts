@@ -17,6 +17,8 @@ export interface OvertimeRuleSet {
   seventhDay: { doubleOver: string | null; onlyOverWeekly: boolean } | null;
   /** Daily overtime only below this multiple of the place's minimum wage. */
   dailyGateMultiple: string | null;
+  /** A flat-sum bonus is divided by the hours that were not overtime and brings whole overtime, not half. */
+  flatSumBonusApart: boolean;
   /** Card fees may come off a tip, and tips may count toward the cash wage. */
   allowsTipDeductions: boolean;
   source: string;
@@ -30,6 +32,7 @@ const weekly = {
   dailyDoubleHours: null,
   seventhDay: null,
   dailyGateMultiple: null,
+  flatSumBonusApart: false,
   allowsTipDeductions: true,
 } satisfies Partial<OvertimeRuleSet>;
 
@@ -52,6 +55,7 @@ export const OVERTIME_RULE_SETS: readonly OvertimeRuleSet[] = [
     dailyHours: '8',
     dailyDoubleHours: '12',
     seventhDay: { doubleOver: '8', onlyOverWeekly: false },
+    flatSumBonusApart: true,
     allowsTipDeductions: false,
     source: 'California Labor Code 510',
     certainty: 'read',

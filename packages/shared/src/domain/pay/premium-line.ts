@@ -63,27 +63,29 @@ const INCLUDED: [PayLineKind, string][] = [
   ['minimum_wage_make_up', 'The make-up to the minimum wage counts'],
 ];
 
-/** Hourly lines one by one with their own arithmetic; the other kinds as one sum each. */
+/** The included lines as they are added up: hourly lines one by one, the other kinds each as one sum. */
+function includedGroups(included: readonly PayLine[]): PayLine[][] {
+  const hourly = included.filter((line) => line.kind === 'hourly').map((line) => [line]);
+  const others = INCLUDED.map(([kind]) => included.filter((line) => line.kind === kind));
+  return [...hourly, ...others].filter((lines) => lines.length > 0);
+}
+
 function includedSteps(included: readonly PayLine[]): WorkingStep[] {
-  const hourly = included.filter((line) => line.kind === 'hourly').flatMap((line) => line.working.slice(-1));
-  const others = INCLUDED.flatMap(([kind, label]) => {
-    const lines = included.filter((line) => line.kind === kind);
-    if (lines.length === 0) return [];
+  return includedGroups(included).flatMap((lines) => {
+    const label = INCLUDED.find(([kind]) => kind === lines[0]?.kind)?.[1];
+    if (label === undefined) return lines.flatMap((line) => line.working.slice(-1));
     const jobs = [...new Set(lines.map((line) => line.jobNumber).filter((number) => number !== null))];
+    const names = lines.map((line) => line.label).join(', ');
     return [
       {
         label,
-        note:
-          jobs.length > 0
-            ? `${jobs.length === 1 ? 'Job' : 'Jobs'} ${jobs.join(', ')}`
-            : lines.map((line) => line.label).join(', '),
+        note: jobs.length > 0 ? `${jobs.length === 1 ? 'Job' : 'Jobs'} ${jobs.join(', ')}` : names,
         arithmetic: lines.map((line) => centsText(line.amountCents)).join(' + '),
         result: centsText(totalCents(lines)),
         sources: lines.map(lineSource),
       },
     ];
   });
-  return [...hourly, ...others];
 }
 
 const EXCLUDED: [PayLineKind[], string, string][] = [
@@ -120,7 +122,9 @@ function rateSteps({ included }: PremiumParts, hours: Exact, rate: Exact): Worki
     {
       label: 'Together',
       note: 'Everything that counts',
-      arithmetic: included.map((line) => centsText(line.amountCents)).join(' + '),
+      arithmetic: includedGroups(included)
+        .map((lines) => centsText(totalCents(lines)))
+        .join(' + '),
       result: centsText(total),
       sources: [],
     },
@@ -136,22 +140,27 @@ function rateSteps({ included }: PremiumParts, hours: Exact, rate: Exact): Worki
   ];
 }
 
-function premiumSteps({ hours, rate, premium }: PremiumParts, amountCents: number): WorkingStep[] {
-  const { overtime, double } = premium.split;
-  const isFederal = premium.ruleSet.key === 'us_federal';
-  const sources: SourceRef[] = [{ kind: 'rule', id: premium.ruleSet.key, label: premium.ruleSet.name }];
-  const note = isFederal
-    ? `${shortText(hours)} less ${premium.ruleSet.weeklyHours} is ${shortText(overtime)} h. The whole hour is in the steps above already`
-    : `${premium.ruleSet.name}: ${shortText(overtime)} h. The whole hour is in the steps above already`;
-  const half = `half of ${decimalText(rate, 4)} times ${shortText(overtime)} h`;
-  const whole = `${decimalText(rate, 4)} times ${shortText(double)} h`;
+function premiumSteps({ hours, premium }: PremiumParts, amountCents: number): WorkingStep[] {
+  const { ruleSet, split, rate, onBonus } = premium;
+  const isFederal = ruleSet.key === 'us_federal';
+  const where = isFederal
+    ? `${shortText(hours)} less ${ruleSet.weeklyHours} is ${shortText(split.overtime)} h`
+    : `${ruleSet.name}: ${shortText(split.overtime)} h${split.double.gt(0) ? `, double time ${shortText(split.double)} h` : ''}`;
+  const parts = [
+    `half of ${decimalText(rate, 4)} times ${shortText(split.overtime)} h`,
+    ...(split.double.gt(0) ? [`${decimalText(rate, 4)} times ${shortText(split.double)} h`] : []),
+    ...(onBonus.gt(0) ? [`${decimalText(onBonus, 4)} on the bonus`] : []),
+  ];
+  const bonusNote = onBonus.gt(0)
+    ? '. The bonus is left out of this rate: it is divided by the hours that were not overtime and brings one and a half times that'
+    : '';
   return [
     {
-      label: isFederal ? `Half of it, for the hours over ${premium.ruleSet.weeklyHours}` : 'The premium on top',
-      note: double.gt(0) ? `${note}. Double time: ${shortText(double)} h` : note,
-      arithmetic: double.gt(0) ? `${half} + ${whole}` : half,
+      label: isFederal ? `Half of it, for the hours over ${ruleSet.weeklyHours}` : 'The premium on top',
+      note: `${where}. The whole hour is in the steps above already${bonusNote}`,
+      arithmetic: parts.join(' + '),
       result: centsText(amountCents),
-      sources,
+      sources: [{ kind: 'rule', id: ruleSet.key, label: ruleSet.name }],
     },
   ];
 }

@@ -1,5 +1,6 @@
-import { exact, sum, type Exact } from '../money/exact.ts';
+import { dollars, exact, greatest, sum, ZERO, type Exact } from '../money/exact.ts';
 import { hasDailyOvertime, splitHours, splitPremium, type SplitHours } from './daily-overtime.ts';
+import { flatSumBonusOvertime } from './flat-sum-bonus.ts';
 import { overtimeRuleSet, type OvertimeRuleSet } from './overtime-rule-sets.ts';
 import { halfTimePremium, hoursOver } from './regular-rate.ts';
 
@@ -7,16 +8,22 @@ export interface WeekPremium {
   /** The rule set that pays more; the federal one always runs beside the place's own (29 USC 218(a)). */
   ruleSet: OvertimeRuleSet;
   split: SplitHours;
+  /** The rate the premium was taken from: the regular rate, without a bonus that has overtime of its own. */
+  rate: Exact;
+  /** Overtime on a flat-sum bonus where the place works it out apart; a part of the premium. */
+  onBonus: Exact;
   /** Exact dollars owed on top of straight pay. */
   premium: Exact;
 }
 
 export interface PremiumQuestion {
   ruleSetKey: string;
-  /** Exact dollars an hour. */
+  /** The regular rate, exact dollars an hour. */
   rate: Exact;
   hoursByWorkday: readonly Exact[];
   minimumWage: Exact;
+  /** Cents of bonuses inside the regular rate. */
+  bonusCents: number;
 }
 
 /**
@@ -24,22 +31,30 @@ export interface PremiumQuestion {
  * larger of the two is owed, once.
  */
 export function weekPremium(question: PremiumQuestion): WeekPremium {
-  const federal = federalPremium(question.rate, question.hoursByWorkday);
-  const rules = overtimeRuleSet(question.ruleSetKey);
-  if (rules.key === federal.ruleSet.key) return federal;
-  const daily = hasDailyOvertime(rules, question.rate, question.minimumWage);
-  const split = splitHours(question.hoursByWorkday, rules, { daily });
-  const premium = splitPremium(question.rate, split);
-  return premium.lt(federal.premium) ? federal : { ruleSet: rules, split, premium };
+  const federal = federalPremium(question);
+  const ruleSet = overtimeRuleSet(question.ruleSetKey);
+  if (ruleSet.key === federal.ruleSet.key) return federal;
+  const local = localPremium(question, ruleSet);
+  return local.premium.lt(federal.premium) ? federal : local;
 }
 
-function federalPremium(rate: Exact, hoursByWorkday: readonly Exact[]): WeekPremium {
+function federalPremium({ rate, hoursByWorkday }: PremiumQuestion): WeekPremium {
   const ruleSet = overtimeRuleSet('us_federal');
   const hours = sum(hoursByWorkday);
   const overtime = hoursOver(hours, exact(ruleSet.weeklyHours));
-  return {
-    ruleSet,
-    split: { straight: hours.sub(overtime), overtime, double: exact(0) },
-    premium: halfTimePremium(rate, overtime),
-  };
+  const split = { straight: hours.sub(overtime), overtime, double: ZERO };
+  return { ruleSet, split, rate, onBonus: ZERO, premium: halfTimePremium(rate, overtime) };
+}
+
+function localPremium(question: PremiumQuestion, ruleSet: OvertimeRuleSet): WeekPremium {
+  const { hoursByWorkday, minimumWage } = question;
+  const daily = hasDailyOvertime(ruleSet, question.rate, minimumWage);
+  const split = splitHours(hoursByWorkday, ruleSet, { daily });
+  const bonus = ruleSet.flatSumBonusApart && split.straight.gt(0) ? dollars(question.bonusCents) : ZERO;
+  if (bonus.lte(0)) {
+    return { ruleSet, split, rate: question.rate, onBonus: ZERO, premium: splitPremium(question.rate, split) };
+  }
+  const rate = greatest(question.rate.sub(bonus.div(sum(hoursByWorkday))), minimumWage);
+  const onBonus = flatSumBonusOvertime(bonus, split.straight, split.overtime, split.double).due;
+  return { ruleSet, split, rate, onBonus, premium: splitPremium(rate, split).add(onBonus) };
 }
