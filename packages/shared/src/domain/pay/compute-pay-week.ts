@@ -1,7 +1,6 @@
 import { dollars, exact, fractionText, greatest, hoursOf, ZERO, type Exact } from '../money/exact.ts';
 import { toCentsDown } from '../money/rounding.ts';
 import { additionLines, takingLines } from './adjustment-lines.ts';
-import { ratesOf } from './dated-rates.ts';
 import { deductionRoom } from './deductions.ts';
 import { hourlyPay } from './hourly-pay.ts';
 import { jobLinePay } from './job-line-pay.ts';
@@ -43,10 +42,9 @@ function personWeek(person: PayPerson, own: PersonInput, input: PayWeekInput, gr
   const { counted, shortMeals } = countEntries(own.entries, grid, rules.mealBreakMinutes);
   const spans = cutIntoDays(counted, grid);
   const hours = hoursOf(spans.reduce((total, span) => total + span.to - span.from, 0));
-  const rates = ratesOf(input.rates, person.id);
 
-  const byClock = hourlyPay(person, spans, rates);
-  const byLine = own.doneLines.flatMap((line) => jobLinePay(person, line, rates, rules.crewSplit, zone));
+  const byClock = hourlyPay(person, spans, own.rates);
+  const byLine = own.doneLines.flatMap((line) => jobLinePay(person, line, own.rates, rules.crewSplit, zone));
   const additions = additionLines(own.adjustments);
   const earned = [...byClock.lines, ...byLine, ...additions.filter((line) => line.inRegularRate)];
   const makeUp = makeUpLine(person, earned, hours, minimumWage);

@@ -45,8 +45,3 @@ function isBetter(rate: DatedRate, other: DatedRate): boolean {
 function exactness(rate: DatedRate): number {
   return (rate.personId === null ? 0 : 2) + (rate.serviceId === null && rate.clockKind === null ? 0 : 1);
 }
-
-/** The rates that can concern one person, so that the search for each line stays short. */
-export function ratesOf(rates: readonly DatedRate[], personId: string): DatedRate[] {
-  return rates.filter((rate) => rate.personId === null || rate.personId === personId);
-}

@@ -1,4 +1,4 @@
-import type { DoneLine, PayAdjustment, PayEntry, PayTip, PayWeekInput } from './pay-week.types.ts';
+import type { DatedRate, DoneLine, PayAdjustment, PayEntry, PayTip, PayWeekInput } from './pay-week.types.ts';
 import { entrySpan, secondsOf, type WeekGrid } from './work-spans.ts';
 
 /** One person's part of the week's input, in an order that does not depend on the order it came in. */
@@ -7,6 +7,8 @@ export interface PersonInput {
   doneLines: DoneLine[];
   tips: PayTip[];
   adjustments: PayAdjustment[];
+  /** The person's own rates and the company's. */
+  rates: DatedRate[];
 }
 
 /**
@@ -15,8 +17,15 @@ export interface PersonInput {
  */
 export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: string) => PersonInput {
   const groups = new Map<string, PersonInput>();
+  const companyRates = input.rates.filter((rate) => rate.personId === null);
   const of = (personId: string): PersonInput => {
-    const group = groups.get(personId) ?? { entries: [], doneLines: [], tips: [], adjustments: [] };
+    const group = groups.get(personId) ?? {
+      entries: [],
+      doneLines: [],
+      tips: [],
+      adjustments: [],
+      rates: [...companyRates],
+    };
     groups.set(personId, group);
     return group;
   };
@@ -48,6 +57,7 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
   }
   for (const item of [...input.adjustments].sort(by((adjustment) => adjustment.id)))
     of(item.personId).adjustments.push(item);
+  for (const rate of input.rates) if (rate.personId !== null) of(rate.personId).rates.push(rate);
   return of;
 }
 
