@@ -30,7 +30,7 @@ export function buildWeb() {
     });
     if (code === 0) return;
     if (meansFullDisk(output)) throw new PlainError('The disk is full: the web app could not be built.');
-    process.stderr.write(output);
+    process.stderr.write(output.replace(/^\s+at .*\n/gm, '')); // Where in the tool it happened helps nobody.
     throw new PlainError('The web app could not be built; the reason stands above.');
   });
 }
