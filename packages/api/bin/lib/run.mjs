@@ -112,13 +112,26 @@ export function endRunning() {
  * @param {(signal: NodeJS.Signals) => void} [onStop] called at each such signal
  */
 export function stopOnSignals(onStop) {
-  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) {
-    process.on(signal, () => {
-      stoppedBy ??= signal;
-      endRunning();
-      onStop?.(signal);
-    });
-  }
+  const stop = (signal) => {
+    stoppedBy ??= signal;
+    endRunning();
+    onStop?.(signal);
+  };
+  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, stop);
+  if (process.env.npm_lifecycle_event) whenOrphaned(() => stop('SIGTERM'));
+}
+
+/**
+ * npm passes SIGTERM on to the shell it started, not to what runs in the shell: the shell's end is all
+ * that is seen of it here.
+ */
+function whenOrphaned(tell) {
+  const parent = process.ppid;
+  const watch = setInterval(() => {
+    if (process.ppid === parent) return;
+    clearInterval(watch);
+    tell();
+  }, 200).unref();
 }
 
 /** Throws `Stopped` when the end was asked for. */
