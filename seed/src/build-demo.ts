@@ -1,6 +1,6 @@
 import { writeTimeOff } from './away.ts';
 import type { Calendar } from './calendar.ts';
-import { ZONE, calendarOf, instant } from './calendar.ts';
+import { ZONE, calendarOf, instant, minuteOf } from './calendar.ts';
 import { writeComingDays } from './coming-days.ts';
 import { writeCustomers } from './customers.ts';
 import { writeHistory } from './history.ts';
@@ -27,7 +27,7 @@ export interface Demo {
 export function buildDemo(now: Date): Demo {
   const calendar = calendarOf(now);
   const rows = noRows();
-  const ids = idsFrom(instant(calendar.rulesFrom, 0));
+  const ids = idsFrom(instant(calendar.rulesFrom, minuteOf('09:00')));
   rows.settings.push({
     ...{ id: 1, name: 'Tern & Tide Mobile Detailing', phone: '555-0100', email: 'desk@ternandtide.example' },
     ...{ zone: ZONE, clock: '12', units: 'us', dayStartsAt: '07:30', dayEndsAt: '18:00' },

@@ -33,10 +33,16 @@ export function calendarOf(now: Date): Calendar {
   };
 }
 
-/** The instant of a day's minute, counted from midnight by the clock on the wall. */
+const noons = new Map<string, number>();
+
+/**
+ * The instant of a minute counted from midnight by the clock on the wall.
+ * @param minute from 180 on: clocks change before three in the morning
+ */
 export function instant(day: string, minute: number): Date {
-  const clock = [Math.floor(minute / 60), minute % 60].map((part) => String(part).padStart(2, '0')).join(':');
-  return new Date(instantOf(day, clock, ZONE));
+  const noon = noons.get(day) ?? Date.parse(instantOf(day, '12:00', ZONE));
+  noons.set(day, noon); // Tens of thousands of instants fall on a hundred days.
+  return new Date(noon + (minute - 12 * 60) * 60_000);
 }
 
 /** Minutes from midnight of "HH:mm". */

@@ -30,7 +30,7 @@ export const lastNames = [
     'Delacroix',
   ],
   ...['Draycott', 'Eldermere', 'Esker', 'Farrand', 'Ferrante', 'Galloway', 'Garrick', 'Halloran', 'Hartnoll', 'Ibarra'],
-  ...['Iversen', 'Jessop', 'Kessler', 'Kittredge', 'Lindqvist', 'Lorimer', 'Marlowe', 'Mbeki-Rose', 'Merrow', 'Moreau'],
+  ...['Iversen', 'Jessop', 'Kessler', 'Kittredge', 'Lindqvist', 'Lorimer', 'Marlowe', 'Mbele-Rose', 'Merrow', 'Moreau'],
   ...[
     'Nakagawa',
     'Nettles',

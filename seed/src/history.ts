@@ -18,7 +18,7 @@ import { writeTip } from './tip-rows.ts';
 import type { DemoVan, VanDay } from './vans.ts';
 import { crewsOn, writeCrews } from './vans.ts';
 
-const LAST_END = minuteOf('15:15');
+const LAST_END = minuteOf('15:30');
 const UNCLOCKED = 'Wyn Abara';
 const callOffReasons = ['Customer is ill', 'Car is at the body shop', 'Rain all day', 'Customer forgot'] as const;
 

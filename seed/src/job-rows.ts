@@ -1,5 +1,7 @@
+import { formatDay } from '@driprail/shared/domain/time/format';
+import { clockOf } from '@driprail/shared/domain/time/zone';
 import type { Calendar } from './calendar.ts';
-import { instant } from './calendar.ts';
+import { ZONE, instant, minuteOf } from './calendar.ts';
 import type { DemoCustomer } from './customers.ts';
 import type { Menu } from './menu.ts';
 import { onMenu } from './menu.ts';
@@ -20,6 +22,7 @@ export interface Book {
 
 type JobRow = DemoRows['jobs'][number];
 export type LineRow = DemoRows['jobLines'][number];
+type EventRow = DemoRows['visitEvents'][number];
 export type VisitRow = DemoRows['visits'][number];
 
 export interface OrderedJob {
@@ -38,6 +41,7 @@ export interface Order {
   random: Random;
 }
 
+const DAY_STARTS = minuteOf('07:30');
 const discountReasons = [
   'Second car at the same stop',
   'Neighbor’s referral',
@@ -123,11 +127,28 @@ export function goOut({ rows, ids }: Book, ordered: OrderedJob, { lines, minutes
   };
   rows.visits.push(visit);
   rows.visitLines.push(...lines.map((line) => ({ visitId: visit.id, jobLineId: line.id })));
+  if (placing) rows.visitEvents.push(planEvent(ids(), visit, ordered.job, placing));
   return visit;
 }
 
-/** Two hours around the planned start, from the full hour on. */
+/** The dispatcher placed the visit a few minutes after the booking. */
+function planEvent(
+  id: string,
+  visit: VisitRow,
+  { createdAt, createdBy }: JobRow,
+  { day, van, from }: Placing,
+): EventRow {
+  const when = new Date(createdAt.getTime() + 4 * 60_000);
+  const clock = clockOf(instant(day, from).toISOString(), ZONE);
+  return {
+    ...{ id, visitId: visit.id, kind: 'plan', fromProgress: 'unplaced', toProgress: 'placed' },
+    ...{ userId: createdBy ?? null, personId: null, deviceAt: when, receivedAt: when, occurredAt: when },
+    ...{ trouble: null, reason: `Placed on ${van.name}, ${formatDay(day)} ${clock}` },
+  };
+}
+
+/** Two hours around the planned start, from the full hour on, but not before the company's day. */
 export function windowAround(day: string, from: number): { from: Date; to: Date } {
-  const hour = Math.floor(from / 60) * 60;
-  return { from: instant(day, hour), to: instant(day, hour + 120) };
+  const opens = Math.max(Math.floor(from / 60) * 60, DAY_STARTS);
+  return { from: instant(day, opens), to: instant(day, opens + 120) };
 }

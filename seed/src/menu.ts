@@ -159,3 +159,8 @@ export function onMenu(menu: Menu, name: ServiceName): MenuEntry {
   if (!entry) throw new RangeError(`${name} is not on the menu`);
   return entry;
 }
+
+/** Correction and coating. */
+export function isPaintWork(menu: Menu, service: ServiceName): boolean {
+  return onMenu(menu, service).skills.some((skill) => skill === 'correction' || skill === 'coating');
+}

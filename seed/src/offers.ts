@@ -1,11 +1,11 @@
 import type { DemoCustomer, DemoVehicle } from './customers.ts';
 import type { Menu, ServiceName } from './menu.ts';
-import { onMenu } from './menu.ts';
+import { isPaintWork, onMenu } from './menu.ts';
 import type { PlannedItem } from './plan-day.ts';
 import type { Random } from './random.ts';
 import type { VanDay } from './vans.ts';
 
-/** What is asked for together and how often, of a hundred; invented. */
+/** What is asked for together and how often, by weight; invented. Paint work is asked for more often than it can be done. */
 const bundles: { services: ServiceName[]; weight: number }[] = [
   { services: ['Maintenance wash'], weight: 24 },
   { services: ['Wash and wax'], weight: 19 },
@@ -18,9 +18,9 @@ const bundles: { services: ServiceName[]; weight: number }[] = [
   { services: ['Wash and wax', 'Engine bay'], weight: 3 },
   { services: ['Maintenance wash', 'Headlight restoration'], weight: 3 },
   { services: ['Wheels-off detail'], weight: 2 },
-  { services: ['One-step polish'], weight: 10 },
-  { services: ['Two-step polish'], weight: 5 },
-  { services: ['Ceramic coating, one layer'], weight: 4 },
+  { services: ['One-step polish'], weight: 16 },
+  { services: ['Two-step polish'], weight: 11 },
+  { services: ['Ceramic coating, one layer'], weight: 12 },
 ];
 
 /** A customer's order that this crew and van can do; null when the draw was one they can't. */
@@ -40,7 +40,7 @@ export function offers(
   const isPossible = services.every((name) => {
     const { skills: needed, equipment, prices } = onMenu(menu, name);
     const isSold = prices[vehicle.sizeClass] !== undefined;
-    const isTwice = equipment.includes('polisher') && isPolished(vehicle);
+    const isTwice = isPaintWork(menu, name) && isPolished(vehicle);
     const canDo = needed.every((skill) => skills.has(skill)) && equipment.every((tool) => van.equipment.includes(tool));
     return isSold && !isTwice && canDo;
   });

@@ -6,7 +6,7 @@ import { MEAL_AFTER, MEAL_MINUTES } from './meal.ts';
 import type { DemoCustomer, DemoVehicle } from './customers.ts';
 import type { LineRow, OrderedJob } from './job-rows.ts';
 import type { Menu, ServiceName } from './menu.ts';
-import { onMenu } from './menu.ts';
+import { isPaintWork, onMenu } from './menu.ts';
 import { offers } from './offers.ts';
 import { SHOP } from './places.ts';
 import type { Random } from './random.ts';
@@ -49,8 +49,8 @@ export class Rota {
     return this.polished.has(vehicle.id);
   }
 
-  polish(vehicle: DemoVehicle): void {
-    this.polished.add(vehicle.id);
+  note(items: readonly PlannedItem[], menu: Menu): void {
+    for (const { vehicle, service } of items) if (isPaintWork(menu, service)) this.polished.add(vehicle.id);
   }
 
   /** The one of eight seen longest ago; null when none of them will do. */
@@ -118,8 +118,7 @@ export function planDay({ day, vanDay, menu, rota, random, until, rest }: DayAsk
       misses += 1;
       continue;
     }
-    for (const { vehicle, service } of items)
-      if (onMenu(menu, service).equipment.includes('polisher')) rota.polish(vehicle);
+    rota.note(items, menu);
     add({ customer, items, from, to, continues: null });
   }
   return stops;

@@ -91,7 +91,7 @@ export const todayScript: readonly ScriptedVan[] = [
     visits: [
       { from: '08:50', services: ['Wash and wax'], size: 'sedan', times: ['08:33', '08:52', '08:55', '10:24'] },
       { from: '11:15', services: ['Full interior'], size: 'coupe' },
-      { from: '13:20', services: ['Inside and out'], size: 'sedan', isTight: true },
+      { from: '13:15', services: ['Inside and out'], size: 'sedan', isTight: true },
     ],
   },
 ];

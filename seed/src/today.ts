@@ -7,7 +7,6 @@ import { writeDeskClockToday } from './desk-clock.ts';
 import type { DemoCustomer } from './customers.ts';
 import type { Book, VisitRow } from './job-rows.ts';
 import { goOut, orderJob } from './job-rows.ts';
-import { onMenu } from './menu.ts';
 import type { DemoPeople } from './people.ts';
 import { named } from './people.ts';
 import type { PlannedStop, Rota } from './plan-day.ts';
@@ -39,7 +38,12 @@ export function writeToday(
   customers: readonly DemoCustomer[],
   rota: Rota,
 ): void {
-  const today: Today = { book, people, customers, rota, taken: new Set() };
+  const random = randomFor('today');
+  const shuffled = customers
+    .map((customer) => ({ customer, place: random.next() }))
+    .sort((a, b) => a.place - b.place)
+    .map(({ customer }) => customer);
+  const today: Today = { book, people, customers: shuffled, rota, taken: new Set() };
   for (const scripted of todayScript) {
     const van = at(
       vans,
@@ -118,9 +122,7 @@ function takeCustomer(
   const items = fitting(customer)
     .slice(0, cars)
     .flatMap((vehicle) => services.map((service) => ({ vehicle, service })));
-  for (const { vehicle, service } of items) {
-    if (onMenu(book.menu, service).equipment.includes('polisher')) rota.polish(vehicle);
-  }
+  rota.note(items, book.menu);
   return { customer, items };
 }
 
