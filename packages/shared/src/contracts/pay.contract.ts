@@ -143,8 +143,27 @@ export const listPayWeeks = endpoint({
   path: '/api/pay/weeks',
   roles: owner,
   summary: 'The pay weeks, newest first, with gross and hours.',
-  response: z.object({ weeks: z.array(payWeekHead.extend({ grossCents: z.int().nullable(), salesCents: z.int() })) }),
+  response: z.object({
+    weeks: z.array(
+      payWeekHead.extend({
+        /** Null until the week is locked; tips to be paid out are in the gross and named beside it. */
+        grossCents: z.int().nullable(),
+        tipCents: z.int().nullable(),
+        salesCents: z.int(),
+      }),
+    ),
+  }),
 });
+/** A locked line that a correction names, by the database's id of the line. */
+const correctedLine = z.object({
+  startsOn: day,
+  number: z.int(),
+  key: z.string(),
+  label: z.string(),
+  position: z.int(),
+});
+const correctedLines = z.record(z.string(), correctedLine);
+export type CorrectedLine = z.infer<typeof correctedLine>;
 export const payWeekDto = z.object({
   week: payWeekHead,
   people: z.array(personWeek),
@@ -153,8 +172,22 @@ export const payWeekDto = z.object({
   /** What stored lines are called in the database, by person and key; only for a locked week. */
   lineIds: z.record(z.string(), id),
   engineVersion: z.string(),
-  /** For a locked week: what today's records would pay instead, where that differs. Paid by a correction in an open week. */
-  lateDifferences: z.array(z.object({ personId: id, name: z.string(), lockedCents: z.int(), nowCents: z.int() })),
+  /**
+   * For a locked week: what today's records would pay instead, where that differs and corrections in other weeks,
+   * `correctedCents` in all, have not made it up. Paid by a correction in an open week.
+   */
+  lateDifferences: z.array(
+    z.object({
+      personId: id,
+      name: z.string(),
+      lockedCents: z.int(),
+      nowCents: z.int(),
+      correctedCents: z.int(),
+    }),
+  ),
+  correctedLines,
+  /** When the clock entries and jobs that warnings name took place, by their ids. */
+  warningTimes: z.record(z.string(), instant),
 });
 export type PayWeekDto = z.infer<typeof payWeekDto>;
 const weekParam = z.object({ startsOn: day });
@@ -238,6 +271,6 @@ export const getStatement = endpoint({
   roles: everyone,
   summary: 'One person’s statement of a week: one’s own when locked, anybody’s for the owner.',
   params: weekParam.extend({ personId: id }),
-  response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string() }),
+  response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string(), correctedLines }),
 });
 export type StatementDto = z.infer<(typeof getStatement)['response']>;

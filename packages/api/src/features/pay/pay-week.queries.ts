@@ -1,36 +1,32 @@
 import type { Transaction } from 'sequelize';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { ENGINE_VERSION, computePayWeek } from '@driprail/shared/domain/pay/compute-pay-week';
-import type { PayLine, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import type { PayLine, PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
 import type { PayWeek } from '../../db/models/index.ts';
 import { PayLineRow, PayStatement } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
+import { correctedLinesOf, correctionsOfWeek, differences } from './corrections.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
+import { salesOf } from './week-figures.queries.ts';
 import { headOf } from './weeks.service.ts';
 
 /** A week as the owner sees it: computed while open, as it was frozen once locked. */
 export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): Promise<PayWeekDto> {
-  const computed = computePayWeek(await payInputOf(week, now, tx));
+  const input = await payInputOf(week, now, tx);
+  const computed = computePayWeek(input);
   const frozen = week.state === 'locked' ? await readFrozen(week.id, null, tx) : null;
+  const people = frozen?.people ?? computed.people;
   return {
     week: await headOf(week, tx),
-    people: frozen?.people ?? computed.people,
+    people,
     adjustments: await adjustmentsOf(week.id, tx),
     salesCents: await salesOf(week, tx),
     lineIds: frozen?.lineIds ?? {},
     engineVersion: week.engineVersion ?? ENGINE_VERSION,
-    lateDifferences: frozen ? differences(frozen.people, computed.people) : [],
+    lateDifferences: frozen ? differences(frozen.people, computed.people, await correctionsOfWeek(week.id, tx)) : [],
+    correctedLines: await correctedLinesOf(people, tx),
+    warningTimes: warningTimes(people, input),
   };
-}
-
-/** What arrived after the lock shows as the difference that today's records would make. */
-function differences(locked: PersonWeek[], now: PersonWeek[]): PayWeekDto['lateDifferences'] {
-  const everyone = new Map([...locked, ...now].map((person) => [person.personId, person.name]));
-  return [...everyone].flatMap(([personId, name]) => {
-    const lockedCents = locked.find((p) => p.personId === personId)?.totals.gross ?? 0;
-    const nowCents = now.find((p) => p.personId === personId)?.totals.gross ?? 0;
-    return lockedCents === nowCents ? [] : [{ personId, name, lockedCents, nowCents }];
-  });
 }
 
 /** The stored lines of a locked week, of everybody or of one person. */
@@ -61,29 +57,12 @@ function adjustmentsOf(weekId: string, tx?: Transaction): Promise<PayWeekDto['ad
   );
 }
 
-/** What the finished work sold for, after discounts of jobs that are wholly finished in the week's lines. */
-async function salesOf(week: PayWeek, tx?: Transaction): Promise<number> {
-  const [row] = await select<{ cents: number }>(
-    `SELECT coalesce(sum(l.price_cents - CASE WHEN j.discount_cents = 0 THEN 0 ELSE
-              round(j.discount_cents * l.price_cents::numeric / greatest(1, (SELECT sum(price_cents) FROM job_lines o WHERE o.job_id = j.id))) END), 0)::bigint AS cents
-       FROM job_lines l JOIN jobs j ON j.id = l.job_id WHERE l.finished_at >= :from AND l.finished_at < :to`,
-    { from: week.startsAt, to: week.endsAt },
-    tx,
-  );
-  return row?.cents ?? 0;
-}
-
-export interface WeekRow {
-  id: string;
-  grossCents: number | null;
-  salesCents: number;
-}
-
-/** Gross of locked weeks and sales of all, newest first. */
-export function listWeekFigures(): Promise<WeekRow[]> {
-  return select<WeekRow>(
-    `SELECT w.id, (SELECT sum(s.gross_cents)::bigint FROM pay_statements s WHERE s.pay_week_id = w.id) AS "grossCents",
-            coalesce((SELECT sum(l.price_cents) FROM job_lines l WHERE l.finished_at >= w.starts_at AND l.finished_at < w.ends_at), 0)::bigint AS "salesCents"
-       FROM pay_weeks w ORDER BY w.starts_on DESC LIMIT 60`,
-  );
+/** When what the warnings name took place, so that a screen can lead to the day. */
+function warningTimes(people: readonly PersonWeek[], { entries, doneLines }: PayWeekInput): Record<string, string> {
+  const named = new Set(people.flatMap((person) => person.warnings.flatMap((w) => [w.entryId, w.jobId])));
+  const times = [
+    ...entries.map((entry) => [entry.id, entry.startedAt] as const),
+    ...doneLines.map((line) => [line.jobId, line.doneAt] as const),
+  ];
+  return Object.fromEntries(times.filter(([id]) => named.has(id)));
 }

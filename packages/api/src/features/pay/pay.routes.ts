@@ -7,9 +7,10 @@ import { okay, route } from '../../http/route.ts';
 import { addAdjustment, removeAdjustment } from './adjustments.service.ts';
 import { payWeekCsv } from './export.ts';
 import { setWeekState } from './lock.service.ts';
-import { listWeekFigures, readPayWeek } from './pay-week.queries.ts';
+import { readPayWeek } from './pay-week.queries.ts';
 import { addRate, addRules, listRates, listRules } from './rates.service.ts';
 import { listStatements, readStatement } from './statements.queries.ts';
+import { listWeekFigures } from './week-figures.queries.ts';
 import { headOf, weekOf } from './weeks.service.ts';
 
 export function payRoutes(table: RouteTable): void {
@@ -26,8 +27,8 @@ export function payRoutes(table: RouteTable): void {
     return {
       weeks: await Promise.all(
         weeks.map(async (week) => {
-          const { grossCents = null, salesCents = 0 } = figures.find((f) => f.id === week.id) ?? {};
-          return { ...(await headOf(week)), grossCents, salesCents };
+          const { grossCents = null, tipCents = null, salesCents = 0 } = figures.find((f) => f.id === week.id) ?? {};
+          return { ...(await headOf(week)), grossCents, tipCents, salesCents };
         }),
       ),
     };

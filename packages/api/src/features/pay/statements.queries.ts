@@ -1,11 +1,12 @@
 import { tag } from '@driprail/shared/authz/ability';
-import type { PayWeekHead, PersonWeek } from '@driprail/shared/contracts/pay.contract';
+import type { StatementDto } from '@driprail/shared/contracts/pay.contract';
 import { weekNumberOf } from '@driprail/shared/domain/time/zone';
 import { authorize } from '../../authz/authorize.ts';
 import { companyOf } from '../../db/company.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
+import { correctedLinesOf } from './corrections.queries.ts';
 import { readFrozen, readPayWeek } from './pay-week.queries.ts';
 import { headOf, weekOf } from './weeks.service.ts';
 
@@ -30,11 +31,7 @@ export async function listStatements({ actor }: Ctx) {
 }
 
 /** @throws 403 for another's statement or a week that is not locked yet, except to the owner */
-export function readStatement(
-  { ability, now }: Ctx,
-  day: string,
-  personId: string,
-): Promise<{ week: PayWeekHead; person: PersonWeek; companyName: string }> {
+export function readStatement({ ability, now }: Ctx, day: string, personId: string): Promise<StatementDto> {
   return inTransaction(async (tx) => {
     const week = await weekOf(day, tx);
     authorize(ability, 'read', tag('Statement', { personId, state: week.state }));
@@ -44,6 +41,11 @@ export function readStatement(
         : (await readPayWeek(week, now(), tx)).people;
     const person = people.find((p) => p.personId === personId);
     if (!person) throw notFound('A statement of this person for that week');
-    return { week: await headOf(week, tx), person, companyName: (await companyOf(tx)).name };
+    return {
+      week: await headOf(week, tx),
+      person,
+      companyName: (await companyOf(tx)).name,
+      correctedLines: await correctedLinesOf([person], tx),
+    };
   });
 }
