@@ -4,7 +4,7 @@ import { readConfig } from './config.ts';
 import { migrate } from './db/migrate.ts';
 import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
-import { SetUpCode, isSetUpNeeded } from './features/settings/index.ts';
+import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
 import { every } from './jobs/every.ts';
 import { createLogger } from './log.ts';
 import { localMail, smtpMail } from './mail/transport.ts';
@@ -50,6 +50,7 @@ async function main(): Promise<void> {
   const address = app.server.address();
   const port = typeof address === 'object' && address ? address.port : config.port;
   process.stdout.write(`Driprail is ready at http://${config.host}:${port}\n`);
+  if (await hasDemoLogins()) process.stdout.write(demoSignIns);
   if (await isSetUpNeeded()) process.stdout.write(`Set up the company with this one-time code: ${setUpCode.make()}\n`);
 
   let isStopping = false;
@@ -66,6 +67,12 @@ async function main(): Promise<void> {
   process.once('SIGINT', stop);
   process.once('disconnect', stop);
 }
+
+const demoSignIns = `Sign in with the password driprail-demo as
+  owner@ternandtide.example        owner
+  dispatch@ternandtide.example     dispatcher
+  tech1@ternandtide.example        technician (tech1 to tech12)
+`;
 
 function listen(server: import('node:http').Server, port: number, host: string): Promise<void> {
   return new Promise((resolve, reject) => {

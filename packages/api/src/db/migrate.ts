@@ -1,4 +1,4 @@
-import { Sequelize } from 'sequelize';
+import { QueryTypes, Sequelize } from 'sequelize';
 import { SequelizeStorage, Umzug } from 'umzug';
 import { migrations } from './migrations/index.ts';
 
@@ -11,11 +11,21 @@ import { migrations } from './migrations/index.ts';
 export async function migrate(ownerUrl: string, appRole: string): Promise<void> {
   const sequelize = new Sequelize(ownerUrl, { logging: false, pool: { max: 1 } });
   try {
+    // Two starts on one database take turns.
+    await sequelize.query(`SELECT pg_advisory_lock(${MIGRATION_LOCK})`);
     await umzugFor(sequelize).up();
-    await grantRows(sequelize, appRole);
+    if (!(await isCurrentRole(sequelize, appRole))) await grantRows(sequelize, appRole);
   } finally {
     await sequelize.close();
   }
+}
+
+/** Any number that nothing else in this database locks. */
+const MIGRATION_LOCK = 460_001;
+
+async function isCurrentRole(sequelize: Sequelize, role: string): Promise<boolean> {
+  const [row] = await sequelize.query<{ isSame: boolean }>('SELECT current_user = $role AS "isSame"', { bind: { role }, type: QueryTypes.SELECT });
+  return row?.isSame ?? false;
 }
 
 export function umzugFor(sequelize: Sequelize) {

@@ -35,7 +35,9 @@ WITH entry AS (
 )
 SELECT json_build_object(
   'people', coalesce((SELECT json_agg(json_build_object('id', p.id, 'name', p.name) ORDER BY p.name, p.id)
-     FROM people p WHERE p.id IN (SELECT person_id FROM paid)), '[]'::json),
+     FROM people p WHERE p.id IN (SELECT person_id FROM paid)
+      -- An owner's minutes count for the job, not for wages.
+      AND NOT EXISTS (SELECT 1 FROM users u WHERE u.person_id = p.id AND u.role = 'owner')), '[]'::json),
   'entries', coalesce((SELECT json_agg(json_build_object('id', e.id, 'personId', e.person_id, 'kind', e.kind, 'visitId', e.visit_id,
       'startedAt', to_json(e.started_at) #>> '{}', 'endedAt', to_json(e.ended_at) #>> '{}', 'interrupted', e.is_interrupted)
       ORDER BY e.started_at, e.id) FROM entry e), '[]'::json),

@@ -1,2 +1,2 @@
 export { settingsRoutes } from './settings.routes.ts';
-export { SetUpCode, isSetUpNeeded, setUpCompany } from './set-up.service.ts';
+export { SetUpCode, hasDemoLogins, isSetUpNeeded, setUpCompany } from './set-up.service.ts';

@@ -32,6 +32,11 @@ export async function isSetUpNeeded(): Promise<boolean> {
   return (await CompanySettings.count()) === 0;
 }
 
+/** Whether this is the demo company, whose sign-ins are no secret. */
+export async function hasDemoLogins(): Promise<boolean> {
+  return (await User.count({ where: { email: 'owner@ternandtide.example' } })) > 0;
+}
+
 export interface CompanyStart {
   companyName: string;
   zone: string;

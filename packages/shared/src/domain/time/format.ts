@@ -16,6 +16,12 @@ export function formatSpan(from: string, to: string, zone: string, style: ClockS
   return style === '12' && end.endsWith(half) ? `${start.slice(0, -3)} to ${end}` : `${start} to ${end}`;
 }
 
+/** "10:00–11:30", for a lane whose hours already say am or pm. */
+export function formatBareSpan(from: string, to: string, zone: string, style: ClockStyle): string {
+  const bare = (instant: string) => formatClock(instant, zone, style).replace(/ [ap]m$/, '');
+  return `${bare(from)}–${bare(to)}`;
+}
+
 /** "Thu 14 May" is the look's word order; a US company reads "Thu May 14". */
 export function formatDay(day: string): string {
   return DateTime.fromISO(day, { zone: 'utc', locale: 'en-US' }).toFormat('ccc LLL d');

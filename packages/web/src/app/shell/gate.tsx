@@ -1,0 +1,33 @@
+import { useCallback } from 'react';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { Navigate, Outlet, useLocation } from 'react-router';
+import { sessionKey, sessionQuery } from '../../features/access/index.ts';
+import { Fault, Fetching } from '../../components/states.tsx';
+import { ApiError } from '../../lib/call.ts';
+import { SessionProvider } from '../../lib/session.tsx';
+import { useLiveCache } from '../../lib/socket.ts';
+import { paths } from '../paths.ts';
+
+/** Lets only signed-in people pass, and keeps their screens in step. */
+export function Gate() {
+  const client = useQueryClient();
+  const location = useLocation();
+  const session = useQuery(sessionQuery);
+  const onSignedOut = useCallback(() => {
+    client.clear();
+    client.setQueryData(sessionKey, null);
+  }, [client]);
+  useLiveCache(client, session.data?.user.id, onSignedOut);
+
+  const isSignedOut = session.data === null || (session.error instanceof ApiError && session.error.status === 401);
+  if (isSignedOut) return <Navigate to={paths.signIn} replace state={{ from: location.pathname + location.search }} />;
+  if (session.data) {
+    return (
+      <SessionProvider session={session.data}>
+        <Outlet />
+      </SessionProvider>
+    );
+  }
+  if (session.error) return <Fault message={session.error.message} onRetry={() => void session.refetch()} />;
+  return <Fetching what="your session" />;
+}

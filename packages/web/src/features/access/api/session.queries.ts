@@ -1,0 +1,36 @@
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import { createSession, endSession, getSession } from '@driprail/shared/contracts/session.contract';
+import type { SessionDto } from '@driprail/shared/contracts/session.contract';
+import { call } from '../../../lib/call.ts';
+
+export const sessionKey = ['session'] as const;
+
+/** Null once signed out. */
+export const sessionQuery = queryOptions({
+  queryKey: sessionKey,
+  queryFn: ({ signal }): Promise<SessionDto | null> => call(getSession, {}, signal),
+  staleTime: 5 * 60_000,
+  retry: false,
+});
+
+export function useSignIn() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: (body: { email: string; password: string }) => call(createSession, { body }),
+    onSuccess: (session) => {
+      client.clear();
+      client.setQueryData(sessionKey, session);
+    },
+  });
+}
+
+export function useSignOut() {
+  const client = useQueryClient();
+  return useMutation({
+    mutationFn: () => call(endSession),
+    onSettled: () => {
+      client.clear();
+      client.setQueryData(sessionKey, null);
+    },
+  });
+}

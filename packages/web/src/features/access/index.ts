@@ -1,0 +1,1 @@
+export { sessionKey, sessionQuery, useSignOut } from './api/session.queries.ts';

@@ -1,0 +1,62 @@
+import { useEffect, useState } from 'react';
+import { useQuery } from '@tanstack/react-query';
+import { Link, Navigate, useLocation, useNavigate } from 'react-router';
+import { getSetUp } from '@driprail/shared/contracts/settings.contract';
+import { paths } from '../../../app/paths.ts';
+import { Button } from '../../../components/button.tsx';
+import { TextField } from '../../../components/field.tsx';
+import { ApiError, call } from '../../../lib/call.ts';
+import { sessionQuery, useSignIn } from '../api/session.queries.ts';
+import { HungForm } from '../components/hung-form.tsx';
+
+export function SignInPage() {
+  const session = useQuery(sessionQuery);
+  const setUp = useQuery({ queryKey: ['set-up'], queryFn: ({ signal }) => call(getSetUp, {}, signal) });
+  const signIn = useSignIn();
+  const navigate = useNavigate();
+  const location = useLocation();
+  const [email, setEmail] = useState('');
+  const [password, setPassword] = useState('');
+  const from = (location.state as { from?: string } | null)?.from ?? '/';
+  useEffect(() => {
+    if (session.data) void navigate(from, { replace: true });
+  }, [session.data, from, navigate]);
+  if (setUp.data?.isNeeded) return <Navigate to={paths.setUp} replace />;
+  const fields = signIn.error instanceof ApiError ? signIn.error.fields : {};
+  return (
+    <HungForm
+      title="Sign in"
+      onSubmit={(event) => {
+        event.preventDefault();
+        if (!signIn.isPending) signIn.mutate({ email, password });
+      }}
+    >
+      <TextField
+        label="Work e-mail"
+        type="email"
+        autoComplete="username"
+        autoFocus
+        value={email}
+        error={fields['email']}
+        onChange={(event) => setEmail(event.target.value)}
+      />
+      <TextField
+        label="Password"
+        aside={<Link to={paths.forgotten}>Forgotten</Link>}
+        type="password"
+        autoComplete="current-password"
+        value={password}
+        error={fields['password']}
+        onChange={(event) => setPassword(event.target.value)}
+      />
+      {signIn.error && Object.keys(fields).length === 0 ? (
+        <p className="tape form-err" role="alert">
+          <b>{signIn.error.message}</b>
+        </p>
+      ) : null}
+      <Button type="submit" look="main" isBig isBusy={signIn.isPending}>
+        Sign in
+      </Button>
+    </HungForm>
+  );
+}

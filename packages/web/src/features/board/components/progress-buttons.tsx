@@ -1,0 +1,36 @@
+import { useMutation, useQueryClient } from '@tanstack/react-query';
+import { v4 as uuid } from 'uuid';
+import { postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
+import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
+import type { ProgressAction } from '@driprail/shared/domain/board/progress';
+import { actionNames, nextActions } from '@driprail/shared/domain/board/progress';
+import { Button } from '../../../components/button.tsx';
+import { call } from '../../../lib/call.ts';
+import { deviceOffsetMs } from '../../../lib/device-clock.ts';
+
+/** Marks progress for a crew whose phone can't; part done and calling off have their own ways. */
+export function ProgressButtons({ visit }: { visit: VisitDto }) {
+  const client = useQueryClient();
+  const mark = useMutation({
+    mutationFn: (action: { kind: ProgressAction; key: string }) =>
+      call(postVisitAction, { params: { id: visit.id }, body: { ...action, deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs() } }),
+    onSettled: () => Promise.all([client.invalidateQueries({ queryKey: ['board'] }), client.invalidateQueries({ queryKey: ['jobs'] })]),
+  });
+  const actions = nextActions(visit.progress).filter((action) => action !== 'part_done' && action !== 'call_off');
+  if (actions.length === 0) return null;
+  return (
+    <section>
+      <h3 className="sec">
+        Mark for the crew <span>when their phone can’t</span>
+      </h3>
+      <div className="flex flex-wrap gap-2 mt-2">
+        {actions.map((kind) => (
+          <Button key={kind} isBusy={mark.isPending} onClick={() => mark.mutate({ kind, key: uuid() })}>
+            {actionNames[kind]}
+          </Button>
+        ))}
+      </div>
+      {mark.error ? <p className="tape mt-2">{mark.error.message}</p> : null}
+    </section>
+  );
+}

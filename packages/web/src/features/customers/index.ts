@@ -1,0 +1,1 @@
+export { CustomerForm } from './components/customer-form.tsx';

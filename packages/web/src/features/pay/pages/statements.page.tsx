@@ -1,0 +1,1 @@
+export function StatementsPage() { return null; }

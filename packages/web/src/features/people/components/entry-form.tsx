@@ -1,0 +1,95 @@
+import { useState } from 'react';
+import { useQuery } from '@tanstack/react-query';
+import { clockKindNames, clockKinds } from '@driprail/shared/contracts/clock.contract';
+import type { ClockEntryDto, ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import { addDays, clockOf, dayOf, instantOf } from '@driprail/shared/domain/time/zone';
+import { Button } from '../../../components/button.tsx';
+import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
+import { SheetFoot } from '../../../components/sheet.tsx';
+import { ApiError } from '../../../lib/call.ts';
+import { useSession } from '../../../lib/session.tsx';
+import { useSaveEntry } from '../api/hours.queries.ts';
+import { peopleQuery } from '../api/people.queries.ts';
+
+const picks = ['Forgot to clock out', 'Forgot to clock in', 'Pressed the wrong kind', 'Phone was off'];
+
+/** Corrects or adds a stretch of time. Both versions stay on record; a locked week is mended by a correction in pay. */
+export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null; day: string; onDone: () => void }) {
+  const { zone } = useSession().company;
+  const people = useQuery(peopleQuery);
+  const save = useSaveEntry();
+  const [value, setValue] = useState({
+    personId: entry?.personId ?? '',
+    kind: entry?.kind ?? ('shop' as ClockKindName),
+    day: entry ? dayOf(entry.startedAt, zone) : day,
+    from: entry ? clockOf(entry.startedAt, zone) : '07:30',
+    to: entry?.endedAt ? clockOf(entry.endedAt, zone) : '',
+    isInterrupted: entry?.isInterrupted ?? false,
+    reason: '',
+  });
+  const fields = save.error instanceof ApiError ? save.error.fields : {};
+  const submit = () => {
+    const startedAt = entry && clockOf(entry.startedAt, zone) === value.from ? entry.startedAt : instantOf(value.day, value.from, zone);
+    // An end before its start by the clock is past midnight.
+    const endDay = value.to !== '' && value.to < value.from ? addDays(value.day, 1) : value.day;
+    const endedAt = value.to === '' ? null : entry?.endedAt && clockOf(entry.endedAt, zone) === value.to ? entry.endedAt : instantOf(endDay, value.to, zone);
+    const span = { kind: value.kind, startedAt, endedAt, isInterrupted: value.isInterrupted, reason: value.reason };
+    if (save.isPending) return;
+    if (entry) save.mutate({ id: entry.id, body: { ...span, version: entry.version } }, { onSuccess: onDone });
+    else save.mutate({ id: null, body: { ...span, personId: value.personId, visitId: null } }, { onSuccess: onDone });
+  };
+  return (
+    <form
+      noValidate
+      onSubmit={(event) => {
+        event.preventDefault();
+        submit();
+      }}
+    >
+      {entry ? (
+        <p className="mb-3">
+          <b>{entry.personName}</b>
+          {entry.jobNumber ? `, job ${entry.jobNumber}` : ''}
+        </p>
+      ) : (
+        <SelectField className="mb-3" label="Person" value={value.personId} error={fields['personId']} onChange={(event) => setValue({ ...value, personId: event.target.value })}>
+          <option value="">Choose …</option>
+          {people.data?.people.map((person) => (
+            <option key={person.id} value={person.id}>
+              {person.name}
+            </option>
+          ))}
+        </SelectField>
+      )}
+      <div className="grid grid-cols-4 gap-3 max-[560px]:grid-cols-2">
+        <SelectField label="Kind" value={value.kind} onChange={(event) => setValue({ ...value, kind: event.target.value as ClockKindName })}>
+          {clockKinds.map((kind) => (
+            <option key={kind} value={kind}>
+              {clockKindNames[kind]}
+            </option>
+          ))}
+        </SelectField>
+        <TextField label="Day" type="date" value={value.day} disabled={entry !== null} onChange={(event) => setValue({ ...value, day: event.target.value })} />
+        <TextField label="From" type="time" value={value.from} error={fields['startedAt']} onChange={(event) => setValue({ ...value, from: event.target.value })} />
+        <TextField label="To" type="time" value={value.to} error={fields['endedAt']} hint={value.to === '' ? 'Still running' : undefined} onChange={(event) => setValue({ ...value, to: event.target.value })} />
+      </div>
+      {value.kind === 'meal_break' ? (
+        <CheckField label="Had to work during the break: it counts as worked" checked={value.isInterrupted} onChange={(event) => setValue({ ...value, isInterrupted: event.target.checked })} />
+      ) : null}
+      <div className="flex flex-wrap gap-2 my-3">
+        {picks.map((pick) => (
+          <Button key={pick} onClick={() => setValue({ ...value, reason: pick })}>
+            {pick}
+          </Button>
+        ))}
+      </div>
+      <TextField label="Reason" value={value.reason} error={fields['reason']} onChange={(event) => setValue({ ...value, reason: event.target.value })} />
+      {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
+      <SheetFoot>
+        <Button type="submit" look="main" isBusy={save.isPending}>
+          {entry ? 'Save the correction' : 'Write it down'}
+        </Button>
+      </SheetFoot>
+    </form>
+  );
+}

@@ -1,0 +1,48 @@
+import type { ReactNode } from 'react';
+import { useSyncExternalStore } from 'react';
+import { useAbility } from '@casl/react';
+import type { AppAbility } from '@driprail/shared/authz/ability';
+import { Icon } from '../../../components/icon.tsx';
+import { useSession } from '../../../lib/session.tsx';
+import { useIsLive } from '../../../lib/socket.ts';
+
+/** The head of a phone page: a line, a hanging name, and whether there is signal. */
+export function PhoneHead({ above, title, menu, children }: { above: ReactNode; title: string; menu: (ability: AppAbility) => ReactNode; children?: ReactNode }) {
+  const ability = useAbility<AppAbility>();
+  const isOnline = useOnline();
+  const isLive = useIsLive();
+  const { user } = useSession();
+  return (
+    <header className="ph-head">
+      <div className="flex justify-between items-start gap-3">
+        <p className="t-2">
+          {above}, {user.name}
+        </p>
+        {menu(ability)}
+      </div>
+      <div className="flex justify-between items-end gap-3">
+        <h1 className="t-hang">{title}</h1>
+        {children}
+      </div>
+      {isOnline && isLive ? null : (
+        <p className="adrift" role="status">
+          <Icon name="offline" /> {isOnline ? 'Not live. What you see may be a little old.' : 'No signal. Press again when it is back.'}
+        </p>
+      )}
+    </header>
+  );
+}
+
+export function useOnline(): boolean {
+  return useSyncExternalStore(
+    (watch) => {
+      window.addEventListener('online', watch);
+      window.addEventListener('offline', watch);
+      return () => {
+        window.removeEventListener('online', watch);
+        window.removeEventListener('offline', watch);
+      };
+    },
+    () => navigator.onLine,
+  );
+}

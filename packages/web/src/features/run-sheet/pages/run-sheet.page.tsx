@@ -1,0 +1,164 @@
+import { useState } from 'react';
+import { useQuery } from '@tanstack/react-query';
+import { Link, useParams } from 'react-router';
+import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
+import { isEnded } from '@driprail/shared/domain/board/progress';
+import { estimateTravel } from '@driprail/shared/domain/board/travel';
+import { formatDay } from '@driprail/shared/domain/time/format';
+import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
+import { paths } from '../../../app/paths.ts';
+import { PhoneMenu } from '../../../app/shell/phone-menu.tsx';
+import { Icon } from '../../../components/icon.tsx';
+import { Sheet } from '../../../components/sheet.tsx';
+import { Loaded } from '../../../components/states.tsx';
+import { useFormats } from '../../../lib/format.ts';
+import { serverNow } from '../../../lib/device-clock.ts';
+import { useNow } from '../../../lib/now.ts';
+import { useSession } from '../../../lib/session.tsx';
+import { newPress, runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
+import { ActionBar } from '../components/action-bar.tsx';
+import { ClockBox } from '../components/clock-box.tsx';
+import { NextCard } from '../components/next-card.tsx';
+import { PartDoneSheet } from '../components/part-done-sheet.tsx';
+import { PhoneHead, useOnline } from '../components/phone-head.tsx';
+import { TipSheet } from '../components/tip-sheet.tsx';
+import { TroubleSheet } from '../components/trouble-sheet.tsx';
+import { VisitRow } from '../components/visit-row.tsx';
+import './run-sheet.css';
+
+/** One crew's day, in order, on a phone in a driveway. */
+export function RunSheetPage() {
+  const { zone } = useSession().company;
+  const today = dayOf(serverNow().toISOString(), zone);
+  const { day = today } = useParams();
+  const sheet = useQuery(runSheetQuery(day));
+  const isOnline = useOnline();
+  return (
+    <main className={isOnline ? 'ph' : 'ph is-adrift'} id="main">
+      <Loaded query={sheet} what="the run sheet">
+        {(data) => <RunSheet sheet={data} />}
+      </Loaded>
+    </main>
+  );
+}
+
+type Panel = { kind: 'trouble' | 'part_done' | 'tip' | 'look'; visitId: string };
+
+function RunSheet({ sheet }: { sheet: RunSheetDto }) {
+  const now = useNow();
+  const [panel, setPanel] = useState<Panel | null>(null);
+  const press = usePressVisit(sheet.day);
+  const isToday = sheet.day === dayOf(now, sheet.zone);
+  const at = sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ?? sheet.visits.find((visit) => visit.progress === 'placed');
+  const last = [...sheet.visits].reverse().find((visit) => isEnded(visit.progress) && visit.undoable);
+  const shown = sheet.visits.find((visit) => visit.id === panel?.visitId);
+  const close = () => {
+    press.reset();
+    setPanel(null);
+  };
+  return (
+    <>
+      <PhoneHead above={formatDay(sheet.day)} title={sheet.vanName ?? 'No van'} menu={(ability) => <PhoneMenu ability={ability} />}>
+        {sheet.clock ? <ClockBox clock={sheet.clock} /> : null}
+      </PhoneHead>
+      <p className="crew-line t-2">
+        <DayLinks sheet={sheet} today={dayOf(now, sheet.zone)} />
+      </p>
+      {sheet.clock?.forgotten.length ? (
+        <p className="tape mb-3">
+          <b>No clock-out.</b> The clock still runs from another day. <Link to={paths.clock}>Say when you stopped</Link>
+        </p>
+      ) : null}
+      <div className="leg">
+        <div className="rail" />
+        {sheet.visits.length === 0 ? <p className="empty">Nothing hangs here {isToday ? 'today' : 'that day'}. New work shows up by itself.</p> : null}
+        <ol>
+          {sheet.visits.map((visit, index) => (
+            <li key={visit.id} className={visit.id === at?.id ? 'is-at' : isEnded(visit.progress) ? 'is-over' : ''}>
+              <Drive from={sheet.visits[index - 1]} to={visit} />
+              {visit.id === at?.id ? (
+                <>
+                  <i className="bead" aria-hidden />
+                  <NextCard visit={visit} now={now} onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })} onTip={() => setPanel({ kind: 'tip', visitId: visit.id })} />
+                </>
+              ) : (
+                <VisitRow visit={visit} onOpen={() => setPanel({ kind: 'look', visitId: visit.id })} />
+              )}
+            </li>
+          ))}
+        </ol>
+      </div>
+      <footer className="ph-act">
+        {press.error && panel === null ? (
+          <p className="tape mb-2" role="alert">
+            <b>{press.error.message}</b>
+          </p>
+        ) : null}
+        {at && isToday ? (
+          <ActionBar
+            visit={at.progress === 'placed' && last ? { ...at, undoable: last.undoable } : at}
+            now={now}
+            isBusy={press.isPending}
+            onPress={(kind) => press.mutate(newPress(kind === 'undo' && at.progress === 'placed' && last ? last.id : at.id, { kind }))}
+            onPartDone={() => setPanel({ kind: 'part_done', visitId: at.id })}
+          />
+        ) : last && isToday ? (
+          <div className="below">
+            <p className="flex-1 self-center">The day is done.</p>
+            <button type="button" className="btn" disabled={press.isPending} onClick={() => press.mutate(newPress(last.id, { kind: 'undo' }))}>
+              Take back “Done”
+            </button>
+          </div>
+        ) : (
+          <p className="t-2 py-2">{sheet.visits.length === 0 ? 'No visits.' : isToday ? 'The day is done.' : 'Marks are made on the day itself.'}</p>
+        )}
+      </footer>
+      {shown && panel?.kind === 'trouble' ? (
+        <TroubleSheet visit={shown} isBusy={press.isPending} error={press.error?.message} onClose={close} onSend={(trouble) => press.mutate(newPress(shown.id, { kind: 'trouble', ...trouble }), { onSuccess: close })} />
+      ) : null}
+      {shown && panel?.kind === 'part_done' ? (
+        <PartDoneSheet visit={shown} isBusy={press.isPending} error={press.error?.message} onClose={close} onSend={(part) => press.mutate(newPress(shown.id, { kind: 'part_done', ...part }), { onSuccess: close })} />
+      ) : null}
+      {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} onClose={close} /> : null}
+      {shown && panel?.kind === 'look' ? (
+        <Sheet title={shown.customerName} onClose={close} width={480}>
+          <div className="ph-sheet pb-4">
+            <NextCard visit={shown} now={now} onTrouble={() => setPanel({ kind: 'trouble', visitId: shown.id })} onTip={() => setPanel({ kind: 'tip', visitId: shown.id })} />
+          </div>
+        </Sheet>
+      ) : null}
+    </>
+  );
+}
+
+function DayLinks({ sheet, today }: { sheet: RunSheetDto; today: string }) {
+  return (
+    <>
+      {sheet.crewNames.length > 1 ? <span>With {sheet.crewNames.join(', ')}. </span> : null}
+      {sheet.day === today ? (
+        <Link to={paths.runSheetDay(addDays(today, 1))}>
+          Tomorrow <Icon name="right" />
+        </Link>
+      ) : (
+        <Link to={paths.runSheet}>
+          <Icon name="left" /> Today
+        </Link>
+      )}
+    </>
+  );
+}
+
+/** The drive between two stops, as a hatched slot. */
+function Drive({ from, to }: { from: RunVisitDto | undefined; to: RunVisitDto }) {
+  const format = useFormats();
+  if (!from || isEnded(to.progress) || from.stopId === to.stopId) return null;
+  const point = (visit: RunVisitDto) => (visit.lat === null || visit.lng === null ? null : { lat: visit.lat, lng: visit.lng });
+  const travel = estimateTravel(point(from), point(to));
+  return (
+    <p className="drive">
+      <span>
+        About {travel.minutes} min{travel.kilometers === null ? '' : `, ${format.distance(travel.kilometers)}`}
+      </span>
+    </p>
+  );
+}

@@ -1,0 +1,128 @@
+import { useState } from 'react';
+import { equipmentKinds, equipmentNames, sizeClassNames, sizeClasses, skillNames, skills } from '@driprail/shared/contracts/fields';
+import type { Equipment, SizeClass, Skill } from '@driprail/shared/contracts/fields';
+import { serviceKinds } from '@driprail/shared/contracts/services.contract';
+import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import { Button } from '../../../components/button.tsx';
+import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
+import { SheetFoot } from '../../../components/sheet.tsx';
+import { ApiError } from '../../../lib/call.ts';
+import { parseMoney } from '../../../lib/format.ts';
+import { useSaveService } from '../api/services.queries.ts';
+
+export const kindNames = { package: 'Package', single: 'Single service', add_on: 'Add-on' } as const;
+type PriceTexts = Record<SizeClass, { price: string; minutes: string }>;
+
+/** A service by size class. A new price starts on a date; what was quoted keeps its own. */
+export function ServiceForm({ service, today, onDone }: { service: ServiceDto | null; today: string; onDone: () => void }) {
+  const save = useSaveService();
+  const [value, setValue] = useState({
+    name: service?.name ?? '',
+    kind: service?.kind ?? ('package' as const),
+    description: service?.description ?? '',
+    skills: service?.skills ?? [],
+    equipment: service?.equipment ?? [],
+    isActive: service?.isActive ?? true,
+    position: service?.position ?? 0,
+  });
+  const [prices, setPrices] = useState<PriceTexts>(() => textsOf(service));
+  const [startsOn, setStartsOn] = useState(today);
+  const [unread, setUnread] = useState<Record<string, string>>({});
+  const fields = { ...(save.error instanceof ApiError ? save.error.fields : {}), ...unread };
+  const toggle = <T extends string>(list: T[], item: T, isOn: boolean) => (isOn ? [...list, item] : list.filter((other) => other !== item));
+
+  const submit = () => {
+    const read = readPrices(prices);
+    setUnread(read.fields);
+    if (Object.keys(read.fields).length > 0 || save.isPending) return;
+    const isChanged = JSON.stringify(prices) !== JSON.stringify(textsOf(service));
+    const order = service
+      ? { id: service.id, update: { ...value, version: service.version }, prices: isChanged ? { startsOn, prices: read.prices } : null }
+      : { create: { ...value, startsOn, prices: read.prices } };
+    save.mutate(order, { onSuccess: onDone });
+  };
+  return (
+    <form
+      noValidate
+      onSubmit={(event) => {
+        event.preventDefault();
+        submit();
+      }}
+    >
+      <div className="grid grid-cols-[2fr_1fr_90px] gap-3 max-[560px]:grid-cols-1">
+        <TextField label="Name" value={value.name} error={fields['name']} onChange={(event) => setValue({ ...value, name: event.target.value })} />
+        <SelectField label="Kind" value={value.kind} onChange={(event) => setValue({ ...value, kind: event.target.value as ServiceDto['kind'] })}>
+          {serviceKinds.map((kind) => (
+            <option key={kind} value={kind}>
+              {kindNames[kind]}
+            </option>
+          ))}
+        </SelectField>
+        <TextField label="Order" type="number" value={value.position} error={fields['position']} onChange={(event) => setValue({ ...value, position: Number(event.target.value) })} />
+      </div>
+      <TextArea className="mt-3" label="What it is" value={value.description} onChange={(event) => setValue({ ...value, description: event.target.value })} />
+      <div className="grid grid-cols-2 gap-6 mt-3 max-[560px]:grid-cols-1">
+        <fieldset>
+          <legend className="sec w-full">Skills it needs</legend>
+          {skills.map((skill: Skill) => (
+            <CheckField key={skill} label={skillNames[skill]} checked={value.skills.includes(skill)} onChange={(event) => setValue({ ...value, skills: toggle(value.skills, skill, event.target.checked) })} />
+          ))}
+        </fieldset>
+        <fieldset>
+          <legend className="sec w-full">Equipment it needs</legend>
+          {equipmentKinds.map((tool: Equipment) => (
+            <CheckField key={tool} label={equipmentNames[tool]} checked={value.equipment.includes(tool)} onChange={(event) => setValue({ ...value, equipment: toggle(value.equipment, tool, event.target.checked) })} />
+          ))}
+        </fieldset>
+      </div>
+      <h3 className="sec mt-4">Price and minutes by size class</h3>
+      <div className="grid gap-2 mt-2">
+        {sizeClasses.map((size) => (
+          <div key={size} className="grid grid-cols-[1fr_120px_120px] gap-3 items-end">
+            <span className="self-center">{sizeClassNames[size]}</span>
+            <TextField label="Price" inputMode="decimal" placeholder="not sold" value={prices[size].price} error={fields[`price.${size}`]} onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], price: event.target.value } })} />
+            <TextField label="Minutes" inputMode="numeric" value={prices[size].minutes} error={fields[`minutes.${size}`]} onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], minutes: event.target.value } })} />
+          </div>
+        ))}
+      </div>
+      <div className="grid grid-cols-2 gap-3 mt-3">
+        <TextField label="These prices start on" type="date" value={startsOn} error={fields['startsOn']} onChange={(event) => setStartsOn(event.target.value)} />
+        <CheckField label="On the menu" checked={value.isActive} onChange={(event) => setValue({ ...value, isActive: event.target.checked })} />
+      </div>
+      {fields['prices'] || (save.error && Object.keys(fields).length === 0) ? (
+        <p className="tape mt-3" role="alert">
+          <b>{fields['prices'] ?? save.error?.message}</b>
+        </p>
+      ) : null}
+      <SheetFoot>
+        <Button onClick={onDone}>Leave</Button>
+        <Button type="submit" look="main" isBusy={save.isPending}>
+          {service ? 'Save service' : 'Add service'}
+        </Button>
+      </SheetFoot>
+    </form>
+  );
+}
+
+function textsOf(service: ServiceDto | null): PriceTexts {
+  const entries = sizeClasses.map((size) => {
+    const price = service?.prices.find((p) => p.sizeClass === size);
+    return [size, { price: price ? (price.priceCents / 100).toFixed(2) : '', minutes: price ? String(price.minutes) : '' }];
+  });
+  return Object.fromEntries(entries) as PriceTexts;
+}
+
+function readPrices(texts: PriceTexts) {
+  const fields: Record<string, string> = {};
+  const prices = sizeClasses.flatMap((size) => {
+    const { price, minutes } = texts[size];
+    if (price.trim() === '' && minutes.trim() === '') return [];
+    const priceCents = parseMoney(price);
+    const whole = /^\d{1,5}$/.test(minutes.trim()) ? Number(minutes) : 0;
+    if (priceCents === null || priceCents < 0) fields[`price.${size}`] = 'Give an amount like 240.00.';
+    if (whole < 5) fields[`minutes.${size}`] = 'At least 5 minutes.';
+    return [{ sizeClass: size, priceCents: priceCents ?? 0, minutes: whole }];
+  });
+  if (prices.length === 0) fields['prices'] = 'Give a price for at least one size class.';
+  return { prices, fields };
+}

@@ -1,0 +1,115 @@
+import { useState } from 'react';
+import { useAbility } from '@casl/react';
+import { useQuery } from '@tanstack/react-query';
+import type { AppAbility } from '@driprail/shared/authz/ability';
+import { equipmentNames, sizeClassNames, sizeClasses, skillNames } from '@driprail/shared/contracts/fields';
+import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import { serviceKinds } from '@driprail/shared/contracts/services.contract';
+import { formatMinutes } from '@driprail/shared/domain/time/format';
+import { dayOf } from '@driprail/shared/domain/time/zone';
+import { Button } from '../../../components/button.tsx';
+import { Icon } from '../../../components/icon.tsx';
+import { PageHead, RailPage } from '../../../components/page-head.tsx';
+import { Sheet } from '../../../components/sheet.tsx';
+import { Empty, Loaded } from '../../../components/states.tsx';
+import { serverNow } from '../../../lib/device-clock.ts';
+import { money } from '../../../lib/format.ts';
+import { useSession } from '../../../lib/session.tsx';
+import { servicesQuery } from '../api/services.queries.ts';
+import { ServiceForm, kindNames } from '../components/service-form.tsx';
+
+/** What is sold: price and minutes by size class. */
+export function ServiceMenuPage() {
+  const { zone } = useSession().company;
+  const ability = useAbility<AppAbility>();
+  const canEdit = ability.can('update', 'Service');
+  const [editing, setEditing] = useState<ServiceDto | 'new' | null>(null);
+  const menu = useQuery(servicesQuery);
+  const close = () => setEditing(null);
+  return (
+    <>
+      <PageHead
+        title="Service menu"
+        above="Price and minutes by size class"
+        sums={[{ label: 'On the menu', value: menu.data?.services.filter((s) => s.isActive).length ?? '–' }]}
+        actions={
+          canEdit ? (
+            <Button look="main" onClick={() => setEditing('new')}>
+              <Icon name="plus" /> New service
+            </Button>
+          ) : null
+        }
+      />
+      <RailPage>
+        <div className="hung p-5 scroll-x">
+          <Loaded query={menu} what="the service menu">
+            {({ services }) =>
+              services.length === 0 ? (
+                <Empty>Nothing on the menu yet. Add what you sell, then book the first job.</Empty>
+              ) : (
+                <table className="grid-t min-w-[820px]">
+                  <thead>
+                    <tr>
+                      <th>Service</th>
+                      {sizeClasses.map((size) => (
+                        <th key={size} className="r">
+                          {sizeClassNames[size]}
+                        </th>
+                      ))}
+                      <th className="!pl-6">Needs</th>
+                      {canEdit ? <th className="r">Change</th> : null}
+                    </tr>
+                  </thead>
+                  {serviceKinds.map((kind) => (
+                    <tbody key={kind}>
+                      {services
+                        .filter((service) => service.kind === kind)
+                        .map((service, index) => (
+                          <tr key={service.id} className={service.isActive ? '' : 't-3'}>
+                            <td>
+                              {index === 0 ? <span className="block t-tight t-2 pt-2">{kindNames[kind]}</span> : null}
+                              <b>{service.name}</b>
+                              {service.isActive ? '' : ' (off the menu)'}
+                              {service.description ? <span className="block t-2 max-w-[38ch]">{service.description}</span> : null}
+                            </td>
+                            {sizeClasses.map((size) => {
+                              const price = service.prices.find((p) => p.sizeClass === size);
+                              return (
+                                <td key={size} className="r">
+                                  {price ? (
+                                    <>
+                                      <span className="t-fig">{money(price.priceCents)}</span>
+                                      <span className="block t-2">{formatMinutes(price.minutes)}</span>
+                                    </>
+                                  ) : (
+                                    '–'
+                                  )}
+                                </td>
+                              );
+                            })}
+                            <td className="!pl-6">{[...service.skills.map((s) => skillNames[s]), ...service.equipment.map((e) => equipmentNames[e])].join(', ') || '–'}</td>
+                            {canEdit ? (
+                              <td className="r">
+                                <Button look="bare" onClick={() => setEditing(service)}>
+                                  <Icon name="pen" /> Edit
+                                </Button>
+                              </td>
+                            ) : null}
+                          </tr>
+                        ))}
+                    </tbody>
+                  ))}
+                </table>
+              )
+            }
+          </Loaded>
+        </div>
+      </RailPage>
+      {editing ? (
+        <Sheet title={editing === 'new' ? 'New service' : editing.name} onClose={close} width={680}>
+          <ServiceForm service={editing === 'new' ? null : editing} today={dayOf(serverNow().toISOString(), zone)} onDone={close} />
+        </Sheet>
+      ) : null}
+    </>
+  );
+}

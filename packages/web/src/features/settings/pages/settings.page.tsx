@@ -1,0 +1,118 @@
+import { useState } from 'react';
+import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
+import { Link } from 'react-router';
+import { getSettings, updateSettings } from '@driprail/shared/contracts/settings.contract';
+import type { SettingsDto } from '@driprail/shared/contracts/settings.contract';
+import { warningCodes, warningNames } from '@driprail/shared/domain/board/findings';
+import { paths } from '../../../app/paths.ts';
+import { Button } from '../../../components/button.tsx';
+import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
+import { PageHead, RailPage } from '../../../components/page-head.tsx';
+import { Loaded } from '../../../components/states.tsx';
+import { ApiError, call } from '../../../lib/call.ts';
+import { zoneNames } from '../zones.ts';
+
+export function SettingsPage() {
+  const settings = useQuery({ queryKey: ['settings'], queryFn: ({ signal }) => call(getSettings, {}, signal) });
+  return (
+    <>
+      <PageHead title="Settings" above="The company and its board" />
+      <RailPage>
+        <Loaded query={settings} what="the settings">
+          {(data) => <SettingsForm key={data.settings.version} settings={data.settings} />}
+        </Loaded>
+      </RailPage>
+    </>
+  );
+}
+
+function SettingsForm({ settings }: { settings: SettingsDto }) {
+  const client = useQueryClient();
+  const [value, setValue] = useState(settings);
+  const save = useMutation({
+    mutationFn: () => call(updateSettings, { body: value }),
+    onSuccess: (data) => {
+      client.setQueryData(['settings'], data);
+      return client.invalidateQueries({ queryKey: ['session'] });
+    },
+  });
+  const fields = save.error instanceof ApiError ? save.error.fields : {};
+  const text = (name: 'name' | 'phone' | 'email' | 'dayStartsAt' | 'dayEndsAt') => ({
+    value: value[name],
+    error: fields[name],
+    onChange: (event: React.ChangeEvent<HTMLInputElement>) => setValue({ ...value, [name]: event.target.value }),
+  });
+  return (
+    <form
+      className="hung p-5 max-w-[980px] grid grid-cols-2 gap-x-10 gap-y-6 max-[900px]:grid-cols-1"
+      noValidate
+      onSubmit={(event) => {
+        event.preventDefault();
+        if (!save.isPending) save.mutate();
+      }}
+    >
+      <section className="grid gap-3 content-start">
+        <h2 className="sec">Company</h2>
+        <TextField label="Name" {...text('name')} />
+        <TextField label="Phone, as customers see it" type="tel" {...text('phone')} />
+        <TextField label="E-mail, as customers see it" type="email" {...text('email')} />
+        <SelectField label="Time zone" value={value.zone} error={fields['zone']} hint="Days, shifts and the workweek go by it, whatever a browser says." onChange={(event) => setValue({ ...value, zone: event.target.value })}>
+          {zoneNames(value.zone).map((zone) => (
+            <option key={zone} value={zone}>
+              {zone.replaceAll('_', ' ')}
+            </option>
+          ))}
+        </SelectField>
+        <div className="grid grid-cols-2 gap-3">
+          <SelectField label="Clock" value={value.clock} onChange={(event) => setValue({ ...value, clock: event.target.value as '12' | '24' })}>
+            <option value="12">2:30 pm</option>
+            <option value="24">14:30</option>
+          </SelectField>
+          <SelectField label="Units" value={value.units} onChange={(event) => setValue({ ...value, units: event.target.value as 'us' | 'metric' })}>
+            <option value="us">Miles, gallons, °F</option>
+            <option value="metric">Kilometers, liters, °C</option>
+          </SelectField>
+        </div>
+      </section>
+      <section className="grid gap-3 content-start">
+        <h2 className="sec">Board and run sheet</h2>
+        <div className="grid grid-cols-2 gap-3">
+          <TextField label="The day starts" type="time" {...text('dayStartsAt')} />
+          <TextField label="The day ends" type="time" {...text('dayEndsAt')} />
+        </div>
+        <TextField
+          label="A mark can be taken back for (seconds)"
+          type="number"
+          min={0}
+          max={600}
+          value={value.undoSeconds}
+          error={fields['undoSeconds']}
+          onChange={(event) => setValue({ ...value, undoSeconds: Number(event.target.value) })}
+        />
+        <fieldset>
+          <legend className="sec w-full">
+            Warnings that need a reason <span>asked once per visit</span>
+          </legend>
+          {warningCodes.map((code) => (
+            <CheckField
+              key={code}
+              label={warningNames[code]}
+              checked={value.reasonKinds.includes(code)}
+              onChange={(event) => setValue({ ...value, reasonKinds: event.target.checked ? [...value.reasonKinds, code] : value.reasonKinds.filter((c) => c !== code) })}
+            />
+          ))}
+        </fieldset>
+        <p className="t-2">
+          Overtime, minimum wage, the crew split and the workweek are dated rules of pay: <Link to={paths.rates}>Rates and pay rules</Link>.
+        </p>
+      </section>
+      <div className="col-span-full flex items-center gap-3">
+        <Button type="submit" look="main" isBusy={save.isPending}>
+          Save settings
+        </Button>
+        {save.error && Object.keys(fields).length === 0 ? <p className="tape">{save.error.message}</p> : null}
+        {save.isSuccess ? <p role="status">Saved.</p> : null}
+      </div>
+    </form>
+  );
+}

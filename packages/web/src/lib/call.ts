@@ -1,0 +1,48 @@
+import { errorBody } from '@driprail/shared/contracts/error.contract';
+import type { ErrorHint } from '@driprail/shared/contracts/error.contract';
+import type { Endpoint, OutputOf, RequestOf } from '@driprail/shared/contracts/endpoint';
+import { noteServerTime } from './device-clock.ts';
+
+/** A refusal of the API, in its own words. Status 0 means that it was not reached. */
+export class ApiError extends Error {
+  readonly status: number;
+  readonly code: string;
+  readonly fields: Record<string, string>;
+  readonly hint: ErrorHint;
+
+  constructor(status: number, code: string, message: string, fields: Record<string, string> = {}, hint: ErrorHint = {}) {
+    super(message);
+    this.status = status;
+    this.code = code;
+    this.fields = fields;
+    this.hint = hint;
+  }
+}
+
+/** Asks an endpoint. @throws ApiError */
+export async function call<E extends Endpoint>(endpoint: E, request: RequestOf<E> = {}, signal?: AbortSignal): Promise<OutputOf<E>> {
+  const response = await send(endpoint, request, signal);
+  noteServerTime(response.headers.get('x-now'));
+  const json: unknown = await response.json().catch(() => null);
+  if (response.ok) return endpoint.response.parse(json) as OutputOf<E>;
+  const refusal = errorBody.safeParse(json);
+  if (!refusal.success) throw new ApiError(response.status, 'unknown', 'The server answered with something unreadable. Try again.');
+  const { code, message, fields, hint } = refusal.data.error;
+  throw new ApiError(response.status, code, message, fields, hint);
+}
+
+async function send(endpoint: Endpoint, request: RequestOf<Endpoint>, signal?: AbortSignal): Promise<Response> {
+  const params = (request.params ?? {}) as Record<string, string>;
+  const path = endpoint.path.replace(/:(\w+)/g, (_all, name: string) => encodeURIComponent(params[name] ?? ''));
+  const query = new URLSearchParams(request.query as Record<string, string> | undefined).toString();
+  try {
+    return await fetch(query ? `${path}?${query}` : path, {
+      method: endpoint.method.toUpperCase(),
+      ...(request.body !== undefined && { body: JSON.stringify(request.body), headers: { 'content-type': 'application/json' } }),
+      ...(signal && { signal }),
+    });
+  } catch (error) {
+    if (signal?.aborted) throw error;
+    throw new ApiError(0, 'offline', 'The server can’t be reached. What you entered is kept; try again when there is signal.');
+  }
+}
