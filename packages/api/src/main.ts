@@ -1,7 +1,7 @@
 import { createApp } from './app.ts';
 import { createClock } from './clock.ts';
 import { readConfig } from './config.ts';
-import { migrate } from './db/migrate.ts';
+import { analyze, migrate } from './db/migrate.ts';
 import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
@@ -25,6 +25,7 @@ async function main(): Promise<void> {
     process.stderr.write('Making the demo company …\n');
     const { seedDemo } = await import('../../../seed/src/seed-demo.ts');
     await seedDemo({ now: now() });
+    await analyze(config.migrationUrl);
   }
 
   const setUpCode = new SetUpCode();

@@ -20,11 +20,24 @@ export async function migrate(ownerUrl: string, appRole: string): Promise<void> 
   }
 }
 
+/** Fresh statistics after many rows came at once: without them the planner guesses badly. */
+export async function analyze(ownerUrl: string): Promise<void> {
+  const sequelize = new Sequelize(ownerUrl, { logging: false, pool: { max: 1 } });
+  try {
+    await sequelize.query('ANALYZE');
+  } finally {
+    await sequelize.close();
+  }
+}
+
 /** Any number that nothing else in this database locks. */
 const MIGRATION_LOCK = 460_001;
 
 async function isCurrentRole(sequelize: Sequelize, role: string): Promise<boolean> {
-  const [row] = await sequelize.query<{ isSame: boolean }>('SELECT current_user = $role AS "isSame"', { bind: { role }, type: QueryTypes.SELECT });
+  const [row] = await sequelize.query<{ isSame: boolean }>('SELECT current_user = $role AS "isSame"', {
+    bind: { role },
+    type: QueryTypes.SELECT,
+  });
   return row?.isSame ?? false;
 }
 

@@ -16,7 +16,12 @@ const open = new AsyncLocalStorage<Transaction>();
 
 /** Opens the pool and hands it to the models. One per process. */
 export function connect(url: string, poolSize = 10): Sequelize {
-  sequelize = new Sequelize(url, { logging: false, pool: { max: poolSize }, minifyAliases: false });
+  sequelize = new Sequelize(url, {
+    logging: false,
+    pool: { max: poolSize },
+    // Our statements are short and many: compiling them costs more than running them.
+    dialectOptions: { options: '-c jit=off' },
+  });
   guardTransactions(sequelize);
   initModels(sequelize);
   return sequelize;

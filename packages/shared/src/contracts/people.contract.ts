@@ -57,12 +57,10 @@ export const addTimeOff = endpoint({
   roles: desk,
   summary: 'Put a person’s days off on the calendar.',
   params: z.object({ id }),
-  body: z
-    .strictObject({ startsOn: day, endsOn: day, note: shortText })
-    .refine((body) => body.endsOn >= body.startsOn, {
-      path: ['endsOn'],
-      message: 'The last day can’t be before the first.',
-    }),
+  body: z.strictObject({ startsOn: day, endsOn: day, note: shortText }).refine((body) => body.endsOn >= body.startsOn, {
+    path: ['endsOn'],
+    message: 'The last day can’t be before the first.',
+  }),
   response: z.object({ person: personDto }),
 });
 export const removeTimeOff = endpoint({

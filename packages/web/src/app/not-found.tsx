@@ -22,7 +22,10 @@ export function PageFault() {
     <>
       <PageHead title="Something broke" />
       <RailPage>
-        <Fault message={error instanceof Error ? error.message : 'This page could not be shown.'} onRetry={() => window.location.reload()} />
+        <Fault
+          message={error instanceof Error ? error.message : 'This page could not be shown.'}
+          onRetry={() => window.location.reload()}
+        />
       </RailPage>
     </>
   );

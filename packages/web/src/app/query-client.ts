@@ -7,7 +7,8 @@ export function createQueryClient(onSignedOut: () => void): QueryClient {
     defaultOptions: {
       queries: {
         staleTime: 15_000,
-        retry: (count, error) => (error instanceof ApiError && error.status >= 400 && error.status < 500 ? false : count < 2),
+        retry: (count, error) =>
+          error instanceof ApiError && error.status >= 400 && error.status < 500 ? false : count < 2,
       },
       mutations: { retry: false, networkMode: 'always' },
     },

@@ -14,7 +14,13 @@ export function Button({
 }: ComponentProps<'button'> & { look?: Look; isBusy?: boolean; isBig?: boolean }) {
   const classes = ['btn', look === 'plain' ? '' : look, isBig ? 'big' : '', className].filter(Boolean).join(' ');
   return (
-    <button type={type} className={classes} disabled={disabled === true || isBusy} aria-busy={isBusy || undefined} {...rest}>
+    <button
+      type={type}
+      className={classes}
+      disabled={disabled === true || isBusy}
+      aria-busy={isBusy || undefined}
+      {...rest}
+    >
       {children}
     </button>
   );

@@ -10,7 +10,15 @@ interface FieldProps {
   className?: string;
 }
 
-function Frame({ label, aside, hint, error, className = '', id, children }: FieldProps & { id: string; children: ReactNode }) {
+function Frame({
+  label,
+  aside,
+  hint,
+  error,
+  className = '',
+  id,
+  children,
+}: FieldProps & { id: string; children: ReactNode }) {
   return (
     <div className={`fld ${className}`}>
       <span className="lab">
@@ -37,7 +45,14 @@ function described(id: string, { error, hint }: FieldProps) {
   return { id, 'aria-invalid': error ? true : undefined, 'aria-describedby': by || undefined };
 }
 
-export function TextField({ label, aside, hint, error, className, ...input }: FieldProps & Omit<ComponentProps<'input'>, 'id'>) {
+export function TextField({
+  label,
+  aside,
+  hint,
+  error,
+  className,
+  ...input
+}: FieldProps & Omit<ComponentProps<'input'>, 'id'>) {
   const id = useId();
   const frame = { label, aside, hint, error, className };
   return (
@@ -47,7 +62,14 @@ export function TextField({ label, aside, hint, error, className, ...input }: Fi
   );
 }
 
-export function TextArea({ label, aside, hint, error, className, ...input }: FieldProps & Omit<ComponentProps<'textarea'>, 'id'>) {
+export function TextArea({
+  label,
+  aside,
+  hint,
+  error,
+  className,
+  ...input
+}: FieldProps & Omit<ComponentProps<'textarea'>, 'id'>) {
   const id = useId();
   const frame = { label, aside, hint, error, className };
   return (
@@ -57,7 +79,15 @@ export function TextArea({ label, aside, hint, error, className, ...input }: Fie
   );
 }
 
-export function SelectField({ label, aside, hint, error, className, children, ...input }: FieldProps & Omit<ComponentProps<'select'>, 'id'>) {
+export function SelectField({
+  label,
+  aside,
+  hint,
+  error,
+  className,
+  children,
+  ...input
+}: FieldProps & Omit<ComponentProps<'select'>, 'id'>) {
   const id = useId();
   const frame = { label, aside, hint, error, className };
   return (

@@ -6,7 +6,17 @@ export interface Sum {
 }
 
 /** A page's hanging name, a line above it, a few level figures, and what one can do. */
-export function PageHead({ title, above, sums = [], actions }: { title: ReactNode; above?: ReactNode; sums?: Sum[]; actions?: ReactNode }) {
+export function PageHead({
+  title,
+  above,
+  sums = [],
+  actions,
+}: {
+  title: ReactNode;
+  above?: ReactNode;
+  sums?: Sum[];
+  actions?: ReactNode;
+}) {
   return (
     <header className="dk-head">
       <div>

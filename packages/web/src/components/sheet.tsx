@@ -3,7 +3,17 @@ import type { ReactNode } from 'react';
 import { Icon } from './icon.tsx';
 
 /** A modal sheet of paper hung by two hooks. Esc and the cross close it; focus goes back to where it came from. */
-export function Sheet({ title, onClose, width, children }: { title: ReactNode; onClose: () => void; width?: number; children: ReactNode }) {
+export function Sheet({
+  title,
+  onClose,
+  width,
+  children,
+}: {
+  title: ReactNode;
+  onClose: () => void;
+  width?: number;
+  children: ReactNode;
+}) {
   const dialog = useRef<HTMLDialogElement>(null);
   const titleId = useId();
   useEffect(() => {

@@ -45,7 +45,15 @@ interface QueryLike<T> {
 }
 
 /** Renders a query's data, or that it is being fetched, or what went wrong in its place. */
-export function Loaded<T>({ query, what, children }: { query: QueryLike<T>; what: string; children: (data: T) => ReactNode }) {
+export function Loaded<T>({
+  query,
+  what,
+  children,
+}: {
+  query: QueryLike<T>;
+  what: string;
+  children: (data: T) => ReactNode;
+}) {
   if (query.data !== undefined) return <>{children(query.data)}</>;
   if (query.error) return <Fault message={query.error.message} onRetry={() => void query.refetch()} />;
   return <Fetching what={what} />;

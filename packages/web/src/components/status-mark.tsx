@@ -15,7 +15,15 @@ const marks: Record<Status, string> = {
   called_off: 'm-off',
 };
 
-export function StatusMark({ status, isLate = false, children }: { status: Status; isLate?: boolean; children: ReactNode }) {
+export function StatusMark({
+  status,
+  isLate = false,
+  children,
+}: {
+  status: Status;
+  isLate?: boolean;
+  children: ReactNode;
+}) {
   return (
     <span className={isLate ? 'st is-late' : 'st'}>
       <Mark name={isLate ? 'm-late' : marks[status]} />

@@ -10,7 +10,13 @@ export class ApiError extends Error {
   readonly fields: Record<string, string>;
   readonly hint: ErrorHint;
 
-  constructor(status: number, code: string, message: string, fields: Record<string, string> = {}, hint: ErrorHint = {}) {
+  constructor(
+    status: number,
+    code: string,
+    message: string,
+    fields: Record<string, string> = {},
+    hint: ErrorHint = {},
+  ) {
     super(message);
     this.status = status;
     this.code = code;
@@ -20,13 +26,18 @@ export class ApiError extends Error {
 }
 
 /** Asks an endpoint. @throws ApiError */
-export async function call<E extends Endpoint>(endpoint: E, request: RequestOf<E> = {}, signal?: AbortSignal): Promise<OutputOf<E>> {
+export async function call<E extends Endpoint>(
+  endpoint: E,
+  request: RequestOf<E> = {},
+  signal?: AbortSignal,
+): Promise<OutputOf<E>> {
   const response = await send(endpoint, request, signal);
   noteServerTime(response.headers.get('x-now'));
   const json: unknown = await response.json().catch(() => null);
   if (response.ok) return endpoint.response.parse(json) as OutputOf<E>;
   const refusal = errorBody.safeParse(json);
-  if (!refusal.success) throw new ApiError(response.status, 'unknown', 'The server answered with something unreadable. Try again.');
+  if (!refusal.success)
+    throw new ApiError(response.status, 'unknown', 'The server answered with something unreadable. Try again.');
   const { code, message, fields, hint } = refusal.data.error;
   throw new ApiError(response.status, code, message, fields, hint);
 }
@@ -38,11 +49,18 @@ async function send(endpoint: Endpoint, request: RequestOf<Endpoint>, signal?: A
   try {
     return await fetch(query ? `${path}?${query}` : path, {
       method: endpoint.method.toUpperCase(),
-      ...(request.body !== undefined && { body: JSON.stringify(request.body), headers: { 'content-type': 'application/json' } }),
+      ...(request.body !== undefined && {
+        body: JSON.stringify(request.body),
+        headers: { 'content-type': 'application/json' },
+      }),
       ...(signal && { signal }),
     });
   } catch (error) {
     if (signal?.aborted) throw error;
-    throw new ApiError(0, 'offline', 'The server can’t be reached. What you entered is kept; try again when there is signal.');
+    throw new ApiError(
+      0,
+      'offline',
+      'The server can’t be reached. What you entered is kept; try again when there is signal.',
+    );
   }
 }

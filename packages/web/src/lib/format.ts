@@ -35,7 +35,10 @@ export function useFormats() {
 
 /** Typed dollars and cents to integer cents; null for what is no amount. */
 export function parseMoney(text: string): number | null {
-  const clean = text.trim().replace(/[$,\s]/g, '').replace('−', '-');
+  const clean = text
+    .trim()
+    .replace(/[$,\s]/g, '')
+    .replace('−', '-');
   if (!/^-?\d{1,7}(\.\d{1,2})?$/.test(clean)) return null;
   return Number(decimalText(exact(clean).mul(100), 0));
 }

@@ -1,7 +1,10 @@
 import { useCallback, useState } from 'react';
 
 /** State that survives a reload of this tab until it is saved or given up. */
-export function useDraft<T>(key: string | null, initial: () => T): { value: T; set: (next: T) => void; drop: () => void } {
+export function useDraft<T>(
+  key: string | null,
+  initial: () => T,
+): { value: T; set: (next: T) => void; drop: () => void } {
   const [value, setValue] = useState<T>(() => {
     const kept = key === null ? null : sessionStorage.getItem(key);
     return kept === null ? initial() : (JSON.parse(kept) as T);

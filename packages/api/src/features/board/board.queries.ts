@@ -3,6 +3,7 @@ import type { z } from 'zod';
 import type { boardDto } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import { visitDto } from '@driprail/shared/contracts/visit.dto';
+import { FORGOTTEN_AFTER_HOURS } from '@driprail/shared/domain/time/forgotten';
 import { select } from '../../db/sequelize.ts';
 import { visitFrom, visitJson } from './visit.sql.ts';
 
@@ -27,7 +28,8 @@ WITH frame AS (
   SELECT p.id AS person_id, (
     coalesce((SELECT sum(extract(epoch FROM least(coalesce(e.ended_at, :now), w.ends_at) - greatest(e.started_at, w.starts_at))) / 60
        FROM clock_entries e WHERE e.person_id = p.id AND e.kind <> 'meal_break'
-        AND e.started_at < w.ends_at AND coalesce(e.ended_at, :now) > w.starts_at), 0)
+        AND e.started_at < w.ends_at AND coalesce(e.ended_at, :now) > w.starts_at
+        AND (e.ended_at IS NOT NULL OR e.started_at > :now::timestamptz - interval '${FORGOTTEN_AFTER_HOURS} hours')), 0)
     + coalesce((SELECT sum(extract(epoch FROM upper(v.planned) - greatest(lower(v.planned), :now::timestamptz)) / 60)
        FROM van_crew r JOIN visits v ON v.van_id = r.van_id AND v.planned && r.span
       WHERE r.person_id = p.id AND r.span && tstzrange(w.starts_at, w.ends_at) AND v.planned && tstzrange(w.starts_at, w.ends_at)

@@ -1,9 +1,9 @@
 import type { Transaction } from 'sequelize';
 import type { ClockEntryDto, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import { FORGOTTEN_AFTER_HOURS } from '@driprail/shared/domain/time/forgotten';
 import { select } from '../../db/sequelize.ts';
 
-/** An entry open longer than this was forgotten: flagged, never ended by guess. */
-const FORGOTTEN_AFTER = "interval '14 hours'";
+const FORGOTTEN_AFTER = `interval '${FORGOTTEN_AFTER_HOURS} hours'`;
 
 const columns = `e.id, e.person_id AS "personId", p.name AS "personName", e.kind, e.visit_id AS "visitId", j.number AS "jobNumber",
   to_json(e.started_at) #>> '{}' AS "startedAt", to_json(e.ended_at) #>> '{}' AS "endedAt", e.is_interrupted AS "isInterrupted",

@@ -1,4 +1,5 @@
 import { addDays, clockOf, dayBounds, dayOf, instantOf } from '../time/zone.ts';
+import { isForgotten } from '../time/forgotten.ts';
 import type { ClockKind, PayEntry, PayWeekInput } from './pay-week.types.ts';
 
 /** Worked time of one entry on one company-zone day and one workday; whole seconds since the epoch. */
@@ -60,10 +61,12 @@ export function weekGrid({
   return { from, to, asOf: secondsOf(asOf), cells };
 }
 
-/** Start and end of an entry; an open one is measured to `asOf`. */
+/** Start and end of an entry; an open one is measured to `asOf`, a forgotten one is no time until it is settled. */
 export function entrySpan(entry: PayEntry, grid: WeekGrid): { from: number; to: number } {
   const from = secondsOf(entry.startedAt);
-  return { from, to: Math.max(from, entry.endedAt === null ? grid.asOf : secondsOf(entry.endedAt)) };
+  if (entry.endedAt !== null) return { from, to: Math.max(from, secondsOf(entry.endedAt)) };
+  const isOver = isForgotten(entry.startedAt, null, new Date(grid.asOf * 1000).toISOString());
+  return { from, to: isOver ? from : Math.max(from, grid.asOf) };
 }
 
 /**

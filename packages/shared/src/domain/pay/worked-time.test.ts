@@ -81,8 +81,13 @@ describe('the edges of days and weeks', () => {
   it('measures an open entry to the moment asked for, never past the week', () => {
     const entries = [anEntry('2026-05-11T02:00:00.000Z', null)];
     expect(hoursOf({ entries, asOf: '2026-05-11T03:00:00.000Z' }).worked).toBe('1');
-    expect(hoursOf({ entries, asOf: '2026-05-20T00:00:00.000Z' }).worked).toBe('2');
+    expect(hoursOf({ entries, asOf: '2026-05-11T12:00:00.000Z' }).worked).toBe('2');
     expect(hoursOf({ entries, asOf: '2026-05-10T00:00:00.000Z' }).worked).toBe('0');
+  });
+
+  it('takes no time from a clock-out that was forgotten, until somebody settles it', () => {
+    const entries = [anEntry('2026-05-11T02:00:00.000Z', null)];
+    expect(hoursOf({ entries, asOf: '2026-05-20T00:00:00.000Z' }).worked).toBe('0');
   });
 
   it('takes meal breaks that touch for one break', () => {

@@ -33,7 +33,12 @@ export function Find() {
           note: job.from ? dayOf(job.from, zone) : 'unplaced',
           to: `${paths.boardDay(job.from ? dayOf(job.from, zone) : dayOf(serverNow().toISOString(), zone))}?job=${job.id}`,
         })),
-        ...customers.map((customer) => ({ key: customer.id, label: customer.name, note: customer.phone, to: paths.customer(customer.id) })),
+        ...customers.map((customer) => ({
+          key: customer.id,
+          label: customer.name,
+          note: customer.phone,
+          to: paths.customer(customer.id),
+        })),
       ];
     },
   });
@@ -82,7 +87,14 @@ export function Find() {
       {find.length >= 2 ? (
         <div className="menu left-[-1px] top-[34px] w-[340px]" id="find-list" role="listbox" aria-label="Found">
           {rows.map((row, index) => (
-            <button key={row.key} id={`find-${row.key}`} type="button" role="option" aria-selected={index === picked} onClick={() => go(row.to)}>
+            <button
+              key={row.key}
+              id={`find-${row.key}`}
+              type="button"
+              role="option"
+              aria-selected={index === picked}
+              onClick={() => go(row.to)}
+            >
               <span className="truncate">{row.label}</span>
               <span className="t-3">{row.note}</span>
             </button>

@@ -28,7 +28,8 @@ export function UserMenu({ items }: { items: NavItem[] }) {
   useEffect(() => {
     if (!isOpen) return undefined;
     const close = (event: MouseEvent | KeyboardEvent) => {
-      if (event instanceof KeyboardEvent ? event.key === 'Escape' : !box.current?.contains(event.target as Node)) setOpenAt(null);
+      if (event instanceof KeyboardEvent ? event.key === 'Escape' : !box.current?.contains(event.target as Node))
+        setOpenAt(null);
     };
     document.addEventListener('mousedown', close);
     document.addEventListener('keydown', close);
@@ -39,7 +40,13 @@ export function UserMenu({ items }: { items: NavItem[] }) {
   }, [isOpen]);
   return (
     <div ref={box} className="relative">
-      <button type="button" className="who" aria-expanded={isOpen} aria-haspopup="true" onClick={() => setOpenAt(isOpen ? null : location.key)}>
+      <button
+        type="button"
+        className="who"
+        aria-expanded={isOpen}
+        aria-haspopup="true"
+        onClick={() => setOpenAt(isOpen ? null : location.key)}
+      >
         <span className="max-[900px]:hidden">{user.name}</span>
         <span className="min-[901px]:hidden">Menu</span> <small className="max-[900px]:hidden">{user.role}</small>
         <Icon name="down" className="!w-4 !h-4" />

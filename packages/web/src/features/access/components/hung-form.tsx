@@ -2,7 +2,17 @@ import type { FormEventHandler, ReactNode } from 'react';
 import { Logo } from '../../../components/logo.tsx';
 
 /** Pages before sign-in: one column hung from the rail. They show nothing of the day's work. */
-export function HungForm({ title, company, onSubmit, children }: { title: string; company?: string; onSubmit?: FormEventHandler; children: ReactNode }) {
+export function HungForm({
+  title,
+  company,
+  onSubmit,
+  children,
+}: {
+  title: string;
+  company?: string;
+  onSubmit?: FormEventHandler;
+  children: ReactNode;
+}) {
   return (
     <div className="door">
       <Logo className="logo" />

@@ -47,8 +47,23 @@ function PasswordForm() {
       }}
     >
       <h2 className="sec">Password</h2>
-      <TextField label="Password you use now" type="password" autoComplete="current-password" value={current} error={fields['current']} onChange={(event) => setCurrent(event.target.value)} />
-      <TextField label="New password" type="password" autoComplete="new-password" hint="At least ten letters. Other places where you are signed in are ended." value={next} error={fields['next']} onChange={(event) => setNext(event.target.value)} />
+      <TextField
+        label="Password you use now"
+        type="password"
+        autoComplete="current-password"
+        value={current}
+        error={fields['current']}
+        onChange={(event) => setCurrent(event.target.value)}
+      />
+      <TextField
+        label="New password"
+        type="password"
+        autoComplete="new-password"
+        hint="At least ten letters. Other places where you are signed in are ended."
+        value={next}
+        error={fields['next']}
+        onChange={(event) => setNext(event.target.value)}
+      />
       {change.error && Object.keys(fields).length === 0 ? <p className="tape">{change.error.message}</p> : null}
       {change.isSuccess ? <p role="status">The password is changed.</p> : null}
       <div>

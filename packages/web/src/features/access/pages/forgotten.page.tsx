@@ -24,7 +24,15 @@ export function ForgottenPage() {
         <p role="status">If that address has a login, a link is on its way. It works once, within two hours.</p>
       ) : (
         <>
-          <TextField label="Work e-mail" type="email" autoComplete="username" autoFocus value={email} error={fields['email']} onChange={(event) => setEmail(event.target.value)} />
+          <TextField
+            label="Work e-mail"
+            type="email"
+            autoComplete="username"
+            autoFocus
+            value={email}
+            error={fields['email']}
+            onChange={(event) => setEmail(event.target.value)}
+          />
           {ask.error && !fields['email'] ? (
             <p className="tape form-err" role="alert">
               {ask.error.message}

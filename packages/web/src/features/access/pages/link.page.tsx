@@ -17,7 +17,11 @@ export function LinkPage() {
   const navigate = useNavigate();
   const [password, setPassword] = useState('');
   const [again, setAgain] = useState('');
-  const link = useQuery({ queryKey: ['link', token], queryFn: ({ signal }) => call(getLink, { params: { token } }, signal), retry: false });
+  const link = useQuery({
+    queryKey: ['link', token],
+    queryFn: ({ signal }) => call(getLink, { params: { token } }, signal),
+    retry: false,
+  });
   const use = useMutation({
     mutationFn: () => call(spendLink, { params: { token }, body: { password } }),
     onSuccess: (session) => {
@@ -40,14 +44,34 @@ export function LinkPage() {
         {(data) => (
           <>
             <p className="mb-3">For {data.email}. At least ten letters; a sentence is easy to remember.</p>
-            <TextField label="Password" type="password" autoComplete="new-password" value={password} error={fields['password']} onChange={(event) => setPassword(event.target.value)} />
-            <TextField label="The same again" type="password" autoComplete="new-password" value={again} error={isDifferent ? 'The two are not the same yet.' : undefined} onChange={(event) => setAgain(event.target.value)} />
+            <TextField
+              label="Password"
+              type="password"
+              autoComplete="new-password"
+              value={password}
+              error={fields['password']}
+              onChange={(event) => setPassword(event.target.value)}
+            />
+            <TextField
+              label="The same again"
+              type="password"
+              autoComplete="new-password"
+              value={again}
+              error={isDifferent ? 'The two are not the same yet.' : undefined}
+              onChange={(event) => setAgain(event.target.value)}
+            />
             {use.error && !fields['password'] ? (
               <p className="tape form-err" role="alert">
                 {use.error.message}
               </p>
             ) : null}
-            <Button type="submit" look="main" isBig isBusy={use.isPending} disabled={password === '' || password !== again}>
+            <Button
+              type="submit"
+              look="main"
+              isBig
+              isBusy={use.isPending}
+              disabled={password === '' || password !== again}
+            >
               Save and sign in
             </Button>
           </>

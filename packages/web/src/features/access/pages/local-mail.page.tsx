@@ -8,7 +8,11 @@ import { useFormats } from '../../../lib/format.ts';
 /** What the local mail fake took, since no mail server is set. Only on this machine, only for an owner. */
 export function LocalMailPage() {
   const format = useFormats();
-  const mails = useQuery({ queryKey: ['local-mail'], queryFn: ({ signal }) => call(listLocalMail, {}, signal), refetchInterval: 5000 });
+  const mails = useQuery({
+    queryKey: ['local-mail'],
+    queryFn: ({ signal }) => call(listLocalMail, {}, signal),
+    refetchInterval: 5000,
+  });
   return (
     <>
       <PageHead title="Local mail" above="No mail server is set: mails stop here" />

@@ -2,7 +2,13 @@ import { useState } from 'react';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
 import type { Role } from '@driprail/shared/authz/actor';
 import { listPeople } from '@driprail/shared/contracts/people.contract';
-import { endLoginSessions, inviteLogin, listLogins, sendReset, updateLogin } from '@driprail/shared/contracts/session.contract';
+import {
+  endLoginSessions,
+  inviteLogin,
+  listLogins,
+  sendReset,
+  updateLogin,
+} from '@driprail/shared/contracts/session.contract';
 import type { LoginDto } from '@driprail/shared/contracts/session.contract';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
@@ -68,8 +74,14 @@ function LoginRow({ login }: { login: LoginDto }) {
     mutationFn: (body: { role?: Role; isActive?: boolean }) => call(updateLogin, { params: { id: login.id }, body }),
     onSettled: () => client.invalidateQueries({ queryKey: ['logins'] }),
   });
-  const send = useMutation({ mutationFn: () => call(sendReset, { params: { id: login.id } }), onSuccess: () => setSaid('Link sent') });
-  const end = useMutation({ mutationFn: () => call(endLoginSessions, { params: { id: login.id } }), onSuccess: () => setSaid('Sessions ended') });
+  const send = useMutation({
+    mutationFn: () => call(sendReset, { params: { id: login.id } }),
+    onSuccess: () => setSaid('Link sent'),
+  });
+  const end = useMutation({
+    mutationFn: () => call(endLoginSessions, { params: { id: login.id } }),
+    onSuccess: () => setSaid('Sessions ended'),
+  });
   const error = change.error ?? send.error ?? end.error;
   return (
     <tr>
@@ -79,7 +91,12 @@ function LoginRow({ login }: { login: LoginDto }) {
       </td>
       <td>{login.email}</td>
       <td>
-        <select className="inp !w-auto" aria-label={`Role of ${login.name}`} value={login.role} onChange={(event) => change.mutate({ role: event.target.value as Role })}>
+        <select
+          className="inp !w-auto"
+          aria-label={`Role of ${login.name}`}
+          value={login.role}
+          onChange={(event) => change.mutate({ role: event.target.value as Role })}
+        >
           {roles.map((role) => (
             <option key={role} value={role}>
               {role}
@@ -153,7 +170,13 @@ function InviteSheet({ onClose }: { onClose: () => void }) {
             ))}
         </SelectField>
         <TextField label="Name" value={name} error={fields['name']} onChange={(event) => setName(event.target.value)} />
-        <TextField label="E-mail" type="email" value={email} error={fields['email']} onChange={(event) => setEmail(event.target.value)} />
+        <TextField
+          label="E-mail"
+          type="email"
+          value={email}
+          error={fields['email']}
+          onChange={(event) => setEmail(event.target.value)}
+        />
         <SelectField label="Role" value={role} onChange={(event) => setRole(event.target.value as Role)}>
           {roles.map((value) => (
             <option key={value} value={value}>

@@ -39,7 +39,9 @@ export function useMoveVisits() {
 
 /** Only the last of several saves refetches: an earlier one would undo the guess of a later. */
 function settle(client: QueryClient): Promise<void> | undefined {
-  return client.isMutating({ mutationKey: ['board', 'move'] }) === 1 ? client.invalidateQueries({ queryKey: ['board'] }) : undefined;
+  return client.isMutating({ mutationKey: ['board', 'move'] }) === 1
+    ? client.invalidateQueries({ queryKey: ['board'] })
+    : undefined;
 }
 
 function guess(board: BoardDto, moves: Move[]): BoardDto {
@@ -47,7 +49,11 @@ function guess(board: BoardDto, moves: Move[]): BoardDto {
     const move = moves.find((m) => m.visitId === visit.id);
     if (!move) return [];
     const isPlaced = move.vanId !== null && move.from !== null && move.to !== null;
-    const progress = isPlaced ? (visit.progress === 'unplaced' ? ('placed' as const) : visit.progress) : ('unplaced' as const);
+    const progress = isPlaced
+      ? visit.progress === 'unplaced'
+        ? ('placed' as const)
+        : visit.progress
+      : ('unplaced' as const);
     return [{ ...visit, vanId: move.vanId, from: move.from, to: move.to, progress }];
   });
   return takeIn(board, moved);
@@ -57,7 +63,8 @@ function guess(board: BoardDto, moves: Move[]): BoardDto {
 function takeIn(board: BoardDto, visits: VisitDto[]): BoardDto {
   const { startsAt, endsAt } = dayBounds(board.day, board.zone);
   const isOther = (visit: VisitDto) => !visits.some((v) => v.id === visit.id);
-  const isHere = ({ from }: VisitDto) => from !== null && Date.parse(from) >= Date.parse(startsAt) && Date.parse(from) < Date.parse(endsAt);
+  const isHere = ({ from }: VisitDto) =>
+    from !== null && Date.parse(from) >= Date.parse(startsAt) && Date.parse(from) < Date.parse(endsAt);
   return {
     ...board,
     visits: [...board.visits.filter(isOther), ...visits.filter(isHere)],

@@ -34,14 +34,30 @@ export interface BoardCalendarProps {
 }
 
 /** The lanes: the library keeps time, hits and drags; every look is ours. */
-export function BoardCalendar({ board, now, filter, openId, held, onOpen, onCrew, onHover, onMove }: BoardCalendarProps) {
+export function BoardCalendar({
+  board,
+  now,
+  filter,
+  openId,
+  held,
+  onOpen,
+  onCrew,
+  onHover,
+  onMove,
+}: BoardCalendarProps) {
   const calendar = useRef<FullCalendar>(null);
   const format = useFormats();
   const style = useSession().company.clock;
   const events = useMemo(() => calendarEvents(board, now, filter, openId, held), [board, now, filter, openId, held]);
-  const resources = useMemo(() => board.vans.map((van, order) => ({ id: van.id, title: van.name, order })), [board.vans]);
+  const resources = useMemo(
+    () => board.vans.map((van, order) => ({ id: van.id, title: van.name, order })),
+    [board.vans],
+  );
   const span = useMemo(() => slotSpan(board), [board]);
-  const visits = useMemo(() => new Map(board.visits.filter(isPlacedVisit).map((visit) => [visit.id, visit])), [board.visits]);
+  const visits = useMemo(
+    () => new Map(board.visits.filter(isPlacedVisit).map((visit) => [visit.id, visit])),
+    [board.visits],
+  );
   const unplaced = useMemo(() => new Map(board.unplaced.map((visit) => [visit.id, visit])), [board.unplaced]);
   const troubled = useMemo(() => new Set(board.troubles.map((trouble) => trouble.visitId)), [board.troubles]);
 
@@ -63,13 +79,23 @@ export function BoardCalendar({ board, now, filter, openId, held, onOpen, onCrew
     onMove(move);
   };
   const resize = (arg: EventResizeDoneArg) => {
-    const move = { visitId: arg.event.id, vanId: arg.event.getResources()[0]?.id ?? null, from: utc(arg.event.startStr), to: utc(arg.event.endStr) };
+    const move = {
+      visitId: arg.event.id,
+      vanId: arg.event.getResources()[0]?.id ?? null,
+      from: utc(arg.event.startStr),
+      to: utc(arg.event.endStr),
+    };
     arg.revert();
     onMove(move);
   };
   const receive = (arg: EventReceiveArg) => {
     const visitId = arg.event.extendedProps['visitId'] as string;
-    const move = { visitId, vanId: arg.event.getResources()[0]?.id ?? null, from: utc(arg.event.startStr), to: utc(arg.event.endStr) };
+    const move = {
+      visitId,
+      vanId: arg.event.getResources()[0]?.id ?? null,
+      from: utc(arg.event.startStr),
+      to: utc(arg.event.endStr),
+    };
     arg.event.remove();
     onMove(move);
   };
@@ -118,13 +144,16 @@ export function BoardCalendar({ board, now, filter, openId, held, onOpen, onCrew
       eventClick={({ event }) => {
         if (event.extendedProps['kind'] === 'visit') onOpen(event.id);
       }}
-      slotLabelContent={(arg: SlotLabelContentArg) => <span>{hourLabel(arg.date, style)}</span>}
+      slotLabelContent={(arg: SlotLabelContentArg) => <span>{hourLabel(arg.date, board.zone, style)}</span>}
       nowIndicatorContent={({ isAxis }) => (isAxis ? <NowLabel label={formatClock(now, board.zone, style)} /> : null)}
       resourceLabelContent={({ resource }) => <VanHead board={board} vanId={resource.id} now={now} onCrew={onCrew} />}
       eventContent={(arg: EventContentArg) => {
         const kind = arg.event.extendedProps['kind'] as string | undefined;
         if (kind === 'gap') return <GapWords gap={arg.event.extendedProps['gap'] as Gap} distance={format.distance} />;
-        if (kind === 'shut') return arg.event.extendedProps['words'] ? <span className="shut-l">{arg.event.extendedProps['words'] as string}</span> : null;
+        if (kind === 'shut')
+          return arg.event.extendedProps['words'] ? (
+            <span className="shut-l">{arg.event.extendedProps['words'] as string}</span>
+          ) : null;
         if (kind === 'over') return null;
         const visit = ticketOf(arg, visits, unplaced);
         return visit ? <Ticket visit={visit} now={now} hasTrouble={troubled.has(visit.id)} /> : null;
@@ -142,7 +171,11 @@ export function BoardCalendar({ board, now, filter, openId, held, onOpen, onCrew
 }
 
 /** What is drawn while a ticket is held stands at the held place, not at the stored one. */
-function ticketOf({ event }: EventContentArg, visits: Map<string, PlacedVisit>, unplaced: Map<string, { id: string }>): PlacedVisit | null {
+function ticketOf(
+  { event }: EventContentArg,
+  visits: Map<string, PlacedVisit>,
+  unplaced: Map<string, { id: string }>,
+): PlacedVisit | null {
   const id = event.id || (event.extendedProps['visitId'] as string | undefined) || '';
   const visit = visits.get(id) ?? unplaced.get(id);
   if (!visit) return null;
@@ -153,7 +186,15 @@ function ticketOf({ event }: EventContentArg, visits: Map<string, PlacedVisit>, 
 function GapWords({ gap, distance }: { gap: Gap; distance: (kilometers: number) => string }) {
   const { travel, there, isShort } = gap;
   const way = travel.kilometers === null ? '' : `, ${distance(travel.kilometers)}`;
-  return <span>{isShort ? `${travel.minutes} min needed, ${there} there` : travel.minutes === 0 ? 'Next door' : `${travel.minutes} min${way}`}</span>;
+  return (
+    <span>
+      {isShort
+        ? `${travel.minutes} min needed, ${there} there`
+        : travel.minutes === 0
+          ? 'Next door'
+          : `${travel.minutes} min${way}`}
+    </span>
+  );
 }
 
 function NowLabel({ label }: { label: string }) {
@@ -165,9 +206,8 @@ function NowLabel({ label }: { label: string }) {
   );
 }
 
-function hourLabel(date: Date, style: '12' | '24'): string {
-  // The library hands slot dates as if the zone were UTC.
-  return formatClock(date.toISOString(), 'UTC', style).replace(':00', style === '12' ? '' : ':00');
+function hourLabel(date: Date, zone: string, style: '12' | '24'): string {
+  return formatClock(date.toISOString(), zone, style).replace(':00', style === '12' ? '' : ':00');
 }
 
 /** The hours of the day, stretched to whole hours around what hangs outside them. */

@@ -24,19 +24,38 @@ export function BoardHead({ board, now, filter, onFilter, onDay, onNew }: BoardH
         <Button look="bare" aria-label="Day before" onClick={() => onDay(addDays(day, -1))}>
           <Icon name="left" />
         </Button>
-        {day === today ? <span>Today</span> : <button type="button" className="link" onClick={() => onDay(today)}>Go to today</button>}
+        {day === today ? (
+          <span>Today</span>
+        ) : (
+          <button type="button" className="link" onClick={() => onDay(today)}>
+            Go to today
+          </button>
+        )}
         <span className="t-3">week {weekNumberOf(day)}</span>
         <Button look="bare" aria-label="Day after" onClick={() => onDay(addDays(day, 1))}>
           <Icon name="right" />
         </Button>
-        <input className="jump" type="date" aria-label="Jump to a date" value={day} onChange={(event) => event.target.value && onDay(event.target.value)} />
+        <input
+          className="jump"
+          type="date"
+          aria-label="Jump to a date"
+          value={day}
+          onChange={(event) => event.target.value && onDay(event.target.value)}
+        />
       </div>
       <h1 className="t-hang">{formatDay(day)}</h1>
       <div className="tools">
         <Button look="main" onClick={onNew}>
           <Icon name="plus" /> New job
         </Button>
-        <input className="inp filter" type="search" placeholder="Filter the day" aria-label="Filter the day" value={filter} onChange={(event) => onFilter(event.target.value)} />
+        <input
+          className="inp filter"
+          type="search"
+          placeholder="Filter the day"
+          aria-label="Filter the day"
+          value={filter}
+          onChange={(event) => onFilter(event.target.value)}
+        />
       </div>
       {board.isLocked ? <p className="t-2">This day’s pay week is locked: nothing is planned here.</p> : null}
       <WeekStrip day={day} vans={board.vans} />

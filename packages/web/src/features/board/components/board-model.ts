@@ -88,7 +88,13 @@ export function loadOf(board: BoardDto, vanId: string): { planned: number; there
 export function matchesFilter(visit: VisitDto, filter: string): boolean {
   const wanted = filter.trim().toLowerCase();
   if (wanted === '') return true;
-  const words = [visit.customerName, visit.address, visit.area, String(visit.jobNumber), ...visit.lines.flatMap((l) => [l.serviceName, l.vehicle])];
+  const words = [
+    visit.customerName,
+    visit.address,
+    visit.area,
+    String(visit.jobNumber),
+    ...visit.lines.flatMap((l) => [l.serviceName, l.vehicle]),
+  ];
   return words.some((word) => word.toLowerCase().includes(wanted));
 }
 

@@ -23,7 +23,13 @@ const classes = {
 } as const;
 
 /** The day as calendar events: tickets, travel slots, time over the plan, and the hours a van is shut. */
-export function calendarEvents(board: BoardDto, now: string, filter: string, openId: string | null, held: Held | null): EventInput[] {
+export function calendarEvents(
+  board: BoardDto,
+  now: string,
+  filter: string,
+  openId: string | null,
+  held: Held | null,
+): EventInput[] {
   const tickets = board.visits.filter(isPlacedVisit).map((visit): EventInput => {
     const isHeld = held?.visitId === visit.id;
     return {
@@ -44,7 +50,16 @@ export function calendarEvents(board: BoardDto, now: string, filter: string, ope
   });
   const placing = held && !board.visits.some((visit) => visit.id === held.visitId) ? held : null;
   const ghost: EventInput[] = placing
-    ? [{ id: placing.visitId, resourceId: placing.vanId, start: placing.from, end: placing.to, classNames: ['tk', 'is-held'], extendedProps: { kind: 'visit' } }]
+    ? [
+        {
+          id: placing.visitId,
+          resourceId: placing.vanId,
+          start: placing.from,
+          end: placing.to,
+          classNames: ['tk', 'is-held'],
+          extendedProps: { kind: 'visit' },
+        },
+      ]
     : [];
   return [...tickets, ...ghost, ...gapEvents(board), ...overEvents(board, now), ...shutEvents(board)];
 }
@@ -56,7 +71,12 @@ function gapEvents(board: BoardDto): EventInput[] {
     start: gap.from,
     end: gap.to,
     display: 'background',
-    classNames: ['gap', gap.isShort ? 'is-short' : '', gap.isLive ? 'is-live' : '', isSmall(gap.from, gap.to) ? 'is-small' : ''].filter(Boolean),
+    classNames: [
+      'gap',
+      gap.isShort ? 'is-short' : '',
+      gap.isLive ? 'is-live' : '',
+      isSmall(gap.from, gap.to) ? 'is-small' : '',
+    ].filter(Boolean),
     extendedProps: { kind: 'gap', gap },
   }));
 }
@@ -70,7 +90,17 @@ function overEvents(board: BoardDto, now: string): EventInput[] {
   return board.visits.filter(isPlacedVisit).flatMap((visit) => {
     const isOver = (visit.progress === 'working' || visit.progress === 'on_site') && isBefore(visit.to, now);
     if (!isOver) return [];
-    return [{ id: `over:${visit.id}`, resourceId: visit.vanId, start: visit.to, end: addMinutes(now, 1), display: 'background', classNames: ['over'], extendedProps: { kind: 'over' } }];
+    return [
+      {
+        id: `over:${visit.id}`,
+        resourceId: visit.vanId,
+        start: visit.to,
+        end: addMinutes(now, 1),
+        display: 'background',
+        classNames: ['over'],
+        extendedProps: { kind: 'over' },
+      },
+    ];
   });
 }
 
@@ -80,7 +110,13 @@ function shutEvents(board: BoardDto): EventInput[] {
   return board.vans.flatMap((van) => {
     const starts = van.crew.map((person) => person.from).sort((a, b) => Date.parse(a) - Date.parse(b))[0] ?? shuts;
     const ends = van.crew.map((person) => person.to).sort((a, b) => Date.parse(b) - Date.parse(a))[0] ?? shuts;
-    const spans = van.crew.length === 0 ? [[opens, shuts]] : [[opens, starts], [ends, shuts]];
+    const spans =
+      van.crew.length === 0
+        ? [[opens, shuts]]
+        : [
+            [opens, starts],
+            [ends, shuts],
+          ];
     return spans
       .filter(([from = '', to = '']) => isBefore(from, to))
       .map(([from = '', to = ''], index) => ({

@@ -21,7 +21,9 @@ interface Row {
 export function CrewSheet({ board, van, onClose }: { board: BoardDto; van: BoardVanDto; onClose: () => void }) {
   const client = useQueryClient();
   const people = useQuery({ queryKey: ['people'], queryFn: ({ signal }) => call(listPeople, {}, signal) });
-  const [rows, setRows] = useState<Row[]>(() => van.crew.map((p) => ({ personId: p.personId, from: clockOf(p.from, board.zone), to: clockOf(p.to, board.zone) })));
+  const [rows, setRows] = useState<Row[]>(() =>
+    van.crew.map((p) => ({ personId: p.personId, from: clockOf(p.from, board.zone), to: clockOf(p.to, board.zone) })),
+  );
   const save = useMutation({
     mutationFn: () =>
       call(setVanCrew, {
@@ -36,17 +38,28 @@ export function CrewSheet({ board, van, onClose }: { board: BoardDto; van: Board
       }),
     onSuccess: () => client.invalidateQueries({ queryKey: ['board'] }).then(onClose),
   });
-  const change = (index: number, next: Partial<Row>) => setRows(rows.map((row, at) => (at === index ? { ...row, ...next } : row)));
-  const elsewhere = (personId: string) => board.vans.find((other) => other.id !== van.id && other.crew.some((p) => p.personId === personId));
+  const change = (index: number, next: Partial<Row>) =>
+    setRows(rows.map((row, at) => (at === index ? { ...row, ...next } : row)));
+  const elsewhere = (personId: string) =>
+    board.vans.find((other) => other.id !== van.id && other.crew.some((p) => p.personId === personId));
   return (
     <Sheet title={`${van.name}, crew`} onClose={onClose} width={620}>
-      <p className="t-2 mb-3">{formatDay(board.day)}. The first is asked first; shares of a tie of a cent go in this order.</p>
+      <p className="t-2 mb-3">
+        {formatDay(board.day)}. The first is asked first; shares of a tie of a cent go in this order.
+      </p>
       <Loaded query={people} what="the people">
         {({ people: list }) => (
           <div className="grid gap-2">
             {rows.map((row, index) => (
-              <div key={index} className="grid grid-cols-[minmax(0,1fr)_110px_110px_40px] gap-2 items-end max-[560px]:grid-cols-2">
-                <SelectField label="Person" value={row.personId} onChange={(event) => change(index, { personId: event.target.value })}>
+              <div
+                key={index}
+                className="grid grid-cols-[minmax(0,1fr)_110px_110px_40px] gap-2 items-end max-[560px]:grid-cols-2"
+              >
+                <SelectField
+                  label="Person"
+                  value={row.personId}
+                  onChange={(event) => change(index, { personId: event.target.value })}
+                >
                   {list
                     .filter((person) => person.isActive || person.id === row.personId)
                     .map((person) => {
@@ -60,9 +73,23 @@ export function CrewSheet({ board, van, onClose }: { board: BoardDto; van: Board
                       );
                     })}
                 </SelectField>
-                <TextField label="From" type="time" value={row.from} onChange={(event) => change(index, { from: event.target.value })} />
-                <TextField label="To" type="time" value={row.to} onChange={(event) => change(index, { to: event.target.value })} />
-                <Button look="bare" aria-label="Take out of the crew" onClick={() => setRows(rows.filter((_, at) => at !== index))}>
+                <TextField
+                  label="From"
+                  type="time"
+                  value={row.from}
+                  onChange={(event) => change(index, { from: event.target.value })}
+                />
+                <TextField
+                  label="To"
+                  type="time"
+                  value={row.to}
+                  onChange={(event) => change(index, { to: event.target.value })}
+                />
+                <Button
+                  look="bare"
+                  aria-label="Take out of the crew"
+                  onClick={() => setRows(rows.filter((_, at) => at !== index))}
+                >
                   <Icon name="x" />
                 </Button>
               </div>
@@ -71,7 +98,9 @@ export function CrewSheet({ board, van, onClose }: { board: BoardDto; van: Board
             <div>
               <Button
                 onClick={() => {
-                  const free = list.find((p) => p.isActive && !rows.some((row) => row.personId === p.id) && !elsewhere(p.id));
+                  const free = list.find(
+                    (p) => p.isActive && !rows.some((row) => row.personId === p.id) && !elsewhere(p.id),
+                  );
                   const person = free ?? list.find((p) => p.isActive);
                   if (person) setRows([...rows, { personId: person.id, from: board.dayStartsAt, to: board.dayEndsAt }]);
                 }}

@@ -4,7 +4,19 @@ import { Ticket } from './ticket.tsx';
 import { VanHead } from './van-head.tsx';
 
 /** The board on a narrow screen or at 200 %: a list per van, in the order of the day. */
-export function LaneList({ board, now, filter, onOpen, onCrew }: { board: BoardDto; now: string; filter: string; onOpen: (visitId: string) => void; onCrew: (vanId: string) => void }) {
+export function LaneList({
+  board,
+  now,
+  filter,
+  onOpen,
+  onCrew,
+}: {
+  board: BoardDto;
+  now: string;
+  filter: string;
+  onOpen: (visitId: string) => void;
+  onCrew: (vanId: string) => void;
+}) {
   const troubled = new Set(board.troubles.map((trouble) => trouble.visitId));
   return (
     <div className="lanes">
@@ -18,7 +30,12 @@ export function LaneList({ board, now, filter, onOpen, onCrew }: { board: BoardD
               .sort((a, b) => Date.parse(a.from) - Date.parse(b.from))
               .map((visit) => (
                 <li key={visit.id}>
-                  <button type="button" className={`tk st-${visit.progress}`} data-event-id={visit.id} onClick={() => onOpen(visit.id)}>
+                  <button
+                    type="button"
+                    className={`tk st-${visit.progress}`}
+                    data-event-id={visit.id}
+                    onClick={() => onOpen(visit.id)}
+                  >
                     <Ticket visit={visit} now={now} hasTrouble={troubled.has(visit.id)} />
                   </button>
                 </li>

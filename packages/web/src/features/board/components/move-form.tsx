@@ -8,8 +8,21 @@ import { CheckField, SelectField, TextField } from '../../../components/field.ts
 import { preview } from './board-model.ts';
 
 /** "Move to": van, day and time by form; says what the move does before it is pressed. */
-export function MoveForm({ board, visit, isBusy, onMove }: { board: BoardDto; visit: VisitDto; isBusy: boolean; onMove: (move: Move, words: string) => void }) {
-  const first = visit.windowFrom && dayOf(visit.windowFrom, board.zone) === board.day ? visit.windowFrom : instantOf(board.day, board.dayStartsAt, board.zone);
+export function MoveForm({
+  board,
+  visit,
+  isBusy,
+  onMove,
+}: {
+  board: BoardDto;
+  visit: VisitDto;
+  isBusy: boolean;
+  onMove: (move: Move, words: string) => void;
+}) {
+  const first =
+    visit.windowFrom && dayOf(visit.windowFrom, board.zone) === board.day
+      ? visit.windowFrom
+      : instantOf(board.day, board.dayStartsAt, board.zone);
   const [vanId, setVanId] = useState(visit.vanId ?? board.vans[0]?.id ?? '');
   const [day, setDay] = useState(board.day);
   const [time, setTime] = useState(clockOf(visit.from ?? first, board.zone));
@@ -18,7 +31,16 @@ export function MoveForm({ board, visit, isBusy, onMove }: { board: BoardDto; vi
   const isTime = /^\d{2}:\d{2}$/.test(time);
   const from = isDay && isTime ? instantOf(day, time, board.zone) : null;
   const to = from ? addMinutes(from, visit.minutes) : null;
-  const beside = board.visits.find((v) => from && to && v.vanId === vanId && v.id !== visit.id && v.from && v.to && overlaps({ from: v.from, to: v.to }, { from, to }));
+  const beside = board.visits.find(
+    (v) =>
+      from &&
+      to &&
+      v.vanId === vanId &&
+      v.id !== visit.id &&
+      v.from &&
+      v.to &&
+      overlaps({ from: v.from, to: v.to }, { from, to }),
+  );
   const move: Move = { visitId: visit.id, vanId, from, to, ...(isBeside && beside && { stopId: beside.stopId }) };
   const found = from && day === board.day ? preview(board, move) : null;
   const refusal = found?.refusals[0];
@@ -41,7 +63,14 @@ export function MoveForm({ board, visit, isBusy, onMove }: { board: BoardDto; vi
         ))}
       </SelectField>
       <TextField label="Day" type="date" required value={day} onChange={(event) => setDay(event.target.value)} />
-      <TextField label="Time" type="time" step={300} required value={time} onChange={(event) => setTime(event.target.value)} />
+      <TextField
+        label="Time"
+        type="time"
+        step={300}
+        required
+        value={time}
+        onChange={(event) => setTime(event.target.value)}
+      />
       <Button type="submit" look="main" isBusy={isBusy} disabled={!from || (refusal !== undefined && !beside)}>
         {visit.vanId ? 'Move' : 'Place'}
       </Button>

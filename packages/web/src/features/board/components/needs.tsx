@@ -22,7 +22,8 @@ const SHOWN = 3;
 
 /** What needs somebody: trouble first, then who is late, then plans that do not fit. Each opens its visit. */
 export function needsOf(board: BoardDto, now: string): Need[] {
-  const name = (visitId: string) => [...board.visits, ...board.unplaced].find((v) => v.id === visitId)?.customerName ?? '';
+  const name = (visitId: string) =>
+    [...board.visits, ...board.unplaced].find((v) => v.id === visitId)?.customerName ?? '';
   const troubles = board.troubles.map((t) => ({
     key: t.id,
     visitId: t.visitId,
@@ -35,8 +36,18 @@ export function needsOf(board: BoardDto, now: string): Need[] {
     .map((visit) => ({ visit, minutes: lateOf(visit, now) }))
     .filter(({ minutes }) => minutes >= 5)
     .sort((a, b) => b.minutes - a.minutes)
-    .map(({ visit, minutes }) => ({ key: `late:${visit.id}`, visitId: visit.id, who: visit.customerName, words: `${formatMinutes(minutes)} ${visit.progress === 'working' || visit.progress === 'on_site' ? 'over the plan' : 'late'}` }));
-  const warnings = standingWarnings(board).map((w) => ({ key: `${w.visitId}:${w.key}`, visitId: w.visitId, who: name(w.visitId), words: w.message }));
+    .map(({ visit, minutes }) => ({
+      key: `late:${visit.id}`,
+      visitId: visit.id,
+      who: visit.customerName,
+      words: `${formatMinutes(minutes)} ${visit.progress === 'working' || visit.progress === 'on_site' ? 'over the plan' : 'late'}`,
+    }));
+  const warnings = standingWarnings(board).map((w) => ({
+    key: `${w.visitId}:${w.key}`,
+    visitId: w.visitId,
+    who: name(w.visitId),
+    words: w.message,
+  }));
   return [...troubles, ...late, ...warnings];
 }
 
@@ -74,7 +85,9 @@ export function Needs({ board, now, onOpen }: { board: BoardDto; now: string; on
           </button>
         ) : null}
       </div>
-      {settling?.troubleId ? <SettleSheet need={settling} troubleId={settling.troubleId} onClose={() => setSettling(null)} /> : null}
+      {settling?.troubleId ? (
+        <SettleSheet need={settling} troubleId={settling.troubleId} onClose={() => setSettling(null)} />
+      ) : null}
     </section>
   );
 }
@@ -100,7 +113,12 @@ function SettleSheet({ need, troubleId, onClose }: { need: Need; troubleId: stri
           </Button>
         ))}
       </div>
-      <TextField label="How it was settled" value={outcome} onChange={(event) => setOutcome(event.target.value)} error={settle.error?.message} />
+      <TextField
+        label="How it was settled"
+        value={outcome}
+        onChange={(event) => setOutcome(event.target.value)}
+        error={settle.error?.message}
+      />
       <SheetFoot>
         <Button look="main" isBusy={settle.isPending} disabled={outcome.trim() === ''} onClick={() => settle.mutate()}>
           Mark as settled

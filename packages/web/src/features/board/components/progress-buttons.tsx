@@ -13,8 +13,15 @@ export function ProgressButtons({ visit }: { visit: VisitDto }) {
   const client = useQueryClient();
   const mark = useMutation({
     mutationFn: (action: { kind: ProgressAction; key: string }) =>
-      call(postVisitAction, { params: { id: visit.id }, body: { ...action, deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs() } }),
-    onSettled: () => Promise.all([client.invalidateQueries({ queryKey: ['board'] }), client.invalidateQueries({ queryKey: ['jobs'] })]),
+      call(postVisitAction, {
+        params: { id: visit.id },
+        body: { ...action, deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs() },
+      }),
+    onSettled: () =>
+      Promise.all([
+        client.invalidateQueries({ queryKey: ['board'] }),
+        client.invalidateQueries({ queryKey: ['jobs'] }),
+      ]),
   });
   const actions = nextActions(visit.progress).filter((action) => action !== 'part_done' && action !== 'call_off');
   if (actions.length === 0) return null;

@@ -7,7 +7,12 @@ import type { Question } from './use-board-moves.ts';
 const picks = ['Customer agreed', 'Spare comes along', 'Only crew free', 'Will be sorted before'];
 
 /** A warning that the owner wants explained: asked once, with picks, and kept with the visit. */
-export function ReasonSheet({ question, isBusy, onAnswer, onClose }: {
+export function ReasonSheet({
+  question,
+  isBusy,
+  onAnswer,
+  onClose,
+}: {
   question: Question;
   isBusy: boolean;
   onAnswer: (accept: { visitId: string; key: string; reason: string }[]) => void;
@@ -43,7 +48,15 @@ export function ReasonSheet({ question, isBusy, onAnswer, onClose }: {
           look="main"
           isBusy={isBusy}
           disabled={!isAnswered}
-          onClick={() => onAnswer(question.warnings.map((w) => ({ visitId: w.visitId, key: w.key, reason: (reasons[keyOf(w)] ?? '').trim() })))}
+          onClick={() =>
+            onAnswer(
+              question.warnings.map((w) => ({
+                visitId: w.visitId,
+                key: w.key,
+                reason: (reasons[keyOf(w)] ?? '').trim(),
+              })),
+            )
+          }
         >
           Place with this reason
         </Button>

@@ -8,7 +8,15 @@ import type { Notice } from './use-board-moves.ts';
 const order: Progress[] = ['unplaced', 'placed', 'on_the_way', 'on_site', 'working', 'part_done', 'done', 'called_off'];
 
 /** The foot of the board: the legend with its counts, what just happened, and the keys. */
-export function Sill({ board, hover, notice, heldName, canUndo, onUndo, onDismiss }: {
+export function Sill({
+  board,
+  hover,
+  notice,
+  heldName,
+  canUndo,
+  onUndo,
+  onDismiss,
+}: {
   board: BoardDto;
   hover: string | null;
   notice: Notice | null;
@@ -17,7 +25,8 @@ export function Sill({ board, hover, notice, heldName, canUndo, onUndo, onDismis
   onUndo: () => void;
   onDismiss: () => void;
 }) {
-  const count = (progress: Progress) => (progress === 'unplaced' ? board.unplaced.length : board.visits.filter((v) => v.progress === progress).length);
+  const count = (progress: Progress) =>
+    progress === 'unplaced' ? board.unplaced.length : board.visits.filter((v) => v.progress === progress).length;
   return (
     <footer className="sill">
       <div className="legend">
@@ -29,7 +38,11 @@ export function Sill({ board, hover, notice, heldName, canUndo, onUndo, onDismis
             </StatusMark>
           ))}
       </div>
-      <p className={notice?.isTrouble && !hover ? 'says tape' : 'says'} role={notice?.isTrouble ? 'alert' : 'status'} aria-live="polite">
+      <p
+        className={notice?.isTrouble && !hover ? 'says tape' : 'says'}
+        role={notice?.isTrouble ? 'alert' : 'status'}
+        aria-live="polite"
+      >
         {hover ?? notice?.text ?? ''}
         {notice?.isTrouble && !hover ? (
           <>

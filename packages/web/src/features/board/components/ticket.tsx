@@ -38,11 +38,15 @@ export function Ticket({ visit, now, hasTrouble }: { visit: PlacedVisit; now: st
 }
 
 function statusWords(visit: PlacedVisit, now: string, late: number, clock: (instant: string) => string): string {
-  if (late > 0) return visit.progress === 'working' || visit.progress === 'on_site' ? `${late} min over` : `Late ${formatMinutes(late)}`;
+  if (late > 0)
+    return visit.progress === 'working' || visit.progress === 'on_site'
+      ? `${late} min over`
+      : `Late ${formatMinutes(late)}`;
   const { progress, since } = visit;
   if (!since || progress === 'placed') return progressNames[progress];
   if (progress === 'done' || progress === 'part_done') return `${progressNames[progress]} ${clock(since)}`;
-  if (progress === 'working' || progress === 'on_site') return `${progressNames[progress]} ${formatMinutes(Math.max(0, minutesBetween(since, now)))}`;
+  if (progress === 'working' || progress === 'on_site')
+    return `${progressNames[progress]} ${formatMinutes(Math.max(0, minutesBetween(since, now)))}`;
   return progressNames[progress];
 }
 

@@ -24,11 +24,19 @@ export function useBoardMoves(board: BoardDto | undefined) {
   const [undoable, setUndoable] = useState<Move[][]>([]);
 
   const save = useCallback(
-    async (moves: Move[], words: string, accept: { visitId: string; key: string; reason: string }[] = [], isUndo = false): Promise<boolean> => {
+    async (
+      moves: Move[],
+      words: string,
+      accept: { visitId: string; key: string; reason: string }[] = [],
+      isUndo = false,
+    ): Promise<boolean> => {
       if (!board) return false;
       const known = [...board.visits, ...board.unplaced];
       const before = moves.flatMap((move) => known.find((visit) => visit.id === move.visitId) ?? []);
-      const versioned = moves.map((move) => ({ ...move, planVersion: before.find((v) => v.id === move.visitId)?.planVersion ?? 0 }));
+      const versioned = moves.map((move) => ({
+        ...move,
+        planVersion: before.find((v) => v.id === move.visitId)?.planVersion ?? 0,
+      }));
       try {
         await mutateAsync({ day: board.day, moves: versioned, accept });
         setNotice({ text: words, isTrouble: false });
@@ -36,7 +44,8 @@ export function useBoardMoves(board: BoardDto | undefined) {
         if (!isUndo) setUndoable((stack) => [...stack.slice(1 - UNDO_DEPTH), before.map(planOf)]);
         return true;
       } catch (error) {
-        if (error instanceof ApiError && error.code === 'needs_reason') setQuestion({ moves, warnings: error.hint.warnings ?? [] });
+        if (error instanceof ApiError && error.code === 'needs_reason')
+          setQuestion({ moves, warnings: error.hint.warnings ?? [] });
         else setNotice({ text: error instanceof Error ? error.message : 'That move was not saved.', isTrouble: true });
         return false;
       }
@@ -51,7 +60,15 @@ export function useBoardMoves(board: BoardDto | undefined) {
     await save(moves, 'The last move is taken back.', [], true);
   }, [undoable, save]);
 
-  return { save, undo, canUndo: undoable.length > 0, notice, setNotice, question, closeQuestion: () => setQuestion(null) };
+  return {
+    save,
+    undo,
+    canUndo: undoable.length > 0,
+    notice,
+    setNotice,
+    question,
+    closeQuestion: () => setQuestion(null),
+  };
 }
 export type BoardMoves = ReturnType<typeof useBoardMoves>;
 

@@ -27,7 +27,8 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
   const setDown = useCallback(async () => {
     if (!board || !held || !visit) return;
     const vanName = board.vans.find((van) => van.id === held.vanId)?.name ?? '';
-    if (await moves.save([held], `${visit.customerName} is on ${vanName} at ${clockOf(held.from, board.zone)}.`)) focusTicket(held.visitId);
+    if (await moves.save([held], `${visit.customerName} is on ${vanName} at ${clockOf(held.from, board.zone)}.`))
+      focusTicket(held.visitId);
     setHeld(null);
   }, [board, held, visit, moves]);
 
@@ -35,13 +36,19 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
     (event: KeyboardEvent) => {
       if (!board || event.ctrlKey || event.metaKey || event.altKey) return;
       const target = event.target as HTMLElement;
-      const id = held?.visitId ?? target.closest<HTMLElement>('[data-event-id], [data-unplaced-id]')?.dataset['eventId'] ?? target.dataset['unplacedId'];
+      const id =
+        held?.visitId ??
+        target.closest<HTMLElement>('[data-event-id], [data-unplaced-id]')?.dataset['eventId'] ??
+        target.dataset['unplacedId'];
       const focused = id ? findVisit(board, id) : undefined;
       if (!focused) return;
       if (held) carry(event, board, held, setHeld, setDown);
       else if (event.key === ' ' && isMovable(focused.progress)) setHeld(pickUp(board, focused, now));
       else if (event.key.toLowerCase() === 'u' && isMovable(focused.progress) && focused.vanId) {
-        void moves.save([{ visitId: focused.id, vanId: null, from: null, to: null }], `${focused.customerName} is back on Unplaced.`);
+        void moves.save(
+          [{ visitId: focused.id, vanId: null, from: null, to: null }],
+          `${focused.customerName} is back on Unplaced.`,
+        );
       } else if (event.key === 'Enter') onOpen(focused.id);
       else if (event.key.startsWith('Arrow')) focusTicket(neighbour(board, focused, event.key));
       else return;
@@ -53,9 +60,16 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
   return { held, heldName: visit?.customerName ?? null, words, onKeyDown };
 }
 
-function carry(event: KeyboardEvent, board: BoardDto, held: Held, setHeld: (next: Held | null) => void, setDown: () => Promise<void>): void {
+function carry(
+  event: KeyboardEvent,
+  board: BoardDto,
+  held: Held,
+  setHeld: (next: Held | null) => void,
+  setDown: () => Promise<void>,
+): void {
   const step = event.shiftKey ? FINE_STEP : STEP;
-  const byTime = (minutes: number) => setHeld({ ...held, from: addMinutes(held.from, minutes), to: addMinutes(held.to, minutes) });
+  const byTime = (minutes: number) =>
+    setHeld({ ...held, from: addMinutes(held.from, minutes), to: addMinutes(held.to, minutes) });
   const byVan = (by: number) => {
     const at = board.vans.findIndex((van) => van.id === held.vanId);
     const van = board.vans[Math.min(Math.max(at + by, 0), board.vans.length - 1)];
@@ -76,8 +90,12 @@ function pickUp(board: BoardDto, visit: VisitDto, now: string): Held | null {
   if (!van) return null;
   const opens = instantOf(board.day, board.dayStartsAt, board.zone);
   const soon = new Date(Math.ceil(Date.parse(now) / 900_000) * 900_000).toISOString();
-  const earliest = isBefore(opens, soon) && isBefore(soon, instantOf(board.day, board.dayEndsAt, board.zone)) ? soon : opens;
-  const from = visit.windowFrom && isBefore(earliest, visit.windowFrom) && visit.windowFrom.slice(0, 10) === board.day ? visit.windowFrom : earliest;
+  const earliest =
+    isBefore(opens, soon) && isBefore(soon, instantOf(board.day, board.dayEndsAt, board.zone)) ? soon : opens;
+  const from =
+    visit.windowFrom && isBefore(earliest, visit.windowFrom) && visit.windowFrom.slice(0, 10) === board.day
+      ? visit.windowFrom
+      : earliest;
   return { visitId: visit.id, vanId: van.id, from, to: addMinutes(from, visit.minutes) };
 }
 
@@ -103,7 +121,9 @@ function neighbour(board: BoardDto, visit: VisitDto, key: string): string | null
   }
   const vanAt = board.vans.findIndex((van) => van.id === visit.vanId) + (key === 'ArrowRight' ? 1 : -1);
   const distance = (v: { from: string }) => Math.abs(Date.parse(v.from) - Date.parse(visit.from));
-  return placed.filter((v) => v.vanId === board.vans[vanAt]?.id).sort((a, b) => distance(a) - distance(b))[0]?.id ?? null;
+  return (
+    placed.filter((v) => v.vanId === board.vans[vanAt]?.id).sort((a, b) => distance(a) - distance(b))[0]?.id ?? null
+  );
 }
 
 function findVisit(board: BoardDto, id: string): VisitDto | undefined {
@@ -113,5 +133,9 @@ function findVisit(board: BoardDto, id: string): VisitDto | undefined {
 /** Focus follows the visit, also after the lanes were drawn anew. */
 function focusTicket(id: string | null): void {
   if (!id) return;
-  requestAnimationFrame(() => document.querySelector<HTMLElement>(`[data-event-id="${id}"]:not(.fc-event-mirror), [data-unplaced-id="${id}"]`)?.focus());
+  requestAnimationFrame(() =>
+    document
+      .querySelector<HTMLElement>(`[data-event-id="${id}"]:not(.fc-event-mirror), [data-unplaced-id="${id}"]`)
+      ?.focus(),
+  );
 }

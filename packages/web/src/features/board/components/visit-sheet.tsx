@@ -30,10 +30,27 @@ interface VisitSheetProps {
 }
 
 /** The open ticket: its paper hangs over the board, which stays live beside it. */
-export function VisitSheet({ board, visit, isBusy, onMove, onClose, onStep, onEdit, onCopy, onCallOff, onAddVisit }: VisitSheetProps) {
+export function VisitSheet({
+  board,
+  visit,
+  isBusy,
+  onMove,
+  onClose,
+  onStep,
+  onEdit,
+  onCopy,
+  onCallOff,
+  onAddVisit,
+}: VisitSheetProps) {
   const format = useFormats();
-  const job = useQuery({ queryKey: ['jobs', visit.jobId], queryFn: ({ signal }) => call(getJob, { params: { id: visit.jobId } }, signal) });
-  const standing = isMovable(visit.progress) && visit.vanId ? preview(board, { visitId: visit.id, vanId: visit.vanId, from: visit.from, to: visit.to }).warnings : [];
+  const job = useQuery({
+    queryKey: ['jobs', visit.jobId],
+    queryFn: ({ signal }) => call(getJob, { params: { id: visit.jobId } }, signal),
+  });
+  const standing =
+    isMovable(visit.progress) && visit.vanId
+      ? preview(board, { visitId: visit.id, vanId: visit.vanId, from: visit.from, to: visit.to }).warnings
+      : [];
   return (
     <aside className="open" aria-label={`${visit.customerName}, job ${visit.jobNumber}`}>
       <header className="oh">
@@ -65,7 +82,10 @@ export function VisitSheet({ board, visit, isBusy, onMove, onClose, onStep, onEd
               {visit.customerName} {visit.phone ? <a href={`tel:${visit.phone}`}>{visit.phone}</a> : null}
             </h3>
             <p>
-              {visit.address} <a href={mapLink(visit)} target="_blank" rel="noreferrer">Map</a>
+              {visit.address}{' '}
+              <a href={mapLink(visit)} target="_blank" rel="noreferrer">
+                Map
+              </a>
             </p>
             <ul className="acc">
               <li>
@@ -115,7 +135,11 @@ export function VisitSheet({ board, visit, isBusy, onMove, onClose, onStep, onEd
           </section>
           <section>
             <h3 className="sec">Arrival window</h3>
-            <p>{visit.windowFrom && visit.windowTo ? `Promised ${format.span(visit.windowFrom, visit.windowTo)}` : 'No window promised'}</p>
+            <p>
+              {visit.windowFrom && visit.windowTo
+                ? `Promised ${format.span(visit.windowFrom, visit.windowTo)}`
+                : 'No window promised'}
+            </p>
           </section>
           {visit.notes ? (
             <section>
@@ -149,7 +173,9 @@ export function VisitSheet({ board, visit, isBusy, onMove, onClose, onStep, onEd
             <h3 className="sec">Crew</h3>
             <p>{visit.crew.length > 0 ? visit.crew.map((p) => p.name).join(', ') : 'Nobody yet'}</p>
           </section>
-          {isEnded(visit.progress) || nextActions(visit.progress).length === 0 || !visit.vanId ? null : <ProgressButtons visit={visit} />}
+          {isEnded(visit.progress) || nextActions(visit.progress).length === 0 || !visit.vanId ? null : (
+            <ProgressButtons visit={visit} />
+          )}
           <section>
             <h3 className="sec">So far</h3>
             <Loaded query={job} what="what happened">
@@ -178,14 +204,29 @@ export function VisitSheet({ board, visit, isBusy, onMove, onClose, onStep, onEd
             <Button onClick={() => onAddVisit(visit.jobId)}>Add visit</Button>
             {isEnded(visit.progress) ? null : <Button onClick={() => onCallOff(visit.jobId)}>Call off</Button>}
             {isMovable(visit.progress) && visit.vanId ? (
-              <Button onClick={() => onMove({ visitId: visit.id, vanId: null, from: null, to: null }, `${visit.customerName} is back on Unplaced.`)}>Unplace</Button>
+              <Button
+                onClick={() =>
+                  onMove(
+                    { visitId: visit.id, vanId: null, from: null, to: null },
+                    `${visit.customerName} is back on Unplaced.`,
+                  )
+                }
+              >
+                Unplace
+              </Button>
             ) : null}
           </section>
         </div>
       </div>
       {isMovable(visit.progress) ? (
         <footer className="open-foot">
-          <MoveForm key={`${visit.id}:${visit.planVersion}:${board.day}`} board={board} visit={visit} isBusy={isBusy} onMove={onMove} />
+          <MoveForm
+            key={`${visit.id}:${visit.planVersion}:${board.day}`}
+            board={board}
+            visit={visit}
+            isBusy={isBusy}
+            onMove={onMove}
+          />
         </footer>
       ) : null}
     </aside>

@@ -16,14 +16,24 @@ export function WeekStrip({ day, vans }: { day: string; vans: BoardVanDto[] }) {
         const total = column.vans.reduce((sum, van) => sum + van.minutes, 0);
         const visits = column.vans.reduce((sum, van) => sum + van.visits, 0);
         return (
-          <Link key={column.day} to={paths.boardDay(column.day)} aria-current={column.day === day ? 'date' : undefined} title={`${formatDay(column.day)}: ${visits} visits, ${formatMinutes(total)}`}>
+          <Link
+            key={column.day}
+            to={paths.boardDay(column.day)}
+            aria-current={column.day === day ? 'date' : undefined}
+            title={`${formatDay(column.day)}: ${visits} visits, ${formatMinutes(total)}`}
+          >
             <span className="bars" aria-hidden>
               {vans.map((van) => {
                 const minutes = column.vans.find((v) => v.vanId === van.id)?.minutes ?? 0;
                 return <i key={van.id} style={{ height: `${Math.min(100, (minutes / capacityMinutes) * 100)}%` }} />;
               })}
             </span>
-            <span className="d">{formatDay(column.day).split(' ').filter((_, index) => index !== 1).join(' ')}</span>
+            <span className="d">
+              {formatDay(column.day)
+                .split(' ')
+                .filter((_, index) => index !== 1)
+                .join(' ')}
+            </span>
             <span className="sr">
               , {visits} visits, {formatMinutes(total)}
             </span>

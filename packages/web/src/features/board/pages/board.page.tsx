@@ -34,7 +34,11 @@ export function BoardPage() {
   const { zone } = useSession().company;
   const { day = dayOf(serverNow().toISOString(), zone) } = useParams();
   const board = useQuery(boardQuery(day));
-  return <Loaded query={board} what="the board">{(data) => <Board key={zone} board={data} />}</Loaded>;
+  return (
+    <Loaded query={board} what="the board">
+      {(data) => <Board key={zone} board={data} />}
+    </Loaded>
+  );
 }
 
 function Board({ board }: { board: BoardDto }) {
@@ -51,7 +55,10 @@ function Board({ board }: { board: BoardDto }) {
   const all = [...board.visits, ...board.unplaced];
   const wanted = search.get('visit') ?? all.find((v) => v.jobId === search.get('job'))?.id ?? null;
   const open = all.find((visit) => visit.id === wanted) ?? null;
-  const setOpen = useCallback((visitId: string | null) => setSearch(visitId ? { visit: visitId } : {}, { replace: true }), [setSearch]);
+  const setOpen = useCallback(
+    (visitId: string | null) => setSearch(visitId ? { visit: visitId } : {}, { replace: true }),
+    [setSearch],
+  );
   const held = useHeld({ board, now, moves, onOpen: setOpen });
 
   const goTo = useCallback((next: string) => void navigate(paths.boardDay(next)), [navigate]);
@@ -62,7 +69,10 @@ function Board({ board }: { board: BoardDto }) {
       setHover(null);
       const visit = [...board.visits, ...board.unplaced].find((v) => v.id === next.visitId);
       const van = board.vans.find((v) => v.id === next.vanId);
-      const words = van && next.from ? `${visit?.customerName ?? ''} is on ${van.name} at ${clockOf(next.from, board.zone)}.` : `${visit?.customerName ?? ''} is back on Unplaced.`;
+      const words =
+        van && next.from
+          ? `${visit?.customerName ?? ''} is on ${van.name} at ${clockOf(next.from, board.zone)}.`
+          : `${visit?.customerName ?? ''} is back on Unplaced.`;
       void moves.save([next], words);
     },
     [board, moves],
@@ -79,7 +89,14 @@ function Board({ board }: { board: BoardDto }) {
   return (
     <main className={open ? 'board-page has-open' : 'board-page'} id="main" onKeyDown={held.onKeyDown}>
       <div className="roof">
-        <BoardHead board={board} now={now} filter={filter} onFilter={setFilter} onDay={goTo} onNew={() => setTask({ kind: 'new' })} />
+        <BoardHead
+          board={board}
+          now={now}
+          filter={filter}
+          onFilter={setFilter}
+          onDay={goTo}
+          onNew={() => setTask({ kind: 'new' })}
+        />
         <Roof board={board} filter={filter} heldId={held.held?.visitId ?? null} isDraggable={isWide} onOpen={setOpen} />
         <Needs board={board} now={now} onOpen={setOpen} />
       </div>
@@ -88,7 +105,17 @@ function Board({ board }: { board: BoardDto }) {
         {board.vans.length === 0 ? (
           <p className="empty">No vans yet. Add the first under Vans, then set its crew here.</p>
         ) : isWide ? (
-          <BoardCalendar board={board} now={now} filter={filter} openId={open?.id ?? null} held={held.held} onOpen={setOpen} onCrew={setCrewVanId} onHover={hoverOver} onMove={move} />
+          <BoardCalendar
+            board={board}
+            now={now}
+            filter={filter}
+            openId={open?.id ?? null}
+            held={held.held}
+            onOpen={setOpen}
+            onCrew={setCrewVanId}
+            onHover={hoverOver}
+            onMove={move}
+          />
         ) : (
           <LaneList board={board} now={now} filter={filter} onOpen={setOpen} onCrew={setCrewVanId} />
         )}
@@ -99,7 +126,8 @@ function Board({ board }: { board: BoardDto }) {
             isBusy={false}
             onMove={(next, words) => {
               void moves.save([next], words).then((isSaved) => {
-                if (isSaved && next.from && dayOf(next.from, board.zone) !== board.day) goTo(dayOf(next.from, board.zone));
+                if (isSaved && next.from && dayOf(next.from, board.zone) !== board.day)
+                  goTo(dayOf(next.from, board.zone));
               });
             }}
             onClose={() => setOpen(null)}
@@ -111,7 +139,15 @@ function Board({ board }: { board: BoardDto }) {
           />
         ) : null}
       </div>
-      <Sill board={board} hover={held.words ?? hover} notice={moves.notice} heldName={held.heldName} canUndo={moves.canUndo} onUndo={() => void moves.undo()} onDismiss={() => moves.setNotice(null)} />
+      <Sill
+        board={board}
+        hover={held.words ?? hover}
+        notice={moves.notice}
+        heldName={held.heldName}
+        canUndo={moves.canUndo}
+        onUndo={() => void moves.undo()}
+        onDismiss={() => moves.setNotice(null)}
+      />
       {moves.question ? (
         <ReasonSheet
           question={moves.question}
@@ -121,21 +157,42 @@ function Board({ board }: { board: BoardDto }) {
         />
       ) : null}
       {crewVan ? <CrewSheet board={board} van={crewVan} onClose={() => setCrewVanId(null)} /> : null}
-      <JobTasks task={task} day={board.day} visits={board} onClose={() => setTask(null)} onMade={(visitId) => setOpen(visitId)} />
+      <JobTasks
+        task={task}
+        day={board.day}
+        visits={board}
+        onClose={() => setTask(null)}
+        onMade={(visitId) => setOpen(visitId)}
+      />
     </main>
   );
 }
 
-function JobTasks({ task, day, visits, onClose, onMade }: { task: JobTask | null; day: string; visits: BoardDto; onClose: () => void; onMade: (visitId: string) => void }) {
+function JobTasks({
+  task,
+  day,
+  visits,
+  onClose,
+  onMade,
+}: {
+  task: JobTask | null;
+  day: string;
+  visits: BoardDto;
+  onClose: () => void;
+  onMade: (visitId: string) => void;
+}) {
   if (!task) return null;
   if (task.kind === 'callOff') return <CallOffSheet jobId={task.jobId} onClose={onClose} />;
-  if (task.kind === 'addVisit') return <AddVisitSheet jobId={task.jobId} visits={[...visits.visits, ...visits.unplaced]} onClose={onClose} />;
+  if (task.kind === 'addVisit')
+    return <AddVisitSheet jobId={task.jobId} visits={[...visits.visits, ...visits.unplaced]} onClose={onClose} />;
   return (
     <JobSheet
       jobId={task.kind === 'new' ? null : task.jobId}
       isCopy={task.kind === 'copy'}
       day={day}
-      newCustomer={({ name, onSaved, onCancel }) => <CustomerForm customer={null} name={name} onSaved={onSaved} onCancel={onCancel} />}
+      newCustomer={({ name, onSaved, onCancel }) => (
+        <CustomerForm customer={null} name={name} onSaved={onSaved} onCancel={onCancel} />
+      )}
       onClose={onClose}
       onSaved={(job) => {
         onClose();
@@ -168,4 +225,3 @@ function useBoardKeys({ onUndo, onClose, isOpen }: { onUndo: () => void; onClose
     return () => document.removeEventListener('keydown', press);
   });
 }
-

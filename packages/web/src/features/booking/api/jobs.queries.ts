@@ -6,12 +6,19 @@ import type { JobBody } from '@driprail/shared/contracts/jobs.contract';
 import { listServices } from '@driprail/shared/contracts/services.contract';
 import { call } from '../../../lib/call.ts';
 
-export const jobQuery = (id: string) => queryOptions({ queryKey: ['jobs', id], queryFn: ({ signal }) => call(getJob, { params: { id } }, signal) });
+export const jobQuery = (id: string) =>
+  queryOptions({ queryKey: ['jobs', id], queryFn: ({ signal }) => call(getJob, { params: { id } }, signal) });
 export const customerQuery = (id: string) =>
   queryOptions({ queryKey: ['customers', id], queryFn: ({ signal }) => call(getCustomer, { params: { id } }, signal) });
 export const customerSearch = (find: string) =>
-  queryOptions({ queryKey: ['customers', 'find', find], queryFn: ({ signal }) => call(listCustomers, { query: { find, limit: 8 } }, signal) });
-export const menuQuery = queryOptions({ queryKey: ['services', 'today'], queryFn: ({ signal }) => call(listServices, {}, signal) });
+  queryOptions({
+    queryKey: ['customers', 'find', find],
+    queryFn: ({ signal }) => call(listCustomers, { query: { find, limit: 8 } }, signal),
+  });
+export const menuQuery = queryOptions({
+  queryKey: ['services', 'today'],
+  queryFn: ({ signal }) => call(listServices, {}, signal),
+});
 
 const refresh = (client: QueryClient) =>
   Promise.all(['board', 'jobs', 'run-sheet', 'customers'].map((key) => client.invalidateQueries({ queryKey: [key] })));
@@ -34,7 +41,8 @@ export function useCallOff(id: string) {
 
 export function useAddVisit(id: string) {
   return useMutation({
-    mutationFn: (body: { minutes: number; lineIds: string[]; besideVisitId: string | null }) => call(addVisit, { params: { id }, body }),
+    mutationFn: (body: { minutes: number; lineIds: string[]; besideVisitId: string | null }) =>
+      call(addVisit, { params: { id }, body }),
     onSuccess: (_data, _vars, _saved, { client }) => refresh(client),
   });
 }

@@ -22,7 +22,14 @@ export function AddVisitSheet({ jobId, visits, onClose }: { jobId: string; visit
             <p className="t-2">
               {data.customerName}, job {data.number}. The visit lands on Unplaced.
             </p>
-            <TextField label="Minutes" type="number" min={5} step={5} value={minutes} onChange={(event) => setMinutes(event.target.value)} />
+            <TextField
+              label="Minutes"
+              type="number"
+              min={5}
+              step={5}
+              value={minutes}
+              onChange={(event) => setMinutes(event.target.value)}
+            />
             <fieldset>
               <legend className="t-2">Work it does</legend>
               {data.lines
@@ -32,11 +39,17 @@ export function AddVisitSheet({ jobId, visits, onClose }: { jobId: string; visit
                     key={line.id}
                     label={`${line.serviceName}${line.vehicle ? `, ${line.vehicle}` : ''}`}
                     checked={lineIds.includes(line.id)}
-                    onChange={(event) => setLineIds(event.target.checked ? [...lineIds, line.id] : lineIds.filter((id) => id !== line.id))}
+                    onChange={(event) =>
+                      setLineIds(event.target.checked ? [...lineIds, line.id] : lineIds.filter((id) => id !== line.id))
+                    }
                   />
                 ))}
             </fieldset>
-            <SelectField label="Parking place" value={besideVisitId} onChange={(event) => setBeside(event.target.value)}>
+            <SelectField
+              label="Parking place"
+              value={besideVisitId}
+              onChange={(event) => setBeside(event.target.value)}
+            >
               <option value="">Its own</option>
               {visits
                 .filter((visit) => visit.vanId !== null)
@@ -58,7 +71,12 @@ export function AddVisitSheet({ jobId, visits, onClose }: { jobId: string; visit
         <Button
           look="main"
           isBusy={add.isPending}
-          onClick={() => add.mutate({ minutes: Number(minutes), lineIds, besideVisitId: besideVisitId || null }, { onSuccess: onClose })}
+          onClick={() =>
+            add.mutate(
+              { minutes: Number(minutes), lineIds, besideVisitId: besideVisitId || null },
+              { onSuccess: onClose },
+            )
+          }
         >
           Add the visit
         </Button>

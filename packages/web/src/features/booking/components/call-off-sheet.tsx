@@ -24,7 +24,12 @@ export function CallOffSheet({ jobId, onClose }: { jobId: string; onClose: () =>
           </Button>
         ))}
       </div>
-      <TextField label="Reason" value={reason} onChange={(event) => setReason(event.target.value)} error={callOff.error?.message} />
+      <TextField
+        label="Reason"
+        value={reason}
+        onChange={(event) => setReason(event.target.value)}
+        error={callOff.error?.message}
+      />
       <SheetFoot>
         <Button onClick={onClose}>Keep the job</Button>
         <Button

@@ -29,7 +29,15 @@ export function CustomerPick({ chosen, error, onChoose, onClear, onNew }: Custom
   }
   return (
     <div>
-      <TextField label="Customer" autoFocus placeholder="Name, phone, plate or street" value={find} error={error} autoComplete="off" onChange={(event) => setFind(event.target.value)} />
+      <TextField
+        label="Customer"
+        autoFocus
+        placeholder="Name, phone, plate or street"
+        value={find}
+        error={error}
+        autoComplete="off"
+        onChange={(event) => setFind(event.target.value)}
+      />
       {found.data ? (
         <ul className="rows mt-1" aria-label="Customers found">
           {found.data.customers.map((customer) => (
@@ -44,7 +52,9 @@ export function CustomerPick({ chosen, error, onChoose, onClear, onNew }: Custom
         </ul>
       ) : null}
       <div className="mt-2">
-        <Button onClick={() => onNew(find.trim())}>New customer{find.trim() && found.data?.customers.length === 0 ? ` “${find.trim()}”` : ''}</Button>
+        <Button onClick={() => onNew(find.trim())}>
+          New customer{find.trim() && found.data?.customers.length === 0 ? ` “${find.trim()}”` : ''}
+        </Button>
       </div>
     </div>
   );

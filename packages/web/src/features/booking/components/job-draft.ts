@@ -28,7 +28,17 @@ export interface JobDraft {
 }
 
 export function emptyDraft(day: string): JobDraft {
-  return { customerId: '', addressId: '', windowDay: day, windowFrom: '', windowTo: '', notes: '', discount: '', discountReason: '', lines: [] };
+  return {
+    customerId: '',
+    addressId: '',
+    windowDay: day,
+    windowFrom: '',
+    windowTo: '',
+    notes: '',
+    discount: '',
+    discountReason: '',
+    lines: [],
+  };
 }
 
 export function draftOf(job: JobDto, zone: string, isCopy: boolean, day: string): JobDraft {
@@ -60,7 +70,8 @@ export function bodyOf(draft: JobDraft, zone: string): { body: JobBody } | { fie
   if (discount === null) fields['discountCents'] = 'Give an amount like 15.00.';
   if (draft.customerId === '') fields['customerId'] = 'Choose a customer, or add a new one.';
   if (draft.lines.length === 0) fields['lines'] = 'Add at least one service.';
-  if ((draft.windowFrom === '') !== (draft.windowTo === '')) fields['windowTo'] = 'Give both ends of the window, or none.';
+  if ((draft.windowFrom === '') !== (draft.windowTo === ''))
+    fields['windowTo'] = 'Give both ends of the window, or none.';
   const lines = draft.lines.map((line, index) => {
     const priceCents = line.price.trim() === '' ? undefined : parseMoney(line.price);
     if (priceCents === null) fields[`lines.${index}.priceCents`] = 'Give an amount like 240.00.';
@@ -95,7 +106,11 @@ export function withCustomer(draft: JobDraft, customer: CustomerDto): JobDraft {
     ...draft,
     customerId: customer.id,
     addressId: customer.addresses[0]?.id ?? '',
-    lines: draft.lines.map((line) => ({ ...line, vehicleId: vehicle?.id ?? '', sizeClass: vehicle?.sizeClass ?? line.sizeClass })),
+    lines: draft.lines.map((line) => ({
+      ...line,
+      vehicleId: vehicle?.id ?? '',
+      sizeClass: vehicle?.sizeClass ?? line.sizeClass,
+    })),
   };
 }
 

@@ -19,7 +19,8 @@ interface JobLinesFieldProps {
 
 /** What is ordered: a service on a vehicle, by its size class, at the menu's price or an agreed one. */
 export function JobLinesField({ lines, services, customer, fields, onChange }: JobLinesFieldProps) {
-  const change = (index: number, next: Partial<LineDraft>) => onChange(lines.map((line, at) => (at === index ? { ...line, ...next } : line)));
+  const change = (index: number, next: Partial<LineDraft>) =>
+    onChange(lines.map((line, at) => (at === index ? { ...line, ...next } : line)));
   const sold = services.filter((service) => service.isActive);
   return (
     <fieldset>
@@ -28,8 +29,17 @@ export function JobLinesField({ lines, services, customer, fields, onChange }: J
         {lines.map((line, index) => {
           const price = menuPrice(services, line);
           return (
-            <div key={line.id ?? index} className="grid grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_130px_100px_36px] gap-2 items-end max-[720px]:grid-cols-2">
-              <SelectField label="Service" disabled={line.isFinished} value={line.serviceId} error={fields[`lines.${index}.serviceId`]} onChange={(event) => change(index, { serviceId: event.target.value, price: '' })}>
+            <div
+              key={line.id ?? index}
+              className="grid grid-cols-[minmax(0,1.5fr)_minmax(0,1.2fr)_130px_100px_36px] gap-2 items-end max-[720px]:grid-cols-2"
+            >
+              <SelectField
+                label="Service"
+                disabled={line.isFinished}
+                value={line.serviceId}
+                error={fields[`lines.${index}.serviceId`]}
+                onChange={(event) => change(index, { serviceId: event.target.value, price: '' })}
+              >
                 <option value="">Choose …</option>
                 {sold.map((service) => (
                   <option key={service.id} value={service.id}>
@@ -44,7 +54,10 @@ export function JobLinesField({ lines, services, customer, fields, onChange }: J
                 error={fields[`lines.${index}.vehicleId`]}
                 onChange={(event) => {
                   const vehicle = customer?.vehicles.find((v) => v.id === event.target.value);
-                  change(index, { vehicleId: event.target.value, ...(vehicle && { sizeClass: vehicle.sizeClass, price: '' }) });
+                  change(index, {
+                    vehicleId: event.target.value,
+                    ...(vehicle && { sizeClass: vehicle.sizeClass, price: '' }),
+                  });
                 }}
               >
                 <option value="">None named</option>
@@ -54,7 +67,12 @@ export function JobLinesField({ lines, services, customer, fields, onChange }: J
                   </option>
                 ))}
               </SelectField>
-              <SelectField label="Size class" disabled={line.isFinished} value={line.sizeClass} onChange={(event) => change(index, { sizeClass: event.target.value as SizeClass, price: '' })}>
+              <SelectField
+                label="Size class"
+                disabled={line.isFinished}
+                value={line.sizeClass}
+                onChange={(event) => change(index, { sizeClass: event.target.value as SizeClass, price: '' })}
+              >
                 {sizeClasses.map((size) => (
                   <option key={size} value={size}>
                     {sizeClassNames[size]}
@@ -70,7 +88,12 @@ export function JobLinesField({ lines, services, customer, fields, onChange }: J
                 error={fields[`lines.${index}.priceCents`]}
                 onChange={(event) => change(index, { price: event.target.value })}
               />
-              <Button look="bare" aria-label="Drop this line" disabled={line.isFinished} onClick={() => onChange(lines.filter((_, at) => at !== index))}>
+              <Button
+                look="bare"
+                aria-label="Drop this line"
+                disabled={line.isFinished}
+                onClick={() => onChange(lines.filter((_, at) => at !== index))}
+              >
                 <Icon name="x" />
               </Button>
             </div>
@@ -81,7 +104,16 @@ export function JobLinesField({ lines, services, customer, fields, onChange }: J
           <Button
             onClick={() => {
               const vehicle = customer?.vehicles[0];
-              onChange([...lines, { serviceId: '', vehicleId: vehicle?.id ?? '', sizeClass: vehicle?.sizeClass ?? 'sedan', price: '', isFinished: false }]);
+              onChange([
+                ...lines,
+                {
+                  serviceId: '',
+                  vehicleId: vehicle?.id ?? '',
+                  sizeClass: vehicle?.sizeClass ?? 'sedan',
+                  price: '',
+                  isFinished: false,
+                },
+              ]);
             }}
           >
             <Icon name="plus" /> Add a service

@@ -55,7 +55,9 @@ export function JobSheet(props: JobSheetProps) {
 function JobForm({ job, isCopy, day, newCustomer, onClose, onSaved }: JobSheetProps & { job: JobDto | null }) {
   const { zone } = useSession().company;
   const isNew = job === null || isCopy;
-  const draft = useDraft<JobDraft>(job === null ? 'job-draft' : null, () => (job ? draftOf(job, zone, isCopy, day) : emptyDraft(day)));
+  const draft = useDraft<JobDraft>(job === null ? 'job-draft' : null, () =>
+    job ? draftOf(job, zone, isCopy, day) : emptyDraft(day),
+  );
   const { value, set } = draft;
   const [newName, setNewName] = useState<string | null>(null);
   const [unread, setUnread] = useState<Record<string, string>>({});
@@ -104,7 +106,13 @@ function JobForm({ job, isCopy, day, newCustomer, onClose, onSaved }: JobSheetPr
         onNew={setNewName}
       />
       {customer.data ? (
-        <SelectField label="Address" className="mt-3" value={value.addressId} error={fields['addressId']} onChange={(event) => set({ ...value, addressId: event.target.value })}>
+        <SelectField
+          label="Address"
+          className="mt-3"
+          value={value.addressId}
+          error={fields['addressId']}
+          onChange={(event) => set({ ...value, addressId: event.target.value })}
+        >
           {customer.data.customer.addresses.map((address) => (
             <option key={address.id} value={address.id}>
               {[address.line, address.area, address.city].filter(Boolean).join(', ')}
@@ -113,22 +121,65 @@ function JobForm({ job, isCopy, day, newCustomer, onClose, onSaved }: JobSheetPr
         </SelectField>
       ) : null}
       <div className="grid grid-cols-3 gap-3 my-3 max-[560px]:grid-cols-1">
-        <TextField label="Promised day" type="date" value={value.windowDay} onChange={(event) => set({ ...value, windowDay: event.target.value })} />
-        <TextField label="Arrival from" type="time" step={900} value={value.windowFrom} error={fields['windowFrom']} onChange={(event) => set({ ...value, windowFrom: event.target.value })} />
-        <TextField label="Arrival to" type="time" step={900} value={value.windowTo} error={fields['windowTo']} onChange={(event) => set({ ...value, windowTo: event.target.value })} />
+        <TextField
+          label="Promised day"
+          type="date"
+          value={value.windowDay}
+          onChange={(event) => set({ ...value, windowDay: event.target.value })}
+        />
+        <TextField
+          label="Arrival from"
+          type="time"
+          step={900}
+          value={value.windowFrom}
+          error={fields['windowFrom']}
+          onChange={(event) => set({ ...value, windowFrom: event.target.value })}
+        />
+        <TextField
+          label="Arrival to"
+          type="time"
+          step={900}
+          value={value.windowTo}
+          error={fields['windowTo']}
+          onChange={(event) => set({ ...value, windowTo: event.target.value })}
+        />
       </div>
       <Loaded query={menu} what="the service menu">
         {({ services }) => (
           <>
-            <JobLinesField lines={value.lines} services={services} customer={customer.data?.customer} fields={fields} onChange={(lines) => set({ ...value, lines })} />
+            <JobLinesField
+              lines={value.lines}
+              services={services}
+              customer={customer.data?.customer}
+              fields={fields}
+              onChange={(lines) => set({ ...value, lines })}
+            />
             <JobTotal draft={value} prices={value.lines.map((line) => menuPrice(services, line))} />
           </>
         )}
       </Loaded>
-      <TextArea label="Notes for the crew" className="mt-3" value={value.notes} error={fields['notes']} onChange={(event) => set({ ...value, notes: event.target.value })} />
+      <TextArea
+        label="Notes for the crew"
+        className="mt-3"
+        value={value.notes}
+        error={fields['notes']}
+        onChange={(event) => set({ ...value, notes: event.target.value })}
+      />
       <div className="grid grid-cols-[140px_1fr] gap-3 mt-3">
-        <TextField label="Discount" inputMode="decimal" placeholder="0.00" value={value.discount} error={fields['discountCents']} onChange={(event) => set({ ...value, discount: event.target.value })} />
-        <TextField label="Reason for the discount" value={value.discountReason} error={fields['discountReason']} onChange={(event) => set({ ...value, discountReason: event.target.value })} />
+        <TextField
+          label="Discount"
+          inputMode="decimal"
+          placeholder="0.00"
+          value={value.discount}
+          error={fields['discountCents']}
+          onChange={(event) => set({ ...value, discount: event.target.value })}
+        />
+        <TextField
+          label="Reason for the discount"
+          value={value.discountReason}
+          error={fields['discountReason']}
+          onChange={(event) => set({ ...value, discountReason: event.target.value })}
+        />
       </div>
       {save.error && Object.keys(fields).length === 0 ? (
         <p className="tape mt-3" role="alert">
@@ -153,7 +204,10 @@ function JobForm({ job, isCopy, day, newCustomer, onClose, onSaved }: JobSheetPr
 }
 
 function JobTotal({ draft, prices }: { draft: JobDraft; prices: ({ priceCents: number; minutes: number } | null)[] }) {
-  const cents = draft.lines.reduce((sum, line, index) => sum + (parseMoney(line.price) ?? prices[index]?.priceCents ?? 0), 0);
+  const cents = draft.lines.reduce(
+    (sum, line, index) => sum + (parseMoney(line.price) ?? prices[index]?.priceCents ?? 0),
+    0,
+  );
   const minutes = prices.reduce((sum, price) => sum + (price?.minutes ?? 0), 0);
   if (draft.lines.length === 0) return null;
   return (

@@ -1,5 +1,10 @@
 import { keepPreviousData, queryOptions, useMutation } from '@tanstack/react-query';
-import { createCustomer, getCustomer, listCustomers, updateCustomer } from '@driprail/shared/contracts/customers.contract';
+import {
+  createCustomer,
+  getCustomer,
+  listCustomers,
+  updateCustomer,
+} from '@driprail/shared/contracts/customers.contract';
 import type { CustomerBody } from '@driprail/shared/contracts/customers.contract';
 import { call } from '../../../lib/call.ts';
 
@@ -16,7 +21,10 @@ export const customerQuery = (id: string) =>
 export function useSaveCustomer() {
   return useMutation({
     mutationFn: ({ id, version, body }: { id: string | null; version: number; body: CustomerBody }) =>
-      id === null ? call(createCustomer, { body }) : call(updateCustomer, { params: { id }, body: { ...body, version } }),
-    onSuccess: (_data, _vars, _saved, { client }) => Promise.all(['customers', 'board'].map((key) => client.invalidateQueries({ queryKey: [key] }))),
+      id === null
+        ? call(createCustomer, { body })
+        : call(updateCustomer, { params: { id }, body: { ...body, version } }),
+    onSuccess: (_data, _vars, _saved, { client }) =>
+      Promise.all(['customers', 'board'].map((key) => client.invalidateQueries({ queryKey: [key] }))),
   });
 }

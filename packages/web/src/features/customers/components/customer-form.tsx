@@ -17,7 +17,18 @@ interface CustomerFormProps {
   onCancel: () => void;
 }
 
-const address = { line: '', city: '', postcode: '', area: '', lat: null, lng: null, gateCode: '', accessNotes: '', hasWater: false, hasPower: false };
+const address = {
+  line: '',
+  city: '',
+  postcode: '',
+  area: '',
+  lat: null,
+  lng: null,
+  gateCode: '',
+  accessNotes: '',
+  hasWater: false,
+  hasPower: false,
+};
 const vehicle = { label: '', color: '', plate: '', sizeClass: 'sedan' as const, notes: '' };
 
 /** A customer with addresses and vehicles. Gate codes reach a crew only on the day. */
@@ -25,7 +36,9 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
   const save = useSaveCustomer();
   const form = useForm<CustomerBody>({
     resolver: zodResolver(customerBody),
-    defaultValues: customer ? bodyOf(customer) : { name, isCompany: false, phone: '', email: '', notes: '', addresses: [address], vehicles: [vehicle] },
+    defaultValues: customer
+      ? bodyOf(customer)
+      : { name, isCompany: false, phone: '', email: '', notes: '', addresses: [address], vehicles: [vehicle] },
   });
   const { register, control, handleSubmit, setError, formState } = form;
   const { errors } = formState;
@@ -58,13 +71,26 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
         const at = `addresses.${index}` as const;
         const wrong = errors.addresses?.[index];
         return (
-          <div key={field.key} className="grid grid-cols-6 gap-x-3 gap-y-2 py-3 border-b border-line items-end max-[560px]:grid-cols-2">
-            <TextField className="col-span-3 max-[560px]:col-span-2" label="Street and number" {...register(`${at}.line`)} error={wrong?.line?.message} />
+          <div
+            key={field.key}
+            className="grid grid-cols-6 gap-x-3 gap-y-2 py-3 border-b border-line items-end max-[560px]:grid-cols-2"
+          >
+            <TextField
+              className="col-span-3 max-[560px]:col-span-2"
+              label="Street and number"
+              {...register(`${at}.line`)}
+              error={wrong?.line?.message}
+            />
             <TextField label="Area" {...register(`${at}.area`)} error={wrong?.area?.message} />
             <TextField label="Town" {...register(`${at}.city`)} error={wrong?.city?.message} />
             <TextField label="Zip" {...register(`${at}.postcode`)} error={wrong?.postcode?.message} />
             <TextField label="Gate code" {...register(`${at}.gateCode`)} error={wrong?.gateCode?.message} />
-            <TextField className="col-span-3 max-[560px]:col-span-1" label="Access notes for the crew" {...register(`${at}.accessNotes`)} error={wrong?.accessNotes?.message} />
+            <TextField
+              className="col-span-3 max-[560px]:col-span-1"
+              label="Access notes for the crew"
+              {...register(`${at}.accessNotes`)}
+              error={wrong?.accessNotes?.message}
+            />
             <CheckField label="Spigot" {...register(`${at}.hasWater`)} />
             <CheckField label="Outlet" {...register(`${at}.hasPower`)} />
             {addresses.fields.length > 1 ? (
@@ -83,8 +109,16 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
         const at = `vehicles.${index}` as const;
         const wrong = errors.vehicles?.[index];
         return (
-          <div key={field.key} className="grid grid-cols-[1.4fr_1fr_1fr_1.2fr_1.6fr_auto] gap-x-3 gap-y-2 py-3 border-b border-line items-end max-[720px]:grid-cols-2">
-            <TextField label="Vehicle" placeholder="2019 hatchback" {...register(`${at}.label`)} error={wrong?.label?.message} />
+          <div
+            key={field.key}
+            className="grid grid-cols-[1.4fr_1fr_1fr_1.2fr_1.6fr_auto] gap-x-3 gap-y-2 py-3 border-b border-line items-end max-[720px]:grid-cols-2"
+          >
+            <TextField
+              label="Vehicle"
+              placeholder="2019 hatchback"
+              {...register(`${at}.label`)}
+              error={wrong?.label?.message}
+            />
             <TextField label="Color" {...register(`${at}.color`)} error={wrong?.color?.message} />
             <TextField label="Plate" {...register(`${at}.plate`)} error={wrong?.plate?.message} />
             <SelectField label="Size class" {...register(`${at}.sizeClass`)} error={wrong?.sizeClass?.message}>

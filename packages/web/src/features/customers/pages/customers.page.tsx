@@ -40,7 +40,14 @@ export function CustomersPage() {
       <RailPage>
         <div className="beside">
           <section aria-label="List">
-            <input className="inp mb-2 max-w-[410px]" type="search" placeholder="Find: name, street, phone, plate" aria-label="Find customers" value={find} onChange={(event) => setFind(event.target.value)} />
+            <input
+              className="inp mb-2 max-w-[410px]"
+              type="search"
+              placeholder="Find: name, street, phone, plate"
+              aria-label="Find customers"
+              value={find}
+              onChange={(event) => setFind(event.target.value)}
+            />
             <Loaded query={list} what="the customers">
               {({ customers, total }) => (
                 <>
@@ -51,19 +58,36 @@ export function CustomersPage() {
                           <b>{customer.name}</b>
                           <small>{customer.phone}</small>
                           <small>
-                            {customer.addresses[0]?.area || customer.addresses[0]?.line}. {customer.vehicles.length === 1 ? sizeClassNames[customer.vehicles[0]?.sizeClass ?? 'sedan'] : `${customer.vehicles.length} vehicles`}
+                            {customer.addresses[0]?.area || customer.addresses[0]?.line}.{' '}
+                            {customer.vehicles.length === 1
+                              ? sizeClassNames[customer.vehicles[0]?.sizeClass ?? 'sedan']
+                              : `${customer.vehicles.length} vehicles`}
                           </small>
                         </Link>
                       </li>
                     ))}
                   </ul>
-                  {customers.length === 0 ? <Empty>{find ? `Nobody found for “${find}”.` : 'No customers yet. Add the first, or bring in a list with npm run import.'}</Empty> : null}
-                  {total > customers.length ? <Empty>The first {customers.length} of {total}. Narrow the search to see others.</Empty> : null}
+                  {customers.length === 0 ? (
+                    <Empty>
+                      {find
+                        ? `Nobody found for “${find}”.`
+                        : 'No customers yet. Add the first, or bring in a list with npm run import.'}
+                    </Empty>
+                  ) : null}
+                  {total > customers.length ? (
+                    <Empty>
+                      The first {customers.length} of {total}. Narrow the search to see others.
+                    </Empty>
+                  ) : null}
                 </>
               )}
             </Loaded>
           </section>
-          {id ? <CustomerSheet id={id} onEdit={setEditing} /> : <p className="empty max-[900px]:hidden">Choose a customer to see addresses, vehicles and past visits.</p>}
+          {id ? (
+            <CustomerSheet id={id} onEdit={setEditing} />
+          ) : (
+            <p className="empty max-[900px]:hidden">Choose a customer to see addresses, vehicles and past visits.</p>
+          )}
         </div>
       </RailPage>
       {editing ? (
@@ -110,10 +134,18 @@ function CustomerSheet({ id, onEdit }: { id: string; onEdit: (customer: Customer
             <div className="grid grid-cols-2 gap-x-8 max-[900px]:grid-cols-1">
               {customer.addresses.map((address) => (
                 <p key={address.id} className="py-2">
-                  <b>{address.area || 'Address'}</b> {address.line}, {address.city} <a href={mapLink({ ...address, address: address.line })}>Map</a>
+                  <b>{address.area || 'Address'}</b> {address.line}, {address.city}{' '}
+                  <a href={mapLink({ ...address, address: address.line })}>Map</a>
                   <br />
                   <span className="t-2">
-                    {[address.gateCode ? 'Gate code kept' : '', address.hasWater ? 'Spigot' : 'No spigot', address.hasPower ? 'Outlet' : 'No outlet', address.accessNotes].filter(Boolean).join('. ')}
+                    {[
+                      address.gateCode ? 'Gate code kept' : '',
+                      address.hasWater ? 'Spigot' : 'No spigot',
+                      address.hasPower ? 'Outlet' : 'No outlet',
+                      address.accessNotes,
+                    ]
+                      .filter(Boolean)
+                      .join('. ')}
                   </span>
                 </p>
               ))}
@@ -154,7 +186,13 @@ function CustomerSheet({ id, onEdit }: { id: string; onEdit: (customer: Customer
                       {job.on ? formatDate(dayOf(job.on, format.zone)) : 'No date'}
                       <br />
                       <span className="t-2">
-                        {job.on ? <Link to={`${paths.boardDay(dayOf(job.on, format.zone))}?job=${job.jobId}`}>job {job.jobNumber}</Link> : `job ${job.jobNumber}`}
+                        {job.on ? (
+                          <Link to={`${paths.boardDay(dayOf(job.on, format.zone))}?job=${job.jobId}`}>
+                            job {job.jobNumber}
+                          </Link>
+                        ) : (
+                          `job ${job.jobNumber}`
+                        )}
                       </span>
                     </td>
                     <td>

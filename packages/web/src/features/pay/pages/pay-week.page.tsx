@@ -1,1 +1,3 @@
-export function PayWeekPage() { return null; }
+export function PayWeekPage() {
+  return null;
+}

@@ -1,1 +1,3 @@
-export function PayWorkingPage() { return null; }
+export function PayWorkingPage() {
+  return null;
+}

@@ -1,1 +1,3 @@
-export function RatesPage() { return null; }
+export function RatesPage() {
+  return null;
+}

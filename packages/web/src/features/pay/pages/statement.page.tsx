@@ -1,1 +1,3 @@
-export function StatementPage() { return null; }
+export function StatementPage() {
+  return null;
+}

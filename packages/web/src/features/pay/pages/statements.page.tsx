@@ -1,1 +1,3 @@
-export function StatementsPage() { return null; }
+export function StatementsPage() {
+  return null;
+}

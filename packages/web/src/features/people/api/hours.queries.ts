@@ -4,7 +4,10 @@ import { addClockEntry, correctClockEntry, listClock } from '@driprail/shared/co
 import { call } from '../../../lib/call.ts';
 
 export const hoursQuery = (from: string, to: string) =>
-  queryOptions({ queryKey: ['clock', 'entries', from, to], queryFn: ({ signal }) => call(listClock, { query: { from, to } }, signal) });
+  queryOptions({
+    queryKey: ['clock', 'entries', from, to],
+    queryFn: ({ signal }) => call(listClock, { query: { from, to } }, signal),
+  });
 
 type Correction = NonNullable<RequestOf<typeof correctClockEntry>['body']>;
 type Addition = NonNullable<RequestOf<typeof addClockEntry>['body']>;
@@ -13,7 +16,10 @@ type Addition = NonNullable<RequestOf<typeof addClockEntry>['body']>;
 export function useSaveEntry() {
   return useMutation({
     mutationFn: (save: { id: string; body: Correction } | { id: null; body: Addition }) =>
-      save.id === null ? call(addClockEntry, { body: save.body }) : call(correctClockEntry, { params: { id: save.id }, body: save.body }),
-    onSuccess: (_d, _v, _s, { client }) => Promise.all(['clock', 'pay', 'board'].map((key) => client.invalidateQueries({ queryKey: [key] }))),
+      save.id === null
+        ? call(addClockEntry, { body: save.body })
+        : call(correctClockEntry, { params: { id: save.id }, body: save.body }),
+    onSuccess: (_d, _v, _s, { client }) =>
+      Promise.all(['clock', 'pay', 'board'].map((key) => client.invalidateQueries({ queryKey: [key] }))),
   });
 }

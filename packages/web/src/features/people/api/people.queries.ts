@@ -1,16 +1,29 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
 import type { QueryClient } from '@tanstack/react-query';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
-import { addTimeOff, createPerson, createVan, listPeople, listVans, removeTimeOff, updatePerson, updateVan } from '@driprail/shared/contracts/people.contract';
+import {
+  addTimeOff,
+  createPerson,
+  createVan,
+  listPeople,
+  listVans,
+  removeTimeOff,
+  updatePerson,
+  updateVan,
+} from '@driprail/shared/contracts/people.contract';
 import { call } from '../../../lib/call.ts';
 
-export const peopleQuery = queryOptions({ queryKey: ['people'], queryFn: ({ signal }) => call(listPeople, {}, signal) });
+export const peopleQuery = queryOptions({
+  queryKey: ['people'],
+  queryFn: ({ signal }) => call(listPeople, {}, signal),
+});
 export const vansQuery = queryOptions({ queryKey: ['vans'], queryFn: ({ signal }) => call(listVans, {}, signal) });
 
 type PersonBody = NonNullable<RequestOf<typeof createPerson>['body']>;
 type VanBody = NonNullable<RequestOf<typeof createVan>['body']>;
 type TimeOffBody = NonNullable<RequestOf<typeof addTimeOff>['body']>;
-const refresh = (client: QueryClient, key: string) => Promise.all([key, 'board'].map((k) => client.invalidateQueries({ queryKey: [k] })));
+const refresh = (client: QueryClient, key: string) =>
+  Promise.all([key, 'board'].map((k) => client.invalidateQueries({ queryKey: [k] })));
 
 export function useSavePerson() {
   return useMutation({

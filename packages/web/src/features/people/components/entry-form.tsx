@@ -29,10 +29,16 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
   });
   const fields = save.error instanceof ApiError ? save.error.fields : {};
   const submit = () => {
-    const startedAt = entry && clockOf(entry.startedAt, zone) === value.from ? entry.startedAt : instantOf(value.day, value.from, zone);
+    const startedAt =
+      entry && clockOf(entry.startedAt, zone) === value.from ? entry.startedAt : instantOf(value.day, value.from, zone);
     // An end before its start by the clock is past midnight.
     const endDay = value.to !== '' && value.to < value.from ? addDays(value.day, 1) : value.day;
-    const endedAt = value.to === '' ? null : entry?.endedAt && clockOf(entry.endedAt, zone) === value.to ? entry.endedAt : instantOf(endDay, value.to, zone);
+    const endedAt =
+      value.to === ''
+        ? null
+        : entry?.endedAt && clockOf(entry.endedAt, zone) === value.to
+          ? entry.endedAt
+          : instantOf(endDay, value.to, zone);
     const span = { kind: value.kind, startedAt, endedAt, isInterrupted: value.isInterrupted, reason: value.reason };
     if (save.isPending) return;
     if (entry) save.mutate({ id: entry.id, body: { ...span, version: entry.version } }, { onSuccess: onDone });
@@ -52,7 +58,13 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
           {entry.jobNumber ? `, job ${entry.jobNumber}` : ''}
         </p>
       ) : (
-        <SelectField className="mb-3" label="Person" value={value.personId} error={fields['personId']} onChange={(event) => setValue({ ...value, personId: event.target.value })}>
+        <SelectField
+          className="mb-3"
+          label="Person"
+          value={value.personId}
+          error={fields['personId']}
+          onChange={(event) => setValue({ ...value, personId: event.target.value })}
+        >
           <option value="">Choose …</option>
           {people.data?.people.map((person) => (
             <option key={person.id} value={person.id}>
@@ -62,19 +74,46 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
         </SelectField>
       )}
       <div className="grid grid-cols-4 gap-3 max-[560px]:grid-cols-2">
-        <SelectField label="Kind" value={value.kind} onChange={(event) => setValue({ ...value, kind: event.target.value as ClockKindName })}>
+        <SelectField
+          label="Kind"
+          value={value.kind}
+          onChange={(event) => setValue({ ...value, kind: event.target.value as ClockKindName })}
+        >
           {clockKinds.map((kind) => (
             <option key={kind} value={kind}>
               {clockKindNames[kind]}
             </option>
           ))}
         </SelectField>
-        <TextField label="Day" type="date" value={value.day} disabled={entry !== null} onChange={(event) => setValue({ ...value, day: event.target.value })} />
-        <TextField label="From" type="time" value={value.from} error={fields['startedAt']} onChange={(event) => setValue({ ...value, from: event.target.value })} />
-        <TextField label="To" type="time" value={value.to} error={fields['endedAt']} hint={value.to === '' ? 'Still running' : undefined} onChange={(event) => setValue({ ...value, to: event.target.value })} />
+        <TextField
+          label="Day"
+          type="date"
+          value={value.day}
+          disabled={entry !== null}
+          onChange={(event) => setValue({ ...value, day: event.target.value })}
+        />
+        <TextField
+          label="From"
+          type="time"
+          value={value.from}
+          error={fields['startedAt']}
+          onChange={(event) => setValue({ ...value, from: event.target.value })}
+        />
+        <TextField
+          label="To"
+          type="time"
+          value={value.to}
+          error={fields['endedAt']}
+          hint={value.to === '' ? 'Still running' : undefined}
+          onChange={(event) => setValue({ ...value, to: event.target.value })}
+        />
       </div>
       {value.kind === 'meal_break' ? (
-        <CheckField label="Had to work during the break: it counts as worked" checked={value.isInterrupted} onChange={(event) => setValue({ ...value, isInterrupted: event.target.checked })} />
+        <CheckField
+          label="Had to work during the break: it counts as worked"
+          checked={value.isInterrupted}
+          onChange={(event) => setValue({ ...value, isInterrupted: event.target.checked })}
+        />
       ) : null}
       <div className="flex flex-wrap gap-2 my-3">
         {picks.map((pick) => (
@@ -83,7 +122,12 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
           </Button>
         ))}
       </div>
-      <TextField label="Reason" value={value.reason} error={fields['reason']} onChange={(event) => setValue({ ...value, reason: event.target.value })} />
+      <TextField
+        label="Reason"
+        value={value.reason}
+        error={fields['reason']}
+        onChange={(event) => setValue({ ...value, reason: event.target.value })}
+      />
       {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
       <SheetFoot>
         <Button type="submit" look="main" isBusy={save.isPending}>

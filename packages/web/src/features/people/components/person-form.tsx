@@ -26,12 +26,24 @@ export function PersonForm({ person, onDone }: { person: PersonDto | null; onDon
         noValidate
         onSubmit={(event) => {
           event.preventDefault();
-          if (!save.isPending) save.mutate({ id: person?.id ?? null, version: person?.version ?? 0, body: value }, { onSuccess: onDone });
+          if (!save.isPending)
+            save.mutate({ id: person?.id ?? null, version: person?.version ?? 0, body: value }, { onSuccess: onDone });
         }}
       >
         <div className="grid grid-cols-2 gap-3">
-          <TextField label="Name" value={value.name} error={fields['name']} onChange={(event) => setValue({ ...value, name: event.target.value })} />
-          <TextField label="Phone" type="tel" value={value.phone} error={fields['phone']} onChange={(event) => setValue({ ...value, phone: event.target.value })} />
+          <TextField
+            label="Name"
+            value={value.name}
+            error={fields['name']}
+            onChange={(event) => setValue({ ...value, name: event.target.value })}
+          />
+          <TextField
+            label="Phone"
+            type="tel"
+            value={value.phone}
+            error={fields['phone']}
+            onChange={(event) => setValue({ ...value, phone: event.target.value })}
+          />
         </div>
         <div className="grid grid-cols-2 gap-6 mt-3">
           <fieldset>
@@ -41,16 +53,35 @@ export function PersonForm({ person, onDone }: { person: PersonDto | null; onDon
                 key={skill}
                 label={skillNames[skill]}
                 checked={value.skills.includes(skill)}
-                onChange={(event) => setValue({ ...value, skills: event.target.checked ? [...value.skills, skill] : value.skills.filter((s) => s !== skill) })}
+                onChange={(event) =>
+                  setValue({
+                    ...value,
+                    skills: event.target.checked ? [...value.skills, skill] : value.skills.filter((s) => s !== skill),
+                  })
+                }
               />
             ))}
           </fieldset>
           <fieldset>
             <legend className="sec w-full">Standing</legend>
-            <CheckField label="Works here" checked={value.isActive} onChange={(event) => setValue({ ...value, isActive: event.target.checked })} />
-            <CheckField label="Trainee: rides along, adds no speed, no skill, no share" checked={value.isTrainee} onChange={(event) => setValue({ ...value, isTrainee: event.target.checked })} />
-            <CheckField label="Shares in tips, from today on" checked={value.sharesTips} onChange={(event) => setValue({ ...value, sharesTips: event.target.checked })} />
-            <p className="t-2 mt-1">Owners, managers and supervisors by their duties may not keep tips (29 USC 203(m)(2)(B)).</p>
+            <CheckField
+              label="Works here"
+              checked={value.isActive}
+              onChange={(event) => setValue({ ...value, isActive: event.target.checked })}
+            />
+            <CheckField
+              label="Trainee: rides along, adds no speed, no skill, no share"
+              checked={value.isTrainee}
+              onChange={(event) => setValue({ ...value, isTrainee: event.target.checked })}
+            />
+            <CheckField
+              label="Shares in tips, from today on"
+              checked={value.sharesTips}
+              onChange={(event) => setValue({ ...value, sharesTips: event.target.checked })}
+            />
+            <p className="t-2 mt-1">
+              Owners, managers and supervisors by their duties may not keep tips (29 USC 203(m)(2)(B)).
+            </p>
           </fieldset>
         </div>
         {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
@@ -93,8 +124,20 @@ function TimeOffList({ person }: { person: PersonDto }) {
         </p>
       ))}
       <div className="grid grid-cols-[1fr_1fr_1.4fr_auto] gap-2 items-end mt-2 max-[560px]:grid-cols-2">
-        <TextField label="First day" type="date" value={off.startsOn} error={fields['startsOn']} onChange={(event) => setOff({ ...off, startsOn: event.target.value })} />
-        <TextField label="Last day" type="date" value={off.endsOn} error={fields['endsOn']} onChange={(event) => setOff({ ...off, endsOn: event.target.value })} />
+        <TextField
+          label="First day"
+          type="date"
+          value={off.startsOn}
+          error={fields['startsOn']}
+          onChange={(event) => setOff({ ...off, startsOn: event.target.value })}
+        />
+        <TextField
+          label="Last day"
+          type="date"
+          value={off.endsOn}
+          error={fields['endsOn']}
+          onChange={(event) => setOff({ ...off, endsOn: event.target.value })}
+        />
         <TextField label="Note" value={off.note} onChange={(event) => setOff({ ...off, note: event.target.value })} />
         <Button type="submit" isBusy={add.isPending}>
           Add days off

@@ -52,7 +52,13 @@ export function HoursPage() {
       <RailPage>
         <div className="hung p-5 max-w-[1100px]">
           <Loaded query={hours} what="the hours">
-            {() => (entries.length === 0 ? <Empty>Nobody was on the clock that day.</Empty> : <PeopleHours entries={entries} now={now} onEdit={setEditing} />)}
+            {() =>
+              entries.length === 0 ? (
+                <Empty>Nobody was on the clock that day.</Empty>
+              ) : (
+                <PeopleHours entries={entries} now={now} onEdit={setEditing} />
+              )
+            }
           </Loaded>
         </div>
       </RailPage>
@@ -65,14 +71,26 @@ export function HoursPage() {
   );
 }
 
-function PeopleHours({ entries, now, onEdit }: { entries: ClockEntryDto[]; now: string; onEdit: (entry: ClockEntryDto) => void }) {
+function PeopleHours({
+  entries,
+  now,
+  onEdit,
+}: {
+  entries: ClockEntryDto[];
+  now: string;
+  onEdit: (entry: ClockEntryDto) => void;
+}) {
   const format = useFormats();
-  const people = [...new Map(entries.map((entry) => [entry.personId, entry.personName]))].sort((a, b) => a[1].localeCompare(b[1]));
+  const people = [...new Map(entries.map((entry) => [entry.personId, entry.personName]))].sort((a, b) =>
+    a[1].localeCompare(b[1]),
+  );
   return (
     <>
       {people.map(([personId, name]) => {
         const own = entries.filter((entry) => entry.personId === personId);
-        const worked = own.filter((e) => e.kind !== 'meal_break').reduce((sum, e) => sum + minutesBetween(e.startedAt, e.endedAt ?? now), 0);
+        const worked = own
+          .filter((e) => e.kind !== 'meal_break')
+          .reduce((sum, e) => sum + minutesBetween(e.startedAt, e.endedAt ?? now), 0);
         return (
           <section key={personId} className="mb-5" aria-label={name}>
             <h2 className="sec">

@@ -55,7 +55,11 @@ export function PeoplePage() {
                         <td>{person.phone}</td>
                         <td>{person.skills.map((skill) => skillNames[skill]).join(', ') || '–'}</td>
                         <td>{person.loginRole ?? 'none'}</td>
-                        <td>{person.timeOff[0] ? `${formatDate(person.timeOff[0].startsOn)}${person.timeOff.length > 1 ? ' and more' : ''}` : '–'}</td>
+                        <td>
+                          {person.timeOff[0]
+                            ? `${formatDate(person.timeOff[0].startsOn)}${person.timeOff.length > 1 ? ' and more' : ''}`
+                            : '–'}
+                        </td>
                         <td className="r">
                           <Button look="bare" onClick={() => setEditingId(person.id)}>
                             <Icon name="pen" /> Edit

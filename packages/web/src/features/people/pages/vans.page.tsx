@@ -36,7 +36,11 @@ export function VansPage() {
             ) : (
               <div className="grid grid-cols-[repeat(auto-fill,minmax(300px,1fr))] gap-x-4 gap-y-9 pt-1">
                 {list.map((van) => (
-                  <section key={van.id} className={`hung p-5 ${van.isActive ? '' : 'opacity-60'}`} aria-label={van.name}>
+                  <section
+                    key={van.id}
+                    className={`hung p-5 ${van.isActive ? '' : 'opacity-60'}`}
+                    aria-label={van.name}
+                  >
                     <h2 className="t-hang text-[44px] leading-[40px]">{van.name}</h2>
                     <p className="t-2 mb-2">
                       {van.plate ? `Plate ${van.plate}` : 'No plate on record'}
@@ -44,7 +48,10 @@ export function VansPage() {
                     </p>
                     <ul className="list-none p-0 m-0">
                       {equipmentKinds.map((tool) => (
-                        <li key={tool} className={`border-t border-line py-1 flex justify-between ${van.equipment.includes(tool) ? '' : 't-3'}`}>
+                        <li
+                          key={tool}
+                          className={`border-t border-line py-1 flex justify-between ${van.equipment.includes(tool) ? '' : 't-3'}`}
+                        >
                           <span>{equipmentNames[tool]}</span>
                           <span>{van.equipment.includes(tool) ? 'aboard' : '–'}</span>
                         </li>
@@ -63,7 +70,11 @@ export function VansPage() {
       </RailPage>
       {editing ? (
         <Sheet title={editing === 'new' ? 'New van' : editing.name} onClose={() => setEditing(null)} width={520}>
-          <VanForm van={editing === 'new' ? null : editing} nextPosition={vans.data?.vans.length ?? 0} onDone={() => setEditing(null)} />
+          <VanForm
+            van={editing === 'new' ? null : editing}
+            nextPosition={vans.data?.vans.length ?? 0}
+            onDone={() => setEditing(null)}
+          />
         </Sheet>
       ) : null}
     </>
@@ -86,13 +97,30 @@ function VanForm({ van, nextPosition, onDone }: { van: VanDto | null; nextPositi
       noValidate
       onSubmit={(event) => {
         event.preventDefault();
-        if (!save.isPending) save.mutate({ id: van?.id ?? null, version: van?.version ?? 0, body: value }, { onSuccess: onDone });
+        if (!save.isPending)
+          save.mutate({ id: van?.id ?? null, version: van?.version ?? 0, body: value }, { onSuccess: onDone });
       }}
     >
       <div className="grid grid-cols-[1fr_1fr_80px] gap-3">
-        <TextField label="Name" value={value.name} error={fields['name']} onChange={(event) => setValue({ ...value, name: event.target.value })} />
-        <TextField label="Plate" value={value.plate} error={fields['plate']} onChange={(event) => setValue({ ...value, plate: event.target.value })} />
-        <TextField label="Lane" type="number" value={value.position} error={fields['position']} onChange={(event) => setValue({ ...value, position: Number(event.target.value) })} />
+        <TextField
+          label="Name"
+          value={value.name}
+          error={fields['name']}
+          onChange={(event) => setValue({ ...value, name: event.target.value })}
+        />
+        <TextField
+          label="Plate"
+          value={value.plate}
+          error={fields['plate']}
+          onChange={(event) => setValue({ ...value, plate: event.target.value })}
+        />
+        <TextField
+          label="Lane"
+          type="number"
+          value={value.position}
+          error={fields['position']}
+          onChange={(event) => setValue({ ...value, position: Number(event.target.value) })}
+        />
       </div>
       <fieldset className="mt-3">
         <legend className="sec w-full">Aboard</legend>
@@ -101,12 +129,29 @@ function VanForm({ van, nextPosition, onDone }: { van: VanDto | null; nextPositi
             key={tool}
             label={equipmentNames[tool]}
             checked={value.equipment.includes(tool)}
-            onChange={(event) => setValue({ ...value, equipment: event.target.checked ? [...value.equipment, tool] : value.equipment.filter((t) => t !== tool) })}
+            onChange={(event) =>
+              setValue({
+                ...value,
+                equipment: event.target.checked
+                  ? [...value.equipment, tool]
+                  : value.equipment.filter((t) => t !== tool),
+              })
+            }
           />
         ))}
       </fieldset>
-      <TextArea className="mt-3" label="Notes" value={value.notes} error={fields['notes']} onChange={(event) => setValue({ ...value, notes: event.target.value })} />
-      <CheckField label="On the road" checked={value.isActive} onChange={(event) => setValue({ ...value, isActive: event.target.checked })} />
+      <TextArea
+        className="mt-3"
+        label="Notes"
+        value={value.notes}
+        error={fields['notes']}
+        onChange={(event) => setValue({ ...value, notes: event.target.value })}
+      />
+      <CheckField
+        label="On the road"
+        checked={value.isActive}
+        onChange={(event) => setValue({ ...value, isActive: event.target.checked })}
+      />
       {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
       <SheetFoot>
         <Button type="submit" look="main" isBusy={save.isPending}>

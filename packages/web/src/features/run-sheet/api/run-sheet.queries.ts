@@ -11,9 +11,16 @@ import { call } from '../../../lib/call.ts';
 import { deviceOffsetMs } from '../../../lib/device-clock.ts';
 
 export const runSheetQuery = (day: string) =>
-  queryOptions({ queryKey: ['run-sheet', day], queryFn: ({ signal }) => call(getRunSheet, { params: { day } }, signal), refetchInterval: 60_000 });
+  queryOptions({
+    queryKey: ['run-sheet', day],
+    queryFn: ({ signal }) => call(getRunSheet, { params: { day } }, signal),
+    refetchInterval: 60_000,
+  });
 
-export const clockQuery = queryOptions({ queryKey: ['clock', 'own'], queryFn: ({ signal }) => call(getClock, {}, signal) });
+export const clockQuery = queryOptions({
+  queryKey: ['clock', 'own'],
+  queryFn: ({ signal }) => call(getClock, {}, signal),
+});
 
 type VisitActionBody = NonNullable<RequestOf<typeof postVisitAction>['body']>;
 /** A press as it was made: the key and the time belong to the press, so that sending it twice marks once. */
@@ -23,7 +30,8 @@ export function newPress(visitId: string, action: Omit<VisitActionBody, 'key' | 
   return { visitId, key: uuid(), deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs(), ...action };
 }
 
-const refresh = (client: QueryClient) => Promise.all(['run-sheet', 'clock'].map((key) => client.invalidateQueries({ queryKey: [key] })));
+const refresh = (client: QueryClient) =>
+  Promise.all(['run-sheet', 'clock'].map((key) => client.invalidateQueries({ queryKey: [key] })));
 
 export function usePressVisit(day: string) {
   return useMutation({
@@ -31,8 +39,10 @@ export function usePressVisit(day: string) {
     // A lost answer is asked for again with the same key.
     retry: (count, error) => count < 3 && 'status' in error && error.status === 0,
     onSuccess: ({ visit }, _press, _saved, { client }) => {
-      client.setQueryData(runSheetQuery(day).queryKey, (sheet): RunSheetDto | undefined =>
-        sheet && { ...sheet, visits: sheet.visits.map((v) => (v.id === visit.id ? visit : v)) },
+      client.setQueryData(
+        runSheetQuery(day).queryKey,
+        (sheet): RunSheetDto | undefined =>
+          sheet && { ...sheet, visits: sheet.visits.map((v) => (v.id === visit.id ? visit : v)) },
       );
     },
     onSettled: (_d, _e, _v, _s, { client }) => refresh(client),
@@ -41,7 +51,13 @@ export function usePressVisit(day: string) {
 
 export function usePressClock() {
   return useMutation({
-    mutationFn: (press: { key: string; deviceAt: string; offsetMs: number; action: 'start' | 'stop'; kind?: ClockKindName }) => call(postClockAction, { body: press }),
+    mutationFn: (press: {
+      key: string;
+      deviceAt: string;
+      offsetMs: number;
+      action: 'start' | 'stop';
+      kind?: ClockKindName;
+    }) => call(postClockAction, { body: press }),
     retry: (count, error) => count < 3 && 'status' in error && error.status === 0,
     onSettled: (_d, _e, _v, _s, { client }) => refresh(client),
   });
@@ -53,7 +69,8 @@ export function newClockPress(action: 'start' | 'stop', kind?: ClockKindName) {
 
 export function useRecordTip(jobId: string) {
   return useMutation({
-    mutationFn: (tip: NonNullable<RequestOf<typeof recordTip>['body']>) => call(recordTip, { params: { id: jobId }, body: tip }),
+    mutationFn: (tip: NonNullable<RequestOf<typeof recordTip>['body']>) =>
+      call(recordTip, { params: { id: jobId }, body: tip }),
     onSettled: (_d, _e, _v, _s, { client }) => refresh(client),
   });
 }

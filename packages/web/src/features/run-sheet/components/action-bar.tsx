@@ -43,7 +43,11 @@ export function ActionBar({ visit, now, isBusy, onPress, onPartDone }: ActionBar
           const at = visit.times[step.time];
           const isHere = main === step.action;
           return (
-            <li key={step.action} className={isHere ? 'is-here' : at ? 'is-past' : ''} aria-current={isHere ? 'step' : undefined}>
+            <li
+              key={step.action}
+              className={isHere ? 'is-here' : at ? 'is-past' : ''}
+              aria-current={isHere ? 'step' : undefined}
+            >
               {isHere ? <i className="bead" aria-hidden /> : null}
               {step.label}
               <small>{at ? format.clock(at) : isHere ? 'next' : ' '}</small>
@@ -66,7 +70,12 @@ export function ActionBar({ visit, now, isBusy, onPress, onPartDone }: ActionBar
           </div>
         </div>
       ) : main && main !== 'call_off' ? (
-        <button type="button" className={main === 'finish' ? 'ph-main seal' : 'ph-main'} disabled={isBusy} onClick={() => press(main)}>
+        <button
+          type="button"
+          className={main === 'finish' ? 'ph-main seal' : 'ph-main'}
+          disabled={isBusy}
+          onClick={() => press(main)}
+        >
           {actionNames[main]}
         </button>
       ) : null}
@@ -76,14 +85,31 @@ export function ActionBar({ visit, now, isBusy, onPress, onPartDone }: ActionBar
             Part done
           </button>
         ) : null}
-        {canUndo && visit.undoable ? <UndoButton label={actionNames[visit.undoable.action]} until={visit.undoable.until} isBusy={isBusy} onUndo={() => onPress('undo')} /> : null}
+        {canUndo && visit.undoable ? (
+          <UndoButton
+            label={actionNames[visit.undoable.action]}
+            until={visit.undoable.until}
+            isBusy={isBusy}
+            onUndo={() => onPress('undo')}
+          />
+        ) : null}
       </div>
     </>
   );
 }
 
 /** Counts down, so that nobody wonders why it left. */
-function UndoButton({ label, until, isBusy, onUndo }: { label: string; until: string; isBusy: boolean; onUndo: () => void }) {
+function UndoButton({
+  label,
+  until,
+  isBusy,
+  onUndo,
+}: {
+  label: string;
+  until: string;
+  isBusy: boolean;
+  onUndo: () => void;
+}) {
   const [left, setLeft] = useState<number | null>(null);
   useEffect(() => {
     const measure = () => setLeft(Math.max(0, Math.round((Date.parse(until) - serverNow().getTime()) / 1000)));

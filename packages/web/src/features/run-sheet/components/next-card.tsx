@@ -8,7 +8,17 @@ import { useFormats } from '../../../lib/format.ts';
 import { mapLink } from '../../../lib/map-link.ts';
 
 /** The visit at hand, large: where, what, how to get in, whom to call. */
-export function NextCard({ visit, now, onTrouble, onTip }: { visit: RunVisitDto; now: string; onTrouble: () => void; onTip: () => void }) {
+export function NextCard({
+  visit,
+  now,
+  onTrouble,
+  onTip,
+}: {
+  visit: RunVisitDto;
+  now: string;
+  onTrouble: () => void;
+  onTip: () => void;
+}) {
   const format = useFormats();
   const isOpen = visit.phone !== null;
   return (
@@ -17,7 +27,9 @@ export function NextCard({ visit, now, onTrouble, onTip }: { visit: RunVisitDto;
         <span>{visit.from && visit.to ? format.span(visit.from, visit.to) : ''}</span>
         <StatusMark status={visit.progress}>
           {progressNames[visit.progress]}
-          {visit.since && visit.progress !== 'placed' ? ` ${formatMinutes(Math.max(0, minutesBetween(visit.since, now)))}` : ''}
+          {visit.since && visit.progress !== 'placed'
+            ? ` ${formatMinutes(Math.max(0, minutesBetween(visit.since, now)))}`
+            : ''}
         </StatusMark>
       </div>
       <h2 className="t-hang" style={{ fontSize: nameSize(visit.customerName) }}>
@@ -27,7 +39,9 @@ export function NextCard({ visit, now, onTrouble, onTip }: { visit: RunVisitDto;
         {visit.address}
         {visit.area ? <span className="t-2">, {visit.area}</span> : null}
       </p>
-      {visit.windowFrom && visit.windowTo ? <p className="t-2">Promised {format.span(visit.windowFrom, visit.windowTo)}</p> : null}
+      {visit.windowFrom && visit.windowTo ? (
+        <p className="t-2">Promised {format.span(visit.windowFrom, visit.windowTo)}</p>
+      ) : null}
       <ul className="work">
         {visit.lines.map((line) => (
           <li key={line.id}>
@@ -42,7 +56,19 @@ export function NextCard({ visit, now, onTrouble, onTip }: { visit: RunVisitDto;
       <dl className="access">
         <div>
           <Icon name="gate" />
-          {isOpen ? visit.gateCode ? <span>Gate <b>{visit.gateCode}</b></span> : 'No gate code' : visit.hasGateCode ? 'Gate code comes on the day' : 'No gate code'}
+          {isOpen ? (
+            visit.gateCode ? (
+              <span>
+                Gate <b>{visit.gateCode}</b>
+              </span>
+            ) : (
+              'No gate code'
+            )
+          ) : visit.hasGateCode ? (
+            'Gate code comes on the day'
+          ) : (
+            'No gate code'
+          )}
         </div>
         <div>
           <Icon name={visit.hasWater ? 'hose' : 'nohose'} /> {visit.hasWater ? 'Spigot' : 'No spigot, own water'}

@@ -8,7 +8,13 @@ const reasons = ['Weather', 'Out of time', 'Cure time', 'No water', 'Customer as
 const spans = [30, 60, 90, 120, 180, 240];
 
 /** Ends a visit with what is finished; the rest goes back to Unplaced with its minutes. */
-export function PartDoneSheet({ visit, isBusy, error, onSend, onClose }: {
+export function PartDoneSheet({
+  visit,
+  isBusy,
+  error,
+  onSend,
+  onClose,
+}: {
   visit: RunVisitDto;
   isBusy: boolean;
   error: string | undefined;
@@ -29,14 +35,22 @@ export function PartDoneSheet({ visit, isBusy, error, onSend, onClose }: {
               key={line.id}
               label={`${line.serviceName}${line.vehicle ? `, ${line.vehicle}` : ''}`}
               checked={finished.includes(line.id)}
-              onChange={(event) => setFinished(event.target.checked ? [...finished, line.id] : finished.filter((id) => id !== line.id))}
+              onChange={(event) =>
+                setFinished(event.target.checked ? [...finished, line.id] : finished.filter((id) => id !== line.id))
+              }
             />
           ))}
         </fieldset>
         <h3 className="sec">Why the rest is left</h3>
         <div className="grid grid-cols-2 gap-2 my-2">
           {reasons.map((pick) => (
-            <button key={pick} type="button" className={reason === pick ? 'btn is-picked' : 'btn'} aria-pressed={reason === pick} onClick={() => setReason(pick)}>
+            <button
+              key={pick}
+              type="button"
+              className={reason === pick ? 'btn is-picked' : 'btn'}
+              aria-pressed={reason === pick}
+              onClick={() => setReason(pick)}
+            >
               {pick}
             </button>
           ))}
@@ -45,7 +59,13 @@ export function PartDoneSheet({ visit, isBusy, error, onSend, onClose }: {
         <h3 className="sec mt-3">The rest takes about</h3>
         <div className="grid grid-cols-3 gap-2 my-2">
           {spans.map((span) => (
-            <button key={span} type="button" className={minutes === span ? 'btn is-picked' : 'btn'} aria-pressed={minutes === span} onClick={() => setMinutes(span)}>
+            <button
+              key={span}
+              type="button"
+              className={minutes === span ? 'btn is-picked' : 'btn'}
+              aria-pressed={minutes === span}
+              onClick={() => setMinutes(span)}
+            >
               {span < 60 ? `${span} min` : `${span / 60} h`}
             </button>
           ))}

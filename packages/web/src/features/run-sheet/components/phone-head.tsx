@@ -7,7 +7,17 @@ import { useSession } from '../../../lib/session.tsx';
 import { useIsLive } from '../../../lib/socket.ts';
 
 /** The head of a phone page: a line, a hanging name, and whether there is signal. */
-export function PhoneHead({ above, title, menu, children }: { above: ReactNode; title: string; menu: (ability: AppAbility) => ReactNode; children?: ReactNode }) {
+export function PhoneHead({
+  above,
+  title,
+  menu,
+  children,
+}: {
+  above: ReactNode;
+  title: string;
+  menu: (ability: AppAbility) => ReactNode;
+  children?: ReactNode;
+}) {
   const ability = useAbility<AppAbility>();
   const isOnline = useOnline();
   const isLive = useIsLive();
@@ -26,7 +36,8 @@ export function PhoneHead({ above, title, menu, children }: { above: ReactNode; 
       </div>
       {isOnline && isLive ? null : (
         <p className="adrift" role="status">
-          <Icon name="offline" /> {isOnline ? 'Not live. What you see may be a little old.' : 'No signal. Press again when it is back.'}
+          <Icon name="offline" />{' '}
+          {isOnline ? 'Not live. What you see may be a little old.' : 'No signal. Press again when it is back.'}
         </p>
       )}
     </header>

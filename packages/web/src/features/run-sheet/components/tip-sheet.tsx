@@ -28,27 +28,57 @@ export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () =
         <p className="t-2 mb-2">{visit.customerName}. Shared by the crew, never by the house.</p>
         <div className="grid grid-cols-3 gap-2 mb-3">
           {amounts.map((pick) => (
-            <button key={pick} type="button" className={amount === pick ? 'btn is-picked' : 'btn'} aria-pressed={amount === pick} onClick={() => setAmount(pick)}>
+            <button
+              key={pick}
+              type="button"
+              className={amount === pick ? 'btn is-picked' : 'btn'}
+              aria-pressed={amount === pick}
+              onClick={() => setAmount(pick)}
+            >
               {pick}
             </button>
           ))}
         </div>
-        <TextField label="Amount" inputMode="decimal" value={amount} onChange={(event) => setAmount(event.target.value)} error={amount !== '' && cents === null ? 'Give an amount like 15.00.' : tip.error?.message} />
+        <TextField
+          label="Amount"
+          inputMode="decimal"
+          value={amount}
+          onChange={(event) => setAmount(event.target.value)}
+          error={amount !== '' && cents === null ? 'Give an amount like 15.00.' : tip.error?.message}
+        />
         <div className="grid grid-cols-3 gap-2 my-3" role="radiogroup" aria-label="How">
           {methods.map(([value, label]) => (
-            <button key={value} type="button" role="radio" aria-checked={method === value} className={method === value ? 'btn is-picked' : 'btn'} onClick={() => setMethod(value)}>
+            <button
+              key={value}
+              type="button"
+              role="radio"
+              aria-checked={method === value}
+              className={method === value ? 'btn is-picked' : 'btn'}
+              onClick={() => setMethod(value)}
+            >
               {label}
             </button>
           ))}
         </div>
-        {method === 'cash' ? <CheckField label="Kept by the crew on the spot" checked={isKept} onChange={(event) => setKept(event.target.checked)} /> : null}
+        {method === 'cash' ? (
+          <CheckField
+            label="Kept by the crew on the spot"
+            checked={isKept}
+            onChange={(event) => setKept(event.target.checked)}
+          />
+        ) : null}
       </div>
       <SheetFoot>
         <Button
           look="main"
           isBusy={tip.isPending}
           disabled={cents === null || cents <= 0}
-          onClick={() => tip.mutate({ key, amountCents: cents ?? 0, method, alreadyReceived: method === 'cash' && isKept }, { onSuccess: onClose })}
+          onClick={() =>
+            tip.mutate(
+              { key, amountCents: cents ?? 0, method, alreadyReceived: method === 'cash' && isKept },
+              { onSuccess: onClose },
+            )
+          }
         >
           Record the tip
         </Button>

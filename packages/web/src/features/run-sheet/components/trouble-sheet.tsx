@@ -8,7 +8,13 @@ import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 type Trouble = (typeof troubleKinds)[number];
 
 /** Tells the board what is wrong. In an injury first aid and the emergency number come first. */
-export function TroubleSheet({ visit, isBusy, error, onSend, onClose }: {
+export function TroubleSheet({
+  visit,
+  isBusy,
+  error,
+  onSend,
+  onClose,
+}: {
   visit: RunVisitDto;
   isBusy: boolean;
   error: string | undefined;
@@ -21,7 +27,8 @@ export function TroubleSheet({ visit, isBusy, error, onSend, onClose }: {
     <Sheet title="Trouble" onClose={onClose} width={460}>
       <div className="ph-sheet">
         <p className="caution">
-          <b>Somebody hurt?</b> Help first: call <a href="tel:911">911</a>, give the address below, follow the data sheet’s first aid. The board comes after.
+          <b>Somebody hurt?</b> Help first: call <a href="tel:911">911</a>, give the address below, follow the data
+          sheet’s first aid. The board comes after.
         </p>
         <p className="mb-3">
           {visit.address}
@@ -29,15 +36,32 @@ export function TroubleSheet({ visit, isBusy, error, onSend, onClose }: {
         </p>
         <div className="grid grid-cols-2 gap-2 mb-3" role="radiogroup" aria-label="What is wrong">
           {troubleKinds.map((kind) => (
-            <button key={kind} type="button" role="radio" aria-checked={trouble === kind} className={trouble === kind ? 'btn is-picked' : 'btn'} onClick={() => setTrouble(kind)}>
+            <button
+              key={kind}
+              type="button"
+              role="radio"
+              aria-checked={trouble === kind}
+              className={trouble === kind ? 'btn is-picked' : 'btn'}
+              onClick={() => setTrouble(kind)}
+            >
               {troubleNames[kind]}
             </button>
           ))}
         </div>
-        <TextField label="More, if it helps" value={note} onChange={(event) => setNote(event.target.value)} error={error} />
+        <TextField
+          label="More, if it helps"
+          value={note}
+          onChange={(event) => setNote(event.target.value)}
+          error={error}
+        />
       </div>
       <SheetFoot>
-        <Button look="main" isBusy={isBusy} disabled={trouble === null} onClick={() => trouble && onSend({ trouble, reason: note })}>
+        <Button
+          look="main"
+          isBusy={isBusy}
+          disabled={trouble === null}
+          onClick={() => trouble && onSend({ trouble, reason: note })}
+        >
           Tell the board
         </Button>
       </SheetFoot>

@@ -30,7 +30,11 @@ export function ClockPage() {
   const format = useFormats();
   return (
     <main className="ph" id="main">
-      <PhoneHead above={formatDay(dayOf(now, format.zone))} title="Clock" menu={(ability) => <PhoneMenu ability={ability} />} />
+      <PhoneHead
+        above={formatDay(dayOf(now, format.zone))}
+        title="Clock"
+        menu={(ability) => <PhoneMenu ability={ability} />}
+      />
       <p className="crew-line">
         <Link to={paths.runSheet}>
           <Icon name="left" /> Run sheet
@@ -39,7 +43,13 @@ export function ClockPage() {
       <div className="leg">
         <div className="rail" />
         <Loaded query={clock} what="the clock">
-          {(data) => (data.clock ? <Clock clock={data.clock} now={now} /> : <Empty>This login belongs to nobody on the crew, so it has no clock.</Empty>)}
+          {(data) =>
+            data.clock ? (
+              <Clock clock={data.clock} now={now} />
+            ) : (
+              <Empty>This login belongs to nobody on the crew, so it has no clock.</Empty>
+            )
+          }
         </Loaded>
       </div>
     </main>
@@ -59,7 +69,8 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
       <p className="t-2">Today. This week {formatMinutes(clock.weekMinutes)}.</p>
       {clock.forgotten.map((entry) => (
         <p key={entry.id} className="tape mt-2">
-          <b>No clock-out since {formatDay(dayOf(entry.startedAt, format.zone))}.</b> Ask dispatch to set the time; nobody guesses it.
+          <b>No clock-out since {formatDay(dayOf(entry.startedAt, format.zone))}.</b> Ask dispatch to set the time;
+          nobody guesses it.
         </p>
       ))}
       {press.error ? (
@@ -69,7 +80,14 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
       ) : null}
       <div className="toggles" role="group" aria-label="Kind of time">
         {toggles.map(({ kind, note }) => (
-          <button key={kind} type="button" className={open?.kind === kind ? 'btn is-on' : 'btn'} aria-pressed={open?.kind === kind} disabled={press.isPending} onClick={() => press.mutate(newClockPress('start', kind))}>
+          <button
+            key={kind}
+            type="button"
+            className={open?.kind === kind ? 'btn is-on' : 'btn'}
+            aria-pressed={open?.kind === kind}
+            disabled={press.isPending}
+            onClick={() => press.mutate(newClockPress('start', kind))}
+          >
             {clockKindNames[kind]}
             <small>{note}</small>
           </button>
@@ -84,17 +102,28 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
             {entry.jobNumber ? <span className="t-2">, job {entry.jobNumber}</span> : null}
           </span>
           <span>
-            {entry.endedAt ? format.span(entry.startedAt, entry.endedAt) : `since ${format.clock(entry.startedAt)}`}, {formatMinutes(minutesBetween(entry.startedAt, entry.endedAt ?? now))}
+            {entry.endedAt ? format.span(entry.startedAt, entry.endedAt) : `since ${format.clock(entry.startedAt)}`},{' '}
+            {formatMinutes(minutesBetween(entry.startedAt, entry.endedAt ?? now))}
           </span>
         </p>
       ))}
       <footer className="ph-act">
         {open ? (
-          <button type="button" className="ph-main seal" disabled={press.isPending} onClick={() => press.mutate(newClockPress('stop'))}>
+          <button
+            type="button"
+            className="ph-main seal"
+            disabled={press.isPending}
+            onClick={() => press.mutate(newClockPress('stop'))}
+          >
             Clock out
           </button>
         ) : (
-          <button type="button" className="ph-main" disabled={press.isPending} onClick={() => press.mutate(newClockPress('start', 'shop'))}>
+          <button
+            type="button"
+            className="ph-main"
+            disabled={press.isPending}
+            onClick={() => press.mutate(newClockPress('start', 'shop'))}
+          >
             Clock in
           </button>
         )}

@@ -49,7 +49,9 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
   const [panel, setPanel] = useState<Panel | null>(null);
   const press = usePressVisit(sheet.day);
   const isToday = sheet.day === dayOf(now, sheet.zone);
-  const at = sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ?? sheet.visits.find((visit) => visit.progress === 'placed');
+  const at =
+    sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ??
+    sheet.visits.find((visit) => visit.progress === 'placed');
   const last = [...sheet.visits].reverse().find((visit) => isEnded(visit.progress) && visit.undoable);
   const shown = sheet.visits.find((visit) => visit.id === panel?.visitId);
   const close = () => {
@@ -58,7 +60,11 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
   };
   return (
     <>
-      <PhoneHead above={formatDay(sheet.day)} title={sheet.vanName ?? 'No van'} menu={(ability) => <PhoneMenu ability={ability} />}>
+      <PhoneHead
+        above={formatDay(sheet.day)}
+        title={sheet.vanName ?? 'No van'}
+        menu={(ability) => <PhoneMenu ability={ability} />}
+      >
         {sheet.clock ? <ClockBox clock={sheet.clock} /> : null}
       </PhoneHead>
       <p className="crew-line t-2">
@@ -71,7 +77,9 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
       ) : null}
       <div className="leg">
         <div className="rail" />
-        {sheet.visits.length === 0 ? <p className="empty">Nothing hangs here {isToday ? 'today' : 'that day'}. New work shows up by itself.</p> : null}
+        {sheet.visits.length === 0 ? (
+          <p className="empty">Nothing hangs here {isToday ? 'today' : 'that day'}. New work shows up by itself.</p>
+        ) : null}
         <ol>
           {sheet.visits.map((visit, index) => (
             <li key={visit.id} className={visit.id === at?.id ? 'is-at' : isEnded(visit.progress) ? 'is-over' : ''}>
@@ -79,7 +87,12 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
               {visit.id === at?.id ? (
                 <>
                   <i className="bead" aria-hidden />
-                  <NextCard visit={visit} now={now} onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })} onTip={() => setPanel({ kind: 'tip', visitId: visit.id })} />
+                  <NextCard
+                    visit={visit}
+                    now={now}
+                    onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })}
+                    onTip={() => setPanel({ kind: 'tip', visitId: visit.id })}
+                  />
                 </>
               ) : (
                 <VisitRow visit={visit} onOpen={() => setPanel({ kind: 'look', visitId: visit.id })} />
@@ -99,31 +112,61 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
             visit={at.progress === 'placed' && last ? { ...at, undoable: last.undoable } : at}
             now={now}
             isBusy={press.isPending}
-            onPress={(kind) => press.mutate(newPress(kind === 'undo' && at.progress === 'placed' && last ? last.id : at.id, { kind }))}
+            onPress={(kind) =>
+              press.mutate(newPress(kind === 'undo' && at.progress === 'placed' && last ? last.id : at.id, { kind }))
+            }
             onPartDone={() => setPanel({ kind: 'part_done', visitId: at.id })}
           />
         ) : last && isToday ? (
           <div className="below">
             <p className="flex-1 self-center">The day is done.</p>
-            <button type="button" className="btn" disabled={press.isPending} onClick={() => press.mutate(newPress(last.id, { kind: 'undo' }))}>
+            <button
+              type="button"
+              className="btn"
+              disabled={press.isPending}
+              onClick={() => press.mutate(newPress(last.id, { kind: 'undo' }))}
+            >
               Take back “Done”
             </button>
           </div>
         ) : (
-          <p className="t-2 py-2">{sheet.visits.length === 0 ? 'No visits.' : isToday ? 'The day is done.' : 'Marks are made on the day itself.'}</p>
+          <p className="t-2 py-2">
+            {sheet.visits.length === 0
+              ? 'No visits.'
+              : isToday
+                ? 'The day is done.'
+                : 'Marks are made on the day itself.'}
+          </p>
         )}
       </footer>
       {shown && panel?.kind === 'trouble' ? (
-        <TroubleSheet visit={shown} isBusy={press.isPending} error={press.error?.message} onClose={close} onSend={(trouble) => press.mutate(newPress(shown.id, { kind: 'trouble', ...trouble }), { onSuccess: close })} />
+        <TroubleSheet
+          visit={shown}
+          isBusy={press.isPending}
+          error={press.error?.message}
+          onClose={close}
+          onSend={(trouble) => press.mutate(newPress(shown.id, { kind: 'trouble', ...trouble }), { onSuccess: close })}
+        />
       ) : null}
       {shown && panel?.kind === 'part_done' ? (
-        <PartDoneSheet visit={shown} isBusy={press.isPending} error={press.error?.message} onClose={close} onSend={(part) => press.mutate(newPress(shown.id, { kind: 'part_done', ...part }), { onSuccess: close })} />
+        <PartDoneSheet
+          visit={shown}
+          isBusy={press.isPending}
+          error={press.error?.message}
+          onClose={close}
+          onSend={(part) => press.mutate(newPress(shown.id, { kind: 'part_done', ...part }), { onSuccess: close })}
+        />
       ) : null}
       {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} onClose={close} /> : null}
       {shown && panel?.kind === 'look' ? (
         <Sheet title={shown.customerName} onClose={close} width={480}>
           <div className="ph-sheet pb-4">
-            <NextCard visit={shown} now={now} onTrouble={() => setPanel({ kind: 'trouble', visitId: shown.id })} onTip={() => setPanel({ kind: 'tip', visitId: shown.id })} />
+            <NextCard
+              visit={shown}
+              now={now}
+              onTrouble={() => setPanel({ kind: 'trouble', visitId: shown.id })}
+              onTip={() => setPanel({ kind: 'tip', visitId: shown.id })}
+            />
           </div>
         </Sheet>
       ) : null}
@@ -152,7 +195,8 @@ function DayLinks({ sheet, today }: { sheet: RunSheetDto; today: string }) {
 function Drive({ from, to }: { from: RunVisitDto | undefined; to: RunVisitDto }) {
   const format = useFormats();
   if (!from || isEnded(to.progress) || from.stopId === to.stopId) return null;
-  const point = (visit: RunVisitDto) => (visit.lat === null || visit.lng === null ? null : { lat: visit.lat, lng: visit.lng });
+  const point = (visit: RunVisitDto) =>
+    visit.lat === null || visit.lng === null ? null : { lat: visit.lat, lng: visit.lng };
   const travel = estimateTravel(point(from), point(to));
   return (
     <p className="drive">

@@ -1,9 +1,17 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
-import { createService, listServices, setServicePrices, updateService } from '@driprail/shared/contracts/services.contract';
+import {
+  createService,
+  listServices,
+  setServicePrices,
+  updateService,
+} from '@driprail/shared/contracts/services.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import { call } from '../../../lib/call.ts';
 
-export const servicesQuery = queryOptions({ queryKey: ['services', 'menu'], queryFn: ({ signal }) => call(listServices, {}, signal) });
+export const servicesQuery = queryOptions({
+  queryKey: ['services', 'menu'],
+  queryFn: ({ signal }) => call(listServices, {}, signal),
+});
 
 type CreateBody = NonNullable<RequestOf<typeof createService>['body']>;
 type UpdateBody = NonNullable<RequestOf<typeof updateService>['body']>;

@@ -1,5 +1,12 @@
 import { useState } from 'react';
-import { equipmentKinds, equipmentNames, sizeClassNames, sizeClasses, skillNames, skills } from '@driprail/shared/contracts/fields';
+import {
+  equipmentKinds,
+  equipmentNames,
+  sizeClassNames,
+  sizeClasses,
+  skillNames,
+  skills,
+} from '@driprail/shared/contracts/fields';
 import type { Equipment, SizeClass, Skill } from '@driprail/shared/contracts/fields';
 import { serviceKinds } from '@driprail/shared/contracts/services.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
@@ -14,7 +21,15 @@ export const kindNames = { package: 'Package', single: 'Single service', add_on:
 type PriceTexts = Record<SizeClass, { price: string; minutes: string }>;
 
 /** A service by size class. A new price starts on a date; what was quoted keeps its own. */
-export function ServiceForm({ service, today, onDone }: { service: ServiceDto | null; today: string; onDone: () => void }) {
+export function ServiceForm({
+  service,
+  today,
+  onDone,
+}: {
+  service: ServiceDto | null;
+  today: string;
+  onDone: () => void;
+}) {
   const save = useSaveService();
   const [value, setValue] = useState({
     name: service?.name ?? '',
@@ -29,7 +44,8 @@ export function ServiceForm({ service, today, onDone }: { service: ServiceDto | 
   const [startsOn, setStartsOn] = useState(today);
   const [unread, setUnread] = useState<Record<string, string>>({});
   const fields = { ...(save.error instanceof ApiError ? save.error.fields : {}), ...unread };
-  const toggle = <T extends string>(list: T[], item: T, isOn: boolean) => (isOn ? [...list, item] : list.filter((other) => other !== item));
+  const toggle = <T extends string>(list: T[], item: T, isOn: boolean) =>
+    isOn ? [...list, item] : list.filter((other) => other !== item);
 
   const submit = () => {
     const read = readPrices(prices);
@@ -37,7 +53,11 @@ export function ServiceForm({ service, today, onDone }: { service: ServiceDto | 
     if (Object.keys(read.fields).length > 0 || save.isPending) return;
     const isChanged = JSON.stringify(prices) !== JSON.stringify(textsOf(service));
     const order = service
-      ? { id: service.id, update: { ...value, version: service.version }, prices: isChanged ? { startsOn, prices: read.prices } : null }
+      ? {
+          id: service.id,
+          update: { ...value, version: service.version },
+          prices: isChanged ? { startsOn, prices: read.prices } : null,
+        }
       : { create: { ...value, startsOn, prices: read.prices } };
     save.mutate(order, { onSuccess: onDone });
   };
@@ -50,28 +70,60 @@ export function ServiceForm({ service, today, onDone }: { service: ServiceDto | 
       }}
     >
       <div className="grid grid-cols-[2fr_1fr_90px] gap-3 max-[560px]:grid-cols-1">
-        <TextField label="Name" value={value.name} error={fields['name']} onChange={(event) => setValue({ ...value, name: event.target.value })} />
-        <SelectField label="Kind" value={value.kind} onChange={(event) => setValue({ ...value, kind: event.target.value as ServiceDto['kind'] })}>
+        <TextField
+          label="Name"
+          value={value.name}
+          error={fields['name']}
+          onChange={(event) => setValue({ ...value, name: event.target.value })}
+        />
+        <SelectField
+          label="Kind"
+          value={value.kind}
+          onChange={(event) => setValue({ ...value, kind: event.target.value as ServiceDto['kind'] })}
+        >
           {serviceKinds.map((kind) => (
             <option key={kind} value={kind}>
               {kindNames[kind]}
             </option>
           ))}
         </SelectField>
-        <TextField label="Order" type="number" value={value.position} error={fields['position']} onChange={(event) => setValue({ ...value, position: Number(event.target.value) })} />
+        <TextField
+          label="Order"
+          type="number"
+          value={value.position}
+          error={fields['position']}
+          onChange={(event) => setValue({ ...value, position: Number(event.target.value) })}
+        />
       </div>
-      <TextArea className="mt-3" label="What it is" value={value.description} onChange={(event) => setValue({ ...value, description: event.target.value })} />
+      <TextArea
+        className="mt-3"
+        label="What it is"
+        value={value.description}
+        onChange={(event) => setValue({ ...value, description: event.target.value })}
+      />
       <div className="grid grid-cols-2 gap-6 mt-3 max-[560px]:grid-cols-1">
         <fieldset>
           <legend className="sec w-full">Skills it needs</legend>
           {skills.map((skill: Skill) => (
-            <CheckField key={skill} label={skillNames[skill]} checked={value.skills.includes(skill)} onChange={(event) => setValue({ ...value, skills: toggle(value.skills, skill, event.target.checked) })} />
+            <CheckField
+              key={skill}
+              label={skillNames[skill]}
+              checked={value.skills.includes(skill)}
+              onChange={(event) => setValue({ ...value, skills: toggle(value.skills, skill, event.target.checked) })}
+            />
           ))}
         </fieldset>
         <fieldset>
           <legend className="sec w-full">Equipment it needs</legend>
           {equipmentKinds.map((tool: Equipment) => (
-            <CheckField key={tool} label={equipmentNames[tool]} checked={value.equipment.includes(tool)} onChange={(event) => setValue({ ...value, equipment: toggle(value.equipment, tool, event.target.checked) })} />
+            <CheckField
+              key={tool}
+              label={equipmentNames[tool]}
+              checked={value.equipment.includes(tool)}
+              onChange={(event) =>
+                setValue({ ...value, equipment: toggle(value.equipment, tool, event.target.checked) })
+              }
+            />
           ))}
         </fieldset>
       </div>
@@ -80,14 +132,37 @@ export function ServiceForm({ service, today, onDone }: { service: ServiceDto | 
         {sizeClasses.map((size) => (
           <div key={size} className="grid grid-cols-[1fr_120px_120px] gap-3 items-end">
             <span className="self-center">{sizeClassNames[size]}</span>
-            <TextField label="Price" inputMode="decimal" placeholder="not sold" value={prices[size].price} error={fields[`price.${size}`]} onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], price: event.target.value } })} />
-            <TextField label="Minutes" inputMode="numeric" value={prices[size].minutes} error={fields[`minutes.${size}`]} onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], minutes: event.target.value } })} />
+            <TextField
+              label="Price"
+              inputMode="decimal"
+              placeholder="not sold"
+              value={prices[size].price}
+              error={fields[`price.${size}`]}
+              onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], price: event.target.value } })}
+            />
+            <TextField
+              label="Minutes"
+              inputMode="numeric"
+              value={prices[size].minutes}
+              error={fields[`minutes.${size}`]}
+              onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], minutes: event.target.value } })}
+            />
           </div>
         ))}
       </div>
       <div className="grid grid-cols-2 gap-3 mt-3">
-        <TextField label="These prices start on" type="date" value={startsOn} error={fields['startsOn']} onChange={(event) => setStartsOn(event.target.value)} />
-        <CheckField label="On the menu" checked={value.isActive} onChange={(event) => setValue({ ...value, isActive: event.target.checked })} />
+        <TextField
+          label="These prices start on"
+          type="date"
+          value={startsOn}
+          error={fields['startsOn']}
+          onChange={(event) => setStartsOn(event.target.value)}
+        />
+        <CheckField
+          label="On the menu"
+          checked={value.isActive}
+          onChange={(event) => setValue({ ...value, isActive: event.target.checked })}
+        />
       </div>
       {fields['prices'] || (save.error && Object.keys(fields).length === 0) ? (
         <p className="tape mt-3" role="alert">
@@ -107,7 +182,10 @@ export function ServiceForm({ service, today, onDone }: { service: ServiceDto | 
 function textsOf(service: ServiceDto | null): PriceTexts {
   const entries = sizeClasses.map((size) => {
     const price = service?.prices.find((p) => p.sizeClass === size);
-    return [size, { price: price ? (price.priceCents / 100).toFixed(2) : '', minutes: price ? String(price.minutes) : '' }];
+    return [
+      size,
+      { price: price ? (price.priceCents / 100).toFixed(2) : '', minutes: price ? String(price.minutes) : '' },
+    ];
   });
   return Object.fromEntries(entries) as PriceTexts;
 }

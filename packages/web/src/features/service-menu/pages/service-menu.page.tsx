@@ -70,7 +70,9 @@ export function ServiceMenuPage() {
                               {index === 0 ? <span className="block t-tight t-2 pt-2">{kindNames[kind]}</span> : null}
                               <b>{service.name}</b>
                               {service.isActive ? '' : ' (off the menu)'}
-                              {service.description ? <span className="block t-2 max-w-[38ch]">{service.description}</span> : null}
+                              {service.description ? (
+                                <span className="block t-2 max-w-[38ch]">{service.description}</span>
+                              ) : null}
                             </td>
                             {sizeClasses.map((size) => {
                               const price = service.prices.find((p) => p.sizeClass === size);
@@ -87,7 +89,12 @@ export function ServiceMenuPage() {
                                 </td>
                               );
                             })}
-                            <td className="!pl-6">{[...service.skills.map((s) => skillNames[s]), ...service.equipment.map((e) => equipmentNames[e])].join(', ') || '–'}</td>
+                            <td className="!pl-6">
+                              {[
+                                ...service.skills.map((s) => skillNames[s]),
+                                ...service.equipment.map((e) => equipmentNames[e]),
+                              ].join(', ') || '–'}
+                            </td>
                             {canEdit ? (
                               <td className="r">
                                 <Button look="bare" onClick={() => setEditing(service)}>
@@ -107,7 +114,11 @@ export function ServiceMenuPage() {
       </RailPage>
       {editing ? (
         <Sheet title={editing === 'new' ? 'New service' : editing.name} onClose={close} width={680}>
-          <ServiceForm service={editing === 'new' ? null : editing} today={dayOf(serverNow().toISOString(), zone)} onDone={close} />
+          <ServiceForm
+            service={editing === 'new' ? null : editing}
+            today={dayOf(serverNow().toISOString(), zone)}
+            onDone={close}
+          />
         </Sheet>
       ) : null}
     </>

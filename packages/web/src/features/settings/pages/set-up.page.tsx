@@ -15,7 +15,13 @@ export function SetUpPage() {
   const client = useQueryClient();
   const navigate = useNavigate();
   const setUp = useQuery({ queryKey: ['set-up'], queryFn: ({ signal }) => call(getSetUp, {}, signal) });
-  const draft = useDraft('set-up-draft', () => ({ companyName: '', zone: Intl.DateTimeFormat().resolvedOptions().timeZone, ownerName: '', email: '', code: '' }));
+  const draft = useDraft('set-up-draft', () => ({
+    companyName: '',
+    zone: Intl.DateTimeFormat().resolvedOptions().timeZone,
+    ownerName: '',
+    email: '',
+    code: '',
+  }));
   const [password, setPassword] = useState('');
   const { value, set } = draft;
   const complete = useMutation({
@@ -52,7 +58,13 @@ export function SetUpPage() {
             <h2 className="t-hang">Company</h2>
             <div className="grid grid-cols-2 gap-x-5 max-[700px]:grid-cols-1">
               <TextField label="Company name" autoFocus {...text('companyName')} />
-              <SelectField label="Time zone" value={value.zone} error={fields['zone']} hint="Days, shifts and the workweek go by it." onChange={(event) => set({ ...value, zone: event.target.value })}>
+              <SelectField
+                label="Time zone"
+                value={value.zone}
+                error={fields['zone']}
+                hint="Days, shifts and the workweek go by it."
+                onChange={(event) => set({ ...value, zone: event.target.value })}
+              >
                 {zoneNames(value.zone).map((zone) => (
                   <option key={zone} value={zone}>
                     {zone.replaceAll('_', ' ')}
@@ -66,8 +78,21 @@ export function SetUpPage() {
             <div className="grid grid-cols-2 gap-x-5 max-[700px]:grid-cols-1">
               <TextField label="Your name" autoComplete="name" {...text('ownerName')} />
               <TextField label="Your e-mail" type="email" autoComplete="username" {...text('email')} />
-              <TextField label="Password" type="password" autoComplete="new-password" hint="At least ten letters." value={password} error={fields['password']} onChange={(event) => setPassword(event.target.value)} />
-              <TextField label="One-time code" hint="The terminal that started Driprail shows it." autoComplete="one-time-code" {...text('code')} />
+              <TextField
+                label="Password"
+                type="password"
+                autoComplete="new-password"
+                hint="At least ten letters."
+                value={password}
+                error={fields['password']}
+                onChange={(event) => setPassword(event.target.value)}
+              />
+              <TextField
+                label="One-time code"
+                hint="The terminal that started Driprail shows it."
+                autoComplete="one-time-code"
+                {...text('code')}
+              />
             </div>
           </section>
           {complete.error && Object.keys(fields).length === 0 ? (

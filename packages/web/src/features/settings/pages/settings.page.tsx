@@ -56,7 +56,13 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
         <TextField label="Name" {...text('name')} />
         <TextField label="Phone, as customers see it" type="tel" {...text('phone')} />
         <TextField label="E-mail, as customers see it" type="email" {...text('email')} />
-        <SelectField label="Time zone" value={value.zone} error={fields['zone']} hint="Days, shifts and the workweek go by it, whatever a browser says." onChange={(event) => setValue({ ...value, zone: event.target.value })}>
+        <SelectField
+          label="Time zone"
+          value={value.zone}
+          error={fields['zone']}
+          hint="Days, shifts and the workweek go by it, whatever a browser says."
+          onChange={(event) => setValue({ ...value, zone: event.target.value })}
+        >
           {zoneNames(value.zone).map((zone) => (
             <option key={zone} value={zone}>
               {zone.replaceAll('_', ' ')}
@@ -64,11 +70,19 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
           ))}
         </SelectField>
         <div className="grid grid-cols-2 gap-3">
-          <SelectField label="Clock" value={value.clock} onChange={(event) => setValue({ ...value, clock: event.target.value as '12' | '24' })}>
+          <SelectField
+            label="Clock"
+            value={value.clock}
+            onChange={(event) => setValue({ ...value, clock: event.target.value as '12' | '24' })}
+          >
             <option value="12">2:30 pm</option>
             <option value="24">14:30</option>
           </SelectField>
-          <SelectField label="Units" value={value.units} onChange={(event) => setValue({ ...value, units: event.target.value as 'us' | 'metric' })}>
+          <SelectField
+            label="Units"
+            value={value.units}
+            onChange={(event) => setValue({ ...value, units: event.target.value as 'us' | 'metric' })}
+          >
             <option value="us">Miles, gallons, °F</option>
             <option value="metric">Kilometers, liters, °C</option>
           </SelectField>
@@ -98,12 +112,20 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
               key={code}
               label={warningNames[code]}
               checked={value.reasonKinds.includes(code)}
-              onChange={(event) => setValue({ ...value, reasonKinds: event.target.checked ? [...value.reasonKinds, code] : value.reasonKinds.filter((c) => c !== code) })}
+              onChange={(event) =>
+                setValue({
+                  ...value,
+                  reasonKinds: event.target.checked
+                    ? [...value.reasonKinds, code]
+                    : value.reasonKinds.filter((c) => c !== code),
+                })
+              }
             />
           ))}
         </fieldset>
         <p className="t-2">
-          Overtime, minimum wage, the crew split and the workweek are dated rules of pay: <Link to={paths.rates}>Rates and pay rules</Link>.
+          Overtime, minimum wage, the crew split and the workweek are dated rules of pay:{' '}
+          <Link to={paths.rates}>Rates and pay rules</Link>.
         </p>
       </section>
       <div className="col-span-full flex items-center gap-3">
