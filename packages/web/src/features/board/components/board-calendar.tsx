@@ -1,4 +1,4 @@
-import { useEffect, useMemo, useRef } from 'react';
+import { memo, useEffect, useMemo, useRef } from 'react';
 import type { AllowFunc, EventContentArg, EventDropArg, EventMountArg, SlotLabelContentArg } from '@fullcalendar/core';
 import interactionPlugin from '@fullcalendar/interaction';
 import type { EventDragStopArg, EventReceiveArg, EventResizeDoneArg } from '@fullcalendar/interaction';
@@ -33,8 +33,11 @@ export interface BoardCalendarProps {
   onMove: (move: Move) => void;
 }
 
-/** The lanes: the library keeps time, hits and drags; every look is ours. */
-export function BoardCalendar({
+/**
+ * The lanes: the library keeps time, hits and drags; every look is ours. It is drawn anew only for what it
+ * shows: each drawing makes the library start afresh, also while a ticket is held.
+ */
+export const BoardCalendar = memo(function BoardCalendar({
   board,
   now,
   filter,
@@ -89,7 +92,8 @@ export function BoardCalendar({
     onMove(move);
   };
   const receive = (arg: EventReceiveArg) => {
-    const visitId = arg.event.extendedProps['visitId'] as string;
+    // A ticket of its own comes back this way too, when the calendar was drawn anew while it was held.
+    const visitId = arg.event.id || (arg.event.extendedProps['visitId'] as string);
     const move = {
       visitId,
       vanId: arg.event.getResources()[0]?.id ?? null,
@@ -168,7 +172,7 @@ export function BoardCalendar({
       }}
     />
   );
-}
+});
 
 /** What is drawn while a ticket is held stands at the held place, not at the stored one. */
 function ticketOf(

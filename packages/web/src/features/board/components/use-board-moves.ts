@@ -1,4 +1,4 @@
-import { useCallback, useState } from 'react';
+import { useCallback, useMemo, useState } from 'react';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import type { Finding } from '@driprail/shared/domain/board/findings';
@@ -60,15 +60,11 @@ export function useBoardMoves(board: BoardDto | undefined) {
     await save(moves, 'The last move is taken back.', [], true);
   }, [undoable, save]);
 
-  return {
-    save,
-    undo,
-    canUndo: undoable.length > 0,
-    notice,
-    setNotice,
-    question,
-    closeQuestion: () => setQuestion(null),
-  };
+  const canUndo = undoable.length > 0;
+  return useMemo(
+    () => ({ save, undo, canUndo, notice, setNotice, question, closeQuestion: () => setQuestion(null) }),
+    [save, undo, canUndo, notice, question],
+  );
 }
 export type BoardMoves = ReturnType<typeof useBoardMoves>;
 
