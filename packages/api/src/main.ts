@@ -1,3 +1,4 @@
+import type { Server } from 'node:http';
 import { createApp } from './app.ts';
 import { createClock } from './clock.ts';
 import { readConfig } from './config.ts';
@@ -75,7 +76,7 @@ const demoSignIns = `Sign in with the password driprail-demo as
   tech1@ternandtide.example        technician (tech1 to tech12)
 `;
 
-function listen(server: import('node:http').Server, port: number, host: string): Promise<void> {
+function listen(server: Server, port: number, host: string): Promise<void> {
   return new Promise((resolve, reject) => {
     server.once('error', reject);
     server.listen(port, host, () => resolve());

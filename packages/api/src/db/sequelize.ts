@@ -46,7 +46,7 @@ export function inTransaction<T>(work: (tx: Transaction) => Promise<T>): Promise
 /** Runs an effect once the outermost transaction has committed; a failing effect is logged, never thrown. */
 export function afterCommit(tx: Transaction, effect: () => void | Promise<void>, log: (error: unknown) => void): void {
   let root = tx as Transaction & { parent?: Transaction };
-  while (root.parent) root = root.parent as typeof root;
+  while (root.parent) root = root.parent;
   root.afterCommit(() => {
     void open.exit(() => Promise.resolve().then(effect)).catch(log);
   });

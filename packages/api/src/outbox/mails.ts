@@ -9,9 +9,9 @@ export interface Mail {
 }
 
 /** A promise to send: a row in the change's own transaction, sent by the outbox's job with retries. */
-export async function queueMail(tx: Transaction, mail: Mail): Promise<void> {
+export async function queueMail(tx: Transaction, now: Date, mail: Mail): Promise<void> {
   await OutboxMail.create(
-    { id: uuid(), recipient: mail.to, subject: mail.subject, body: mail.body },
+    { id: uuid(), recipient: mail.to, subject: mail.subject, body: mail.body, createdAt: now, nextTryAt: now },
     { transaction: tx },
   );
 }

@@ -1,4 +1,4 @@
-import type { Server as HttpServer } from 'node:http';
+import type { IncomingMessage, Server as HttpServer } from 'node:http';
 import type { RequestHandler } from 'express';
 import { Server } from 'socket.io';
 import { hintEvent, signedOutEvent } from '@driprail/shared/realtime/hints';
@@ -12,11 +12,7 @@ export type Audience = 'desk' | 'owners' | 'everyone' | { personIds: string[] };
 export class Hub {
   private io: Server | null = null;
 
-  attach(
-    server: HttpServer,
-    chain: RequestHandler[],
-    isAllowed: (req: import('node:http').IncomingMessage) => boolean,
-  ): void {
+  attach(server: HttpServer, chain: RequestHandler[], isAllowed: (req: IncomingMessage) => boolean): void {
     const io = new Server(server, { serveClient: false, allowRequest: (req, done) => done(null, isAllowed(req)) });
     for (const step of chain) {
       io.engine.use((req: { _query?: { sid?: string } }, res: unknown, next: () => void) =>

@@ -26,6 +26,7 @@ export const boardVanDto = z.object({
 export const boardDto = z.object({
   day,
   zone: z.string(),
+  clock: z.enum(['12', '24']),
   now: instant,
   dayStartsAt: clockTime,
   dayEndsAt: clockTime,

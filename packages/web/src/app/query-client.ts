@@ -15,8 +15,9 @@ export function createQueryClient(onSignedOut: () => void): QueryClient {
   });
   client.getQueryCache().subscribe(({ type, query }) => {
     if (type !== 'updated') return;
-    const { error } = query.state;
-    if (error instanceof ApiError && error.status === 401 && query.queryKey[0] !== 'session') onSignedOut();
+    const error: unknown = query.state.error;
+    const key = query.queryKey as readonly unknown[];
+    if (error instanceof ApiError && error.status === 401 && key[0] !== 'session') onSignedOut();
   });
   return client;
 }

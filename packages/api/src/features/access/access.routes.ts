@@ -5,6 +5,7 @@ import type { Clock } from '../../clock.ts';
 import { User } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import { AppError, unauthorized } from '../../http/errors.ts';
+import { settled } from '../../http/settled.ts';
 import type { RouteTable, SignedIn } from '../../http/route.ts';
 import { okay, publicRoute, route } from '../../http/route.ts';
 import { asSignedIn } from '../../http/session.ts';
@@ -53,9 +54,7 @@ export function accessRoutes(table: RouteTable, { hasLocalMail, baseUrlOf }: Acc
   route(table, api.getSession, (_input, ctx, { req }) => sessionOf(signedIn(req), ctx.now(), hasLocalMail));
   route(table, api.endSession, async (_input, _ctx, { req }) => {
     const sid = req.sessionID;
-    await new Promise<void>((resolve, reject) =>
-      req.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve())),
-    );
+    await new Promise<void>((resolve, reject) => req.session.destroy(settled(resolve, reject)));
     hub.signOut(`session:${sid}`);
     return okay;
   });
@@ -97,9 +96,7 @@ export function accessRoutes(table: RouteTable, { hasLocalMail, baseUrlOf }: Acc
 /** A new session id at sign-in, so that one planted before is worth nothing. */
 export async function begin(req: Request, user: User, now: Clock, hasLocalMail: boolean): Promise<api.SessionDto> {
   const who = asSignedIn(user);
-  await new Promise<void>((resolve, reject) =>
-    req.logIn(who, (error: unknown) => (error ? reject(error as Error) : resolve())),
-  );
+  await new Promise<void>((resolve, reject) => req.logIn(who, settled(resolve, reject)));
   req.session.device = (req.get('user-agent') ?? '').slice(0, 200);
   req.session.signedInAt = now().toISOString();
   req.session.lastSeenAt = now().toISOString();

@@ -30,7 +30,7 @@ export async function sendLink(
   const company = await CompanySettings.findByPk(1, { transaction: tx });
   const url = `${baseUrl}/link/${token}`;
   const words = kind === 'invitation' ? invitation(company?.name ?? 'Driprail', user.name, url) : reset(user.name, url);
-  await queueMail(tx, { to: user.email, ...words });
+  await queueMail(tx, now, { to: user.email, ...words });
   announceLink(tx, kind, user.email, url);
 }
 

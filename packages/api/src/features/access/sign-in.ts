@@ -3,6 +3,7 @@ import { Strategy } from 'passport-local';
 import { User } from '../../db/models/index.ts';
 import { AppError } from '../../http/errors.ts';
 import { asSignedIn } from '../../http/session.ts';
+import { settled } from '../../http/settled.ts';
 import { isPassword } from './passwords.ts';
 
 /** Tells Passport how an e-mail and a password become a user. */
@@ -27,7 +28,7 @@ async function verified(email: string, password: string): Promise<User | null> {
 export async function signInWith(email: string, password: string): Promise<User> {
   const signedIn = await new Promise<Express.User | false>((resolve, reject) => {
     const check = passport.authenticate('local', { session: false }, (error: unknown, user: Express.User | false) =>
-      error ? reject(error as Error) : resolve(user),
+      settled(() => resolve(user), reject)(error),
     ) as (req: unknown, res: unknown, next: (error: unknown) => void) => void;
     check({ body: { email, password } }, {}, reject);
   });

@@ -15,7 +15,7 @@ const OVERTIME_AFTER_MINUTES = 40 * 60;
 /** A day by vans in one statement: bounds come from the company's zone, the workweek from the rules of that day. */
 export const boardSql = `
 WITH frame AS (
-  SELECT s.zone, s.day_starts_at, s.day_ends_at, s.reason_kinds,
+  SELECT s.zone, s.clock, s.day_starts_at, s.day_ends_at, s.reason_kinds,
          (:day::date)::timestamp AT TIME ZONE s.zone AS starts_at,
          (:day::date + 1)::timestamp AT TIME ZONE s.zone AS ends_at,
          (:day::date - ((extract(isodow FROM :day::date)::int - coalesce(r.workweek_starts_on, 1) + 7) % 7))
@@ -37,7 +37,7 @@ WITH frame AS (
     FROM people p CROSS JOIN week w WHERE p.is_active
 )
 SELECT json_build_object(
-  'day', :day::text, 'zone', f.zone, 'now', to_json(:now::timestamptz) #>> '{}',
+  'day', :day::text, 'zone', f.zone, 'clock', f.clock, 'now', to_json(:now::timestamptz) #>> '{}',
   'dayStartsAt', f.day_starts_at, 'dayEndsAt', f.day_ends_at, 'reasonKinds', to_json(f.reason_kinds),
   'overtimeAfterMinutes', ${OVERTIME_AFTER_MINUTES},
   'isLocked', EXISTS (SELECT 1 FROM pay_weeks p WHERE p.state = 'locked' AND p.starts_at < f.ends_at AND p.ends_at > f.starts_at),

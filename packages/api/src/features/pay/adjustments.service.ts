@@ -1,3 +1,4 @@
+import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import type { AdjustmentKind } from '@driprail/shared/domain/pay/pay-week.types';
@@ -70,7 +71,7 @@ function refuseLocked(week: PayWeek): void {
 async function refuseForeignLine(
   { correctsLineId, personId }: AdjustmentFields,
   weekId: string,
-  tx: import('sequelize').Transaction,
+  tx: Transaction,
 ): Promise<void> {
   const line = await PayLineRow.findByPk(correctsLineId ?? '', { transaction: tx });
   if (line?.personId === personId && line.payWeekId !== weekId) return;

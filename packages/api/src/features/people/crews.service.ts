@@ -1,3 +1,4 @@
+import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import { dayBounds, isBefore } from '@driprail/shared/domain/time/zone';
 import { audit } from '../../db/audit.ts';
@@ -59,12 +60,7 @@ export function setVanCrew(
   });
 }
 
-function crewOf(
-  vanId: string,
-  startsAt: string,
-  endsAt: string,
-  tx: import('sequelize').Transaction,
-): Promise<CrewMember[]> {
+function crewOf(vanId: string, startsAt: string, endsAt: string, tx: Transaction): Promise<CrewMember[]> {
   return select<CrewMember>(
     `SELECT c.id, c.person_id AS "personId", p.name, c.position,
             to_json(lower(c.span)) #>> '{}' AS "from", to_json(upper(c.span)) #>> '{}' AS "to"

@@ -29,10 +29,11 @@ export function plannedOf(visit: VisitDto): PlannedVisit {
 
 /** A day's board as the facts that moves are judged on. */
 export function factsOf(board: BoardDto): BoardFacts {
-  const { day, zone, dayStartsAt, dayEndsAt, isLocked, overtimeAfterMinutes } = board;
+  const { day, zone, clock, dayStartsAt, dayEndsAt, isLocked, overtimeAfterMinutes } = board;
   return {
     day,
     zone,
+    clock,
     dayStartsAt,
     dayEndsAt,
     isLocked,

@@ -1,4 +1,5 @@
-import { addMinutes, clockOf, dayOf, instantOf, isBefore, minutesBetween, overlaps } from '../time/zone.ts';
+import { formatClock, formatDay, formatSpan } from '../time/format.ts';
+import { addMinutes, dayOf, instantOf, isBefore, minutesBetween, overlaps } from '../time/zone.ts';
 import type { BoardFacts, Move, PlannedVan, PlannedVisit, RidingPerson } from './plan.ts';
 import type { Finding, Findings, RefusalCode, WarningCode } from './findings.ts';
 import { isEnded, isMovable, progressNames } from './progress.ts';
@@ -87,7 +88,7 @@ function refuse(
   const van = facts.vans.find((v) => v.id === visit.vanId)?.name ?? 'That van';
   return no(
     'van_overlap',
-    `${van} is at ${clash.customerName} until ${clockOf(clash.to ?? '', facts.zone)}. One van can’t be at two stops.`,
+    `${van} is at ${clash.customerName} until ${formatClock(clash.to ?? '', facts.zone, facts.clock)}. One van can’t be at two stops.`,
   );
 }
 
@@ -133,20 +134,23 @@ function missing(visit: Placed, van: PlannedVan, riding: RidingPerson[]) {
 
 function outside(facts: BoardFacts, visit: Placed) {
   const found: Finding<WarningCode>[] = [];
-  const time = clockOf(visit.from, facts.zone);
+  const time = formatClock(visit.from, facts.zone, facts.clock);
   if (
     visit.windowFrom &&
     visit.windowTo &&
     (isBefore(visit.from, visit.windowFrom) || isBefore(visit.windowTo, visit.from))
   ) {
-    const promise = `${clockOf(visit.windowFrom, facts.zone)} to ${clockOf(visit.windowTo, facts.zone)}`;
-    const day = dayOf(visit.windowFrom, facts.zone) === facts.day ? '' : ` on ${dayOf(visit.windowFrom, facts.zone)}`;
+    const promise = formatSpan(visit.windowFrom, visit.windowTo, facts.zone, facts.clock);
+    const promisedDay = dayOf(visit.windowFrom, facts.zone);
+    const day = promisedDay === facts.day ? '' : ` on ${formatDay(promisedDay)}`;
     found.push(warning(visit, 'outside_window', visit.from, `${time} is outside the promise, ${promise}${day}.`));
   }
   const opens = instantOf(facts.day, facts.dayStartsAt, facts.zone);
   const shuts = instantOf(facts.day, facts.dayEndsAt, facts.zone);
   if (isBefore(visit.from, opens) || isBefore(shuts, visit.to)) {
-    found.push(warning(visit, 'outside_hours', visit.from, `The day runs ${facts.dayStartsAt} to ${facts.dayEndsAt}.`));
+    found.push(
+      warning(visit, 'outside_hours', visit.from, `The day runs ${formatSpan(opens, shuts, facts.zone, facts.clock)}.`),
+    );
   }
   return found;
 }

@@ -42,6 +42,8 @@ export interface PlannedVan {
 export interface BoardFacts {
   day: string;
   zone: string;
+  /** How the company writes clock times in what it says. */
+  clock: '12' | '24';
   dayStartsAt: string;
   dayEndsAt: string;
   /** Days of a locked pay week can't be planned. */

@@ -2,10 +2,13 @@ import { useState } from 'react';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import type { Move } from '@driprail/shared/domain/board/plan';
-import { addMinutes, clockOf, dayOf, instantOf, overlaps } from '@driprail/shared/domain/time/zone';
+import { formatClock } from '@driprail/shared/domain/time/format';
+import { addMinutes, clockOf, instantOf, overlaps } from '@driprail/shared/domain/time/zone';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
-import { preview } from './board-model.ts';
+import { serverNow } from '../../../lib/device-clock.ts';
+import { isPlacedVisit, preview } from './board-model.ts';
+import { firstFit } from './first-fit.ts';
 
 /** "Move to": van, day and time by form; says what the move does before it is pressed. */
 export function MoveForm({
@@ -19,13 +22,10 @@ export function MoveForm({
   isBusy: boolean;
   onMove: (move: Move, words: string) => void;
 }) {
-  const first =
-    visit.windowFrom && dayOf(visit.windowFrom, board.zone) === board.day
-      ? visit.windowFrom
-      : instantOf(board.day, board.dayStartsAt, board.zone);
-  const [vanId, setVanId] = useState(visit.vanId ?? board.vans[0]?.id ?? '');
+  const [start] = useState(() => (isPlacedVisit(visit) ? visit : firstFit(board, visit, serverNow().toISOString())));
+  const [vanId, setVanId] = useState(start.vanId ?? '');
   const [day, setDay] = useState(board.day);
-  const [time, setTime] = useState(clockOf(visit.from ?? first, board.zone));
+  const [time, setTime] = useState(start.from ? clockOf(start.from, board.zone) : board.dayStartsAt);
   const [isBeside, setBeside] = useState(false);
   const isDay = /^\d{4}-\d{2}-\d{2}$/.test(day);
   const isTime = /^\d{2}:\d{2}$/.test(time);
@@ -50,7 +50,8 @@ export function MoveForm({
       className="move"
       onSubmit={(event) => {
         event.preventDefault();
-        if (from && !isBusy) onMove(move, `${visit.customerName} is on ${vanName} at ${time}.`);
+        if (from && !isBusy)
+          onMove(move, `${visit.customerName} is on ${vanName} at ${formatClock(from, board.zone, board.clock)}.`);
       }}
     >
       <b className="sec-like">{visit.vanId ? 'Move to' : 'Place on'}</b>

@@ -3,7 +3,8 @@ import type { KeyboardEvent } from 'react';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import { isMovable } from '@driprail/shared/domain/board/progress';
-import { addMinutes, clockOf, instantOf, isBefore } from '@driprail/shared/domain/time/zone';
+import { formatClock, formatSpan } from '@driprail/shared/domain/time/format';
+import { addMinutes, dayOf, instantOf, isBefore } from '@driprail/shared/domain/time/zone';
 import { isPlacedVisit, preview } from './board-model.ts';
 import type { Held } from './calendar-events.ts';
 import type { BoardMoves } from './use-board-moves.ts';
@@ -27,7 +28,12 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
   const setDown = useCallback(async () => {
     if (!board || !held || !visit) return;
     const vanName = board.vans.find((van) => van.id === held.vanId)?.name ?? '';
-    if (await moves.save([held], `${visit.customerName} is on ${vanName} at ${clockOf(held.from, board.zone)}.`))
+    if (
+      await moves.save(
+        [held],
+        `${visit.customerName} is on ${vanName} at ${formatClock(held.from, board.zone, board.clock)}.`,
+      )
+    )
       focusTicket(held.visitId);
     setHeld(null);
   }, [board, held, visit, moves]);
@@ -93,7 +99,7 @@ function pickUp(board: BoardDto, visit: VisitDto, now: string): Held | null {
   const earliest =
     isBefore(opens, soon) && isBefore(soon, instantOf(board.day, board.dayEndsAt, board.zone)) ? soon : opens;
   const from =
-    visit.windowFrom && isBefore(earliest, visit.windowFrom) && visit.windowFrom.slice(0, 10) === board.day
+    visit.windowFrom && isBefore(earliest, visit.windowFrom) && dayOf(visit.windowFrom, board.zone) === board.day
       ? visit.windowFrom
       : earliest;
   return { visitId: visit.id, vanId: van.id, from, to: addMinutes(from, visit.minutes) };
@@ -103,7 +109,7 @@ function describe(board: BoardDto, visit: VisitDto, held: Held): string {
   const van = board.vans.find((v) => v.id === held.vanId)?.name ?? '';
   const { refusals, warnings } = preview(board, held);
   const fit = refusals[0]?.message ?? (warnings.length > 0 ? warnings.map((w) => w.message).join(' ') : 'Fits.');
-  return `${visit.customerName}, ${van} ${clockOf(held.from, board.zone)} to ${clockOf(held.to, board.zone)}. ${fit}`;
+  return `${visit.customerName}, ${van} ${formatSpan(held.from, held.to, board.zone, board.clock)}. ${fit}`;
 }
 
 /** Up and down in a van by time; left and right to the nearest time in the next van; the roof is a row of its own. */

@@ -3,7 +3,8 @@ import { useQuery } from '@tanstack/react-query';
 import { useNavigate, useParams, useSearchParams } from 'react-router';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { Move } from '@driprail/shared/domain/board/plan';
-import { clockOf, dayOf } from '@driprail/shared/domain/time/zone';
+import { formatClock } from '@driprail/shared/domain/time/format';
+import { dayOf } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { Loaded } from '../../../components/states.tsx';
 import { serverNow } from '../../../lib/device-clock.ts';
@@ -71,7 +72,7 @@ function Board({ board }: { board: BoardDto }) {
       const van = board.vans.find((v) => v.id === next.vanId);
       const words =
         van && next.from
-          ? `${visit?.customerName ?? ''} is on ${van.name} at ${clockOf(next.from, board.zone)}.`
+          ? `${visit?.customerName ?? ''} is on ${van.name} at ${formatClock(next.from, board.zone, board.clock)}.`
           : `${visit?.customerName ?? ''} is back on Unplaced.`;
       void moves.save([next], words);
     },
@@ -209,7 +210,7 @@ function hoverWords(board: BoardDto, move: Move): string {
   if (!visit || !van || !move.from) return '';
   const { refusals, warnings } = preview(board, move);
   const fit = refusals[0]?.message ?? (warnings.length > 0 ? warnings.map((w) => w.message).join(' ') : 'Fits.');
-  return `${visit.customerName}, ${van.name} ${clockOf(move.from, board.zone)}. ${fit}`;
+  return `${visit.customerName}, ${van.name} ${formatClock(move.from, board.zone, board.clock)}. ${fit}`;
 }
 
 /** Keys of the whole page: undo, and Esc for the open ticket. */

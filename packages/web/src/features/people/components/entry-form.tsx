@@ -20,7 +20,7 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
   const save = useSaveEntry();
   const [value, setValue] = useState({
     personId: entry?.personId ?? '',
-    kind: entry?.kind ?? ('shop' as ClockKindName),
+    kind: entry?.kind ?? ('shop'),
     day: entry ? dayOf(entry.startedAt, zone) : day,
     from: entry ? clockOf(entry.startedAt, zone) : '07:30',
     to: entry?.endedAt ? clockOf(entry.endedAt, zone) : '',
