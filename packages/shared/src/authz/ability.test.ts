@@ -6,7 +6,7 @@ const owner: Actor = { userId: 'o', personId: null, role: 'owner' };
 const dispatcher: Actor = { userId: 'd', personId: 'pd', role: 'dispatcher' };
 const technician: Actor = { userId: 't', personId: 'pt', role: 'technician' };
 const visit = (crewPersonIds: string[], daysFromToday: number | null) =>
-  tag('Visit', { id: 'v', crewPersonIds, day: '2026-05-14', daysFromToday });
+  tag('Visit', { id: 'v', crewPersonIds, day: daysFromToday === null ? null : '2026-05-14', daysFromToday });
 
 describe('the pay wall', () => {
   test.each([

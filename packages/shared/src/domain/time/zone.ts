@@ -17,7 +17,9 @@ export function clockOf(instant: string, zone: string): string {
  * one that an autumn change repeats is the first of the two.
  */
 export function instantOf(day: string, clock: string, zone: string): string {
-  return utc(DateTime.fromISO(`${day}T${clock}`, { zone }));
+  const [first, second] = DateTime.fromISO(`${day}T${clock}`, { zone }).getPossibleOffsets();
+  if (!first) throw new RangeError(`${day} ${clock} is no time`);
+  return utc(second && second < first ? second : first);
 }
 
 /** First instant of the day and first instant of the next: 23, 24 or 25 hours apart. */
