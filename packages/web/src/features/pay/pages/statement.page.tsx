@@ -1,3 +1,98 @@
+import { useQuery } from '@tanstack/react-query';
+import { useAbility } from '@casl/react';
+import { Link, useParams } from 'react-router';
+import type { AppAbility } from '@driprail/shared/authz/ability';
+import type { StatementDto } from '@driprail/shared/contracts/pay.contract';
+import { paths } from '../../../app/paths.ts';
+import { Button } from '../../../components/button.tsx';
+import { Icon } from '../../../components/icon.tsx';
+import { PageHead, RailPage } from '../../../components/page-head.tsx';
+import { Empty, Loaded } from '../../../components/states.tsx';
+import { hoursMinutes, money } from '../../../lib/format.ts';
+import { useSession } from '../../../lib/session.tsx';
+import { statementQuery, weekQuery } from '../api/pay.queries.ts';
+import { StatementPaper } from '../components/statement-paper.tsx';
+import { hoursSum, weekSpan, weekSums } from '../components/week-model.ts';
+import './pay.css';
+import './pay-working.css';
+import './statement.css';
+
+/** One person's statement of a week, or everybody's, one a page. */
 export function StatementPage() {
-  return null;
+  const { day = '', personId = '' } = useParams();
+  return personId === 'all' ? <EveryStatement day={day} /> : <OneStatement day={day} personId={personId} />;
+}
+
+function OneStatement({ day, personId }: { day: string; personId: string }) {
+  const statement = useQuery(statementQuery(day, personId));
+  return (
+    <Loaded query={statement} what="the statement">
+      {(found) => <Papers week={found.week} statements={[found]} />}
+    </Loaded>
+  );
+}
+
+function EveryStatement({ day }: { day: string }) {
+  const { company } = useSession();
+  const week = useQuery(weekQuery(day));
+  return (
+    <Loaded query={week} what="the pay week">
+      {(dto) => (
+        <Papers
+          week={dto.week}
+          statements={dto.people.map((person) => ({
+            week: dto.week,
+            person,
+            companyName: company.name,
+            correctedLines: dto.correctedLines,
+          }))}
+        />
+      )}
+    </Loaded>
+  );
+}
+
+function Papers({ week, statements }: { week: StatementDto['week']; statements: StatementDto[] }) {
+  const ability = useAbility<AppAbility>();
+  const isOwner = ability.can('read', 'PayWeek');
+  const people = statements.map((statement) => statement.person);
+  return (
+    <>
+      <div className="no-print">
+        <PageHead
+          title={`Week ${week.number}`}
+          above={
+            isOwner ? (
+              <Link className="back" to={paths.payWeek(week.startsOn)}>
+                <Icon name="left" /> Pay week
+              </Link>
+            ) : (
+              <Link className="back" to={paths.statements}>
+                <Icon name="left" /> My pay
+              </Link>
+            )
+          }
+          sums={[
+            { label: 'Gross', value: money(weekSums(people).gross) },
+            { label: 'Hours', value: hoursMinutes(hoursSum(people, 'hoursWorked')) },
+            { label: 'Over 40 h', value: hoursMinutes(hoursSum(people, 'overtimeHours')) },
+          ]}
+          actions={
+            <Button onClick={() => window.print()}>
+              <Icon name="print" /> {people.length === 1 ? 'Print statement' : `Print ${people.length} statements`}
+            </Button>
+          }
+        />
+      </div>
+      <RailPage>
+        <h2 className="sr">Statements, {weekSpan(week)}</h2>
+        {statements.length === 0 ? <Empty>Nobody has pay in this week.</Empty> : null}
+        <div className="papers">
+          {statements.map((statement) => (
+            <StatementPaper key={statement.person.personId} statement={statement} hasLinks={isOwner} />
+          ))}
+        </div>
+      </RailPage>
+    </>
+  );
 }

@@ -1,0 +1,96 @@
+import { exact } from '@driprail/shared/domain/money/exact';
+import { decimalText, shortText } from '@driprail/shared/domain/money/rounding';
+import type { PayLine, PayLineKind, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import { hoursMinutes } from '../../../lib/format.ts';
+
+export interface LedgerGroup {
+  key: string;
+  title: string;
+  lines: PayLine[];
+  /** Sum of the group's lines, cents; of what was received already it is what is shown, not what is paid. */
+  cents: number;
+  isPayable: boolean;
+}
+
+const GROUPS: { key: string; title: string; kinds: PayLineKind[] }[] = [
+  { key: 'hours', title: 'Hours', kinds: ['hourly', 'overtime_premium', 'minimum_wage_make_up'] },
+  { key: 'flat', title: 'Flat per service', kinds: ['flat'] },
+  { key: 'commission', title: 'Commission', kinds: ['commission'] },
+  { key: 'tips', title: 'Tips', kinds: ['tip'] },
+  { key: 'received', title: 'Tips already received', kinds: ['tip_already_received'] },
+  {
+    key: 'adjustments',
+    title: 'Adjustments',
+    kinds: ['bonus', 'discretionary_bonus', 'reimbursement', 'paid_time_off', 'deduction'],
+  },
+  { key: 'corrections', title: 'Corrections of earlier weeks', kinds: ['correction'] },
+];
+
+/** A person's lines as a statement lists them; the payable groups add up to the gross. */
+export function ledgerGroups({ lines }: Pick<PersonWeek, 'lines'>): LedgerGroup[] {
+  return GROUPS.map(({ key, title, kinds }) => {
+    const own = lines.filter((line) => kinds.includes(line.kind)).sort(byDate);
+    const cents = own.reduce((sum, line) => sum + line.amountCents, 0);
+    return { key, title: titleOf(key, title, own), lines: own, cents, isPayable: key !== 'received' };
+  }).filter((group) => group.lines.length > 0);
+}
+
+/** Lines without a date of their own keep their place at the front. */
+function byDate(a: PayLine, b: PayLine): number {
+  return (a.workedOn ?? '').localeCompare(b.workedOn ?? '');
+}
+
+/** "Commission, 6% of the line", where all lines have the one rate. */
+function titleOf(key: string, title: string, lines: PayLine[]): string {
+  const rates = new Set(lines.map((line) => line.rate));
+  const [rate] = rates;
+  if (key !== 'commission' || rates.size !== 1 || !rate) return title;
+  return `${title}, ${shortText(exact(rate))}% of the line`;
+}
+
+/** What a line is, without what its other columns say. */
+export function lineWords(line: PayLine): string {
+  return line.jobNumber === null ? line.label : line.label.replace(`, job ${line.jobNumber}`, '');
+}
+
+/** How a line came about, in one glance: "42:15 at 19.50", "6% of 240.00". */
+export function howText(line: PayLine): string {
+  const rate = line.rate === null ? null : exact(line.rate);
+  if (line.kind === 'overtime_premium' && rate && line.hours)
+    return `${hoursMinutes(line.hours)} at ${decimalText(rate.div(2), 4)}`;
+  if (line.kind === 'minimum_wage_make_up' && rate) return `to ${decimalText(rate, 2)} an hour`;
+  if (rate && line.hours) return `${hoursMinutes(line.hours)} at ${rateText(line.rate)}`;
+  if (line.kind === 'commission' && rate) {
+    const isShared = line.working.length > 2;
+    return `${isShared ? 'share of ' : ''}${shortText(rate)}% of ${line.working[0]?.result ?? ''}`;
+  }
+  if (line.kind === 'flat' && rate) return line.working.length > 1 ? `share of ${rateText(line.rate)}` : 'flat';
+  if (line.kind === 'tip' || line.kind === 'tip_already_received')
+    return line.working.length > 1 ? `share of ${line.working[0]?.result ?? ''}` : '';
+  return '';
+}
+
+/** A rate with at least two places, "19.50", and more where it has more. */
+export function rateText(value: string | null): string {
+  if (value === null) return '';
+  const short = shortText(exact(value));
+  const fixed = decimalText(exact(value), 2);
+  return exact(short).equals(exact(fixed)) ? fixed : short;
+}
+
+/** What a line's page is called. */
+export const kindTitles: Record<PayLineKind, string> = {
+  hourly: 'Hours',
+  flat: 'Flat amount',
+  commission: 'Commission',
+  overtime_premium: 'Overtime',
+  minimum_wage_make_up: 'Make-up',
+  tip: 'Tip',
+  tip_already_received: 'Tip received',
+  bonus: 'Bonus',
+  discretionary_bonus: 'Bonus',
+  reimbursement: 'Paid back',
+  paid_time_off: 'Time off',
+  deduction: 'Deduction',
+  correction: 'Correction',
+};
