@@ -125,7 +125,7 @@ export const BoardCalendar = memo(function BoardCalendar({
       expandRows
       slotMinTime={span.from}
       slotMaxTime={span.to}
-      slotDuration="00:30:00"
+      slotDuration="00:05:00"
       snapDuration="00:05:00"
       slotLabelInterval="01:00"
       slotEventOverlap={false}
