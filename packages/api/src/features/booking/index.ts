@@ -1,4 +1,4 @@
 export { jobsRoutes } from './jobs.routes.ts';
-export { createJob } from './jobs.service.ts';
+export { createJob, orderJob } from './jobs.service.ts';
 export type { JobFields } from './jobs.service.ts';
 export { recordTip } from './tips.service.ts';

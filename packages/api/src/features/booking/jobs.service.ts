@@ -28,29 +28,26 @@ export interface JobFields {
 
 /** Orders a job; its first visit lands on Unplaced with the minutes of one person. */
 export function createJob(ctx: Ctx, fields: JobFields, id = uuid()): Promise<JobDto> {
-  return inTransaction(async (tx) => {
-    const { zone } = await companyOf(tx);
-    const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), zone));
-    const { lines: _asked, windowFrom, windowTo, ...columns } = fields;
-    await Job.create(
-      {
-        id,
-        ...columns,
-        windowFrom: date(windowFrom),
-        windowTo: date(windowTo),
-        createdBy: ctx.actor.userId,
-        createdAt: ctx.now(),
-      },
-      { transaction: tx },
-    );
-    const { ids } = await keepLines(tx, id, lines);
-    const minutes = visitMinutes(
-      lines.map((line) => line.minutes),
-      1,
-    );
-    await createVisit(tx, { jobId: id, addressId: fields.addressId, minutes, lineIds: ids });
-    return saved(tx, ctx, id, 'booked');
-  });
+  return inTransaction((tx) => orderJob(tx, ctx, fields, id));
+}
+
+/** The same inside a caller's transaction. */
+export async function orderJob(tx: Transaction, ctx: Ctx, fields: JobFields, id = uuid()): Promise<JobDto> {
+  const { zone } = await companyOf(tx);
+  const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), zone));
+  const { lines: _asked, windowFrom, windowTo, ...columns } = fields;
+  const windows = { windowFrom: date(windowFrom), windowTo: date(windowTo) };
+  await Job.create(
+    { id, ...columns, ...windows, createdBy: ctx.actor.userId, createdAt: ctx.now() },
+    { transaction: tx },
+  );
+  const { ids } = await keepLines(tx, id, lines);
+  const minutes = visitMinutes(
+    lines.map((line) => line.minutes),
+    1,
+  );
+  await createVisit(tx, { jobId: id, addressId: fields.addressId, minutes, lineIds: ids });
+  return saved(tx, ctx, id, 'booked');
 }
 
 /** Changes a job. New lines join the first visit that has not begun; what was finished stays. */

@@ -12,17 +12,21 @@ import { findCustomer } from './customers.queries.ts';
 
 export type CustomerFields = z.infer<typeof customerBody>;
 
-export function createCustomer(
+export function createCustomer(ctx: Ctx, fields: CustomerFields, id = uuid()): Promise<CustomerDto> {
+  return inTransaction((tx) => addCustomer(tx, ctx, fields, id));
+}
+
+/** The same inside a caller's transaction. */
+export async function addCustomer(
+  tx: Transaction,
   ctx: Ctx,
   { addresses, vehicles, ...fields }: CustomerFields,
   id = uuid(),
 ): Promise<CustomerDto> {
-  return inTransaction(async (tx) => {
-    await Customer.create({ id, ...fields }, { transaction: tx });
-    await keepAddresses(tx, id, addresses);
-    await keepVehicles(tx, id, vehicles);
-    return saved(tx, ctx, id, 'added');
-  });
+  await Customer.create({ id, ...fields }, { transaction: tx });
+  await keepAddresses(tx, id, addresses);
+  await keepVehicles(tx, id, vehicles);
+  return saved(tx, ctx, id, 'added');
 }
 
 export function updateCustomer(

@@ -1,3 +1,3 @@
 export { customersRoutes } from './customers.routes.ts';
-export { createCustomer } from './customers.service.ts';
+export { addCustomer, createCustomer } from './customers.service.ts';
 export type { CustomerFields } from './customers.service.ts';

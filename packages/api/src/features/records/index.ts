@@ -1,0 +1,2 @@
+export { importCsv } from './import.service.ts';
+export type { ImportKind } from './import.service.ts';
