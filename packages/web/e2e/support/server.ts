@@ -15,7 +15,8 @@ import {
 } from '../../../api/src/testing/database.ts';
 
 const root = fileURLToPath(new URL('../../../../', import.meta.url));
-const webDist = join(root, 'packages/web/dist');
+/** DRIPRAIL_WEB_DIST names another build than the usual one. */
+const webDist = process.env.DRIPRAIL_WEB_DIST ?? join(root, 'packages/web/dist');
 const patience = 120_000; // ms until the server must be ready; seeding on a busy machine is slow
 
 export interface RunningServer {

@@ -1,0 +1,127 @@
+import type { BrowserContext, Page } from 'playwright-core';
+
+import type { DemoLogin, sizes } from './browser.ts';
+import { TODAY } from './stage.ts';
+
+/** A screen as one role sees it. */
+export interface Screen {
+  /** For file names, together with the role. */
+  name: string;
+  role: 'owner' | 'dispatcher' | 'technician' | 'nobody';
+  /** Where it is; some lie behind an id that only the server knows. */
+  path: string | ((context: BrowserContext) => Promise<string>);
+  /** What has to be pressed for it to open. */
+  open?: (page: Page) => Promise<void>;
+  /** Drawn for the phone alone. */
+  isPhoneOnly?: boolean;
+  /** Looked at in the night and in the sun as well. */
+  hasGrounds?: boolean;
+}
+
+export type Size = keyof typeof sizes;
+
+/** The last week that is over, and not locked yet; the one before it is. */
+const LAST_WEEK = '2026-05-04';
+const LOCKED_WEEK = '2026-04-27';
+
+export const logins = {
+  owner: 'owner',
+  dispatcher: 'dispatch',
+  technician: 'tech1',
+} as const satisfies Record<string, DemoLogin>;
+
+async function read<T>(context: BrowserContext, path: string): Promise<T> {
+  const answer = await context.request.get(path);
+  if (!answer.ok()) throw new Error(`${path} answered ${answer.status()}.`);
+  return (await answer.json()) as T;
+}
+
+async function ownPersonId(context: BrowserContext): Promise<string> {
+  const { user } = await read<{ user: { personId: string } }>(context, '/api/session');
+  return user.personId;
+}
+
+async function somebodyId(context: BrowserContext): Promise<string> {
+  const { people } = await read<{ people: { id: string; name: string }[] }>(context, '/api/people');
+  return people.find(({ name }) => name === 'Idris Vale')?.id ?? '';
+}
+
+async function customerPath(context: BrowserContext): Promise<string> {
+  const { customers } = await read<{ customers: { id: string }[] }>(context, '/api/customers?find=Odette');
+  return `/customers/${customers[0]?.id ?? ''}`;
+}
+
+async function openVisitPath(context: BrowserContext): Promise<string> {
+  const board = await read<{ visits: { id: string; customerName: string }[] }>(context, `/api/board/${TODAY}`);
+  return `/board?visit=${board.visits.find((visit) => visit.customerName === 'Odette Yarrow')?.id ?? ''}`;
+}
+
+const press = (name: string) => (page: Page) => page.getByRole('button', { name, exact: true }).first().click();
+
+const door: Screen[] = [
+  { name: 'sign-in', role: 'nobody', path: '/sign-in' },
+  { name: 'forgotten', role: 'nobody', path: '/forgotten' },
+];
+
+const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
+  { name: 'board', role, path: '/board', hasGrounds: role === 'dispatcher' },
+  { name: 'board-open', role, path: openVisitPath },
+  { name: 'job-new', role, path: '/board', open: press('New job') },
+  { name: 'customers', role, path: '/customers' },
+  { name: 'customer', role, path: customerPath },
+  { name: 'service-menu', role, path: '/service-menu' },
+  { name: 'vans', role, path: '/vans' },
+  { name: 'people', role, path: '/people' },
+  { name: 'hours', role, path: '/hours' },
+  { name: 'account', role, path: '/account' },
+]);
+
+const office: Screen[] = [
+  { name: 'van', role: 'owner', path: '/vans', open: press('Edit Plover') },
+  { name: 'person', role: 'owner', path: '/people', open: press('Edit') },
+  { name: 'service', role: 'owner', path: '/service-menu', open: press('Edit') },
+  { name: 'pay-week', role: 'owner', path: `/pay/${LAST_WEEK}` },
+  { name: 'pay-week-locked', role: 'owner', path: `/pay/${LOCKED_WEEK}` },
+  { name: 'pay-working', role: 'owner', path: async (context) => `/pay/${LAST_WEEK}/${await somebodyId(context)}` },
+  { name: 'pay-rates', role: 'owner', path: '/pay-rates' },
+  {
+    name: 'statement',
+    role: 'owner',
+    path: async (context) => `/statements/${LOCKED_WEEK}/${await somebodyId(context)}`,
+  },
+  { name: 'settings', role: 'owner', path: '/settings' },
+  { name: 'logins', role: 'owner', path: '/logins' },
+  { name: 'local-mail', role: 'owner', path: '/local-mail' },
+];
+
+const own: Screen[] = (['dispatcher', 'technician'] as const).flatMap((role) => [
+  { name: 'statements', role, path: '/statements' },
+  { name: 'statement', role, path: async (context) => `/statements/${LOCKED_WEEK}/${await ownPersonId(context)}` },
+]);
+
+const phone: Screen[] = [
+  { name: 'run-sheet', role: 'technician', path: '/run-sheet', isPhoneOnly: true, hasGrounds: true },
+  { name: 'run-sheet-tomorrow', role: 'technician', path: '/run-sheet/2026-05-15', isPhoneOnly: true },
+  { name: 'trouble', role: 'technician', path: '/run-sheet', open: press('Trouble'), isPhoneOnly: true },
+  { name: 'clock', role: 'technician', path: '/clock', isPhoneOnly: true },
+  { name: 'account', role: 'technician', path: '/account' },
+];
+
+/** Every screen of the demo company; setting up an empty one is looked at beside them. */
+export const screens: Screen[] = [...door, ...desk, ...office, ...own, ...phone];
+
+/** Opens a screen and waits until nothing is being fetched any more. */
+export async function show(page: Page, context: BrowserContext, { path, open }: Screen): Promise<void> {
+  await page.goto(typeof path === 'string' ? path : await path(context));
+  await settled(page);
+  if (!open) return;
+  await open(page);
+  await settled(page);
+}
+
+/** The page's name is there, and no bead runs along a rail. */
+export async function settled(page: Page): Promise<void> {
+  await page.locator('main h1, .dk-head h1, .board-page h1').first().waitFor();
+  await page.locator('.fetching').first().waitFor({ state: 'detached' });
+  await page.evaluate(() => document.fonts.ready);
+}
