@@ -53,8 +53,8 @@ export function NextCard({
           </li>
         ))}
       </ul>
-      <dl className="access">
-        <div>
+      <ul className="access">
+        <li>
           <Icon name="gate" />
           {isOpen ? (
             visit.gateCode ? (
@@ -69,19 +69,19 @@ export function NextCard({
           ) : (
             'No gate code'
           )}
-        </div>
-        <div>
+        </li>
+        <li>
           <Icon name={visit.hasWater ? 'hose' : 'nohose'} /> {visit.hasWater ? 'Spigot' : 'No spigot, own water'}
-        </div>
-        <div>
+        </li>
+        <li>
           <Icon name="power" /> {visit.hasPower ? 'Outlet' : 'No outlet'}
-        </div>
+        </li>
         {visit.accessNotes ? (
-          <div className="wide">
+          <li className="wide">
             <Icon name="key" /> {visit.accessNotes}
-          </div>
+          </li>
         ) : null}
-      </dl>
+      </ul>
       {visit.notes ? <p className="notes">{visit.notes}</p> : null}
       <div className="card-acts">
         <a className="btn" href={mapLink(visit)} target="_blank" rel="noreferrer">
