@@ -41,7 +41,7 @@ export function ServiceMenuPage() {
         }
       />
       <RailPage>
-        <div className="hung p-5 scroll-x">
+        <div className="hung p-5 scroll-x" role="region" aria-label="Prices" tabIndex={0}>
           <Loaded query={menu} what="the service menu">
             {({ services }) =>
               services.length === 0 ? (
