@@ -9,8 +9,8 @@ interface Layer {
 }
 
 test('every mounted route is listed with the roles that may ask', async () => {
-  const { body } = await app.anonymous().get('/api/openapi.json').expect(200);
-  const { paths } = body as { paths: Record<string, Record<string, { 'x-roles': string[] }>> };
+  const answer = await app.anonymous().get('/api/openapi.json').expect(200);
+  const { paths } = answer.body as { paths: Record<string, Record<string, { 'x-roles': string[] }>> };
   const { stack } = app.app.table.router as unknown as { stack: Layer[] };
   const mounted = stack.flatMap(({ route }) =>
     route ? Object.keys(route.methods).map((method) => `${method} ${route.path.replace(/:(\w+)/g, '{$1}')}`) : [],

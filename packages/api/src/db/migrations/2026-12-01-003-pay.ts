@@ -149,6 +149,7 @@ CREATE TRIGGER pay_rules_append_only BEFORE UPDATE OR DELETE ON pay_rules FOR EA
 CREATE TRIGGER pay_lines_no_truncate BEFORE TRUNCATE ON pay_lines FOR EACH STATEMENT EXECUTE FUNCTION refuse_change();
 `,
   down: `
+DROP TRIGGER clock_corrections_append_only ON clock_corrections;
 DROP TABLE outbox_mails, audit_entries, pay_adjustments, pay_statements, pay_lines, pay_weeks, pay_rules, pay_rates;
 DROP FUNCTION refuse_locked_week, refuse_locked_head, refuse_change;
 `,

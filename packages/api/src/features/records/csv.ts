@@ -23,7 +23,7 @@ export function readCsv<S extends z.ZodType>(
   const complaints: Complaint[] = [];
   for (const { line, record } of recordsOf(text)) {
     const parsed = schema.safeParse(record);
-    if (parsed.success) rows.push({ line, row: parsed.data as z.infer<S> });
+    if (parsed.success) rows.push({ line, row: parsed.data });
     else {
       for (const issue of parsed.error.issues) {
         const unknown = issue.code === 'unrecognized_keys' ? `There is no column ${issue.keys.join(', ')}.` : null;
@@ -50,7 +50,9 @@ function recordsOf(text: string): { line: number; record: Record<string, string>
     }) as unknown as { record: Record<string, string>; info: { lines: number } }[];
     return parsed.map(({ record, info }) => ({ line: info.lines, record }));
   } catch (error) {
-    throw new Error(`The file can’t be read as CSV: ${error instanceof Error ? error.message : String(error)}`);
+    throw new Error(`The file can’t be read as CSV: ${error instanceof Error ? error.message : String(error)}`, {
+      cause: error,
+    });
   }
 }
 

@@ -1,13 +1,14 @@
 import { describe, expect, test } from 'vitest';
 import { isAccessOpen } from './access-notes.ts';
 import { visitMinutes } from './crew-time.ts';
-import { nextActions, progressStates, takeStep } from './progress.ts';
+import { nextActions, takeStep } from './progress.ts';
+import type { Progress } from './progress.ts';
 import { estimateTravel, kilometersBetween } from './travel.ts';
 
 describe('progress', () => {
   test('goes placed, on the way, on site, working, done', () => {
     const way = ['set_off', 'arrive', 'start_work', 'finish'] as const;
-    let at: (typeof progressStates)[number] = 'placed';
+    let at: Progress = 'placed';
     for (const action of way) {
       expect(nextActions(at)[0]).toBe(action);
       const step = takeStep(at, action);

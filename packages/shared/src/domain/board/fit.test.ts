@@ -29,7 +29,15 @@ const placed = (id: string, from: string, to: string, more: Partial<PlannedVisit
   aVisit(id, { vanId: 'gannet', from: at(from), to: at(to), progress: 'placed', ...more });
 
 function aVan(id: string, more: Partial<PlannedVan> = {}): PlannedVan {
-  const person = { personId: `p-${id}`, name: 'Sefa', skills: ['correction'], isTrainee: false, from: at('11:30'), to: at('22:00'), weekMinutes: 600 };
+  const person = {
+    personId: `p-${id}`,
+    name: 'Sefa',
+    skills: ['correction'],
+    isTrainee: false,
+    from: at('11:30'),
+    to: at('22:00'),
+    weekMinutes: 600,
+  };
   return { id, name: id === 'gannet' ? 'Gannet' : 'Plover', equipment: ['polisher'], crew: [person], ...more };
 }
 
@@ -93,7 +101,10 @@ describe('warnings', () => {
   test('say the skill and the tool that are missing; a trainee brings none', () => {
     const trainee = aVan('gannet', { crew: [{ ...aVan('gannet').crew[0]!, isTrainee: true }] });
     const visit = aVisit('b', { skills: ['correction'], equipment: ['extractor'] });
-    expect(codes(judge(facts([], { vans: [trainee] }), visit, '14:00', '15:00').warnings)).toEqual(['missing_skill', 'missing_equipment']);
+    expect(codes(judge(facts([], { vans: [trainee] }), visit, '14:00', '15:00').warnings)).toEqual([
+      'missing_skill',
+      'missing_equipment',
+    ]);
     expect(codes(judge(facts([]), visit, '14:00', '15:00').warnings)).toEqual(['missing_equipment']);
   });
   test('outside the promise and outside the day', () => {
@@ -112,12 +123,16 @@ describe('warnings', () => {
   });
   test('overtime is a risk in hours, and not twice for a visit that is there already', () => {
     const busy = aVan('gannet', { crew: [{ ...aVan('gannet').crew[0]!, weekMinutes: 2390 }] });
-    expect(codes(judge(facts([], { vans: [busy] }), aVisit('b'), '14:00', '15:00').warnings)).toEqual(['overtime_risk']);
+    expect(codes(judge(facts([], { vans: [busy] }), aVisit('b'), '14:00', '15:00').warnings)).toEqual([
+      'overtime_risk',
+    ]);
     const there = placed('b', '14:00', '15:00');
     expect(codes(judge(facts([there], { vans: [busy] }), there, '15:00', '16:00').warnings)).toEqual([]);
   });
   test('nobody in the van then', () => {
-    expect(codes(judge(facts([], { vans: [aVan('gannet', { crew: [] })] }), aVisit('b'), '14:00', '15:00').warnings)).toEqual(['no_crew']);
+    expect(
+      codes(judge(facts([], { vans: [aVan('gannet', { crew: [] })] }), aVisit('b'), '14:00', '15:00').warnings),
+    ).toEqual(['no_crew']);
   });
   test('keep their key while the facts stay the same', () => {
     const visit = aVisit('b', { equipment: ['extractor'] });

@@ -61,8 +61,17 @@ describe('words', () => {
 describe('a phone’s clock', () => {
   const received = new Date('2026-05-14T15:00:00.900Z');
   test('is corrected by its offset, flagged over two minutes, and never runs ahead of the server', () => {
-    expect(stamp('2026-05-14T14:58:00.000Z', 0, received)).toMatchObject({ occurredAt: '2026-05-14T14:58:00.000Z', isCorrected: false });
-    expect(stamp('2026-05-16T14:58:00.000Z', 172_800_000, received)).toMatchObject({ occurredAt: '2026-05-14T14:58:00.000Z', isCorrected: true });
-    expect(stamp('2026-05-14T16:00:00.000Z', 0, received)).toMatchObject({ occurredAt: '2026-05-14T15:00:00.000Z', isCorrected: true });
+    expect(stamp('2026-05-14T14:58:00.000Z', 0, received)).toMatchObject({
+      occurredAt: '2026-05-14T14:58:00.000Z',
+      isCorrected: false,
+    });
+    expect(stamp('2026-05-16T14:58:00.000Z', 172_800_000, received)).toMatchObject({
+      occurredAt: '2026-05-14T14:58:00.000Z',
+      isCorrected: true,
+    });
+    expect(stamp('2026-05-14T16:00:00.000Z', 0, received)).toMatchObject({
+      occurredAt: '2026-05-14T15:00:00.000Z',
+      isCorrected: true,
+    });
   });
 });

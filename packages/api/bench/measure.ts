@@ -1,0 +1,42 @@
+/** Middle value of durations in milliseconds. */
+export function median(values: number[]): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  return sorted[Math.floor(sorted.length / 2)] ?? Number.NaN;
+}
+
+/** The tenth of the values below which one in ten lies: what it costs when nothing else disturbs. */
+export function tenth(values: number[]): number {
+  const sorted = [...values].sort((a, b) => a - b);
+  return sorted[Math.floor(sorted.length / 10)] ?? Number.NaN;
+}
+
+export async function timed(work: () => Promise<unknown>): Promise<number> {
+  const start = performance.now();
+  await work();
+  return performance.now() - start;
+}
+
+/** Runs two works in turn, so that a busy moment of the machine touches both. The first rounds only warm up. */
+export async function inTurn(
+  rounds: number,
+  warmUp: number,
+  one: () => Promise<number>,
+  other: () => Promise<number>,
+): Promise<[number[], number[]]> {
+  const times: [number[], number[]] = [[], []];
+  for (let round = 0; round < rounds + warmUp; round += 1) {
+    const a = await one();
+    const b = await other();
+    if (round < warmUp) continue;
+    times[0].push(a);
+    times[1].push(b);
+  }
+  return times;
+}
+
+export interface Ratio {
+  what: string;
+  ratio: number;
+  goal: number;
+  note: string;
+}

@@ -1,0 +1,143 @@
+import { beforeAll, expect, test } from 'vitest';
+import type TestAgent from 'supertest/lib/agent.js';
+import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
+import { useApp } from '../../testing/app.ts';
+import { aCompany, first } from '../../testing/company.ts';
+import type { TestCompany } from '../../testing/company.ts';
+
+const app = useApp();
+let company: TestCompany;
+let dispatcher: TestAgent;
+beforeAll(async () => {
+  company = await aCompany(app);
+  dispatcher = await company.dispatcher();
+});
+const jobIn = (body: unknown) => (body as { job: JobDto }).job;
+const order = (more: object = {}) => ({
+  customerId: company.customer.id,
+  addressId: first(company.customer.addresses).id,
+  windowFrom: '2026-05-14T09:00:00-04:00',
+  windowTo: '2026-05-14T11:00:00-04:00',
+  notes: '',
+  discountCents: 0,
+  discountReason: '',
+  lines: [{ serviceId: company.wash.id, vehicleId: first(company.customer.vehicles).id, sizeClass: 'sedan' }],
+  ...more,
+});
+const changeOf = (job: JobDto, more: object) => ({
+  ...order(),
+  version: job.version,
+  lines: job.lines.map(({ id, serviceId, vehicleId, sizeClass, priceCents, minutes }) => ({
+    id,
+    serviceId,
+    vehicleId,
+    sizeClass,
+    priceCents,
+    minutes,
+  })),
+  ...more,
+});
+
+test('a job takes the menu’s price and minutes, gets the next number, and lands on Unplaced', async () => {
+  const one = jobIn((await dispatcher.post('/api/jobs').send(order()).expect(200)).body);
+  const two = jobIn((await dispatcher.post('/api/jobs').send(order()).expect(200)).body);
+  expect(two.number).toBe(one.number + 1);
+  expect(one).toMatchObject({
+    totalCents: 24_000,
+    windowFrom: '2026-05-14T13:00:00.000Z',
+    visits: [{ progress: 'unplaced', minutes: 90, part: 1 }],
+  });
+});
+
+test('bad input is said at its field', async () => {
+  const answer = await dispatcher
+    .post('/api/jobs')
+    .send(order({ windowTo: '2026-05-14T08:00:00-04:00', discountCents: 500, lines: [] }))
+    .expect(400);
+  expect((answer.body as { error: { fields: object } }).error.fields).toEqual({
+    lines: 'Add at least one service.',
+    windowTo: 'The window must end after it starts.',
+    discountReason: 'Say why there is a discount.',
+  });
+  const unsold = await dispatcher
+    .post('/api/jobs')
+    .send(order({ lines: [{ serviceId: company.wash.id, vehicleId: null, sizeClass: 'van' }] }))
+    .expect(422);
+  expect(unsold.body).toMatchObject({
+    error: { fields: { 'lines.0.serviceId': expect.stringContaining('not on the menu for van') as string } },
+  });
+  await dispatcher
+    .post('/api/jobs')
+    .send(order({ discountCents: 24_001, discountReason: 'Regular' }))
+    .expect(422);
+  await dispatcher
+    .post('/api/jobs')
+    .send(order({ notes: 'x'.repeat(10_001) }))
+    .expect(400);
+});
+
+test('a new price on the menu never changes what was quoted', async () => {
+  const owner = await company.owner();
+  const job = jobIn((await dispatcher.post('/api/jobs').send(order()).expect(200)).body);
+  const prices = [{ sizeClass: 'sedan', priceCents: 26_000, minutes: 100 }];
+  await owner.post(`/api/services/${company.wash.id}/prices`).send({ startsOn: '2026-05-14', prices }).expect(200);
+  expect(jobIn((await dispatcher.get(`/api/jobs/${job.id}`)).body).totalCents).toBe(24_000);
+  const copy = jobIn((await dispatcher.post(`/api/jobs/${job.id}/copy`).expect(200)).body);
+  expect(copy.totalCents).toBe(26_000);
+});
+
+test('an edit names the version it saw; what was typed comes back with the newer state', async () => {
+  const job = jobIn((await dispatcher.post('/api/jobs').send(order()).expect(200)).body);
+  const added = jobIn(
+    (
+      await dispatcher
+        .put(`/api/jobs/${job.id}`)
+        .send(
+          changeOf(job, {
+            notes: 'Ring first',
+            lines: [
+              ...changeOf(job, {}).lines,
+              { serviceId: company.wash.id, vehicleId: null, sizeClass: 'sedan', priceCents: 1000, minutes: 30 },
+            ],
+          }),
+        )
+        .expect(200)
+    ).body,
+  );
+  expect(added).toMatchObject({ notes: 'Ring first', totalCents: job.totalCents + 1000 });
+  expect(added.visits[0]?.lines).toHaveLength(2);
+  const stale = await dispatcher.put(`/api/jobs/${job.id}`).send(changeOf(job, {})).expect(409);
+  expect(stale.body).toMatchObject({ error: { code: 'stale', hint: { current: { notes: 'Ring first' } } } });
+});
+
+test('calling off takes what was not worked off the day, once', async () => {
+  const job = jobIn((await dispatcher.post('/api/jobs').send(order()).expect(200)).body);
+  await dispatcher.post(`/api/jobs/${job.id}/call-off`).send({ version: job.version, reason: '' }).expect(400);
+  const off = jobIn(
+    (
+      await dispatcher
+        .post(`/api/jobs/${job.id}/call-off`)
+        .send({ version: job.version, reason: 'Weather' })
+        .expect(200)
+    ).body,
+  );
+  expect(off.visits[0]).toMatchObject({ progress: 'called_off', reason: 'Weather' });
+  await dispatcher.post(`/api/jobs/${job.id}/call-off`).send({ version: off.version, reason: 'Weather' }).expect(409);
+});
+
+test('a second crew on one job stands at the same parking place', async () => {
+  const job = jobIn((await dispatcher.post('/api/jobs').send(order()).expect(200)).body);
+  const visit = first(job.visits);
+  const more = jobIn(
+    (
+      await dispatcher
+        .post(`/api/jobs/${job.id}/visits`)
+        .send({ minutes: 60, lineIds: [], besideVisitId: visit.id })
+        .expect(200)
+    ).body,
+  );
+  expect(more.visits.map((v) => [v.part, v.parts, v.stopId === visit.stopId])).toEqual([
+    [1, 2, true],
+    [2, 2, true],
+  ]);
+});
