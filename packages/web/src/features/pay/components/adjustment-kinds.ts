@@ -1,4 +1,4 @@
-import { adjustmentKinds } from '@driprail/shared/contracts/pay.contract';
+import type { adjustmentKinds } from '@driprail/shared/contracts/pay.contract';
 
 export type AdjustmentKindName = (typeof adjustmentKinds)[number];
 

@@ -51,9 +51,8 @@ export function StatementsPage() {
                         <Icon name="lock" />
                         <span>
                           <b>Week {statement.number}</b>
-                          <small>
-                            {weekSpan(statement)}. Locked {formatDay(dayOf(statement.lockedAt, zone))}
-                          </small>
+                          <small>{weekSpan(statement)}</small>
+                          <small>Locked {formatDay(dayOf(statement.lockedAt, zone))}</small>
                         </span>
                         <span className="e">{money(statement.grossCents)}</span>
                       </Link>

@@ -1,0 +1,125 @@
+import { useState } from 'react';
+import type { PayRulesDto } from '@driprail/shared/contracts/pay.contract';
+import { Button } from '../../../components/button.tsx';
+import { SelectField, TextField } from '../../../components/field.tsx';
+import { SheetFoot } from '../../../components/sheet.tsx';
+import { ApiError } from '../../../lib/call.ts';
+import { useAddRules } from '../api/rates.queries.ts';
+import { splitWords, weekdayWords } from './rate-bands.ts';
+
+/** New company rules from a day on, beginning from those in force. */
+export function RulesForm({
+  current,
+  startsOn,
+  onDone,
+}: {
+  current: PayRulesDto | null;
+  startsOn: string;
+  onDone: () => void;
+}) {
+  const add = useAddRules();
+  const [value, setValue] = useState({
+    startsOn,
+    overtimeRuleSet: 'us_federal' as const,
+    minimumWage: current?.minimumWage ?? '7.25',
+    crewSplit: current?.crewSplit ?? 'equal',
+    mealBreakMinutes: String(current?.mealBreakMinutes ?? 30),
+    workweekStartsOn: current?.workweekStartsOn ?? 1,
+    workweekStartsAt: current?.workweekStartsAt ?? '00:00',
+  });
+  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  return (
+    <form
+      noValidate
+      onSubmit={(event) => {
+        event.preventDefault();
+        const body = {
+          ...value,
+          minimumWage: value.minimumWage.replace(/[$,\s]/g, ''),
+          mealBreakMinutes: Number(value.mealBreakMinutes),
+        };
+        if (!add.isPending) add.mutate(body, { onSuccess: onDone });
+      }}
+    >
+      <TextField
+        label="From"
+        type="date"
+        value={value.startsOn}
+        error={fields['startsOn']}
+        onChange={(event) => setValue({ ...value, startsOn: event.target.value })}
+      />
+      <div className="grid grid-cols-2 gap-3 mt-3 max-[520px]:grid-cols-1">
+        <SelectField
+          label="Overtime"
+          value={value.overtimeRuleSet}
+          error={fields['overtimeRuleSet']}
+          onChange={() => undefined}
+        >
+          <option value="us_federal">Federal: half the regular rate over 40 h</option>
+        </SelectField>
+        <TextField
+          label="Minimum wage, dollars an hour"
+          inputMode="decimal"
+          value={value.minimumWage}
+          error={fields['minimumWage']}
+          onChange={(event) => setValue({ ...value, minimumWage: event.target.value })}
+        />
+        <SelectField
+          label="In a crew a job is shared"
+          value={value.crewSplit}
+          error={fields['crewSplit']}
+          onChange={(event) => setValue({ ...value, crewSplit: event.target.value as PayRulesDto['crewSplit'] })}
+        >
+          {Object.entries(splitWords).map(([split, label]) => (
+            <option key={split} value={split}>
+              {label}
+            </option>
+          ))}
+        </SelectField>
+        <TextField
+          label="A meal break is unpaid from, minutes"
+          type="number"
+          min={20}
+          max={120}
+          value={value.mealBreakMinutes}
+          error={fields['mealBreakMinutes']}
+          onChange={(event) => setValue({ ...value, mealBreakMinutes: event.target.value })}
+        />
+        <SelectField
+          label="Workweek starts on"
+          value={value.workweekStartsOn}
+          error={fields['workweekStartsOn']}
+          onChange={(event) => setValue({ ...value, workweekStartsOn: Number(event.target.value) })}
+        >
+          {weekdayWords.map((weekday, index) => (
+            <option key={weekday} value={index + 1}>
+              {weekday}
+            </option>
+          ))}
+        </SelectField>
+        <TextField
+          label="at"
+          type="time"
+          value={value.workweekStartsAt}
+          error={fields['workweekStartsAt']}
+          onChange={(event) => setValue({ ...value, workweekStartsAt: event.target.value })}
+        />
+      </div>
+      <p className="caution mt-4">
+        <b>Caution.</b> Driprail works out pay by the rules set here. It is not legal advice: states and towns add daily
+        overtime, higher minimum wages, meal and rest rules. A workweek may be moved only for good, not to avoid
+        overtime (29 CFR 778.105). Ask a licensed payroll adviser first.
+      </p>
+      {add.error && Object.keys(fields).length === 0 ? (
+        <p className="tape mt-3" role="alert">
+          {add.error.message}
+        </p>
+      ) : null}
+      <SheetFoot>
+        <Button type="submit" look="main" isBusy={add.isPending}>
+          Add rules
+        </Button>
+      </SheetFoot>
+    </form>
+  );
+}
