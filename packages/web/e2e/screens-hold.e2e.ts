@@ -18,12 +18,12 @@ function contextFor(role: Screen['role'], size: 'desk' | 'phone'): Promise<Brows
   return made;
 }
 
-describe.each(screens)('$role: $name', (screen) => {
+describe.concurrent.each(screens)('$role, $name', (screen) => {
   test.skipIf(screen.isPhoneOnly)('holds at a desk', () => hold(screen, 'desk'));
   test('holds on a phone of 390 px', () => hold(screen, 'phone'));
 });
 
-describe.each(screens.filter((screen) => screen.hasGrounds))('$role: $name', (screen) => {
+describe.concurrent.each(screens.filter((screen) => screen.hasGrounds))('$role, $name', (screen) => {
   test.each(['night', 'sun'] as const)('can be read in the %s', async (ground) => {
     const context = await contextFor(screen.role, screen.isPhoneOnly ? 'phone' : 'desk');
     const page = await context.newPage();
@@ -96,7 +96,7 @@ function overhang(page: Page): Promise<string[]> {
 
 /** What axe finds that keeps somebody out: serious and critical violations, one line each. */
 async function barriersOn(page: Page): Promise<string[]> {
-  const { violations } = await new AxeBuilder({ page }).analyze();
+  const { violations } = await new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).analyze();
   return violations
     .filter(({ impact }) => impact === 'serious' || impact === 'critical')
     .flatMap(({ id, nodes }) =>
