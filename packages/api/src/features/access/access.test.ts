@@ -90,9 +90,9 @@ test('one ends one’s own sessions by reference, never another’s', async () =
 test('switching a login off ends it at once, open sockets included; the last owner stays', async () => {
   const owner = await company.owner();
   const dispatcher = await company.dispatcher();
-  const { body } = await owner.get('/api/session').expect(200);
+  const own = await owner.get('/api/session').expect(200);
   await owner
-    .patch(`/api/logins/${(body as { user: { id: string } }).user.id}`)
+    .patch(`/api/logins/${(own.body as { user: { id: string } }).user.id}`)
     .send({ isActive: false })
     .expect(422);
 
