@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import { troubleKinds, troubleNames } from '@driprail/shared/contracts/run-sheet.contract';
 import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
+import { nextActions } from '@driprail/shared/domain/board/progress';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
@@ -13,12 +14,14 @@ export function TroubleSheet({
   isBusy,
   error,
   onSend,
+  onCallOff,
   onClose,
 }: {
   visit: RunVisitDto;
   isBusy: boolean;
   error: string | undefined;
   onSend: (trouble: { trouble: Trouble; reason: string }) => void;
+  onCallOff: (reason: string) => void;
   onClose: () => void;
 }) {
   const [trouble, setTrouble] = useState<Trouble | null>(null);
@@ -56,6 +59,15 @@ export function TroubleSheet({
         />
       </div>
       <SheetFoot>
+        {nextActions(visit.progress).includes('call_off') ? (
+          <Button
+            isBusy={isBusy}
+            disabled={trouble === null}
+            onClick={() => trouble && onCallOff([troubleNames[trouble], note.trim()].filter(Boolean).join(': '))}
+          >
+            Call the visit off
+          </Button>
+        ) : null}
         <Button
           look="main"
           isBusy={isBusy}

@@ -146,6 +146,7 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
           error={press.error?.message}
           onClose={close}
           onSend={(trouble) => press.mutate(newPress(shown.id, { kind: 'trouble', ...trouble }), { onSuccess: close })}
+          onCallOff={(reason) => press.mutate(newPress(shown.id, { kind: 'call_off', reason }), { onSuccess: close })}
         />
       ) : null}
       {shown && panel?.kind === 'part_done' ? (
