@@ -7,9 +7,11 @@ import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Loaded } from '../../../components/states.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { useFormats } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 export function AccountPage() {
   const { user } = useSession();
@@ -36,7 +38,7 @@ function PasswordForm() {
       setNext('');
     },
   });
-  const fields = change.error instanceof ApiError ? change.error.fields : {};
+  const fields = fieldsOf(change.error);
   return (
     <form
       className="grid gap-3 content-start"
@@ -64,7 +66,7 @@ function PasswordForm() {
         error={fields['next']}
         onChange={(event) => setNext(event.target.value)}
       />
-      {change.error && Object.keys(fields).length === 0 ? <p className="tape">{change.error.message}</p> : null}
+      <FormFault error={change.error} fields={fields} />
       {change.isSuccess ? <p role="status">The password is changed.</p> : null}
       <div>
         <Button type="submit" isBusy={change.isPending}>

@@ -5,13 +5,14 @@ import { requestReset } from '@driprail/shared/contracts/session.contract';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { HungForm } from '../components/hung-form.tsx';
+import { fieldsOf } from '../../../lib/fields.ts';
 
 export function ForgottenPage() {
   const [email, setEmail] = useState('');
   const ask = useMutation({ mutationFn: () => call(requestReset, { body: { email } }) });
-  const fields = ask.error instanceof ApiError ? ask.error.fields : {};
+  const fields = fieldsOf(ask.error);
   return (
     <HungForm
       title="New password"

@@ -6,9 +6,10 @@ import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
 import { Loaded } from '../../../components/states.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { sessionKey } from '../api/session.queries.ts';
 import { HungForm } from '../components/hung-form.tsx';
+import { fieldsOf } from '../../../lib/fields.ts';
 
 /** An invitation or reset link: choose a password, and be signed in. */
 export function LinkPage() {
@@ -29,7 +30,7 @@ export function LinkPage() {
       void navigate('/', { replace: true });
     },
   });
-  const fields = use.error instanceof ApiError ? use.error.fields : {};
+  const fields = fieldsOf(use.error);
   const isDifferent = again !== '' && again !== password;
   return (
     <HungForm

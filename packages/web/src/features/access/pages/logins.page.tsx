@@ -16,8 +16,10 @@ import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { Loaded } from '../../../components/states.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { useSession } from '../../../lib/session.tsx';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 const roles: Role[] = ['owner', 'dispatcher', 'technician'];
 
@@ -139,7 +141,7 @@ function InviteSheet({ onClose }: { onClose: () => void }) {
     mutationFn: () => call(inviteLogin, { body: { name, email, role, personId: personId || null } }),
     onSuccess: () => client.invalidateQueries({ queryKey: ['logins'] }).then(onClose),
   });
-  const fields = invite.error instanceof ApiError ? invite.error.fields : {};
+  const fields = fieldsOf(invite.error);
   return (
     <Sheet title="Invite" onClose={onClose} width={520}>
       <form
@@ -184,7 +186,7 @@ function InviteSheet({ onClose }: { onClose: () => void }) {
             </option>
           ))}
         </SelectField>
-        {invite.error && Object.keys(fields).length === 0 ? <p className="tape">{invite.error.message}</p> : null}
+        <FormFault error={invite.error} fields={fields} />
         <SheetFoot>
           <Button type="submit" look="main" isBusy={invite.isPending}>
             Send the invitation

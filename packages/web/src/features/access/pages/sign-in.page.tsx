@@ -5,9 +5,11 @@ import { getSetUp } from '@driprail/shared/contracts/settings.contract';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { sessionQuery, useSignIn } from '../api/session.queries.ts';
 import { HungForm } from '../components/hung-form.tsx';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 export function SignInPage() {
   const session = useQuery(sessionQuery);
@@ -22,7 +24,7 @@ export function SignInPage() {
     if (session.data) void navigate(from, { replace: true });
   }, [session.data, from, navigate]);
   if (setUp.data?.isNeeded) return <Navigate to={paths.setUp} replace />;
-  const fields = signIn.error instanceof ApiError ? signIn.error.fields : {};
+  const fields = fieldsOf(signIn.error);
   return (
     <HungForm
       title="Sign in"
@@ -49,11 +51,7 @@ export function SignInPage() {
         error={fields['password']}
         onChange={(event) => setPassword(event.target.value)}
       />
-      {signIn.error && Object.keys(fields).length === 0 ? (
-        <p className="tape form-err" role="alert">
-          <b>{signIn.error.message}</b>
-        </p>
-      ) : null}
+      <FormFault error={signIn.error} fields={fields} className="form-err" />
       <Button type="submit" look="main" isBig isBusy={signIn.isPending}>
         Sign in
       </Button>

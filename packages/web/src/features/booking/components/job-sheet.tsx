@@ -8,7 +8,6 @@ import { Button } from '../../../components/button.tsx';
 import { SelectField, TextArea, TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { Loaded } from '../../../components/states.tsx';
-import { ApiError } from '../../../lib/call.ts';
 import { money, parseMoney } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { useDraft } from '../../../lib/use-draft.ts';
@@ -17,6 +16,8 @@ import { CustomerPick } from './customer-pick.tsx';
 import type { JobDraft } from './job-draft.ts';
 import { bodyOf, draftOf, emptyDraft, menuPrice, withCustomer } from './job-draft.ts';
 import { JobLinesField } from './job-lines-field.tsx';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 export interface NewCustomerProps {
   name: string;
@@ -64,7 +65,7 @@ function JobForm({ job, isCopy, day, newCustomer, onClose, onSaved }: JobSheetPr
   const customer = useQuery({ ...customerQuery(value.customerId), enabled: value.customerId !== '' });
   const menu = useQuery(menuQuery);
   const save = useSaveJob();
-  const fields = { ...(save.error instanceof ApiError ? save.error.fields : {}), ...unread };
+  const fields = { ...fieldsOf(save.error), ...unread };
 
   if (newName !== null) {
     return newCustomer({
@@ -181,11 +182,7 @@ function JobForm({ job, isCopy, day, newCustomer, onClose, onSaved }: JobSheetPr
           onChange={(event) => set({ ...value, discountReason: event.target.value })}
         />
       </div>
-      {save.error && Object.keys(fields).length === 0 ? (
-        <p className="tape mt-3" role="alert">
-          <b>{save.error.message}</b>
-        </p>
-      ) : null}
+      <FormFault error={save.error} fields={fields} className="mt-3" />
       <SheetFoot>
         <Button
           onClick={() => {

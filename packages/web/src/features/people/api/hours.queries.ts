@@ -1,4 +1,5 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
+import { getBoard } from '@driprail/shared/contracts/board.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import { addClockEntry, correctClockEntry, listClock } from '@driprail/shared/contracts/clock.contract';
 import { call } from '../../../lib/call.ts';
@@ -7,6 +8,13 @@ export const hoursQuery = (from: string, to: string) =>
   queryOptions({
     queryKey: ['clock', 'entries', from, to],
     queryFn: ({ signal }) => call(listClock, { query: { from, to } }, signal),
+  });
+
+/** The visits of a day: time at a car belongs to one of them. */
+export const dayVisitsQuery = (day: string) =>
+  queryOptions({
+    queryKey: ['board', day, 'visits'],
+    queryFn: async ({ signal }) => (await call(getBoard, { params: { day } }, signal)).visits,
   });
 
 type Correction = NonNullable<RequestOf<typeof correctClockEntry>['body']>;

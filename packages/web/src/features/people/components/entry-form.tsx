@@ -6,10 +6,11 @@ import { addDays, clockOf, dayOf, instantOf } from '@driprail/shared/domain/time
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
 import { useSession } from '../../../lib/session.tsx';
-import { useSaveEntry } from '../api/hours.queries.ts';
+import { dayVisitsQuery, useSaveEntry } from '../api/hours.queries.ts';
 import { peopleQuery } from '../api/people.queries.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 const picks = ['Forgot to clock out', 'Forgot to clock in', 'Pressed the wrong kind', 'Phone was off'];
 
@@ -20,14 +21,17 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
   const save = useSaveEntry();
   const [value, setValue] = useState({
     personId: entry?.personId ?? '',
-    kind: entry?.kind ?? ('shop'),
+    kind: entry?.kind ?? 'shop',
+    visitId: '',
     day: entry ? dayOf(entry.startedAt, zone) : day,
     from: entry ? clockOf(entry.startedAt, zone) : '07:30',
     to: entry?.endedAt ? clockOf(entry.endedAt, zone) : '',
     isInterrupted: entry?.isInterrupted ?? false,
     reason: '',
   });
-  const fields = save.error instanceof ApiError ? save.error.fields : {};
+  const isAtJob = entry === null && (value.kind === 'job' || value.kind === 'travel');
+  const visits = useQuery({ ...dayVisitsQuery(value.day), enabled: isAtJob && value.day !== '' });
+  const fields = fieldsOf(save.error);
   const submit = () => {
     const startedAt =
       entry && clockOf(entry.startedAt, zone) === value.from ? entry.startedAt : instantOf(value.day, value.from, zone);
@@ -42,7 +46,10 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
     const span = { kind: value.kind, startedAt, endedAt, isInterrupted: value.isInterrupted, reason: value.reason };
     if (save.isPending) return;
     if (entry) save.mutate({ id: entry.id, body: { ...span, version: entry.version } }, { onSuccess: onDone });
-    else save.mutate({ id: null, body: { ...span, personId: value.personId, visitId: null } }, { onSuccess: onDone });
+    else {
+      const visitId = isAtJob && value.visitId !== '' ? value.visitId : null;
+      save.mutate({ id: null, body: { ...span, personId: value.personId, visitId } }, { onSuccess: onDone });
+    }
   };
   return (
     <form
@@ -108,6 +115,23 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
           onChange={(event) => setValue({ ...value, to: event.target.value })}
         />
       </div>
+      {isAtJob ? (
+        <SelectField
+          className="mt-3"
+          label="Job"
+          value={value.visitId}
+          error={fields['visitId']}
+          onChange={(event) => setValue({ ...value, visitId: event.target.value })}
+        >
+          <option value="">None named</option>
+          {visits.data?.map((visit) => (
+            <option key={visit.id} value={visit.id}>
+              {visit.jobNumber}, {visit.customerName}
+              {visit.crew.length > 0 ? ` (${visit.crew.map((member) => member.name).join(', ')})` : ''}
+            </option>
+          ))}
+        </SelectField>
+      ) : null}
       {value.kind === 'meal_break' ? (
         <CheckField
           label="Had to work during the break: it counts as worked"
@@ -128,7 +152,7 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
         error={fields['reason']}
         onChange={(event) => setValue({ ...value, reason: event.target.value })}
       />
-      {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
+      <FormFault error={save.error} fields={fields} className="mt-3" />
       <SheetFoot>
         <Button type="submit" look="main" isBusy={save.isPending}>
           {entry ? 'Save the correction' : 'Write it down'}

@@ -6,8 +6,9 @@ import { formatDate } from '@driprail/shared/domain/time/format';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
 import { useSavePerson, useTimeOff } from '../api/people.queries.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 export function PersonForm({ person, onDone }: { person: PersonDto | null; onDone: () => void }) {
   const save = useSavePerson();
@@ -19,7 +20,7 @@ export function PersonForm({ person, onDone }: { person: PersonDto | null; onDon
     isActive: person?.isActive ?? true,
     sharesTips: person?.sharesTips ?? true,
   });
-  const fields = save.error instanceof ApiError ? save.error.fields : {};
+  const fields = fieldsOf(save.error);
   return (
     <>
       <form
@@ -84,7 +85,7 @@ export function PersonForm({ person, onDone }: { person: PersonDto | null; onDon
             </p>
           </fieldset>
         </div>
-        {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
+        <FormFault error={save.error} fields={fields} className="mt-3" />
         <SheetFoot>
           <Button type="submit" look="main" isBusy={save.isPending}>
             {person ? 'Save person' : 'Add person'}
@@ -99,7 +100,7 @@ export function PersonForm({ person, onDone }: { person: PersonDto | null; onDon
 function TimeOffList({ person }: { person: PersonDto }) {
   const { add, remove } = useTimeOff(person.id);
   const [off, setOff] = useState({ startsOn: '', endsOn: '', note: '' });
-  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  const fields = fieldsOf(add.error);
   return (
     <form
       className="pb-5"
@@ -143,7 +144,7 @@ function TimeOffList({ person }: { person: PersonDto }) {
           Add days off
         </Button>
       </div>
-      {add.error && Object.keys(fields).length === 0 ? <p className="tape mt-2">{add.error.message}</p> : null}
+      <FormFault error={add.error} fields={fields} className="mt-2" />
     </form>
   );
 }

@@ -1,5 +1,6 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
+import { useSearchParams } from 'react-router';
 import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
 import type { ClockEntryDto } from '@driprail/shared/contracts/clock.contract';
 import { formatDay, formatMinutes } from '@driprail/shared/domain/time/format';
@@ -14,15 +15,23 @@ import { useNow } from '../../../lib/now.ts';
 import { hoursQuery } from '../api/hours.queries.ts';
 import { EntryForm } from '../components/entry-form.tsx';
 
-/** The clock of a day, everybody's: hours, never money. */
+/** The clock of a day, everybody's: hours, never money. The address may name the day and an entry to open. */
 export function HoursPage() {
   const format = useFormats();
   const now = useNow();
   const today = dayOf(now, format.zone);
-  const [day, setDay] = useState(today);
-  const [editing, setEditing] = useState<ClockEntryDto | 'new' | null>(null);
+  const [search, setSearch] = useSearchParams();
+  const asked = search.get('day') ?? '';
+  const day = /^\d{4}-\d{2}-\d{2}$/.test(asked) ? asked : today;
+  const setDay = (next: string) => setSearch({ day: next }, { replace: true });
+  const [picked, setEditing] = useState<ClockEntryDto | 'new' | null>(null);
   const hours = useQuery(hoursQuery(day, day));
   const entries = hours.data?.entries ?? [];
+  const editing = picked ?? entries.find((entry) => entry.id === search.get('entry')) ?? null;
+  const close = () => {
+    setEditing(null);
+    if (search.has('entry')) setDay(day);
+  };
   const running = entries.filter((entry) => entry.endedAt === null).length;
   return (
     <>
@@ -63,8 +72,8 @@ export function HoursPage() {
         </div>
       </RailPage>
       {editing ? (
-        <Sheet title={editing === 'new' ? 'Time' : 'Correct'} onClose={() => setEditing(null)} width={620}>
-          <EntryForm entry={editing === 'new' ? null : editing} day={day} onDone={() => setEditing(null)} />
+        <Sheet title={editing === 'new' ? 'Time' : 'Correct'} onClose={close} width={620}>
+          <EntryForm entry={editing === 'new' ? null : editing} day={day} onDone={close} />
         </Sheet>
       ) : null}
     </>

@@ -9,8 +9,9 @@ import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { Empty, Loaded } from '../../../components/states.tsx';
-import { ApiError } from '../../../lib/call.ts';
 import { useSaveVan, vansQuery } from '../api/people.queries.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 /** The vans and what they carry. Their crews are set by day, at the head of each lane of the board. */
 export function VansPage() {
@@ -91,7 +92,7 @@ function VanForm({ van, nextPosition, onDone }: { van: VanDto | null; nextPositi
     position: van?.position ?? nextPosition,
     isActive: van?.isActive ?? true,
   });
-  const fields = save.error instanceof ApiError ? save.error.fields : {};
+  const fields = fieldsOf(save.error);
   return (
     <form
       noValidate
@@ -152,7 +153,7 @@ function VanForm({ van, nextPosition, onDone }: { van: VanDto | null; nextPositi
         checked={value.isActive}
         onChange={(event) => setValue({ ...value, isActive: event.target.checked })}
       />
-      {save.error && Object.keys(fields).length === 0 ? <p className="tape mt-3">{save.error.message}</p> : null}
+      <FormFault error={save.error} fields={fields} className="mt-3" />
       <SheetFoot>
         <Button type="submit" look="main" isBusy={save.isPending}>
           {van ? 'Save van' : 'Add van'}

@@ -13,9 +13,9 @@ import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
 import { parseMoney } from '../../../lib/format.ts';
 import { useSaveService } from '../api/services.queries.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 
 export const kindNames = { package: 'Package', single: 'Single service', add_on: 'Add-on' } as const;
 type PriceTexts = Record<SizeClass, { price: string; minutes: string }>;
@@ -43,7 +43,7 @@ export function ServiceForm({
   const [prices, setPrices] = useState<PriceTexts>(() => textsOf(service));
   const [startsOn, setStartsOn] = useState(today);
   const [unread, setUnread] = useState<Record<string, string>>({});
-  const fields = { ...(save.error instanceof ApiError ? save.error.fields : {}), ...unread };
+  const fields = { ...fieldsOf(save.error), ...unread };
   const toggle = <T extends string>(list: T[], item: T, isOn: boolean) =>
     isOn ? [...list, item] : list.filter((other) => other !== item);
 

@@ -6,9 +6,11 @@ import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { Logo } from '../../../components/logo.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { useDraft } from '../../../lib/use-draft.ts';
 import { zoneNames } from '../zones.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 /** The first start: the company and its owner, with the one-time code from the terminal. */
 export function SetUpPage() {
@@ -34,7 +36,7 @@ export function SetUpPage() {
     },
   });
   if (setUp.data && !setUp.data.isNeeded && !complete.isSuccess) return <Navigate to="/" replace />;
-  const fields = complete.error instanceof ApiError ? complete.error.fields : {};
+  const fields = fieldsOf(complete.error);
   const text = (name: keyof typeof value) => ({
     value: value[name],
     error: fields[name],
@@ -95,11 +97,7 @@ export function SetUpPage() {
               />
             </div>
           </section>
-          {complete.error && Object.keys(fields).length === 0 ? (
-            <p className="tape mb-4" role="alert">
-              <b>{complete.error.message}</b>
-            </p>
-          ) : null}
+          <FormFault error={complete.error} fields={fields} className="mb-4" />
           <div className="max-w-[340px]">
             <Button type="submit" look="main" isBig isBusy={complete.isPending}>
               Set up the company

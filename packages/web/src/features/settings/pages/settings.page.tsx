@@ -9,8 +9,10 @@ import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Loaded } from '../../../components/states.tsx';
-import { ApiError, call } from '../../../lib/call.ts';
+import { call } from '../../../lib/call.ts';
 import { zoneNames } from '../zones.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
+import { FormFault } from '../../../components/form-fault.tsx';
 
 export function SettingsPage() {
   const settings = useQuery({ queryKey: ['settings'], queryFn: ({ signal }) => call(getSettings, {}, signal) });
@@ -36,7 +38,7 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
       return client.invalidateQueries({ queryKey: ['session'] });
     },
   });
-  const fields = save.error instanceof ApiError ? save.error.fields : {};
+  const fields = fieldsOf(save.error);
   const text = (name: 'name' | 'phone' | 'email' | 'dayStartsAt' | 'dayEndsAt') => ({
     value: value[name],
     error: fields[name],
@@ -132,7 +134,7 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
         <Button type="submit" look="main" isBusy={save.isPending}>
           Save settings
         </Button>
-        {save.error && Object.keys(fields).length === 0 ? <p className="tape">{save.error.message}</p> : null}
+        <FormFault error={save.error} fields={fields} />
         {save.isSuccess ? <p role="status">Saved.</p> : null}
       </div>
     </form>
