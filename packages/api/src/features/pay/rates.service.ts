@@ -1,5 +1,6 @@
 import { v7 as uuid } from 'uuid';
 import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import { formatDate } from '@driprail/shared/domain/time/format';
 import { audit } from '../../db/audit.ts';
 import { PayRate, PayRuleSet, PayWeek } from '../../db/models/index.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
@@ -69,6 +70,6 @@ export function addRules({ actor, now }: Ctx, fields: Omit<PayRulesDto, 'id' | '
 async function refuseLockedDay(startsOn: string, tx: Transaction): Promise<void> {
   const last = await PayWeek.findOne({ where: { state: 'locked' }, order: [['startsOn', 'DESC']], transaction: tx });
   if (!last || startsOn > last.endsOn) return;
-  const message = `Weeks are locked to ${last.endsOn}. Start later, or add a correction to an open week.`;
+  const message = `Weeks are locked to ${formatDate(last.endsOn)}. Start later, or add a correction to an open week.`;
   throw unprocessable('locked_week', message, { fields: { startsOn: message } });
 }

@@ -96,7 +96,10 @@ export function AdjustmentSheet({
                   ? 'Is taken off.'
                   : undefined
             }
-            onChange={(event) => setValue({ ...value, amount: event.target.value })}
+            onChange={(event) => {
+              setValue({ ...value, amount: event.target.value });
+              setAmountError(undefined);
+            }}
           />
         </div>
         {isCorrection ? (

@@ -63,7 +63,7 @@ export function OvertimeArea({ drawing }: { drawing: AreaDrawing }) {
       ))}
       <text
         x={isRoomLeft ? from - 8 : 12}
-        y={isRoomLeft ? roof + 12 : roof - 6}
+        y={isRoomLeft ? roof + 7 : roof - 6}
         textAnchor={isRoomLeft ? 'end' : 'start'}
         fontWeight="700"
       >

@@ -17,12 +17,16 @@ export function StageRail({ dto, toSettle, now }: { dto: PayWeekDto; toSettle: n
   const words = {
     draft: isRunning(week, now)
       ? `The week runs to ${formatDay(week.endsOn)}`
-      : `From ${people.length} people’s clocks and ${jobs} jobs`,
+      : people.length === 0
+        ? 'Nothing was worked'
+        : `From ${people.length === 1 ? 'one person’s clock' : `${people.length} people’s clocks`} and ${jobs === 1 ? '1 job' : `${jobs} jobs`}`,
     checked:
       at(week.checkedAt, week.checkedBy) ??
-      (toSettle > 0
-        ? `After ${toSettle === 1 ? '1 thing is' : `${toSettle} things are`} settled`
-        : 'Nothing is left to settle'),
+      (isRunning(week, now)
+        ? 'Once the week is over'
+        : toSettle > 0
+          ? `After ${toSettle === 1 ? '1 thing is' : `${toSettle} things are`} settled`
+          : 'Nothing is left to settle'),
     locked: at(week.lockedAt, week.lockedBy) ?? 'Lines freeze, statements go out',
   };
   const reached = order.indexOf(week.state);

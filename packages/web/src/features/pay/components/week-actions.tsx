@@ -57,8 +57,8 @@ export function WeekActions({ dto, toSettle, now, move }: Props) {
             {weekSpan(week)}: {money(weekSums(dto.people).gross)} for {dto.people.length} people.
           </p>
           <p className="mt-2 text-[15px] leading-[22px]">
-            Once locked, these lines never change, and everybody sees their own statement. What is wrong later is mended
-            by a line in an open week that names the line here.
+            Once locked, these lines never change, and everybody sees their own statement. What is found wrong later is
+            corrected by a line in an open week that names the line here.
           </p>
           <SheetFoot>
             <Button onClick={() => setLocking(false)}>Keep it open</Button>

@@ -42,7 +42,7 @@ export function WeekTable({ dto, chosenId, now, plan }: Props) {
   const sums = weekSums(people);
   const shown = columns.filter((column) => column.isAlways || sums[column.key] !== 0);
   return (
-    <table className="led">
+    <table className={shown.length === columns.length ? 'led is-full' : 'led'}>
       <thead>
         <tr>
           <th scope="col">Name</th>

@@ -6,11 +6,12 @@ import { addDays } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
-import { Empty, Loaded } from '../../../components/states.tsx';
+import { Empty } from '../../../components/states.tsx';
 import { hoursMinutes, money, useFormats } from '../../../lib/format.ts';
 import { useNow } from '../../../lib/now.ts';
 import { useSetWeekState, weekQuery, weeksQuery } from '../api/pay.queries.ts';
 import { ratesQuery, rulesQuery } from '../api/rates.queries.ts';
+import { LoadedPage } from '../components/loaded-page.tsx';
 import { AdjustmentSheet } from '../components/adjustment-sheet.tsx';
 import type { AdjustmentStart } from '../components/adjustment-sheet.tsx';
 import { LateTape } from '../components/late-tape.tsx';
@@ -43,9 +44,9 @@ export function PayWeekPage() {
   const week = useQuery(weekQuery(startsOn));
   const query = day || weeks.data ? week : { ...week, error: weeks.error, refetch: weeks.refetch };
   return (
-    <Loaded query={query} what="the pay week">
+    <LoadedPage title="Pay week" query={query} what="the pay week">
       {(dto) => <Week key={dto.week.id} dto={dto} weeks={weeks.data?.weeks ?? []} now={now} />}
-    </Loaded>
+    </LoadedPage>
   );
 }
 
@@ -59,7 +60,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
   const move = useSetWeekState(dto.week.startsOn);
   const { week, people } = dto;
   const warnings = troubles(dto, now, zone);
-  const toSettle = people.flatMap((person) => person.warnings).filter((warning) => warning.isBlocking).length;
+  const toSettle = warnings.filter((warning) => warning.isBlocking).length;
   const sums = weekSums(people);
   const share = shareOfSales(sums.gross, sums.tips, dto.salesCents);
   const picked = people.find((person) => person.personId === search.get('person'));
@@ -100,7 +101,10 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
             <StageRail dto={dto} toSettle={toSettle} now={now} />
             {move.error ? (
               <p className="tape pay-tape" role="alert">
-                {move.error.message} <span>What you see is the newest state.</span>
+                <span>{move.error.message} What you see is the newest state.</span>
+                <button type="button" className="link" onClick={() => move.reset()}>
+                  Carry on
+                </button>
               </p>
             ) : null}
             <TroubleTape dto={dto} warnings={warnings} />
@@ -116,7 +120,9 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
                 <Link to={paths.hours}>Write down time</Link>
               </Empty>
             ) : (
-              <WeekTable dto={dto} chosenId={chosen?.personId ?? null} now={now} plan={(id) => plan(id, true)} />
+              <div className="led-box">
+                <WeekTable dto={dto} chosenId={chosen?.personId ?? null} now={now} plan={(id) => plan(id, true)} />
+              </div>
             )}
           </div>
           {chosen ? (
@@ -147,10 +153,11 @@ function WeekSteps({ dto: { week }, weeks, now }: { dto: PayWeekDto; weeks: Week
       <Link to={paths.payWeek(addDays(week.startsOn, -7))} aria-label="Week before">
         <Icon name="left" />
       </Link>
-      {weekSpan(week)}
-      {isRunning(week, now) ? (
-        <span>, still running</span>
-      ) : (
+      <span>
+        {weekSpan(week)}
+        {isRunning(week, now) ? ', still running' : ''}
+      </span>
+      {isRunning(week, now) ? null : (
         <Link to={paths.payWeek(addDays(week.startsOn, 7))} aria-label="Week after">
           <Icon name="right" />
         </Link>

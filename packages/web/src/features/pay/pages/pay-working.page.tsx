@@ -10,11 +10,12 @@ import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
-import { Empty, Loaded } from '../../../components/states.tsx';
+import { Empty } from '../../../components/states.tsx';
 import { hoursMinutes, money, useFormats } from '../../../lib/format.ts';
 import { useNow } from '../../../lib/now.ts';
 import { weekQuery, weeksQuery } from '../api/pay.queries.ts';
 import { rulesQuery } from '../api/rates.queries.ts';
+import { LoadedPage } from '../components/loaded-page.tsx';
 import { AdjustmentSheet } from '../components/adjustment-sheet.tsx';
 import { ledgerGroups } from '../components/ledger.ts';
 import { LedgerSection, LineCells } from '../components/ledger-line.tsx';
@@ -30,7 +31,7 @@ export function PayWorkingPage() {
   const { day = '', personId = '' } = useParams();
   const week = useQuery(weekQuery(day));
   return (
-    <Loaded query={week} what="the pay week">
+    <LoadedPage title="Pay" query={week} what="the pay week">
       {(dto) => {
         const person = dto.people.find((own) => own.personId === personId);
         if (person) return <Working key={personId} dto={dto} person={person} />;
@@ -45,7 +46,7 @@ export function PayWorkingPage() {
           </>
         );
       }}
-    </Loaded>
+    </LoadedPage>
   );
 }
 

@@ -10,11 +10,11 @@ import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Sheet } from '../../../components/sheet.tsx';
-import { Loaded } from '../../../components/states.tsx';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { weeksQuery } from '../api/pay.queries.ts';
 import { payPeopleQuery, payServicesQuery, ratesQuery, rulesQuery } from '../api/rates.queries.ts';
+import { LoadedPage } from '../components/loaded-page.tsx';
 import { BandChart } from '../components/band-chart.tsx';
 import { rateText } from '../components/ledger.ts';
 import { ratesOn, rulesOn } from '../components/plan-words.ts';
@@ -31,9 +31,9 @@ export function RatesPage() {
   const rules = useQuery(rulesQuery);
   const query = rates.data ? rules : { ...rules, data: undefined, error: rates.error, refetch: rates.refetch };
   return (
-    <Loaded query={query} what="the rates">
+    <LoadedPage title="Rates" query={query} what="the rates">
       {(found) => <Rates rates={rates.data?.rates ?? []} rules={found.rules} />}
-    </Loaded>
+    </LoadedPage>
   );
 }
 

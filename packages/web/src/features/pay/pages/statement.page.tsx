@@ -7,10 +7,11 @@ import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
-import { Empty, Loaded } from '../../../components/states.tsx';
+import { Empty } from '../../../components/states.tsx';
 import { hoursMinutes, money } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { statementQuery, weekQuery } from '../api/pay.queries.ts';
+import { LoadedPage } from '../components/loaded-page.tsx';
 import { StatementPaper } from '../components/statement-paper.tsx';
 import { hoursSum, weekSpan, weekSums } from '../components/week-model.ts';
 import './pay.css';
@@ -26,9 +27,9 @@ export function StatementPage() {
 function OneStatement({ day, personId }: { day: string; personId: string }) {
   const statement = useQuery(statementQuery(day, personId));
   return (
-    <Loaded query={statement} what="the statement">
+    <LoadedPage title="Statement" query={statement} what="the statement">
       {(found) => <Papers week={found.week} statements={[found]} />}
-    </Loaded>
+    </LoadedPage>
   );
 }
 
@@ -36,7 +37,7 @@ function EveryStatement({ day }: { day: string }) {
   const { company } = useSession();
   const week = useQuery(weekQuery(day));
   return (
-    <Loaded query={week} what="the pay week">
+    <LoadedPage title="Statement" query={week} what="the pay week">
       {(dto) => (
         <Papers
           week={dto.week}
@@ -48,7 +49,7 @@ function EveryStatement({ day }: { day: string }) {
           }))}
         />
       )}
-    </Loaded>
+    </LoadedPage>
   );
 }
 
