@@ -18,7 +18,7 @@ export function PageHead({
   actions?: ReactNode;
 }) {
   return (
-    <header className="dk-head">
+    <div className="dk-head">
       <div>
         <div className="sub">{above}</div>
         <h1 className="t-hang">{title}</h1>
@@ -32,7 +32,7 @@ export function PageHead({
         ))}
       </dl>
       <div className="dk-acts no-print">{actions}</div>
-    </header>
+    </div>
   );
 }
 
