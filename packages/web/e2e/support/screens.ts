@@ -1,7 +1,7 @@
 import type { BrowserContext, Page } from 'playwright-core';
 
 import type { DemoLogin, sizes } from './browser.ts';
-import { TODAY } from './stage.ts';
+import { TODAY } from './moment.ts';
 
 /** A screen as one role sees it. */
 export interface Screen {

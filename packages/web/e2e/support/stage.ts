@@ -3,11 +3,8 @@ import { afterAll, beforeAll, inject } from 'vitest';
 
 import type {} from '../../../api/src/testing/global-setup.ts';
 import { launchBrowser, openContext, signIn, type ContextOptions, type DemoLogin } from './browser.ts';
+import { NOON } from './moment.ts';
 import { startServer, type RunningServer, type ServerOptions } from './server.ts';
-
-/** Thursday 14 May 2026, 11:00 in New York: the morning the demo's board is scripted for. */
-export const NOON = '2026-05-14T15:00:00.000Z';
-export const TODAY = '2026-05-14';
 
 /** How long anything may take to show, in ms; a busy machine stalls for seconds. */
 export const PATIENCE = 20_000;
