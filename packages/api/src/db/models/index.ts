@@ -30,6 +30,8 @@ import { initPayLineRow } from './pay-line-row.model.ts';
 import { initPayStatement } from './pay-statement.model.ts';
 import { initPayAdjustment } from './pay-adjustment.model.ts';
 import { initAuditEntry } from './audit-entry.model.ts';
+import { initClockRequest } from './clock-request.model.ts';
+import { initHoursWord } from './hours-word.model.ts';
 import { initOutboxMail } from './outbox-mail.model.ts';
 
 /** Gives every model its connection. Reads across tables are SQL, so no associations are declared. */
@@ -65,6 +67,8 @@ export function initModels(sequelize: Sequelize): void {
   initPayStatement(sequelize);
   initPayAdjustment(sequelize);
   initAuditEntry(sequelize);
+  initClockRequest(sequelize);
+  initHoursWord(sequelize);
   initOutboxMail(sequelize);
 }
 
@@ -99,4 +103,6 @@ export { PayLineRow } from './pay-line-row.model.ts';
 export { PayStatement } from './pay-statement.model.ts';
 export { PayAdjustment } from './pay-adjustment.model.ts';
 export { AuditEntry } from './audit-entry.model.ts';
+export { ClockRequest } from './clock-request.model.ts';
+export { HoursWord } from './hours-word.model.ts';
 export { OutboxMail } from './outbox-mail.model.ts';

@@ -1,6 +1,8 @@
+import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import { tag } from '@driprail/shared/authz/ability';
 import type { ClockEntryDto, ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import type { EntrySpan } from '@driprail/shared/contracts/hours.contract';
 import { stamp } from '@driprail/shared/domain/time/device';
 import { isBefore } from '@driprail/shared/domain/time/zone';
 import { authorize } from '../../authz/authorize.ts';
@@ -45,90 +47,101 @@ export async function pressClock(ctx: Ctx, press: ClockPress): Promise<{ clock: 
   return { clock: answer, isRepeat };
 }
 
-export interface EntryFields {
-  kind: ClockKindName;
-  startedAt: string;
-  endedAt: string | null;
-  isInterrupted: boolean;
+export type Span = EntrySpan;
+export interface EntryFields extends Span {
   reason: string;
 }
 
 /** Corrects an entry with a reason; both versions stay on record. Locked weeks are paid by a correction, never changed. */
 export function correctEntry(
-  { actor, ability, now }: Ctx,
+  ctx: Ctx,
   id: string,
-  { version, reason, ...fields }: EntryFields & { version: number },
+  { version, reason, ...span }: EntryFields & { version: number },
 ): Promise<ClockEntryDto> {
   return inTransaction(async (tx) => {
     const entry = await ClockEntry.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
     if (!entry) throw notFound('That entry');
-    authorize(ability, 'update', tag('ClockEntry', { id, personId: entry.personId }));
+    authorize(ctx.ability, 'update', tag('ClockEntry', { id, personId: entry.personId }));
     if (entry.version !== version)
       throw conflict('stale', 'Somebody changed this entry meanwhile. Look at the newer one.');
-    refuseBackwards(fields, now());
-    const before = {
-      kind: entry.kind,
-      startedAt: entry.startedAt,
-      endedAt: entry.endedAt,
-      isInterrupted: entry.isInterrupted,
-    };
-    await entry.update(
-      {
-        ...fields,
-        startedAt: new Date(fields.startedAt),
-        endedAt: fields.endedAt ? new Date(fields.endedAt) : null,
-        isCorrected: true,
-        version: version + 1,
-      },
-      { transaction: tx },
-    );
-    await ClockCorrection.create(
-      { id: uuid(), entryId: id, userId: actor.userId, at: now(), before, after: fields, reason },
-      { transaction: tx },
-    );
-    await audit(tx, { userId: actor.userId, at: now() }, 'clock_entry', id, 'corrected', {
-      before,
-      after: fields,
-      reason,
-    });
-    hintAfterCommit(tx, ['desk', { personIds: [entry.personId] }], 'clock', entry.personId);
-    return found(await findEntry(id, now(), tx));
+    return applyCorrection(tx, ctx, entry, span, reason);
   });
+}
+
+/** Writes a correction inside the caller's transaction; who may was settled before. */
+export async function applyCorrection(
+  tx: Transaction,
+  { actor, now }: Ctx,
+  entry: ClockEntry,
+  span: Span,
+  reason: string,
+): Promise<ClockEntryDto> {
+  refuseBackwards(span, now());
+  const before = spanOf(entry);
+  await entry.update({ ...columnsOf(span), isCorrected: true, version: entry.version + 1 }, { transaction: tx });
+  await ClockCorrection.create(
+    { id: uuid(), entryId: entry.id, userId: actor.userId, at: now(), before, after: span, reason },
+    { transaction: tx },
+  );
+  await audit(tx, { userId: actor.userId, at: now() }, 'clock_entry', entry.id, 'corrected', {
+    before,
+    after: span,
+    reason,
+  });
+  hintAfterCommit(tx, ['desk', { personIds: [entry.personId] }], 'clock', entry.personId);
+  return found(await findEntry(entry.id, now(), tx));
 }
 
 export function addEntry(
-  { actor, ability, now }: Ctx,
-  { personId, visitId, reason, ...fields }: EntryFields & { personId: string; visitId: string | null },
+  ctx: Ctx,
+  { personId, visitId, reason, ...span }: EntryFields & { personId: string; visitId: string | null },
 ): Promise<ClockEntryDto> {
   return inTransaction(async (tx) => {
-    authorize(ability, 'update', tag('ClockEntry', { id: '', personId }));
+    authorize(ctx.ability, 'update', tag('ClockEntry', { id: '', personId }));
     if (!(await Person.findByPk(personId, { transaction: tx }))) throw notFound('That person');
-    refuseBackwards(fields, now());
-    const id = uuid();
-    await ClockEntry.create(
-      {
-        id,
-        personId,
-        visitId,
-        kind: fields.kind,
-        startedAt: new Date(fields.startedAt),
-        endedAt: fields.endedAt ? new Date(fields.endedAt) : null,
-        isInterrupted: fields.isInterrupted,
-        isCorrected: true,
-      },
-      { transaction: tx },
-    );
-    await ClockCorrection.create(
-      { id: uuid(), entryId: id, userId: actor.userId, at: now(), before: null, after: fields, reason },
-      { transaction: tx },
-    );
-    await audit(tx, { userId: actor.userId, at: now() }, 'clock_entry', id, 'added', { ...fields, reason });
-    hintAfterCommit(tx, ['desk', { personIds: [personId] }], 'clock', personId);
-    return found(await findEntry(id, now(), tx));
+    return writeEntry(tx, ctx, { personId, visitId }, span, reason);
   });
 }
 
-function refuseBackwards({ startedAt, endedAt }: { startedAt: string; endedAt: string | null }, now: Date): void {
+/** Writes down time that the clock missed, inside the caller's transaction. */
+export async function writeEntry(
+  tx: Transaction,
+  { actor, now }: Ctx,
+  whose: { personId: string; visitId: string | null },
+  span: Span,
+  reason: string,
+): Promise<ClockEntryDto> {
+  refuseBackwards(span, now());
+  const id = uuid();
+  await ClockEntry.create({ id, ...whose, ...columnsOf(span), isCorrected: true }, { transaction: tx });
+  await ClockCorrection.create(
+    { id: uuid(), entryId: id, userId: actor.userId, at: now(), before: null, after: span, reason },
+    { transaction: tx },
+  );
+  await audit(tx, { userId: actor.userId, at: now() }, 'clock_entry', id, 'added', { ...span, reason });
+  hintAfterCommit(tx, ['desk', { personIds: [whose.personId] }], 'clock', whose.personId);
+  return found(await findEntry(id, now(), tx));
+}
+
+/** An entry's stretch of time as it stands. */
+export function spanOf(entry: ClockEntry): Span {
+  return {
+    kind: entry.kind,
+    startedAt: entry.startedAt.toISOString(),
+    endedAt: entry.endedAt?.toISOString() ?? null,
+    isInterrupted: entry.isInterrupted ?? false,
+  };
+}
+
+function columnsOf({ kind, startedAt, endedAt, isInterrupted }: Span) {
+  return { kind, startedAt: new Date(startedAt), endedAt: endedAt ? new Date(endedAt) : null, isInterrupted };
+}
+
+/** @throws 422 at the field when a stretch of time ends before it starts, or lies ahead */
+export function refuseBackwards(
+  { startedAt, endedAt }: { startedAt: string; endedAt: string | null },
+  now: Date,
+): void {
   if (endedAt && !isBefore(startedAt, endedAt)) {
     throw unprocessable('backwards', 'The end must be after the start.', {
       fields: { endedAt: 'The end must be after the start.' },
