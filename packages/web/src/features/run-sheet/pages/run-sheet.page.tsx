@@ -176,9 +176,11 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
 }
 
 function DayLinks({ sheet, today }: { sheet: RunSheetDto; today: string }) {
+  const { user } = useSession();
+  const others = sheet.crewNames.filter((name) => name !== user.name);
   return (
     <>
-      {sheet.crewNames.length > 1 ? <span>With {sheet.crewNames.join(', ')}. </span> : null}
+      {others.length > 0 ? <span>With {others.join(', ')}. </span> : null}
       {sheet.day === today ? (
         <Link to={paths.runSheetDay(addDays(today, 1))}>
           Tomorrow <Icon name="right" />
