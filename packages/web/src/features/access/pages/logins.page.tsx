@@ -40,27 +40,29 @@ export function LoginsPage() {
         }
       />
       <RailPage>
-        <div className="hung p-5 max-w-[1100px] scroll-x">
-          <Loaded query={logins} what="the logins">
-            {({ logins: list }) => (
-              <table className="grid-t">
-                <thead>
-                  <tr>
-                    <th>Name</th>
-                    <th>E-mail</th>
-                    <th>Role</th>
-                    <th>State</th>
-                    <th className="r">Do</th>
-                  </tr>
-                </thead>
-                <tbody>
-                  {list.map((login) => (
-                    <LoginRow key={login.id} login={login} />
-                  ))}
-                </tbody>
-              </table>
-            )}
-          </Loaded>
+        <div className="hung p-5 max-w-[1100px]">
+          <div className="scroll-x">
+            <Loaded query={logins} what="the logins">
+              {({ logins: list }) => (
+                <table className="grid-t">
+                  <thead>
+                    <tr>
+                      <th>Name</th>
+                      <th>E-mail</th>
+                      <th>Role</th>
+                      <th>State</th>
+                      <th className="r">Do</th>
+                    </tr>
+                  </thead>
+                  <tbody>
+                    {list.map((login) => (
+                      <LoginRow key={login.id} login={login} />
+                    ))}
+                  </tbody>
+                </table>
+              )}
+            </Loaded>
+          </div>
         </div>
       </RailPage>
       {isInviting ? <InviteSheet onClose={() => setInviting(false)} /> : null}

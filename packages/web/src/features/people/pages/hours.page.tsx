@@ -14,6 +14,8 @@ import { useFormats } from '../../../lib/format.ts';
 import { useNow } from '../../../lib/now.ts';
 import { hoursQuery } from '../api/hours.queries.ts';
 import { EntryForm } from '../components/entry-form.tsx';
+import { HoursRequests } from '../components/hours-requests.tsx';
+import { HoursWords } from '../components/hours-words.tsx';
 
 /** The clock of a day, everybody's: hours, never money. The address may name the day and an entry to open. */
 export function HoursPage() {
@@ -59,6 +61,7 @@ export function HoursPage() {
         }
       />
       <RailPage>
+        <HoursRequests />
         <div className="hung p-5 max-w-[1100px]">
           <Loaded query={hours} what="the hours">
             {() =>
@@ -70,6 +73,7 @@ export function HoursPage() {
             }
           </Loaded>
         </div>
+        <HoursWords day={day} />
       </RailPage>
       {editing ? (
         <Sheet title={editing === 'new' ? 'Time' : 'Correct'} onClose={close} width={620}>
@@ -98,7 +102,7 @@ function PeopleHours({
       {people.map(([personId, name]) => {
         const own = entries.filter((entry) => entry.personId === personId);
         const worked = own
-          .filter((e) => e.kind !== 'meal_break')
+          .filter((e) => e.kind !== 'meal_break' && !e.isForgotten)
           .reduce((sum, e) => sum + minutesBetween(e.startedAt, e.endedAt ?? now), 0);
         return (
           <section key={personId} className="mb-5" aria-label={name}>
@@ -120,7 +124,8 @@ function PeopleHours({
                     format.span(entry.startedAt, entry.endedAt)
                   ) : entry.isForgotten ? (
                     <span className="text-clay-text font-bold">
-                      <Mark name="m-late" /> since {format.clock(entry.startedAt)}, no clock-out
+                      <Mark name="m-late" /> since {formatDay(dayOf(entry.startedAt, format.zone))},{' '}
+                      {format.clock(entry.startedAt)}, no clock-out
                     </span>
                   ) : (
                     `since ${format.clock(entry.startedAt)}`

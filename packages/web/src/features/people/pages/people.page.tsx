@@ -27,51 +27,53 @@ export function PeoplePage() {
         }
       />
       <RailPage>
-        <div className="hung p-5 max-w-[1100px] scroll-x">
-          <Loaded query={people} what="the people">
-            {({ people: list }) =>
-              list.length === 0 ? (
-                <Empty>Nobody yet. Add who works here; a crew and a login come after.</Empty>
-              ) : (
-                <table className="grid-t min-w-[640px]">
-                  <thead>
-                    <tr>
-                      <th>Name</th>
-                      <th>Phone</th>
-                      <th>Skills</th>
-                      <th>Login</th>
-                      <th>Time off</th>
-                      <th className="r">Change</th>
-                    </tr>
-                  </thead>
-                  <tbody>
-                    {list.map((person) => (
-                      <tr key={person.id} className={person.isActive ? '' : 't-3'}>
-                        <td>
-                          <b>{person.name}</b>
-                          {person.isTrainee ? ', trainee' : ''}
-                          {person.isActive ? '' : ', left'}
-                        </td>
-                        <td>{person.phone}</td>
-                        <td>{person.skills.map((skill) => skillNames[skill]).join(', ') || '–'}</td>
-                        <td>{person.loginRole ?? 'none'}</td>
-                        <td>
-                          {person.timeOff[0]
-                            ? `${formatDate(person.timeOff[0].startsOn)}${person.timeOff.length > 1 ? ' and more' : ''}`
-                            : '–'}
-                        </td>
-                        <td className="r">
-                          <Button look="bare" onClick={() => setEditingId(person.id)}>
-                            <Icon name="pen" /> Edit
-                          </Button>
-                        </td>
+        <div className="hung p-5 max-w-[1100px]">
+          <div className="scroll-x">
+            <Loaded query={people} what="the people">
+              {({ people: list }) =>
+                list.length === 0 ? (
+                  <Empty>Nobody yet. Add who works here; a crew and a login come after.</Empty>
+                ) : (
+                  <table className="grid-t min-w-[640px]">
+                    <thead>
+                      <tr>
+                        <th>Name</th>
+                        <th>Phone</th>
+                        <th>Skills</th>
+                        <th>Login</th>
+                        <th>Time off</th>
+                        <th className="r">Change</th>
                       </tr>
-                    ))}
-                  </tbody>
-                </table>
-              )
-            }
-          </Loaded>
+                    </thead>
+                    <tbody>
+                      {list.map((person) => (
+                        <tr key={person.id} className={person.isActive ? '' : 't-3'}>
+                          <td>
+                            <b>{person.name}</b>
+                            {person.isTrainee ? ', trainee' : ''}
+                            {person.isActive ? '' : ', left'}
+                          </td>
+                          <td>{person.phone}</td>
+                          <td>{person.skills.map((skill) => skillNames[skill]).join(', ') || '–'}</td>
+                          <td>{person.loginRole ?? 'none'}</td>
+                          <td>
+                            {person.timeOff[0]
+                              ? `${formatDate(person.timeOff[0].startsOn)}${person.timeOff.length > 1 ? ' and more' : ''}`
+                              : '–'}
+                          </td>
+                          <td className="r">
+                            <Button look="bare" onClick={() => setEditingId(person.id)}>
+                              <Icon name="pen" /> Edit
+                            </Button>
+                          </td>
+                        </tr>
+                      ))}
+                    </tbody>
+                  </table>
+                )
+              }
+            </Loaded>
+          </div>
         </div>
       </RailPage>
       {editingId !== null && (editingId === 'new' || editing) ? (

@@ -41,75 +41,77 @@ export function ServiceMenuPage() {
         }
       />
       <RailPage>
-        <div className="hung p-5 scroll-x" role="region" aria-label="Prices" tabIndex={0}>
-          <Loaded query={menu} what="the service menu">
-            {({ services }) =>
-              services.length === 0 ? (
-                <Empty>Nothing on the menu yet. Add what you sell, then book the first job.</Empty>
-              ) : (
-                <table className="grid-t min-w-[820px]">
-                  <thead>
-                    <tr>
-                      <th>Service</th>
-                      {sizeClasses.map((size) => (
-                        <th key={size} className="r">
-                          {sizeClassNames[size]}
-                        </th>
-                      ))}
-                      <th className="!pl-6">Needs</th>
-                      {canEdit ? <th className="r">Change</th> : null}
-                    </tr>
-                  </thead>
-                  {serviceKinds.map((kind) => (
-                    <tbody key={kind}>
-                      {services
-                        .filter((service) => service.kind === kind)
-                        .map((service, index) => (
-                          <tr key={service.id} className={service.isActive ? '' : 't-3'}>
-                            <td>
-                              {index === 0 ? <span className="block t-tight t-2 pt-2">{kindNames[kind]}</span> : null}
-                              <b>{service.name}</b>
-                              {service.isActive ? '' : ' (off the menu)'}
-                              {service.description ? (
-                                <span className="block t-2 max-w-[38ch]">{service.description}</span>
-                              ) : null}
-                            </td>
-                            {sizeClasses.map((size) => {
-                              const price = service.prices.find((p) => p.sizeClass === size);
-                              return (
-                                <td key={size} className="r">
-                                  {price ? (
-                                    <>
-                                      <span className="t-fig">{money(price.priceCents)}</span>
-                                      <span className="block t-2">{formatMinutes(price.minutes)}</span>
-                                    </>
-                                  ) : (
-                                    '–'
-                                  )}
-                                </td>
-                              );
-                            })}
-                            <td className="!pl-6">
-                              {[
-                                ...service.skills.map((s) => skillNames[s]),
-                                ...service.equipment.map((e) => equipmentNames[e]),
-                              ].join(', ') || '–'}
-                            </td>
-                            {canEdit ? (
-                              <td className="r">
-                                <Button look="bare" onClick={() => setEditing(service)}>
-                                  <Icon name="pen" /> Edit
-                                </Button>
-                              </td>
-                            ) : null}
-                          </tr>
+        <div className="hung p-5">
+          <div className="scroll-x" role="region" aria-label="Prices" tabIndex={0}>
+            <Loaded query={menu} what="the service menu">
+              {({ services }) =>
+                services.length === 0 ? (
+                  <Empty>Nothing on the menu yet. Add what you sell, then book the first job.</Empty>
+                ) : (
+                  <table className="grid-t min-w-[820px]">
+                    <thead>
+                      <tr>
+                        <th>Service</th>
+                        {sizeClasses.map((size) => (
+                          <th key={size} className="r">
+                            {sizeClassNames[size]}
+                          </th>
                         ))}
-                    </tbody>
-                  ))}
-                </table>
-              )
-            }
-          </Loaded>
+                        <th className="!pl-6">Needs</th>
+                        {canEdit ? <th className="r">Change</th> : null}
+                      </tr>
+                    </thead>
+                    {serviceKinds.map((kind) => (
+                      <tbody key={kind}>
+                        {services
+                          .filter((service) => service.kind === kind)
+                          .map((service, index) => (
+                            <tr key={service.id} className={service.isActive ? '' : 't-3'}>
+                              <td>
+                                {index === 0 ? <span className="block t-tight t-2 pt-2">{kindNames[kind]}</span> : null}
+                                <b>{service.name}</b>
+                                {service.isActive ? '' : ' (off the menu)'}
+                                {service.description ? (
+                                  <span className="block t-2 max-w-[38ch]">{service.description}</span>
+                                ) : null}
+                              </td>
+                              {sizeClasses.map((size) => {
+                                const price = service.prices.find((p) => p.sizeClass === size);
+                                return (
+                                  <td key={size} className="r">
+                                    {price ? (
+                                      <>
+                                        <span className="t-fig">{money(price.priceCents)}</span>
+                                        <span className="block t-2">{formatMinutes(price.minutes)}</span>
+                                      </>
+                                    ) : (
+                                      '–'
+                                    )}
+                                  </td>
+                                );
+                              })}
+                              <td className="!pl-6">
+                                {[
+                                  ...service.skills.map((s) => skillNames[s]),
+                                  ...service.equipment.map((e) => equipmentNames[e]),
+                                ].join(', ') || '–'}
+                              </td>
+                              {canEdit ? (
+                                <td className="r">
+                                  <Button look="bare" onClick={() => setEditing(service)}>
+                                    <Icon name="pen" /> Edit
+                                  </Button>
+                                </td>
+                              ) : null}
+                            </tr>
+                          ))}
+                      </tbody>
+                    ))}
+                  </table>
+                )
+              }
+            </Loaded>
+          </div>
         </div>
       </RailPage>
       {editing ? (
