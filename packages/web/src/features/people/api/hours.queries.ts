@@ -2,6 +2,7 @@ import { queryOptions, useMutation } from '@tanstack/react-query';
 import { getBoard } from '@driprail/shared/contracts/board.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import { addClockEntry, correctClockEntry, listClock } from '@driprail/shared/contracts/clock.contract';
+import { askClockChange } from '@driprail/shared/contracts/hours.contract';
 import { call } from '../../../lib/call.ts';
 
 export const hoursQuery = (from: string, to: string) =>
@@ -29,5 +30,13 @@ export function useSaveEntry() {
         : call(correctClockEntry, { params: { id: save.id }, body: save.body }),
     onSuccess: (_d, _v, _s, { client }) =>
       Promise.all(['clock', 'pay', 'board'].map((key) => client.invalidateQueries({ queryKey: [key] }))),
+  });
+}
+
+/** Proposes a change to the person it is about; nothing changes before that person agrees. */
+export function useProposeChange() {
+  return useMutation({
+    mutationFn: (body: NonNullable<RequestOf<typeof askClockChange>['body']>) => call(askClockChange, { body }),
+    onSettled: (_d, _e, _v, _s, { client }) => client.invalidateQueries({ queryKey: ['clock'] }),
   });
 }

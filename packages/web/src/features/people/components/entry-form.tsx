@@ -19,6 +19,7 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
   const { zone } = useSession().company;
   const people = useQuery(peopleQuery);
   const save = useSaveEntry();
+  const propose = useProposeChange();
   const [value, setValue] = useState({
     personId: entry?.personId ?? '',
     kind: entry?.kind ?? 'shop',
@@ -31,25 +32,21 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
   });
   const isAtJob = entry === null && (value.kind === 'job' || value.kind === 'travel');
   const visits = useQuery({ ...dayVisitsQuery(value.day), enabled: isAtJob && value.day !== '' });
-  const fields = fieldsOf(save.error);
-  const submit = () => {
+  const fields = { ...fieldsOf(save.error), ...fieldsOf(propose.error) };
+  const spanOf = () => {
     const startedAt =
       entry && clockOf(entry.startedAt, zone) === value.from ? entry.startedAt : instantOf(value.day, value.from, zone);
     // An end before its start by the clock is past midnight.
     const endDay = value.to !== '' && value.to < value.from ? addDays(value.day, 1) : value.day;
-    const endedAt =
-      value.to === ''
-        ? null
-        : entry?.endedAt && clockOf(entry.endedAt, zone) === value.to
-          ? entry.endedAt
-          : instantOf(endDay, value.to, zone);
-    const span = { kind: value.kind, startedAt, endedAt, isInterrupted: value.isInterrupted, reason: value.reason };
+    const isSameEnd = entry?.endedAt && clockOf(entry.endedAt, zone) === value.to;
+    const endedAt = value.to === '' ? null : isSameEnd ? entry.endedAt : instantOf(endDay, value.to, zone);
+    return { kind: value.kind, startedAt, endedAt, isInterrupted: value.isInterrupted };
+  };
+  const submit = () => {
+    const span = { ...spanOf(), reason: value.reason };
     if (save.isPending) return;
     if (entry) save.mutate({ id: entry.id, body: { ...span, version: entry.version } }, { onSuccess: onDone });
-    else {
-      const visitId = isAtJob && value.visitId !== '' ? value.visitId : null;
-      save.mutate({ id: null, body: { ...span, personId: value.personId, visitId } }, { onSuccess: onDone });
-    }
+    else save.mutate({ id: null, body: { ...span, personId: value.personId, visitId: null } }, { onSuccess: onDone });
   };
   return (
     <form
@@ -152,8 +149,20 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
         error={fields['reason']}
         onChange={(event) => setValue({ ...value, reason: event.target.value })}
       />
-      <FormFault error={save.error} fields={fields} className="mt-3" />
+      <FormFault error={save.error ?? propose.error} fields={fields} className="mt-3" />
+      {propose.isSuccess ? <p role="status">{entry?.personName} is asked; nothing changes before the answer.</p> : null}
       <SheetFoot>
+        {entry ? (
+          <Button
+            isBusy={propose.isPending}
+            disabled={value.reason.trim() === '' || propose.isSuccess}
+            onClick={() =>
+              propose.mutate({ personId: entry.personId, entryId: entry.id, after: spanOf(), reason: value.reason })
+            }
+          >
+            Propose it to {entry.personName}
+          </Button>
+        ) : null}
         <Button type="submit" look="main" isBusy={save.isPending}>
           {entry ? 'Save the correction' : 'Write it down'}
         </Button>

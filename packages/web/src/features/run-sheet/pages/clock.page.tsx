@@ -1,7 +1,8 @@
+import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
-import type { ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import type { ClockEntryDto, ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import { formatDay, formatMinutes } from '@driprail/shared/domain/time/format';
 import { dayOf, minutesBetween } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
@@ -11,6 +12,8 @@ import { Empty, Loaded } from '../../../components/states.tsx';
 import { useFormats } from '../../../lib/format.ts';
 import { useNow } from '../../../lib/now.ts';
 import { clockQuery, newClockPress, usePressClock } from '../api/run-sheet.queries.ts';
+import { ChangeSheet } from '../components/change-sheet.tsx';
+import { OwnHours } from '../components/own-hours.tsx';
 import { PhoneHead } from '../components/phone-head.tsx';
 import './run-sheet.css';
 
@@ -59,6 +62,7 @@ export function ClockPage() {
 function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
   const format = useFormats();
   const press = usePressClock();
+  const [wrong, setWrong] = useState<ClockEntryDto | null>(null);
   const { open } = clock;
   return (
     <>
@@ -69,8 +73,10 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
       <p className="t-2">Today. This week {formatMinutes(clock.weekMinutes)}.</p>
       {clock.forgotten.map((entry) => (
         <p key={entry.id} className="tape mt-2">
-          <b>No clock-out since {formatDay(dayOf(entry.startedAt, format.zone))}.</b> Ask dispatch to set the time;
-          nobody guesses it.
+          <b>No clock-out since {formatDay(dayOf(entry.startedAt, format.zone))}.</b> Nobody guesses it.{' '}
+          <button type="button" className="link" onClick={() => setWrong(entry)}>
+            Say when you stopped
+          </button>
         </p>
       ))}
       {press.error ? (
@@ -93,10 +99,13 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
           </button>
         ))}
       </div>
-      <h2 className="sec">Today</h2>
+      <OwnHours today={dayOf(now, format.zone)} personId={clock.personId} />
+      <h2 className="sec">
+        Today <span>press one that is not right</span>
+      </h2>
       {clock.today.length === 0 ? <Empty>Nothing yet. Clock in below.</Empty> : null}
       {clock.today.map((entry) => (
-        <p key={entry.id} className="flex justify-between border-b border-line py-2 text-[16px]">
+        <button key={entry.id} type="button" className="clock-row" onClick={() => setWrong(entry)}>
           <span>
             {clockKindNames[entry.kind]}
             {entry.jobNumber ? <span className="t-2">, job {entry.jobNumber}</span> : null}
@@ -105,8 +114,9 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
             {entry.endedAt ? format.span(entry.startedAt, entry.endedAt) : `since ${format.clock(entry.startedAt)}`},{' '}
             {formatMinutes(minutesBetween(entry.startedAt, entry.endedAt ?? now))}
           </span>
-        </p>
+        </button>
       ))}
+      {wrong ? <ChangeSheet entry={wrong} onClose={() => setWrong(null)} /> : null}
       <footer className="ph-act">
         {open ? (
           <button
