@@ -31,6 +31,7 @@ function weekOf(people: number): PayWeekInput {
     startsAt: at(0, 4),
     endsAt: at(7, 4),
     zone: 'America/New_York',
+    clock: '24',
     rules: { overtimeRuleSet: 'us_federal', minimumWage: '7.25', crewSplit: 'equal', mealBreakMinutes: 30 },
     people: ids.map((id) => ({ id, name: id })),
     entries: ids.flatMap((personId) =>
@@ -75,7 +76,6 @@ function weekOf(people: number): PayWeekInput {
           visitId: `visit-${personId}-${day}-${hour}`,
           serviceId: 'polish',
           serviceName: 'One-step polish',
-          customerName: 'Nakagawa',
           commissionableCents: 26_500,
           doneAt: at(day, hour + 1),
           crew: [{ personId, position: 0, weight: 1, isTrainee: false, minutes: 120 }],

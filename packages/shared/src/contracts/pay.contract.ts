@@ -100,7 +100,8 @@ export const addPayRules = endpoint({
 
 export const payWeekStates = ['draft', 'checked', 'locked'] as const;
 export const payWeekHead = z.object({
-  id,
+  /** Null for a week that nobody has checked, locked or added to yet. */
+  id: id.nullable(),
   startsOn: day,
   /** Last day inside the week. */
   endsOn: day,
@@ -163,6 +164,8 @@ const correctedLine = z.object({
   position: z.int(),
 });
 const correctedLines = z.record(z.string(), correctedLine);
+/** Customers by job id, from today's rows: lines name them by job number only. */
+const customers = z.record(z.string(), z.string());
 export type CorrectedLine = z.infer<typeof correctedLine>;
 export const payWeekDto = z.object({
   week: payWeekHead,
@@ -186,6 +189,7 @@ export const payWeekDto = z.object({
     }),
   ),
   correctedLines,
+  customers,
   /** When the clock entries and jobs that warnings name took place, by their ids. */
   warningTimes: z.record(z.string(), instant),
 });
@@ -271,6 +275,6 @@ export const getStatement = endpoint({
   roles: everyone,
   summary: 'One person’s statement of a week: one’s own when locked, anybody’s for the owner.',
   params: weekParam.extend({ personId: id }),
-  response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string(), correctedLines }),
+  response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string(), correctedLines, customers }),
 });
 export type StatementDto = z.infer<(typeof getStatement)['response']>;

@@ -80,14 +80,13 @@ async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promis
       { transaction: tx },
     );
   }
-  const snapshot = { ...input, doneLines: input.doneLines.map(({ customerName: _name, ...line }) => line) };
   await week.update(
     {
       state: 'locked',
       lockedAt: now(),
       lockedBy: actor.userId,
       engineVersion: result.engineVersion,
-      snapshot,
+      snapshot: input,
       version: week.version + 1,
     },
     { transaction: tx },

@@ -44,13 +44,13 @@ SELECT json_build_object(
   'rates', coalesce((SELECT json_agg(json_build_object('id', r.id, 'kind', r.kind, 'personId', r.person_id, 'serviceId', r.service_id,
       'clockKind', r.clock_kind, 'value', r.value::text, 'startsOn', r.starts_on) ORDER BY r.starts_on, r.id) FROM pay_rates r), '[]'::json),
   'lines', coalesce((SELECT json_agg(json_build_object('lineId', l.id, 'jobId', j.id, 'jobNumber', j.number, 'visitId', l.finished_visit_id,
-      'serviceId', s.id, 'serviceName', s.name, 'customerName', c.name, 'priceCents', l.price_cents, 'discountCents', j.discount_cents,
+      'serviceId', s.id, 'serviceName', s.name, 'priceCents', l.price_cents, 'discountCents', j.discount_cents,
       'jobPrices', (SELECT json_agg(json_build_object('lineId', o.id, 'priceCents', o.price_cents) ORDER BY o.position, o.id)
          FROM job_lines o WHERE o.job_id = j.id),
       'doneAt', to_json(l.finished_at) #>> '{}',
       'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position) FROM visit_crew vc WHERE vc.visit_id = l.finished_visit_id), '[]'::json))
       ORDER BY l.finished_at, j.number, l.position)
-     FROM line l JOIN jobs j ON j.id = l.job_id JOIN services s ON s.id = l.service_id JOIN customers c ON c.id = j.customer_id), '[]'::json),
+     FROM line l JOIN jobs j ON j.id = l.job_id JOIN services s ON s.id = l.service_id), '[]'::json),
   'tips', coalesce((SELECT json_agg(json_build_object('id', t.id, 'jobId', j.id, 'jobNumber', j.number, 'amountCents', t.amount_cents,
       'method', t.method, 'receivedAt', to_json(t.received_at) #>> '{}', 'alreadyReceived', t.already_received,
       'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position)
@@ -66,7 +66,7 @@ SELECT json_build_object(
 
 /** The engine's input for a week as the records stand at `asOf`. */
 export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): Promise<PayWeekInput> {
-  const { zone } = await companyOf(tx);
+  const { zone, clock } = await companyOf(tx);
   const rules = await rulesOn(week.startsOn, tx);
   const startsAt = week.startsAt.toISOString();
   const endsAt = week.endsAt.toISOString();
@@ -81,6 +81,7 @@ export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): P
     startsAt,
     endsAt,
     zone,
+    clock,
     rules: {
       overtimeRuleSet: rules.overtimeRuleSet,
       minimumWage: rules.minimumWage,

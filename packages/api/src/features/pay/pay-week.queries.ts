@@ -5,6 +5,7 @@ import type { PayLine, PayWeekInput, PersonWeek } from '@driprail/shared/domain/
 import type { PayWeek } from '../../db/models/index.ts';
 import { PayLineRow, PayStatement } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
+import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf, correctionsOfWeek, differences } from './corrections.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { salesOf } from './week-figures.queries.ts';
@@ -25,6 +26,7 @@ export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): P
     engineVersion: week.engineVersion ?? ENGINE_VERSION,
     lateDifferences: frozen ? differences(frozen.people, computed.people, await correctionsOfWeek(week.id, tx)) : [],
     correctedLines: await correctedLinesOf(people, tx),
+    customers: await customersOf(people, tx),
     warningTimes: warningTimes(people, input),
   };
 }

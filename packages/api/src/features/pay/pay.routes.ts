@@ -1,6 +1,5 @@
 import * as api from '@driprail/shared/contracts/pay.contract';
 import { todayOf } from '../../db/company.ts';
-import { PayWeek } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
@@ -10,28 +9,18 @@ import { setWeekState } from './lock.service.ts';
 import { readPayWeek } from './pay-week.queries.ts';
 import { addRate, addRules, listRates, listRules } from './rates.service.ts';
 import { listStatements, readStatement } from './statements.queries.ts';
-import { listWeekFigures } from './week-figures.queries.ts';
-import { headOf, weekOf } from './weeks.service.ts';
+import { listWeeks } from './week-figures.queries.ts';
+import { weekAt } from './weeks.service.ts';
 
 export function payRoutes(table: RouteTable): void {
-  const read = (day: string, now: Date) => inTransaction(async (tx) => readPayWeek(await weekOf(day, tx), now, tx));
+  const read = (day: string, now: Date) => inTransaction(async (tx) => readPayWeek(await weekAt(day, tx), now, tx));
 
   route(table, api.listRates, async () => ({ rates: await listRates() }));
   route(table, api.addRate, async ({ body }, ctx) => ({ rate: await addRate(ctx, body) }));
   route(table, api.listPayRules, async () => ({ rules: await listRules() }));
   route(table, api.addPayRules, async ({ body }, ctx) => ({ rules: await addRules(ctx, body) }));
   route(table, api.listPayWeeks, async (_input, { now }) => {
-    await inTransaction(async (tx) => weekOf(await todayOf(now(), tx), tx));
-    const figures = await listWeekFigures();
-    const weeks = await PayWeek.findAll({ where: { id: figures.map((f) => f.id) }, order: [['startsOn', 'DESC']] });
-    return {
-      weeks: await Promise.all(
-        weeks.map(async (week) => {
-          const { grossCents = null, tipCents = null, salesCents = 0 } = figures.find((f) => f.id === week.id) ?? {};
-          return { ...(await headOf(week)), grossCents, tipCents, salesCents };
-        }),
-      ),
-    };
+    return { weeks: await listWeeks(await todayOf(now())) };
   });
   route(table, api.getPayWeek, ({ params }, { now }) => read(params.startsOn, now()));
   route(table, api.setPayWeekState, ({ params, body }, ctx) =>

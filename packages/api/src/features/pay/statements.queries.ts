@@ -6,9 +6,10 @@ import { companyOf } from '../../db/company.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
+import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf } from './corrections.queries.ts';
 import { readFrozen, readPayWeek } from './pay-week.queries.ts';
-import { headOf, weekOf } from './weeks.service.ts';
+import { headOf, weekAt } from './weeks.service.ts';
 
 interface StatementHead {
   weekId: string;
@@ -33,7 +34,7 @@ export async function listStatements({ actor }: Ctx) {
 /** @throws 403 for another's statement or a week that is not locked yet, except to the owner */
 export function readStatement({ ability, now }: Ctx, day: string, personId: string): Promise<StatementDto> {
   return inTransaction(async (tx) => {
-    const week = await weekOf(day, tx);
+    const week = await weekAt(day, tx);
     authorize(ability, 'read', tag('Statement', { personId, state: week.state }));
     const people =
       week.state === 'locked'
@@ -46,6 +47,7 @@ export function readStatement({ ability, now }: Ctx, day: string, personId: stri
       person,
       companyName: (await companyOf(tx)).name,
       correctedLines: await correctedLinesOf([person], tx),
+      customers: await customersOf([person], tx),
     };
   });
 }

@@ -1,6 +1,9 @@
 import type { Transaction } from 'sequelize';
-import type { PayWeek } from '../../db/models/index.ts';
+import type { OutputOf } from '@driprail/shared/contracts/endpoint';
+import type { listPayWeeks } from '@driprail/shared/contracts/pay.contract';
+import { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
+import { headOf, weekAt } from './weeks.service.ts';
 
 /** What a finished line `l` of job `j` sold for: a discount lowers each line by its share of the job's price. */
 const soldSql = `l.price_cents - CASE WHEN j.discount_cents = 0 THEN 0 ELSE
@@ -17,15 +20,36 @@ export async function salesOf(week: PayWeek, tx?: Transaction): Promise<number> 
   return row?.cents ?? 0;
 }
 
-export interface WeekFigures {
+interface WeekFigures {
   id: string;
   grossCents: number | null;
   tipCents: number | null;
   salesCents: number;
 }
 
+/** Weeks that were touched and the one that holds today, newest first, each with its figures. */
+export async function listWeeks(today: string): Promise<OutputOf<typeof listPayWeeks>['weeks']> {
+  const figures = await listWeekFigures();
+  const stored = await PayWeek.findAll({ where: { id: figures.map((f) => f.id) } });
+  const current = await weekAt(today);
+  const weeks = current.isNewRecord ? [...stored, current] : stored;
+  weeks.sort((a, b) => (a.startsOn < b.startsOn ? 1 : -1));
+  return Promise.all(
+    weeks.map(async (week) => {
+      const known = figures.find((f) => f.id === week.id);
+      const salesCents = known?.salesCents ?? (await salesOf(week));
+      return {
+        ...(await headOf(week)),
+        grossCents: known?.grossCents ?? null,
+        tipCents: known?.tipCents ?? null,
+        salesCents,
+      };
+    }),
+  );
+}
+
 /** Gross and tips of locked weeks and sales of all, newest first. */
-export function listWeekFigures(): Promise<WeekFigures[]> {
+function listWeekFigures(): Promise<WeekFigures[]> {
   return select<WeekFigures>(
     `SELECT w.id, s."grossCents", s."tipCents",
             coalesce((SELECT sum(${soldSql}) FROM job_lines l JOIN jobs j ON j.id = l.job_id

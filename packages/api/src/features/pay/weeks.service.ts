@@ -23,21 +23,35 @@ export async function workweekRuleOn(day: string, tx?: Transaction): Promise<Wor
   return { startsOn: rules.workweekStartsOn, startsAt: rules.workweekStartsAt, zone };
 }
 
-/** The stored week that holds a day, made when it is first looked at; its bounds are kept as instants. */
-export async function weekOf(day: string, tx: Transaction): Promise<PayWeek> {
+/** The week that holds a day, to be looked at: one that nobody touched yet is worked out and not stored. */
+export async function weekAt(day: string, tx?: Transaction): Promise<PayWeek> {
   const week = workweekOf(day, await workweekRuleOn(day, tx));
-  const known = await PayWeek.findOne({ where: { startsOn: week.startsOn }, transaction: tx });
-  if (known) return known;
+  const known = await PayWeek.findOne({ where: { startsOn: week.startsOn }, transaction: tx ?? null });
+  return known ?? untouched(week);
+}
+
+/** The stored week that holds a day, to be written to; made when it is first touched, its bounds kept as instants. */
+export async function weekOf(day: string, tx: Transaction): Promise<PayWeek> {
+  const week = await weekAt(day, tx);
+  if (!week.isNewRecord) return week;
   await insertWeek(week, tx);
   return PayWeek.findOne({ where: { startsOn: week.startsOn }, transaction: tx, rejectOnEmpty: true });
 }
 
+function untouched({ startsOn, endsOn, startsAt, endsAt }: Workweek): PayWeek {
+  const bounds = { startsAt: new Date(startsAt), endsAt: new Date(endsAt) };
+  return PayWeek.build({
+    ...{ id: uuid(), startsOn, endsOn, ...bounds, state: 'draft', version: 0 },
+    ...{ checkedAt: null, checkedBy: null, lockedAt: null, lockedBy: null, engineVersion: null, snapshot: null },
+  });
+}
+
 /** Two who open a new week at once make it once. */
-async function insertWeek(week: Workweek, tx: Transaction): Promise<void> {
+async function insertWeek({ id, startsOn, endsOn, startsAt, endsAt }: PayWeek, tx: Transaction): Promise<void> {
   await select(
     `INSERT INTO pay_weeks (id, starts_on, ends_on, starts_at, ends_at) VALUES (:id, :startsOn, :endsOn, :startsAt, :endsAt)
      ON CONFLICT (starts_on) DO NOTHING`,
-    { id: uuid(), ...week },
+    { id, startsOn, endsOn, startsAt, endsAt },
     tx,
   );
 }
@@ -46,7 +60,7 @@ export async function headOf(week: PayWeek, tx?: Transaction): Promise<PayWeekHe
   const names = await select<{ id: string; name: string }>('SELECT id, name FROM users', {}, tx);
   const name = (id: string | null) => names.find((user) => user.id === id)?.name ?? null;
   return {
-    id: week.id,
+    id: week.isNewRecord ? null : week.id,
     startsOn: week.startsOn,
     endsOn: week.endsOn,
     startsAt: week.startsAt.toISOString(),

@@ -19,7 +19,7 @@ import { secondsByDay } from './working-words.ts';
 import { cutIntoDays, weekGrid, type WeekGrid, type WorkSpan } from './work-spans.ts';
 
 /** Stored with every locked week; changed whenever the same input would give another result. */
-export const ENGINE_VERSION = '1';
+export const ENGINE_VERSION = '2';
 
 /**
  * Works out one workweek for everyone. Pure and exact: the same input gives the same result, to the byte.
@@ -85,7 +85,7 @@ function personWeek(person: PayPerson, own: PersonInput, input: PayWeekInput, gr
     regularRate: rate === null ? null : fractionText(rate),
     lines,
     warnings: [
-      ...entryWarnings(person, own.entries, shortMeals, grid, zone),
+      ...entryWarnings(person, own.entries, shortMeals, grid, input),
       ...clocklessJobWarnings(person, own.doneLines, own.entries),
       ...unpaidHoursWarning(person, byClock.unpaidHours),
       ...minimumWageWarning(person, makeUp),

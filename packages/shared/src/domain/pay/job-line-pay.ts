@@ -58,7 +58,7 @@ function earning({ person, line, rate, value, split, workedOn }: Earning): PayLi
       note: `${shares.length} in the crew, split ${SPLIT_WORDS[split]}; cents left over go to the largest remainder, ties by crew order`,
       arithmetic: `${part} of ${centsText(wholeCents)}`,
       result: centsText(amountCents),
-      sources: [{ kind: 'visit', id: line.visitId, label: `Crew of the visit to ${line.customerName}` }],
+      sources: [{ kind: 'visit', id: line.visitId, label: `Crew of job ${line.jobNumber}` }],
     });
   }
   return [
@@ -66,7 +66,7 @@ function earning({ person, line, rate, value, split, workedOn }: Earning): PayLi
       key: `${isFlat ? 'flat' : 'commission'}:${line.lineId}`,
       personId: person.id,
       kind: isFlat ? 'flat' : 'commission',
-      label: `${line.serviceName}, ${line.customerName}`,
+      label: line.serviceName,
       workedOn,
       rate: rate.value,
       amountCents,
@@ -92,7 +92,7 @@ function flatSteps(line: DoneLine, rate: DatedRate, wholeCents: number): Working
   return [
     {
       label: `${line.serviceName} finished`,
-      note: `Job ${line.jobNumber}, ${line.customerName}. Flat amount since ${formatDate(rate.startsOn)}`,
+      note: `Job ${line.jobNumber}. Flat amount since ${formatDate(rate.startsOn)}`,
       arithmetic: `1 line times ${rateText(rate.value)}`,
       result: centsText(wholeCents),
       sources: [jobSource(line), rateSource(rate)],
@@ -105,7 +105,7 @@ function percentSteps(line: DoneLine, rate: DatedRate, wholeCents: number): Work
   return [
     {
       label: `What ${line.serviceName} sold for`,
-      note: `Job ${line.jobNumber}, ${line.customerName}. After discounts, before tax, tips and deposits`,
+      note: `Job ${line.jobNumber}. After discounts, before tax, tips and deposits`,
       arithmetic: centsText(line.commissionableCents),
       result: centsText(line.commissionableCents),
       sources: [jobSource(line)],

@@ -1,9 +1,9 @@
 import { hoursAndMinutes } from './working-words.ts';
 import type { Exact } from '../money/exact.ts';
 import { centsText } from '../money/rounding.ts';
-import { clockOf, dayOf } from '../time/zone.ts';
-import { formatDay } from '../time/format.ts';
-import type { DoneLine, PayEntry, PayLine, PayPerson, PayWarning } from './pay-week.types.ts';
+import { dayOf } from '../time/zone.ts';
+import { formatClock, formatDay } from '../time/format.ts';
+import type { DoneLine, PayEntry, PayLine, PayPerson, PayWarning, PayWeekInput } from './pay-week.types.ts';
 import { entrySpan, type WeekGrid } from './work-spans.ts';
 
 type Said = Pick<PayWarning, 'code' | 'message'> & Partial<PayWarning>;
@@ -18,9 +18,9 @@ export function entryWarnings(
   entries: readonly PayEntry[],
   shortMeals: readonly PayEntry[],
   grid: WeekGrid,
-  zone: string,
+  { zone, clock }: Pick<PayWeekInput, 'zone' | 'clock'>,
 ): PayWarning[] {
-  const at = (instant: string): string => `${formatDay(dayOf(instant, zone))} ${clockOf(instant, zone)}`;
+  const at = (instant: string): string => `${formatDay(dayOf(instant, zone))} ${formatClock(instant, zone, clock)}`;
   const sorted = entries
     .map((entry) => ({ entry, ...entrySpan(entry, grid) }))
     .sort((a, b) => a.from - b.from || a.to - b.to || (a.entry.id < b.entry.id ? -1 : 1));

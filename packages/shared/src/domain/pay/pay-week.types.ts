@@ -1,3 +1,5 @@
+import type { ClockStyle } from '../time/format.ts';
+
 /**
  * What the pay engine takes and gives. Amounts are integer US cents, rates and percents decimal strings,
  * hours exact fractions written as "n/d" or "n", instants ISO 8601 UTC strings, dates "YYYY-MM-DD" in the company's zone.
@@ -44,7 +46,7 @@ export interface CrewShare {
   minutes: number;
 }
 
-/** A finished job line on a done or part-done visit. */
+/** A finished job line on a done or part-done visit. Customers are named by the job's number only: lines and snapshots outlive a customer's erasure. */
 export interface DoneLine {
   lineId: string;
   jobId: string;
@@ -52,7 +54,6 @@ export interface DoneLine {
   visitId: string;
   serviceId: string;
   serviceName: string;
-  customerName: string;
   /** After discounts, before tax, tips and deposits. */
   commissionableCents: number;
   doneAt: string;
@@ -109,6 +110,8 @@ export interface PayWeekInput {
   startsAt: string;
   endsAt: string;
   zone: string;
+  /** How clock times are written in warnings. */
+  clock: ClockStyle;
   rules: PayRules;
   people: PayPerson[];
   entries: (PayEntry & { personId: string })[];

@@ -141,7 +141,7 @@ export function AdjustmentSheet({
             onChange={(event) => setValue({ ...value, startsOn: event.target.value })}
           >
             {open.map((week) => (
-              <option key={week.id} value={week.startsOn}>
+              <option key={week.startsOn} value={week.startsOn}>
                 Week {week.number}, {weekSpan(week)}
                 {week.state === 'checked' ? ' (goes back to draft)' : ''}
               </option>

@@ -26,7 +26,7 @@ export function CorrectedLineField({ personId, weeks, mends, locked, lineId, err
       <SelectField label="Locked week" value={mends ?? ''} onChange={(event) => onWeek(event.target.value || null)}>
         <option value="">Choose the week</option>
         {weeks.map((week) => (
-          <option key={week.id} value={week.startsOn}>
+          <option key={week.startsOn} value={week.startsOn}>
             Week {week.number}, {weekSpan(week)}
           </option>
         ))}
@@ -44,7 +44,7 @@ export function CorrectedLineField({ personId, weeks, mends, locked, lineId, err
           <option key={line.key} value={lineIds[`${personId}:${line.key}`]}>
             {index + 1}. {line.workedOn ? `${shortDate(line.workedOn)}, ` : ''}
             {line.jobNumber ? `job ${line.jobNumber}, ` : ''}
-            {lineWords(line)}, {money(line.amountCents)}
+            {lineWords(line, locked?.customers ?? {})}, {money(line.amountCents)}
           </option>
         ))}
       </SelectField>

@@ -4,7 +4,7 @@ import type { CorrectedLine } from '@driprail/shared/contracts/pay.contract';
 import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
 import { money } from '../../../lib/format.ts';
 import { howText, lineWords } from './ledger.ts';
-import type { LedgerGroup } from './ledger.ts';
+import type { Customers, LedgerGroup } from './ledger.ts';
 import { shortDate } from './week-model.ts';
 import { boardJob } from './working.ts';
 
@@ -24,6 +24,7 @@ export function LedgerSection({ group, children }: { group: LedgerGroup; childre
 
 interface CellsProps {
   line: PayLine;
+  customers: Customers;
   amount?: ReactNode;
   corrected?: CorrectedLine | undefined;
   /** Whether the job number opens the board. */
@@ -31,7 +32,7 @@ interface CellsProps {
 }
 
 /** One line's cells: date, job, what it is, how it came about, amount. */
-export function LineCells({ line, amount, corrected, opensJob = false }: CellsProps) {
+export function LineCells({ line, customers, amount, corrected, opensJob = false }: CellsProps) {
   const number = line.jobNumber;
   return (
     <>
@@ -44,7 +45,7 @@ export function LineCells({ line, amount, corrected, opensJob = false }: CellsPr
         <span className="jb">{number}</span>
       )}
       <span className={line.workedOn ? 'wh' : 'wh is-wide'}>
-        {lineWords(line)}
+        {lineWords(line, customers)}
         {corrected ? (
           <small>
             corrects week {corrected.number}, line {corrected.position + 1}: {corrected.label}

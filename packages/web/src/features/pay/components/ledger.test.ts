@@ -51,7 +51,14 @@ describe('how a line came about', () => {
   });
 
   test('the job number is not said twice', () => {
-    expect(lineWords(aPayLine({ kind: 'tip', label: 'Tip, job 4127, by card', jobNumber: 4127 }))).toBe('Tip, by card');
+    const tip = aPayLine({ kind: 'tip', label: 'Tip, job 4127, by card', jobId: 'j1', jobNumber: 4127 });
+    expect(lineWords(tip, {})).toBe('Tip, by card');
+  });
+
+  test('the customer of the job stands beside what was done, as long as there is one', () => {
+    const polish = aPayLine({ kind: 'commission', label: 'One-step polish', jobId: 'j1', jobNumber: 4127 });
+    expect(lineWords(polish, { j1: 'Galloway' })).toBe('One-step polish, Galloway');
+    expect(lineWords(polish, { j2: 'Nakagawa' })).toBe('One-step polish');
   });
 
   test('rates keep the places they have', () => {

@@ -48,9 +48,14 @@ function titleOf(key: string, title: string, lines: PayLine[]): string {
   return `${title}, ${shortText(exact(rate))}% of the line`;
 }
 
-/** What a line is, without what its other columns say. */
-export function lineWords(line: PayLine): string {
-  return line.jobNumber === null ? line.label : line.label.replace(`, job ${line.jobNumber}`, '');
+/** Customers by job id: lines name them by job number only. */
+export type Customers = Record<string, string>;
+
+/** What a line is and for whom, without what its other columns say: "One-step polish, Galloway". */
+export function lineWords(line: PayLine, customers: Customers): string {
+  const words = line.jobNumber === null ? line.label : line.label.replace(`, job ${line.jobNumber}`, '');
+  const customer = line.jobId === null ? undefined : customers[line.jobId];
+  return customer === undefined ? words : `${words}, ${customer}`;
 }
 
 /** How a line came about, in one glance: "42:15 at 19.50", "6% of 240.00". */

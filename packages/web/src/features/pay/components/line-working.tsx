@@ -5,13 +5,15 @@ import type { PayLine, PersonWeek } from '@driprail/shared/domain/pay/pay-week.t
 import { paths } from '../../../app/paths.ts';
 import { money } from '../../../lib/format.ts';
 import { areaDrawing, moreThanHourly } from './area-drawing.ts';
-import { kindTitles } from './ledger.ts';
+import { kindTitles, lineWords } from './ledger.ts';
+import type { Customers } from './ledger.ts';
 import { OvertimeArea } from './overtime-area.tsx';
 import { WorkingSteps } from './working-steps.tsx';
 
 interface Props {
   person: PersonWeek;
   line: PayLine;
+  customers: Customers;
   /** The line's place on the statement, from 1, and how many there are. */
   place: { at: number; of: number };
   corrected: CorrectedLine | undefined;
@@ -30,7 +32,7 @@ function rounding(line: PayLine): string {
 }
 
 /** The chosen line's paper: what it is called, its amount, and everything it came from. */
-export function LineWorking({ person, line, place, corrected, rulesFrom }: Props) {
+export function LineWorking({ person, line, customers, place, corrected, rulesFrom }: Props) {
   const drawing = areaDrawing(person, line);
   const say = moreThanHourly(person, line);
   return (
@@ -41,12 +43,12 @@ export function LineWorking({ person, line, place, corrected, rulesFrom }: Props
             {kindTitles[line.kind]}
           </h2>
           <p>
-            {line.label}. How {money(line.amountCents)} was worked, line {place.at} of {place.of}
+            {lineWords(line, customers)}. How {money(line.amountCents)} was worked, line {place.at} of {place.of}
           </p>
         </div>
         <p className="t-level amt">{money(line.amountCents)}</p>
       </div>
-      <WorkingSteps line={line} lines={person.lines} hasLinks />
+      <WorkingSteps line={line} lines={person.lines} customers={customers} hasLinks />
       <div className={drawing ? 'dg' : 'dg is-alone'}>
         {drawing ? (
           <figure>

@@ -33,7 +33,7 @@ export function PastWeeks({ weeks, here }: Props) {
                 : shareOfSales(week.grossCents, week.tipCents ?? 0, week.salesCents);
             return (
               <li
-                key={week.id}
+                key={week.startsOn}
                 className={isHere ? 'is-here' : ''}
                 style={{ '--v': Number(share ?? 0) } as React.CSSProperties}
               >

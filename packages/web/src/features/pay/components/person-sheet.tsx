@@ -77,6 +77,7 @@ function SheetLine({ dto, line }: { dto: PayWeekDto; line: PayLine }) {
     <li className="pl">
       <LineCells
         line={line}
+        customers={dto.customers}
         corrected={corrected}
         opensJob
         amount={

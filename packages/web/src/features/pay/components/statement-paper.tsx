@@ -90,10 +90,15 @@ function StatementLine({ statement, line, hasLinks }: Props & { line: PayLine })
     <li>
       <details>
         <summary className="pl">
-          <LineCells line={line} corrected={corrected} />
+          <LineCells line={line} customers={statement.customers} corrected={corrected} />
         </summary>
         <div className="stmt-why">
-          <WorkingSteps line={line} lines={statement.person.lines} hasLinks={hasLinks} />
+          <WorkingSteps
+            line={line}
+            lines={statement.person.lines}
+            customers={statement.customers}
+            hasLinks={hasLinks}
+          />
           <p>{line.rule}</p>
         </div>
       </details>

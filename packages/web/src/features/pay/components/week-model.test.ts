@@ -72,6 +72,7 @@ describe('what asks for somebody', () => {
     engineVersion: '1',
     lateDifferences: [],
     correctedLines: {},
+    customers: {},
     warningTimes: { e1: since },
   });
 

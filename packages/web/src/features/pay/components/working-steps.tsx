@@ -1,21 +1,24 @@
 import { Link } from 'react-router';
 import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
-import { arithmeticParts, numberSteps, stepSources, trueMinus } from './working.ts';
+import type { Customers } from './ledger.ts';
+import { arithmeticParts, numberSteps, stepSources, trueMinus, withCustomer } from './working.ts';
 
 interface Props {
   line: PayLine;
   /** All lines of the person's week, to name the jobs that sources point at. */
   lines: readonly PayLine[];
+  customers: Customers;
   /** The owner may open what a figure comes from; the person paid reads the words. */
   hasLinks: boolean;
 }
 
 /** How an amount was worked: numbered steps, the arithmetic between words and result. */
-export function WorkingSteps({ line, lines, hasLinks }: Props) {
+export function WorkingSteps({ line, lines, customers, hasLinks }: Props) {
   const steps = numberSteps(line.working);
   return (
     <ol className="chain">
-      {steps.map(({ step, number }, index) => {
+      {steps.map(({ step: plain, number }, index) => {
+        const step = withCustomer(plain, line, customers);
         const { note, lead, links } = stepSources(step, line, lines);
         const isLast = index === steps.length - 1;
         return (

@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import type { WorkingStep } from '@driprail/shared/domain/pay/pay-week.types';
-import { arithmeticParts, dayOfSource, numberSteps, stepSources } from './working.ts';
+import { arithmeticParts, dayOfSource, numberSteps, stepSources, withCustomer } from './working.ts';
 import { aPayLine } from './testing/pay-line.factory.ts';
 
 const aStep = (parts: Partial<WorkingStep>): WorkingStep => ({
@@ -57,4 +57,12 @@ test('a rate leads to its band and another line to its own working', () => {
   ];
   const { links } = stepSources(aStep({ sources }), aPayLine({}), []);
   expect(links.map((link) => link.to)).toEqual(['/pay-rates?rate=r1', '?line=hourly%3Ar1%3Aall']);
+});
+
+test('the step that tells of a job says whose it was', () => {
+  const line = aPayLine({ jobId: 'j1', jobNumber: 4127 });
+  const step = aStep({ note: 'Job 4127. After discounts' });
+  expect(withCustomer(step, line, { j1: 'Galloway' }).note).toBe('Job 4127, Galloway. After discounts');
+  expect(withCustomer(step, line, {}).note).toBe('Job 4127. After discounts');
+  expect(withCustomer(aStep({ note: '6 % since May 1' }), line, { j1: 'Galloway' }).note).toBe('6 % since May 1');
 });

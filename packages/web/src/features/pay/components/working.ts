@@ -1,6 +1,7 @@
 import { formatDay } from '@driprail/shared/domain/time/format';
 import type { PayLine, SourceRef, WorkingStep } from '@driprail/shared/domain/pay/pay-week.types';
 import { paths } from '../../../app/paths.ts';
+import type { Customers } from './ledger.ts';
 
 export interface NumberedStep {
   step: WorkingStep;
@@ -12,6 +13,14 @@ export interface NumberedStep {
 export function numberSteps(working: readonly WorkingStep[]): NumberedStep[] {
   let number = 0;
   return working.map((step) => ({ step, number: step.result === '' ? null : ++number }));
+}
+
+/** A step of a job's line that begins with the job's number says whose job it was: "Job 4127, Galloway. Flat". */
+export function withCustomer(step: WorkingStep, line: PayLine, customers: Customers): WorkingStep {
+  const customer = line.jobId === null ? undefined : customers[line.jobId];
+  const job = `Job ${line.jobNumber}`;
+  if (customer === undefined || !step.note.startsWith(job)) return step;
+  return { ...step, note: `${job}, ${customer}${step.note.slice(job.length)}` };
 }
 
 export interface ArithmeticPart {

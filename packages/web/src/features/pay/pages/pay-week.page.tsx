@@ -45,7 +45,7 @@ export function PayWeekPage() {
   const query = day || weeks.data ? week : { ...week, error: weeks.error, refetch: weeks.refetch };
   return (
     <LoadedPage title="Pay week" query={query} what="the pay week">
-      {(dto) => <Week key={dto.week.id} dto={dto} weeks={weeks.data?.weeks ?? []} now={now} />}
+      {(dto) => <Week key={dto.week.startsOn} dto={dto} weeks={weeks.data?.weeks ?? []} now={now} />}
     </LoadedPage>
   );
 }
@@ -170,7 +170,7 @@ function WeekSteps({ dto: { week }, weeks, now }: { dto: PayWeekDto; weeks: Week
       >
         {isKnown ? null : <option value={week.startsOn}>Week {week.number}</option>}
         {weeks.map((known) => (
-          <option key={known.id} value={known.startsOn}>
+          <option key={known.startsOn} value={known.startsOn}>
             Week {known.number}, {known.state}
           </option>
         ))}

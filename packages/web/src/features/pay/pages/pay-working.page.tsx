@@ -116,6 +116,7 @@ function Working({ dto, person }: { dto: PayWeekDto; person: PersonWeek }) {
                     >
                       <LineCells
                         line={line}
+                        customers={dto.customers}
                         corrected={line.correctsLineId ? dto.correctedLines[line.correctsLineId] : undefined}
                       />
                     </Link>
@@ -138,6 +139,7 @@ function Working({ dto, person }: { dto: PayWeekDto; person: PersonWeek }) {
             <LineWorking
               person={person}
               line={chosen}
+              customers={dto.customers}
               place={{ at: lines.indexOf(chosen) + 1, of: lines.length }}
               corrected={chosen.correctsLineId ? dto.correctedLines[chosen.correctsLineId] : undefined}
               rulesFrom={rules ? (rulesOn(rules, week.startsOn)?.startsOn ?? null) : null}

@@ -46,6 +46,7 @@ function EveryStatement({ day }: { day: string }) {
             person,
             companyName: company.name,
             correctedLines: dto.correctedLines,
+            customers: dto.customers,
           }))}
         />
       )}
