@@ -7,7 +7,7 @@ import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
 import { useSession } from '../../../lib/session.tsx';
-import { dayVisitsQuery, useSaveEntry } from '../api/hours.queries.ts';
+import { dayVisitsQuery, useProposeChange, useSaveEntry } from '../api/hours.queries.ts';
 import { peopleQuery } from '../api/people.queries.ts';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { FormFault } from '../../../components/form-fault.tsx';
@@ -46,7 +46,14 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
     const span = { ...spanOf(), reason: value.reason };
     if (save.isPending) return;
     if (entry) save.mutate({ id: entry.id, body: { ...span, version: entry.version } }, { onSuccess: onDone });
-    else save.mutate({ id: null, body: { ...span, personId: value.personId, visitId: null } }, { onSuccess: onDone });
+    else
+      save.mutate(
+        {
+          id: null,
+          body: { ...span, personId: value.personId, visitId: isAtJob && value.visitId !== '' ? value.visitId : null },
+        },
+        { onSuccess: onDone },
+      );
   };
   return (
     <form
