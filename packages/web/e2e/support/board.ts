@@ -30,7 +30,7 @@ export async function dragTicket(page: Page, customer: string, van: string, time
   const found = ticket(page, customer);
   await isStill(page);
   const box = await boxOf(found);
-  const from = await timeOf(page, found);
+  const from = await timeAt(page, box.y);
   const x = await middleOf(await lane(page, van));
   // A ticket moves by as much as the pointer: where in it one grabs does not matter.
   const y = (await heightOf(page, time)) - (await heightOf(page, from));
@@ -60,8 +60,9 @@ export async function resizeTicket(page: Page, customer: string, time: string): 
   const found = ticket(page, customer);
   await found.hover(); // The edge can be taken once the pointer is over the ticket.
   const box = await boxOf(found);
+  const end = await heightOf(page, await timeAt(page, box.y + box.height));
   const from = { x: box.x + box.width / 2, y: box.y + box.height - 2 };
-  await dragMouse(page, from, { x: from.x, y: (await heightOf(page, time)) - 2 });
+  await dragMouse(page, from, { x: from.x, y: from.y + (await heightOf(page, time)) - end });
 }
 
 async function dragMouse(page: Page, from: Point, to: Point, over?: Locator): Promise<void> {
@@ -98,16 +99,15 @@ async function middleOf(found: Locator): Promise<number> {
   return box.x + box.width / 2;
 }
 
-/** When a ticket starts: its label counts to twelve, its place on the lane to twenty-four. */
-async function timeOf(page: Page, found: Locator): Promise<string> {
-  const { y } = await boxOf(found);
-  const rows = page.locator('td.fc-timegrid-slot-lane');
-  const times = await rows.evaluateAll((cells) =>
-    cells.map((cell) => ({ time: cell.getAttribute('data-time') ?? '', top: cell.getBoundingClientRect().top })),
-  );
-  const at = times.findLast(({ top }) => top <= y + 1);
-  if (!at) throw new Error('The ticket hangs above the first hour.');
-  return at.time.slice(0, 5);
+/** The clock time of the row nearest to a height: labels count to twelve, rows to twenty-four. */
+async function timeAt(page: Page, y: number): Promise<string> {
+  const times = await page
+    .locator('td.fc-timegrid-slot-lane')
+    .evaluateAll((cells) =>
+      cells.map((cell) => ({ time: cell.getAttribute('data-time') ?? '', top: cell.getBoundingClientRect().top })),
+    );
+  const [nearest] = times.sort((a, b) => Math.abs(a.top - y) - Math.abs(b.top - y));
+  return nearest?.time.slice(0, 5) ?? '';
 }
 
 /** Where a clock time lies on the screen; a row of the lanes is five minutes. */

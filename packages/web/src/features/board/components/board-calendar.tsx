@@ -8,7 +8,7 @@ import resourceTimeGridPlugin from '@fullcalendar/resource-timegrid';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { Move } from '@driprail/shared/domain/board/plan';
 import { formatClock } from '@driprail/shared/domain/time/format';
-import { clockOf } from '@driprail/shared/domain/time/zone';
+import { addMinutes, clockOf, minutesBetween } from '@driprail/shared/domain/time/zone';
 import { useFormats } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
 import type { Gap, PlacedVisit } from './board-model.ts';
@@ -68,15 +68,25 @@ export const BoardCalendar = memo(function BoardCalendar({
     calendar.current?.getApi().gotoDate(board.day);
   }, [board.day]);
 
+  /** A moved visit keeps its real length: the library counts by the clock, which jumps twice a year. */
+  const moved = (visitId: string, vanId: string | null, startStr: string): Move => {
+    const placed = visits.get(visitId);
+    const minutes = placed ? minutesBetween(placed.from, placed.to) : (unplaced.get(visitId)?.minutes ?? 60);
+    return { visitId, vanId, from: utc(startStr), to: addMinutes(utc(startStr), minutes) };
+  };
   const allow: AllowFunc = (span_, event) => {
     const vanId = (span_ as { resource?: { id: string } }).resource?.id ?? null;
     const visitId = event?.id || (event?.extendedProps['visitId'] as string | undefined);
-    if (visitId) queueMicrotask(() => onHover({ visitId, vanId, from: utc(span_.startStr), to: utc(span_.endStr) }));
+    if (!visitId) return true;
+    const move = moved(visitId, vanId, span_.startStr);
+    // One edge stands still while the other is pulled.
+    const isPulled = visits.get(visitId)?.from === move.from;
+    queueMicrotask(() => onHover(isPulled ? { ...move, to: utc(span_.endStr) } : move));
     return true;
   };
   const drop = (arg: EventDropArg) => {
     const vanId = arg.newResource?.id ?? arg.event.getResources()[0]?.id ?? null;
-    const move = { visitId: arg.event.id, vanId, from: utc(arg.event.startStr), to: utc(arg.event.endStr) };
+    const move = moved(arg.event.id, vanId, arg.event.startStr);
     // The library's own copy goes back; the cache moves the ticket.
     arg.revert();
     onMove(move);
@@ -94,12 +104,7 @@ export const BoardCalendar = memo(function BoardCalendar({
   const receive = (arg: EventReceiveArg) => {
     // A ticket of its own comes back this way too, when the calendar was drawn anew while it was held.
     const visitId = arg.event.id || (arg.event.extendedProps['visitId'] as string);
-    const move = {
-      visitId,
-      vanId: arg.event.getResources()[0]?.id ?? null,
-      from: utc(arg.event.startStr),
-      to: utc(arg.event.endStr),
-    };
+    const move = moved(visitId, arg.event.getResources()[0]?.id ?? null, arg.event.startStr);
     arg.event.remove();
     onMove(move);
   };
