@@ -27,8 +27,8 @@ export function BoardHead({ board, now, filter, onFilter, onDay, onNew }: BoardH
         {day === today ? (
           <span>Today</span>
         ) : (
-          <button type="button" className="link" onClick={() => onDay(today)}>
-            Go to today
+          <button type="button" className="link" aria-label="Go to today" onClick={() => onDay(today)}>
+            Today
           </button>
         )}
         <span className="t-3">week {weekNumberOf(day)}</span>

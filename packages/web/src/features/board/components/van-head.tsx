@@ -41,7 +41,8 @@ export function VanHead({
           </span>
         ) : (
           <span>
-            {formatMinutes(planned)} of {there > 0 ? formatMinutes(there) : 'no shift'}
+            {there > 0 ? `${formatMinutes(planned)} of ${formatMinutes(there)}` : 'No shift'}
+            {there === 0 && planned > 0 ? `, ${formatMinutes(planned)} planned` : ''}
           </span>
         )}
         {off.length > 0 ? (
