@@ -20,6 +20,17 @@ export async function migrate(ownerUrl: string, appRole: string): Promise<void> 
   }
 }
 
+/** Takes everything out of the schema, for a backup to be brought in. Only for a database without a company. */
+export async function emptySchema(ownerUrl: string): Promise<void> {
+  const sequelize = new Sequelize(ownerUrl, { logging: false, pool: { max: 1 } });
+  try {
+    await umzugFor(sequelize).down({ to: 0 });
+    await sequelize.query('DROP TABLE schema_migrations; DROP EXTENSION btree_gist;');
+  } finally {
+    await sequelize.close();
+  }
+}
+
 /** Fresh statistics after many rows came at once: without them the planner guesses badly. */
 export async function analyze(ownerUrl: string): Promise<void> {
   const sequelize = new Sequelize(ownerUrl, { logging: false, pool: { max: 1 } });

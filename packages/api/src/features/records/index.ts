@@ -1,2 +1,3 @@
+export { checkData } from './check-data.queries.ts';
 export { importCsv } from './import.service.ts';
 export type { ImportKind } from './import.service.ts';

@@ -1,0 +1,59 @@
+import { select } from '../../db/sequelize.ts';
+
+/** What must hold in every company's data, each as a statement that counts the rows that break it. */
+const checks: { what: string; sql: string }[] = [
+  {
+    what: 'no van is planned at two stops at once',
+    sql: `SELECT count(*) AS count FROM visits a JOIN visits b ON a.van_id = b.van_id AND a.id < b.id AND a.stop_id <> b.stop_id AND a.planned && b.planned
+      WHERE a.progress <> 'called_off' AND b.progress <> 'called_off'`,
+  },
+  {
+    what: 'no person rides in two vans at once',
+    sql: `SELECT count(*) AS count FROM van_crew a JOIN van_crew b ON a.person_id = b.person_id AND a.id < b.id AND a.span && b.span`,
+  },
+  {
+    what: 'a locked statement is the sum of its payable lines',
+    sql: `SELECT count(*) AS count FROM pay_statements s WHERE s.gross_cents <>
+      coalesce((SELECT sum(l.amount_cents) FROM pay_lines l WHERE l.pay_week_id = s.pay_week_id AND l.person_id = s.person_id AND l.is_payable), 0)`,
+  },
+  {
+    what: 'every locked week has its snapshot and who locked it',
+    sql: `SELECT count(*) AS count FROM pay_weeks WHERE state = 'locked' AND (snapshot IS NULL OR locked_by IS NULL OR locked_at < ends_at)`,
+  },
+  {
+    what: 'lines are frozen for locked weeks only',
+    sql: `SELECT count(*) AS count FROM pay_lines l JOIN pay_weeks w ON w.id = l.pay_week_id WHERE w.state <> 'locked'`,
+  },
+  {
+    what: 'a correction names a line of the same person in another week',
+    sql: `SELECT count(*) AS count FROM pay_adjustments a JOIN pay_lines l ON l.id = a.corrects_line_id
+      WHERE l.person_id <> a.person_id OR l.pay_week_id = a.pay_week_id`,
+  },
+  {
+    what: 'finished lines belong to a visit that ended',
+    sql: `SELECT count(*) AS count FROM job_lines l JOIN visits v ON v.id = l.finished_visit_id WHERE v.progress NOT IN ('done', 'part_done')`,
+  },
+  {
+    what: 'a visit that began has its crew',
+    sql: `SELECT count(*) AS count FROM visits v WHERE v.progress IN ('on_site', 'working') AND NOT EXISTS (SELECT 1 FROM visit_crew c WHERE c.visit_id = v.id)`,
+  },
+  {
+    what: 'a discount is not more than its job',
+    sql: `SELECT count(*) AS count FROM jobs j WHERE j.discount_cents > coalesce((SELECT sum(price_cents) FROM job_lines l WHERE l.job_id = j.id), 0)`,
+  },
+];
+
+export interface DataFinding {
+  what: string;
+  /** Rows that break it. */
+  count: number;
+}
+
+export async function checkData(): Promise<DataFinding[]> {
+  const findings: DataFinding[] = [];
+  for (const { what, sql } of checks) {
+    const [row] = await select<{ count: number }>(sql);
+    findings.push({ what, count: row?.count ?? 0 });
+  }
+  return findings;
+}
