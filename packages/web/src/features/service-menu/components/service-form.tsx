@@ -130,7 +130,12 @@ export function ServiceForm({
       <h3 className="sec mt-4">Price and minutes by size class</h3>
       <div className="grid gap-2 mt-2">
         {sizeClasses.map((size) => (
-          <div key={size} className="grid grid-cols-[1fr_120px_120px] gap-3 items-end">
+          <div
+            key={size}
+            role="group"
+            aria-label={sizeClassNames[size]}
+            className="grid grid-cols-[1fr_120px_120px] gap-3 items-end"
+          >
             <span className="self-center">{sizeClassNames[size]}</span>
             <TextField
               label="Price"
