@@ -6,6 +6,6 @@ const api = process.env['DRIPRAIL_API_URL'] ?? 'http://127.0.0.1:4601';
 
 export default defineConfig({
   plugins: [react(), tailwindcss()],
-  build: { outDir: 'dist', chunkSizeWarningLimit: 400 },
+  build: { outDir: 'dist', manifest: 'manifest.json', chunkSizeWarningLimit: 400 },
   server: { proxy: { '/api': { target: api, xfwd: true }, '/socket.io': { target: api, ws: true } } },
 });

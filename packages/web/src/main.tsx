@@ -2,9 +2,11 @@ import { StrictMode } from 'react';
 import { createRoot } from 'react-dom/client';
 import { App } from './app/app.tsx';
 import { applyTheme } from './lib/theme.ts';
+import { keepScreens } from './lib/keep-screens.ts';
 import './styles/main.css';
 
 applyTheme();
+keepScreens();
 const root = document.getElementById('root');
 if (root) {
   createRoot(root).render(

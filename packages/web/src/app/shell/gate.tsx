@@ -5,6 +5,8 @@ import { sessionKey, sessionQuery } from '../../features/access/index.ts';
 import { Fault, Fetching } from '../../components/states.tsx';
 import { ApiError } from '../../lib/call.ts';
 import { SessionProvider } from '../../lib/session.tsx';
+import { useOutboxOf } from '../../lib/outbox/outbox.ts';
+import { wipeCopies } from '../../lib/outbox/store.ts';
 import { useLiveCache } from '../../lib/socket.ts';
 import { paths } from '../paths.ts';
 
@@ -16,8 +18,11 @@ export function Gate() {
   const onSignedOut = useCallback(() => {
     client.clear();
     client.setQueryData(sessionKey, null);
+    // A session that was ended elsewhere takes its copies along; what waits to be sent stays for its person.
+    void wipeCopies();
   }, [client]);
   useLiveCache(client, session.data?.user.id, onSignedOut);
+  useOutboxOf(client, session.data?.user.id);
 
   const isSignedOut = session.data === null || (session.error instanceof ApiError && session.error.status === 401);
   if (isSignedOut) return <Navigate to={paths.signIn} replace state={{ from: location.pathname + location.search }} />;

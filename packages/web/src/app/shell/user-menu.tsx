@@ -4,6 +4,7 @@ import { Link, useLocation } from 'react-router';
 import type { AppAbility } from '@driprail/shared/authz/ability';
 import { Icon } from '../../components/icon.tsx';
 import { useSignOut } from '../../features/access/index.ts';
+import { useOutbox } from '../../lib/outbox/outbox.ts';
 import { useSession } from '../../lib/session.tsx';
 import { chooseTheme, useTheme } from '../../lib/theme.ts';
 import type { NavItem } from './nav-items.ts';
@@ -24,6 +25,7 @@ export function UserMenu({ items }: { items: NavItem[] }) {
   const isOpen = openAt === location.key;
   const box = useRef<HTMLDivElement>(null);
   const signOut = useSignOut();
+  const { waiting } = useOutbox();
   const theme = useTheme();
   useEffect(() => {
     if (!isOpen) return undefined;
@@ -75,8 +77,14 @@ export function UserMenu({ items }: { items: NavItem[] }) {
             ))}
           </div>
           <hr className="my-1 border-line" />
+          {waiting.length > 0 ? (
+            <p className="tape my-1" role="status">
+              {waiting.length} change{waiting.length === 1 ? ' is' : 's are'} not sent yet. They stay on this phone for
+              you.
+            </p>
+          ) : null}
           <button type="button" onClick={() => signOut.mutate()}>
-            Sign out
+            {waiting.length > 0 ? 'Sign out all the same' : 'Sign out'}
           </button>
         </nav>
       ) : null}

@@ -2,13 +2,17 @@ import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query
 import { createSession, endSession, getSession } from '@driprail/shared/contracts/session.contract';
 import type { SessionDto } from '@driprail/shared/contracts/session.contract';
 import { call } from '../../../lib/call.ts';
+import { orKept } from '../../../lib/outbox/or-kept.ts';
+import { wipeCopies } from '../../../lib/outbox/store.ts';
 
 export const sessionKey = ['session'] as const;
 
 /** Null once signed out. */
 export const sessionQuery = queryOptions({
   queryKey: sessionKey,
-  queryFn: ({ signal }): Promise<SessionDto | null> => call(getSession, {}, signal),
+  networkMode: 'always',
+  // In a dead zone the phone still knows who is signed in; the server judges again when it answers.
+  queryFn: ({ signal }): Promise<SessionDto | null> => orKept('session', () => call(getSession, {}, signal)),
   staleTime: 5 * 60_000,
   retry: false,
 });
@@ -31,6 +35,7 @@ export function useSignOut() {
     onSettled: () => {
       client.clear();
       client.setQueryData(sessionKey, null);
+      return wipeCopies();
     },
   });
 }

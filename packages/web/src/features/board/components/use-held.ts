@@ -1,4 +1,4 @@
-import { useCallback, useMemo, useState } from 'react';
+import { useCallback, useEffect, useMemo, useState } from 'react';
 import type { KeyboardEvent } from 'react';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
@@ -28,14 +28,12 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
   const setDown = useCallback(async () => {
     if (!board || !held || !visit) return;
     const vanName = board.vans.find((van) => van.id === held.vanId)?.name ?? '';
-    if (
-      await moves.save(
-        [held],
-        `${visit.customerName} is on ${vanName} at ${formatClock(held.from, board.zone, board.clock)}.`,
-      )
-    )
-      focusTicket(held.visitId);
+    await moves.save(
+      [held],
+      `${visit.customerName} is on ${vanName} at ${formatClock(held.from, board.zone, board.clock)}.`,
+    );
     setHeld(null);
+    focusTicket(held.visitId);
   }, [board, held, visit, moves]);
 
   const onKeyDown = useCallback(
@@ -51,10 +49,8 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
       if (held) carry(event, board, held, setHeld, setDown);
       else if (event.key === ' ' && isMovable(focused.progress)) setHeld(pickUp(board, focused, now));
       else if (event.key.toLowerCase() === 'u' && isMovable(focused.progress) && focused.vanId) {
-        void moves.save(
-          [{ visitId: focused.id, vanId: null, from: null, to: null }],
-          `${focused.customerName} is back on Unplaced.`,
-        );
+        const off = { visitId: focused.id, vanId: null, from: null, to: null };
+        void moves.save([off], `${focused.customerName} is back on Unplaced.`).then(() => focusTicket(focused.id));
       } else if (event.key === 'Enter') onOpen(focused.id);
       else if (event.key.startsWith('Arrow')) focusTicket(neighbour(board, focused, event.key));
       else return;
@@ -63,11 +59,24 @@ export function useHeld({ board, now, moves, onOpen }: HeldOptions) {
     },
     [board, held, now, moves, onOpen, setDown],
   );
+  // A held ticket is drawn anew in each lane that it enters and loses the focus on the way: what is pressed
+  // before it has the focus again belongs to it too.
+  useEffect(() => {
+    if (!board || !held) return undefined;
+    focusTicket(held.visitId);
+    const press = (event: globalThis.KeyboardEvent) => {
+      if (event.target !== document.body || event.ctrlKey || event.metaKey || event.altKey) return;
+      carry(event, board, held, setHeld, setDown);
+      event.preventDefault();
+    };
+    document.addEventListener('keydown', press);
+    return () => document.removeEventListener('keydown', press);
+  }, [board, held, setDown]);
   return { held, heldName: visit?.customerName ?? null, words, onKeyDown };
 }
 
 function carry(
-  event: KeyboardEvent,
+  event: { key: string; shiftKey: boolean },
   board: BoardDto,
   held: Held,
   setHeld: (next: Held | null) => void,
@@ -86,7 +95,10 @@ function carry(
   else if (event.key === 'ArrowLeft') byVan(-1);
   else if (event.key === 'ArrowRight') byVan(1);
   else if (event.key === 'Enter' || event.key === ' ') void setDown();
-  else if (event.key === 'Escape') setHeld(null);
+  else if (event.key === 'Escape') {
+    setHeld(null);
+    focusTicket(held.visitId);
+  }
 }
 
 /** An unplaced visit is held over the first van at the next quarter hour, or at its window's start. */

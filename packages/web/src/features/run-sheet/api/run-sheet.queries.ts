@@ -1,76 +1,91 @@
-import { queryOptions, useMutation } from '@tanstack/react-query';
-import type { QueryClient } from '@tanstack/react-query';
+import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { v4 as uuid } from 'uuid';
-import { getClock, postClockAction } from '@driprail/shared/contracts/clock.contract';
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import { getClock } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
-import { recordTip } from '@driprail/shared/contracts/jobs.contract';
-import { getRunSheet, postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
-import type { RunSheetDto } from '@driprail/shared/contracts/run-sheet.contract';
+import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
+import { getRunSheet } from '@driprail/shared/contracts/run-sheet.contract';
+import type { RunSheetDto, RunVisitDto, postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
+import { actionNames } from '@driprail/shared/domain/board/progress';
 import { call } from '../../../lib/call.ts';
 import { deviceOffsetMs } from '../../../lib/device-clock.ts';
+import { orKept } from '../../../lib/outbox/or-kept.ts';
+import { press } from '../../../lib/outbox/outbox.ts';
 
-export const runSheetQuery = (day: string) =>
+/** The run sheet, or in a dead zone the copy that this phone kept of it. */
+export const runSheetQuery = (userId: string, day: string) =>
   queryOptions({
     queryKey: ['run-sheet', day],
-    queryFn: ({ signal }) => call(getRunSheet, { params: { day } }, signal),
+    networkMode: 'always',
+    retry: 0,
+    queryFn: ({ signal }): Promise<RunSheetDto> =>
+      orKept(`${userId}:run-sheet:${day}`, () => call(getRunSheet, { params: { day } }, signal)),
     refetchInterval: 60_000,
   });
 
-export const clockQuery = queryOptions({
-  queryKey: ['clock', 'own'],
-  queryFn: ({ signal }) => call(getClock, {}, signal),
-});
+export const clockQuery = (userId: string) =>
+  queryOptions({
+    queryKey: ['clock', 'own'],
+    networkMode: 'always',
+    retry: 0,
+    queryFn: ({ signal }): Promise<{ clock: ClockStateDto | null }> =>
+      orKept(`${userId}:clock`, () => call(getClock, {}, signal)),
+  });
 
 type VisitActionBody = NonNullable<RequestOf<typeof postVisitAction>['body']>;
-/** A press as it was made: the key and the time belong to the press, so that sending it twice marks once. */
-export type VisitPress = VisitActionBody & { visitId: string };
+/** What was pressed; the key and the time are made with it, so that sending it twice marks once. */
+export type VisitPress = Omit<VisitActionBody, 'key' | 'deviceAt' | 'offsetMs'>;
 
-export function newPress(visitId: string, action: Omit<VisitActionBody, 'key' | 'deviceAt' | 'offsetMs'>): VisitPress {
-  return { visitId, key: uuid(), deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs(), ...action };
+const stamped = () => ({ key: uuid(), deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs() });
+
+/** Marks a visit: kept on the phone at once, sent when there is signal. */
+export function usePressVisit() {
+  const client = useQueryClient();
+  return useMutation({
+    networkMode: 'always',
+    mutationFn: ({ visit, ...action }: VisitPress & { visit: RunVisitDto }) => {
+      const body = { ...stamped(), ...action };
+      return press(client, {
+        key: body.key,
+        path: 'visit',
+        targetId: visit.id,
+        body,
+        words: `${wordsOf(action.kind)}, ${visit.customerName}`,
+      });
+    },
+  });
 }
 
-const refresh = (client: QueryClient) =>
-  Promise.all(['run-sheet', 'clock'].map((key) => client.invalidateQueries({ queryKey: [key] })));
-
-export function usePressVisit(day: string) {
-  return useMutation({
-    mutationFn: ({ visitId, ...body }: VisitPress) => call(postVisitAction, { params: { id: visitId }, body }),
-    // A lost answer is asked for again with the same key.
-    retry: (count, error) => count < 3 && 'status' in error && error.status === 0,
-    onSuccess: ({ visit }, _press, _saved, { client }) => {
-      client.setQueryData(
-        runSheetQuery(day).queryKey,
-        (sheet): RunSheetDto | undefined =>
-          sheet && { ...sheet, visits: sheet.visits.map((v) => (v.id === visit.id ? visit : v)) },
-      );
-    },
-    onSettled: (_d, _e, _v, _s, { client }) => refresh(client),
-  });
+function wordsOf(kind: VisitActionBody['kind']): string {
+  if (kind === 'undo') return 'Taken back';
+  return kind === 'trouble' ? 'Trouble' : actionNames[kind];
 }
 
 export function usePressClock() {
+  const client = useQueryClient();
   return useMutation({
-    mutationFn: (press: {
-      key: string;
-      deviceAt: string;
-      offsetMs: number;
-      action: 'start' | 'stop';
-      kind?: ClockKindName;
-    }) => call(postClockAction, { body: press }),
-    retry: (count, error) => count < 3 && 'status' in error && error.status === 0,
-    onSettled: (_d, _e, _v, _s, { client }) => refresh(client),
+    networkMode: 'always',
+    mutationFn: (action: { action: 'start' | 'stop'; kind?: ClockKindName }) => {
+      const body = { ...stamped(), ...action };
+      const words = action.action === 'stop' ? 'Clock out' : `Clock: ${action.kind ?? 'in'}`;
+      return press(client, { key: body.key, path: 'clock', targetId: '', body, words });
+    },
   });
 }
 
-export function newClockPress(action: 'start' | 'stop', kind?: ClockKindName) {
-  return { key: uuid(), deviceAt: new Date().toISOString(), offsetMs: deviceOffsetMs(), action, ...(kind && { kind }) };
-}
-
-export function useRecordTip(jobId: string) {
+export function useRecordTip(visit: RunVisitDto) {
+  const client = useQueryClient();
   return useMutation({
-    mutationFn: (tip: NonNullable<RequestOf<typeof recordTip>['body']>) =>
-      call(recordTip, { params: { id: jobId }, body: tip }),
-    onSettled: (_d, _e, _v, _s, { client }) => refresh(client),
+    networkMode: 'always',
+    mutationFn: (tip: Omit<NonNullable<RequestOf<typeof recordTip>['body']>, 'key'>) => {
+      const body = { key: uuid(), ...tip };
+      return press(client, {
+        key: body.key,
+        path: 'tip',
+        targetId: visit.jobId,
+        body,
+        words: `Tip, ${visit.customerName}`,
+      });
+    },
   });
 }

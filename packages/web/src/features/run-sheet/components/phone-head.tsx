@@ -2,7 +2,7 @@ import type { ReactNode } from 'react';
 import { useSyncExternalStore } from 'react';
 import { useAbility } from '@casl/react';
 import type { AppAbility } from '@driprail/shared/authz/ability';
-import { Icon } from '../../../components/icon.tsx';
+import { OutboxLine } from './outbox-line.tsx';
 import { useSession } from '../../../lib/session.tsx';
 import { useIsLive } from '../../../lib/socket.ts';
 
@@ -34,12 +34,7 @@ export function PhoneHead({
         <h1 className="t-hang">{title}</h1>
         {children}
       </div>
-      {isOnline && isLive ? null : (
-        <p className="adrift" role="status">
-          <Icon name="offline" />{' '}
-          {isOnline ? 'Not live. What you see may be a little old.' : 'No signal. Press again when it is back.'}
-        </p>
-      )}
+      <OutboxLine isOnline={isOnline} isLive={isLive} />
     </header>
   );
 }

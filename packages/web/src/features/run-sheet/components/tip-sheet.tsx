@@ -1,5 +1,4 @@
 import { useState } from 'react';
-import { v4 as uuid } from 'uuid';
 import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, TextField } from '../../../components/field.tsx';
@@ -16,11 +15,10 @@ const methods = [
 
 /** A tip belongs to the crew. Cash kept on the spot is recorded and adds nothing to what is to be paid. */
 export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () => void }) {
-  const [key] = useState(() => uuid());
   const [amount, setAmount] = useState('');
   const [method, setMethod] = useState<'cash' | 'card' | 'invoice'>('cash');
   const [isKept, setKept] = useState(true);
-  const tip = useRecordTip(visit.jobId);
+  const tip = useRecordTip(visit);
   const cents = parseMoney(amount);
   return (
     <Sheet title="Tip" onClose={onClose} width={460}>
@@ -75,7 +73,7 @@ export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () =
           disabled={cents === null || cents <= 0}
           onClick={() =>
             tip.mutate(
-              { key, amountCents: cents ?? 0, method, alreadyReceived: method === 'cash' && isKept },
+              { amountCents: cents ?? 0, method, alreadyReceived: method === 'cash' && isKept },
               { onSuccess: onClose },
             )
           }

@@ -10,8 +10,11 @@ import { PhoneMenu } from '../../../app/shell/phone-menu.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { Empty, Loaded } from '../../../components/states.tsx';
 import { useFormats } from '../../../lib/format.ts';
+import { useOutbox } from '../../../lib/outbox/outbox.ts';
+import { useSession } from '../../../lib/session.tsx';
 import { useNow } from '../../../lib/now.ts';
-import { clockQuery, newClockPress, usePressClock } from '../api/run-sheet.queries.ts';
+import { clockQuery, usePressClock } from '../api/run-sheet.queries.ts';
+import { applyToClocks } from '../components/apply-waiting.ts';
 import { ChangeSheet } from '../components/change-sheet.tsx';
 import { OwnHours } from '../components/own-hours.tsx';
 import { PhoneHead } from '../components/phone-head.tsx';
@@ -28,7 +31,7 @@ const toggles: { kind: ClockKindName; note: string }[] = [
 
 /** The clock as large toggles. It follows the marks on the run sheet, and can be changed here. */
 export function ClockPage() {
-  const clock = useQuery(clockQuery);
+  const clock = useQuery(clockQuery(useSession().user.id));
   const now = useNow();
   const format = useFormats();
   return (
@@ -59,8 +62,9 @@ export function ClockPage() {
   );
 }
 
-function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
+function Clock({ clock: kept, now }: { clock: ClockStateDto; now: string }) {
   const format = useFormats();
+  const clock = applyToClocks(kept, useOutbox().waiting);
   const press = usePressClock();
   const [wrong, setWrong] = useState<ClockEntryDto | null>(null);
   const { open } = clock;
@@ -92,7 +96,7 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
             className={open?.kind === kind ? 'btn is-on' : 'btn'}
             aria-pressed={open?.kind === kind}
             disabled={press.isPending}
-            onClick={() => press.mutate(newClockPress('start', kind))}
+            onClick={() => press.mutate({ action: 'start', kind })}
           >
             {clockKindNames[kind]}
             <small>{note}</small>
@@ -123,7 +127,7 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
             type="button"
             className="ph-main seal"
             disabled={press.isPending}
-            onClick={() => press.mutate(newClockPress('stop'))}
+            onClick={() => press.mutate({ action: 'stop' })}
           >
             Clock out
           </button>
@@ -132,7 +136,7 @@ function Clock({ clock, now }: { clock: ClockStateDto; now: string }) {
             type="button"
             className="ph-main"
             disabled={press.isPending}
-            onClick={() => press.mutate(newClockPress('start', 'shop'))}
+            onClick={() => press.mutate({ action: 'start', kind: 'shop' })}
           >
             Clock in
           </button>

@@ -15,7 +15,9 @@ import { useFormats } from '../../../lib/format.ts';
 import { serverNow } from '../../../lib/device-clock.ts';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
-import { newPress, runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
+import { dismiss, useOutbox } from '../../../lib/outbox/outbox.ts';
+import { runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
+import { applyWaiting } from '../components/apply-waiting.ts';
 import { ActionBar } from '../components/action-bar.tsx';
 import { ClockBox } from '../components/clock-box.tsx';
 import { NextCard } from '../components/next-card.tsx';
@@ -28,15 +30,16 @@ import './run-sheet.css';
 
 /** One crew's day, in order, on a phone in a driveway. */
 export function RunSheetPage() {
-  const { zone } = useSession().company;
+  const { company, user } = useSession();
+  const { zone } = company;
   const today = dayOf(serverNow().toISOString(), zone);
   const { day = today } = useParams();
-  const sheet = useQuery(runSheetQuery(day));
+  const sheet = useQuery(runSheetQuery(user.id, day));
   const isOnline = useOnline();
   return (
     <main className={isOnline ? 'ph' : 'ph is-adrift'} id="main">
       <Loaded query={sheet} what="the run sheet">
-        {(data) => <RunSheet sheet={data} />}
+        {(data) => <RunSheet kept={data} />}
       </Loaded>
     </main>
   );
@@ -44,16 +47,20 @@ export function RunSheetPage() {
 
 type Panel = { kind: 'trouble' | 'part_done' | 'tip' | 'look'; visitId: string };
 
-function RunSheet({ sheet }: { sheet: RunSheetDto }) {
+function RunSheet({ kept }: { kept: RunSheetDto }) {
   const now = useNow();
+  const outbox = useOutbox();
+  const sheet = applyWaiting(kept, outbox.waiting, now);
   const [panel, setPanel] = useState<Panel | null>(null);
-  const press = usePressVisit(sheet.day);
+  const press = usePressVisit();
   const isToday = sheet.day === dayOf(now, sheet.zone);
   const at =
     sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ??
     sheet.visits.find((visit) => visit.progress === 'placed');
   const last = [...sheet.visits].reverse().find((visit) => isEnded(visit.progress) && visit.undoable);
   const shown = sheet.visits.find((visit) => visit.id === panel?.visitId);
+  // A press that has not left the phone is taken back on the phone.
+  const unsent = outbox.isSending ? undefined : outbox.waiting.filter((waiting) => waiting.path === 'visit').at(-1);
   const close = () => {
     press.reset();
     setPanel(null);
@@ -107,13 +114,18 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
             <b>{press.error.message}</b>
           </p>
         ) : null}
+        {unsent && isToday ? (
+          <button type="button" className="btn w-full mb-2" onClick={() => void dismiss(unsent.key)}>
+            Take back “{unsent.words}”
+          </button>
+        ) : null}
         {at && isToday ? (
           <ActionBar
             visit={at.progress === 'placed' && last ? { ...at, undoable: last.undoable } : at}
             now={now}
             isBusy={press.isPending}
             onPress={(kind) =>
-              press.mutate(newPress(kind === 'undo' && at.progress === 'placed' && last ? last.id : at.id, { kind }))
+              press.mutate({ visit: kind === 'undo' && at.progress === 'placed' && last ? last : at, kind })
             }
             onPartDone={() => setPanel({ kind: 'part_done', visitId: at.id })}
           />
@@ -124,7 +136,7 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
               type="button"
               className="btn"
               disabled={press.isPending}
-              onClick={() => press.mutate(newPress(last.id, { kind: 'undo' }))}
+              onClick={() => press.mutate({ visit: last, kind: 'undo' })}
             >
               Take back “Done”
             </button>
@@ -145,8 +157,8 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
           isBusy={press.isPending}
           error={press.error?.message}
           onClose={close}
-          onSend={(trouble) => press.mutate(newPress(shown.id, { kind: 'trouble', ...trouble }), { onSuccess: close })}
-          onCallOff={(reason) => press.mutate(newPress(shown.id, { kind: 'call_off', reason }), { onSuccess: close })}
+          onSend={(trouble) => press.mutate({ visit: shown, kind: 'trouble', ...trouble }, { onSuccess: close })}
+          onCallOff={(reason) => press.mutate({ visit: shown, kind: 'call_off', reason }, { onSuccess: close })}
         />
       ) : null}
       {shown && panel?.kind === 'part_done' ? (
@@ -155,7 +167,7 @@ function RunSheet({ sheet }: { sheet: RunSheetDto }) {
           isBusy={press.isPending}
           error={press.error?.message}
           onClose={close}
-          onSend={(part) => press.mutate(newPress(shown.id, { kind: 'part_done', ...part }), { onSuccess: close })}
+          onSend={(part) => press.mutate({ visit: shown, kind: 'part_done', ...part }, { onSuccess: close })}
         />
       ) : null}
       {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} onClose={close} /> : null}

@@ -1,0 +1,76 @@
+/* Keeps the phone's screens for a dead zone: the shell and the run sheet's files. Data are kept by the app itself. */
+const CACHE = 'driprail-shell-1';
+const NEEDED = [
+  'index.html',
+  'src/features/run-sheet/pages/run-sheet.page.tsx',
+  'src/features/run-sheet/pages/clock.page.tsx',
+];
+
+self.addEventListener('install', (event) => {
+  event.waitUntil(keepShell().then(() => self.skipWaiting()));
+});
+
+self.addEventListener('activate', (event) => {
+  const old = caches
+    .keys()
+    .then((names) => Promise.all(names.filter((name) => name !== CACHE).map((name) => caches.delete(name))));
+  event.waitUntil(old.then(() => self.clients.claim()));
+});
+
+self.addEventListener('fetch', (event) => {
+  const { request } = event;
+  const url = new URL(request.url);
+  if (request.method !== 'GET' || url.origin !== self.location.origin) return;
+  if (url.pathname.startsWith('/api/') || url.pathname.startsWith('/socket.io/')) return;
+  if (request.mode === 'navigate') event.respondWith(page(request));
+  else if (url.pathname.startsWith('/assets/')) event.respondWith(file(request));
+});
+
+/** A page comes from the server while it answers; else the kept shell draws it. */
+async function page(request) {
+  try {
+    const fresh = await fetch(request);
+    if (fresh.ok) await refreshShell(fresh.clone());
+    return fresh;
+  } catch (error) {
+    const kept = await caches.match('/');
+    if (kept) return kept;
+    throw error;
+  }
+}
+
+/** Files are named after their content: a kept one is right for ever. */
+async function file(request) {
+  const kept = await caches.match(request);
+  if (kept) return kept;
+  const fresh = await fetch(request);
+  if (fresh.ok) {
+    const cache = await caches.open(CACHE);
+    await cache.put(request, fresh.clone());
+  }
+  return fresh;
+}
+
+/** After an update the new shell is kept with all it needs, so that an offline start never mixes two versions. */
+async function refreshShell(fresh) {
+  const kept = await caches.match('/');
+  const [now, before] = await Promise.all([fresh.text(), kept ? kept.text() : '']);
+  if (now !== before) await keepShell();
+}
+
+async function keepShell() {
+  const cache = await caches.open(CACHE);
+  const manifest = await (await fetch('/manifest.json', { cache: 'no-cache' })).json();
+  const files = new Set();
+  const add = (name) => {
+    const chunk = manifest[name];
+    if (!chunk || files.has(`/${chunk.file}`)) return;
+    for (const path of [chunk.file, ...(chunk.css ?? []), ...(chunk.assets ?? [])]) files.add(`/${path}`);
+    for (const next of chunk.imports ?? []) add(next);
+  };
+  NEEDED.forEach(add);
+  // What the shell loads after the first paint: the live line.
+  for (const next of manifest['index.html']?.dynamicImports ?? []) if (next.includes('socket.io')) add(next);
+  await cache.addAll([...files]);
+  await cache.put('/', await fetch('/', { cache: 'no-cache' }));
+}

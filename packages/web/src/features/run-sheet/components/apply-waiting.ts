@@ -1,0 +1,93 @@
+import type { ClockEntryDto, ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
+import { isAccessOpen } from '@driprail/shared/domain/board/access-notes';
+import type { Progress, ProgressAction } from '@driprail/shared/domain/board/progress';
+import { progressActions, takeStep } from '@driprail/shared/domain/board/progress';
+import type { KeptPress } from '../../../lib/outbox/store.ts';
+
+const timeOf = {
+  set_off: 'setOffAt',
+  arrive: 'arrivedAt',
+  start_work: 'startedAt',
+  part_done: 'endedAt',
+  finish: 'endedAt',
+  call_off: 'endedAt',
+} as const;
+
+/** Where a visit goes back to when its last mark is taken back. */
+function before(visit: RunVisitDto, action: ProgressAction): Progress {
+  if (action === 'arrive') return visit.times.setOffAt ? 'on_the_way' : 'placed';
+  const froms = {
+    set_off: 'placed',
+    start_work: 'on_site',
+    part_done: 'working',
+    finish: 'working',
+    call_off: 'placed',
+  } as const;
+  return froms[action];
+}
+
+/** The run sheet as it will be once what waits on this phone has been sent; the server judges it again then. */
+export function applyWaiting(sheet: RunSheetDto, waiting: KeptPress[], now: string): RunSheetDto {
+  const visits = sheet.visits.map((visit) =>
+    hideClosedNotes(
+      waiting.filter((press) => press.path === 'visit' && press.targetId === visit.id).reduce(applyToVisit, visit),
+      now,
+      sheet.zone,
+    ),
+  );
+  const clock = sheet.clock && applyToClocks(sheet.clock, waiting);
+  return { ...sheet, visits, clock };
+}
+
+function applyToVisit(visit: RunVisitDto, { body }: KeptPress): RunVisitDto {
+  const kind = body['kind'] as string;
+  const at = body['deviceAt'] as string;
+  if (kind === 'undo' && visit.undoable) {
+    return { ...visit, progress: before(visit, visit.undoable.action), since: at, undoable: null };
+  }
+  const action = progressActions.find((known) => known === kind);
+  const step = action ? takeStep(visit.progress, action) : null;
+  if (!action || !step?.ok) return visit;
+  return {
+    ...visit,
+    progress: step.to,
+    since: at,
+    reason: typeof body['reason'] === 'string' ? body['reason'] : '',
+    times: { ...visit.times, [timeOf[action]]: at },
+    undoable: null,
+  };
+}
+
+/** The clock with what waits on this phone. */
+export function applyToClocks(clock: ClockStateDto, waiting: KeptPress[]): ClockStateDto {
+  return waiting.filter((press) => press.path === 'clock').reduce(applyToClock, clock);
+}
+
+function applyToClock(clock: ClockStateDto, { key, body }: KeptPress): ClockStateDto {
+  const at = body['deviceAt'] as string;
+  const ended = clock.today.map((entry) => (entry.endedAt === null ? { ...entry, endedAt: at } : entry));
+  if (body['action'] === 'stop') return { ...clock, open: null, inSince: null, today: ended };
+  const open: ClockEntryDto = {
+    id: key,
+    personId: clock.personId,
+    personName: clock.open?.personName ?? '',
+    kind: (body['kind'] as ClockKindName | undefined) ?? 'shop',
+    visitId: null,
+    jobNumber: null,
+    startedAt: at,
+    endedAt: null,
+    isInterrupted: false,
+    isForgotten: false,
+    note: '',
+    version: 0,
+  };
+  return { ...clock, open, inSince: clock.inSince ?? at, today: [...ended, open] };
+}
+
+/** A copy on the phone keeps to the same hours as the server: gate code and number leave at the day's end. */
+function hideClosedNotes(visit: RunVisitDto, now: string, zone: string): RunVisitDto {
+  const arrivesFrom = visit.windowFrom ?? visit.from;
+  if (arrivesFrom !== null && isAccessOpen(arrivesFrom, now, zone)) return visit;
+  return { ...visit, phone: null, gateCode: null, accessNotes: null };
+}
