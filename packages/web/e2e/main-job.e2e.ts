@@ -103,7 +103,7 @@ describe('the week’s pay', () => {
     await owner.getByRole('heading', { name: 'Pay week 19' }).waitFor();
     await owner.getByRole('link', { name: 'Set the time' }).click();
     const correction = owner.getByRole('dialog', { name: 'Correct' });
-    await correction.getByText('Cal Webb').waitFor();
+    await correction.getByText('Cal Webb', { exact: true }).waitFor();
     await correction.getByLabel('To', { exact: true }).fill('14:40');
     await correction.getByRole('button', { name: 'Forgot to clock out' }).click();
     await correction.getByRole('button', { name: 'Save the correction' }).click();
