@@ -1,4 +1,6 @@
 import * as api from '@driprail/shared/contracts/jobs.contract';
+import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
+import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
@@ -8,20 +10,29 @@ import { recordTip } from './tips.service.ts';
 
 export function jobsRoutes(table: RouteTable): void {
   route(table, api.findJobs, async ({ query }) => ({ jobs: await findJobs(query.find) }));
-  route(table, api.getJob, async ({ params }) => {
+  route(table, api.getJob, async ({ params }, ctx) => {
     const job = await readJob(params.id);
     if (!job) throw notFound('That job');
-    return { job };
+    return { job: forAbility(ctx, job) };
   });
-  route(table, api.createJob, async ({ body }, ctx) => ({ job: await createJob(ctx, body) }));
-  route(table, api.updateJob, async ({ params, body }, ctx) => ({ job: await updateJob(ctx, params.id, body) }));
-  route(table, api.copyJob, async ({ params }, ctx) => ({ job: await copyJob(ctx, params.id) }));
-  route(table, api.callOffJob, async ({ params, body }, ctx) => ({
-    job: await callOffJob(ctx, params.id, body.version, body.reason),
+  route(table, api.createJob, async ({ body }, ctx) => ({ job: forAbility(ctx, await createJob(ctx, body)) }));
+  route(table, api.updateJob, async ({ params, body }, ctx) => ({
+    job: forAbility(ctx, await updateJob(ctx, params.id, body)),
   }));
-  route(table, api.addVisit, async ({ params, body }, ctx) => ({ job: await addVisit(ctx, params.id, body) }));
+  route(table, api.copyJob, async ({ params }, ctx) => ({ job: forAbility(ctx, await copyJob(ctx, params.id)) }));
+  route(table, api.callOffJob, async ({ params, body }, ctx) => ({
+    job: forAbility(ctx, await callOffJob(ctx, params.id, body.version, body.reason)),
+  }));
+  route(table, api.addVisit, async ({ params, body }, ctx) => ({
+    job: forAbility(ctx, await addVisit(ctx, params.id, body)),
+  }));
   route(table, api.recordTip, async ({ params, body }, ctx) => {
     await recordTip(ctx, params.id, body);
     return okay;
   });
+}
+
+/** A tip is pay: whoever may not read the pay week gets the job without it. */
+function forAbility({ ability }: Ctx, job: JobDto): JobDto {
+  return ability.can('read', 'PayWeek') ? job : { ...job, tips: [] };
 }

@@ -182,10 +182,11 @@ async function lockJob(tx: Transaction, id: string, version: number): Promise<Jo
   const job = await Job.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
   if (!job) throw notFound('That job');
   if (job.version !== version) {
+    const newer = await readJob(id, tx);
     throw conflict(
       'stale',
       `Somebody changed job ${job.number} meanwhile. Look at the newer one; what you entered is still here.`,
-      await readJob(id, tx),
+      newer && { ...newer, tips: [] },
     );
   }
   return job;
