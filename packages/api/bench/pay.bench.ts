@@ -32,7 +32,10 @@ function weekOf(people: number): PayWeekInput {
     endsAt: at(7, 4),
     zone: 'America/New_York',
     clock: '24',
-    rules: { overtimeRuleSet: 'us_federal', minimumWage: '7.25', crewSplit: 'equal', mealBreakMinutes: 30 },
+    rules: {
+      ...{ overtimeRuleSet: 'us_federal', minimumWage: '7.25', crewSplit: 'equal', mealBreakMinutes: 30 },
+      ...{ punchRoundingMinutes: null, premiumRounding: 'half_up' },
+    },
     people: ids.map((id) => ({ id, name: id })),
     entries: ids.flatMap((personId) =>
       days.flatMap((day) =>
@@ -76,6 +79,8 @@ function weekOf(people: number): PayWeekInput {
           visitId: `visit-${personId}-${day}-${hour}`,
           serviceId: 'polish',
           serviceName: 'One-step polish',
+          sizeClass: 'sedan' as const,
+          isAddOn: false,
           commissionableCents: 26_500,
           doneAt: at(day, hour + 1),
           crew: [{ personId, position: 0, weight: 1, isTrainee: false, minutes: 120 }],
@@ -84,6 +89,9 @@ function weekOf(people: number): PayWeekInput {
     ),
     tips: [],
     adjustments: [],
+    plans: [],
+    places: [],
+    carried: [],
     asOf: at(8, 12),
   };
 }

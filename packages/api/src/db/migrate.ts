@@ -68,6 +68,7 @@ async function grantRows(sequelize: Sequelize, appRole: string): Promise<void> {
      GRANT SELECT, INSERT, UPDATE, DELETE ON ALL TABLES IN SCHEMA public TO ${role};
      GRANT USAGE, SELECT ON ALL SEQUENCES IN SCHEMA public TO ${role};
      REVOKE UPDATE, DELETE ON audit_entries, clock_corrections, pay_rates, pay_rules FROM ${role};
+     REVOKE UPDATE, DELETE ON pay_plans, pay_places, pay_place_wages, person_places FROM ${role};
      REVOKE ALL ON schema_migrations FROM ${role};`,
   );
 }

@@ -2,7 +2,8 @@ import type { Migration } from '../migration.ts';
 import { company } from './2026-12-01-001-company.ts';
 import { work } from './2026-12-01-002-work.ts';
 import { hours } from './2026-12-01-004-hours.ts';
+import { payPlans } from './2026-12-01-005-pay-plans.ts';
 import { pay } from './2026-12-01-003-pay.ts';
 
 /** In the order in which they are run. */
-export const migrations: Migration[] = [company, work, pay, hours];
+export const migrations: Migration[] = [company, work, pay, hours, payPlans];

@@ -1,6 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
-import type { CrewSplit } from '@driprail/shared/domain/pay/pay-week.types';
+import type { CrewSplit, PremiumRounding } from '@driprail/shared/domain/pay/pay-week.types';
 
 export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreationAttributes<PayRuleSet>> {
   declare id: string;
@@ -9,6 +9,8 @@ export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreation
   declare minimumWage: string;
   declare crewSplit: CrewSplit;
   declare mealBreakMinutes: CreationOptional<number>;
+  declare punchRoundingMinutes: CreationOptional<5 | 6 | 15 | null>;
+  declare premiumRounding: CreationOptional<PremiumRounding>;
   declare workweekStartsOn: number;
   declare workweekStartsAt: CreationOptional<string>;
   declare setBy: CreationOptional<string | null>;
@@ -23,6 +25,8 @@ export function initPayRuleSet(sequelize: Sequelize): void {
       minimumWage: { type: DataTypes.DECIMAL(14, 6), allowNull: false },
       crewSplit: { type: DataTypes.TEXT, allowNull: false },
       mealBreakMinutes: { type: DataTypes.INTEGER },
+      punchRoundingMinutes: { type: DataTypes.INTEGER, allowNull: true },
+      premiumRounding: { type: DataTypes.TEXT },
       workweekStartsOn: { type: DataTypes.INTEGER, allowNull: false },
       workweekStartsAt: { type: DataTypes.TEXT },
       setBy: { type: DataTypes.UUID, allowNull: true },

@@ -1,10 +1,13 @@
 import type { Transaction } from 'sequelize';
 import { splitByLargestRemainder } from '@driprail/shared/domain/money/largest-remainder';
 import { exact } from '@driprail/shared/domain/money/exact';
-import type { CrewShare, DoneLine, PayWeekInput } from '@driprail/shared/domain/pay/pay-week.types';
+import type { CrewShare, DoneLine, PayWeekInput, PersonPlace } from '@driprail/shared/domain/pay/pay-week.types';
+import { ruleSetOf } from '@driprail/shared/domain/pay/own-rules';
+import type { OwnRules } from '@driprail/shared/domain/pay/own-rules';
 import { companyOf } from '../../db/company.ts';
 import type { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
+import { carriedInto } from './carried.queries.ts';
 import { rulesOn } from './weeks.service.ts';
 
 interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
@@ -14,7 +17,15 @@ interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
   crew: CrewShare[];
 }
 
-type Gathered = Pick<PayWeekInput, 'people' | 'entries' | 'rates' | 'tips' | 'adjustments'> & { lines: GatheredLine[] };
+interface GatheredPlace extends Omit<PersonPlace, 'ruleSet'> {
+  ruleSetKey: string | null;
+  ownRules: OwnRules | null;
+}
+
+type Gathered = Pick<PayWeekInput, 'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans'> & {
+  lines: GatheredLine[];
+  places: GatheredPlace[];
+};
 
 const crewJson = `json_build_object('personId', vc.person_id, 'position', vc.position, 'weight', vc.weight, 'isTrainee', vc.is_trainee,
   'minutes', coalesce((SELECT floor(sum(extract(epoch FROM e.ended_at - e.started_at)) / 60)::int FROM clock_entries e
@@ -44,7 +55,7 @@ SELECT json_build_object(
   'rates', coalesce((SELECT json_agg(json_build_object('id', r.id, 'kind', r.kind, 'personId', r.person_id, 'serviceId', r.service_id,
       'clockKind', r.clock_kind, 'value', r.value::text, 'startsOn', r.starts_on) ORDER BY r.starts_on, r.id) FROM pay_rates r), '[]'::json),
   'lines', coalesce((SELECT json_agg(json_build_object('lineId', l.id, 'jobId', j.id, 'jobNumber', j.number, 'visitId', l.finished_visit_id,
-      'serviceId', s.id, 'serviceName', s.name, 'priceCents', l.price_cents, 'discountCents', j.discount_cents,
+      'serviceId', s.id, 'serviceName', s.name, 'sizeClass', l.size_class, 'isAddOn', s.kind = 'add_on', 'priceCents', l.price_cents, 'discountCents', j.discount_cents,
       'jobPrices', (SELECT json_agg(json_build_object('lineId', o.id, 'priceCents', o.price_cents) ORDER BY o.position, o.id)
          FROM job_lines o WHERE o.job_id = j.id),
       'doneAt', to_json(l.finished_at) #>> '{}',
@@ -61,7 +72,16 @@ SELECT json_build_object(
       ORDER BY t.received_at, t.id) FROM tip t JOIN jobs j ON j.id = t.job_id), '[]'::json),
   'adjustments', coalesce((SELECT json_agg(json_build_object('id', x.id, 'personId', x.person_id, 'kind', x.kind,
       'amountCents', x.amount_cents, 'reason', x.reason, 'correctsLineId', x.corrects_line_id) ORDER BY x.at, x.id)
-     FROM pay_adjustments x WHERE x.pay_week_id = :weekId), '[]'::json)
+     FROM pay_adjustments x WHERE x.pay_week_id = :weekId), '[]'::json),
+  'plans', coalesce((SELECT json_agg(json_build_object('id', p.id, 'personId', p.person_id, 'startsOn', p.starts_on, 'plan', p.plan)
+      ORDER BY p.person_id) FROM (SELECT DISTINCT ON (person_id) * FROM pay_plans WHERE starts_on <= :startsOn
+      ORDER BY person_id, starts_on DESC) p), '[]'::json),
+  'places', coalesce((SELECT json_agg(json_build_object('personId', p.person_id, 'placeId', pl.id, 'name', pl.name,
+      'ruleSetKey', pl.rule_set_key, 'ownRules', pl.own_rules,
+      'minimumWages', coalesce((SELECT json_agg(json_build_object('startsOn', w.starts_on, 'amount', w.amount::text) ORDER BY w.starts_on)
+         FROM pay_place_wages w WHERE w.place_id = pl.id), '[]'::json)) ORDER BY p.person_id)
+      FROM (SELECT DISTINCT ON (person_id) * FROM person_places WHERE starts_on <= :startsOn ORDER BY person_id, starts_on DESC) p
+      JOIN pay_places pl ON pl.id = p.place_id), '[]'::json)
 ) AS gathered`;
 
 /** The engine's input for a week as the records stand at `asOf`. */
@@ -72,11 +92,12 @@ export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): P
   const endsAt = week.endsAt.toISOString();
   const [row] = await select<{ gathered: Gathered }>(
     gatherSql,
-    { weekId: week.id, startsAt, endsAt, asOf: asOf.toISOString(), zone },
+    { weekId: week.id, startsOn: week.startsOn, startsAt, endsAt, asOf: asOf.toISOString(), zone },
     tx,
   );
   if (!row) throw new Error('a pay week gathers one row');
-  const { lines, ...gathered } = row.gathered;
+  const { lines, places, ...gathered } = row.gathered;
+  const carried = await carriedInto(week, gathered.plans, (prior) => payInputOf(prior, asOf, tx), tx);
   return {
     startsAt,
     endsAt,
@@ -87,11 +108,19 @@ export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): P
       minimumWage: rules.minimumWage,
       crewSplit: rules.crewSplit,
       mealBreakMinutes: rules.mealBreakMinutes ?? 30,
+      punchRoundingMinutes: rules.punchRoundingMinutes ?? null,
+      premiumRounding: rules.premiumRounding ?? 'half_up',
     },
     ...gathered,
     doneLines: lines.map(toDoneLine),
+    places: places.map(toPlace),
+    carried,
     asOf: asOf.toISOString(),
   };
+}
+
+function toPlace({ ruleSetKey, ownRules, ...place }: GatheredPlace): PersonPlace {
+  return { ...place, ruleSet: ruleSetOf(place.placeId, place.name, ruleSetKey, ownRules) };
 }
 
 /** A discount lowers each line of the job by its share of the price, to the cent. */

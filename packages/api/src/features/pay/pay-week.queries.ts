@@ -1,12 +1,12 @@
 import type { Transaction } from 'sequelize';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { ENGINE_VERSION, computePayWeek } from '@driprail/shared/domain/pay/compute-pay-week';
-import type { PayLine, PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import type { PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
 import type { PayWeek } from '../../db/models/index.ts';
-import { PayLineRow, PayStatement } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
 import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf, correctionsOfWeek, differences } from './corrections.queries.ts';
+import { readFrozen } from './frozen.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { salesOf } from './week-figures.queries.ts';
 import { headOf } from './weeks.service.ts';
@@ -29,25 +29,6 @@ export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): P
     customers: await customersOf(people, tx),
     warningTimes: warningTimes(people, input),
   };
-}
-
-/** The stored lines of a locked week, of everybody or of one person. */
-export async function readFrozen(
-  weekId: string,
-  personId: string | null,
-  tx?: Transaction,
-): Promise<{ people: PersonWeek[]; lineIds: Record<string, string> }> {
-  const where = { payWeekId: weekId, ...(personId && { personId }) };
-  const options = { where, transaction: tx ?? null };
-  const statements = await PayStatement.findAll(options);
-  const rows = await PayLineRow.findAll({ ...options, order: [['position', 'ASC']] });
-  const people = statements
-    .map((statement) => ({
-      ...(statement.summary as Omit<PersonWeek, 'lines'>),
-      lines: rows.filter((row) => row.personId === statement.personId).map((row): PayLine => row.line),
-    }))
-    .sort((a, b) => a.name.localeCompare(b.name));
-  return { people, lineIds: Object.fromEntries(rows.map((row) => [`${row.personId}:${row.key}`, row.id])) };
 }
 
 function adjustmentsOf(weekId: string, tx?: Transaction): Promise<PayWeekDto['adjustments']> {

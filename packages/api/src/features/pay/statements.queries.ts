@@ -8,7 +8,8 @@ import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
 import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf } from './corrections.queries.ts';
-import { readFrozen, readPayWeek } from './pay-week.queries.ts';
+import { readFrozen } from './frozen.queries.ts';
+import { readPayWeek } from './pay-week.queries.ts';
 import { headOf, weekAt } from './weeks.service.ts';
 
 interface StatementHead {

@@ -3,26 +3,60 @@ import { centsText, shortText, toCents } from '../money/rounding.ts';
 import { formatDate } from '../time/format.ts';
 import { rateInForce } from './dated-rates.ts';
 import { aLine } from './pay-line.ts';
-import type { DatedRate, PayLine, PayPerson } from './pay-week.types.ts';
+import type { DatedRate, PayLine, PayPerson, SourceRef } from './pay-week.types.ts';
 import { hoursAndMinutes, kindWords, rateSource, rateText, workedDays } from './working-words.ts';
 import type { WorkSpan } from './work-spans.ts';
 
-interface RateGroup {
-  rate: DatedRate;
-  spans: WorkSpan[];
+/** What an hour of some worked time is paid. */
+export interface TimePrice {
+  /** One line for each; stable within a week. */
+  key: string;
+  label: string;
+  /** Decimal dollars an hour. */
+  value: string;
+  startsOn: string;
+  source: SourceRef;
+  rule: string;
 }
 
 export interface HourlyPay {
   lines: PayLine[];
-  /** Exact hours for which no hourly rate had started. */
+  /** Exact hours for which there was no price. */
   unpaidHours: Exact;
+  /** Exact dollars of the lines that pay for rest breaks. */
+  restPaid: Exact;
 }
 
-/** One line per dated rate: the hours it applied to times the rate, rounded once, half up. */
-export function hourlyPay(person: PayPerson, spans: readonly WorkSpan[], rates: readonly DatedRate[]): HourlyPay {
-  const groups = new Map<string, RateGroup>();
+const RULE = 'Worked time times the dated rate; 29 CFR 778.110';
+
+/** One line per price: the hours it applied to times the price, rounded once, half up. */
+export function hourlyPay(
+  person: PayPerson,
+  spans: readonly WorkSpan[],
+  priceOf: (span: WorkSpan) => TimePrice | null,
+): HourlyPay {
+  const groups = new Map<string, { price: TimePrice; spans: WorkSpan[] }>();
   let unpaidHours = ZERO;
+  let restPaid = ZERO;
   for (const span of spans) {
+    const price = priceOf(span);
+    const hours = hoursOf(span.to - span.from);
+    if (price === null) {
+      unpaidHours = unpaidHours.add(hours);
+      continue;
+    }
+    if (span.kind === 'rest_break') restPaid = restPaid.add(hours.mul(exact(price.value)));
+    const group = groups.get(price.key) ?? { price, spans: [] };
+    group.spans.push(span);
+    groups.set(price.key, group);
+  }
+  const lines = [...groups.values()].map((group) => timeLine(person, group.price, group.spans));
+  return { lines, unpaidHours, restPaid };
+}
+
+/** The dated rate for a piece of worked time, as a price. */
+export function datedPrice(person: PayPerson, rates: readonly DatedRate[]): (span: WorkSpan) => TimePrice | null {
+  return (span) => {
     const rate = rateInForce(rates, {
       kind: 'hourly',
       personId: person.id,
@@ -30,31 +64,33 @@ export function hourlyPay(person: PayPerson, spans: readonly WorkSpan[], rates: 
       clockKind: span.kind,
       date: span.date,
     });
-    if (rate === null) {
-      unpaidHours = unpaidHours.add(hoursOf(span.to - span.from));
-      continue;
-    }
-    const group = groups.get(rate.id) ?? { rate, spans: [] };
-    group.spans.push(span);
-    groups.set(rate.id, group);
-  }
-  return { lines: [...groups.values()].map((group) => hourlyLine(person, group)), unpaidHours };
+    if (rate === null) return null;
+    return {
+      key: `hourly:${rate.id}:${rate.clockKind ?? 'all'}`,
+      label: rate.clockKind === null ? 'Hours by the clock' : `${kindWords(rate.clockKind)}, by the clock`,
+      value: rate.value,
+      startsOn: rate.startsOn,
+      source: rateSource(rate),
+      rule: RULE,
+    };
+  };
 }
 
-function hourlyLine(person: PayPerson, { rate, spans }: RateGroup): PayLine {
+/** Worked time times a price. */
+export function timeLine(person: PayPerson, price: TimePrice, spans: readonly WorkSpan[]): PayLine {
   const hours = hoursOf(spans.reduce((total, span) => total + span.to - span.from, 0));
-  const amountCents = toCents(hours.mul(exact(rate.value)));
-  const price = rateText(rate.value);
+  const amountCents = toCents(hours.mul(exact(price.value)));
+  const words = rateText(price.value);
   return aLine({
-    key: `hourly:${rate.id}:${rate.clockKind ?? 'all'}`,
+    key: price.key,
     personId: person.id,
     kind: 'hourly',
-    label: rate.clockKind === null ? 'Hours by the clock' : `${kindWords(rate.clockKind)}, by the clock`,
+    label: price.label,
     hours: fractionText(hours),
-    rate: rate.value,
+    rate: price.value,
     amountCents,
     inRegularRate: true,
-    rule: 'Worked time times the dated rate; 29 CFR 778.110',
+    rule: price.rule,
     working: [
       {
         label: `What ${person.name} worked`,
@@ -65,10 +101,10 @@ function hourlyLine(person: PayPerson, { rate, spans }: RateGroup): PayLine {
       },
       {
         label: 'By the hour',
-        note: `${price} since ${formatDate(rate.startsOn)}`,
-        arithmetic: `${shortText(hours)} h times ${price}`,
+        note: `${words} since ${formatDate(price.startsOn)}`,
+        arithmetic: `${shortText(hours)} h times ${words}`,
         result: centsText(amountCents),
-        sources: [rateSource(rate)],
+        sources: [price.source],
       },
     ],
   });

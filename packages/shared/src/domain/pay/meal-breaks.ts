@@ -24,7 +24,7 @@ export function countEntries(entries: readonly PayEntry[], grid: WeekGrid, mealB
     if (joined !== undefined && isOffDuty(joined, true, mealBreakMinutes)) continue;
     if (joined !== undefined && entry.endedAt !== null && span.to > grid.from && span.from < grid.to)
       shortMeals.push(entry);
-    counted.push({ entryId: entry.id, kind: entry.kind, ...span });
+    counted.push({ entryId: entry.id, kind: entry.kind, visitId: entry.visitId, ...span });
   }
   return { counted, shortMeals };
 }

@@ -21,9 +21,15 @@ export interface OvertimeRuleSet {
   flatSumBonusApart: boolean;
   /** Card fees may come off a tip, and tips may count toward the cash wage. */
   allowsTipDeductions: boolean;
+  /** Rest breaks of piece work are paid apart, at the week's average hour. */
+  paysPieceRest: boolean;
+  /** Whether an agreement may let flat amounts and commission cover the time beside the jobs. */
+  mayCoverOtherTime: boolean;
+  /** The most hours that a salary may be divided by; null without such a rule. */
+  salaryHoursAtMost: string | null;
   source: string;
   /** How surely the rule was read. */
-  certainty: 'read' | 'from memory';
+  certainty: 'read' | 'from memory' | 'set by the owner';
 }
 
 const weekly = {
@@ -34,6 +40,9 @@ const weekly = {
   dailyGateMultiple: null,
   flatSumBonusApart: false,
   allowsTipDeductions: true,
+  paysPieceRest: false,
+  mayCoverOtherTime: true,
+  salaryHoursAtMost: null,
 } satisfies Partial<OvertimeRuleSet>;
 
 export const OVERTIME_RULE_SETS: readonly OvertimeRuleSet[] = [
@@ -57,7 +66,10 @@ export const OVERTIME_RULE_SETS: readonly OvertimeRuleSet[] = [
     seventhDay: { doubleOver: '8', onlyOverWeekly: false },
     flatSumBonusApart: true,
     allowsTipDeductions: false,
-    source: 'California Labor Code 510',
+    paysPieceRest: true,
+    mayCoverOtherTime: false,
+    salaryHoursAtMost: '40',
+    source: 'California Labor Code 510, 226.2, 515(d)',
     certainty: 'read',
   },
   {

@@ -1,4 +1,7 @@
+import type { SizeClass } from '../../contracts/fields.ts';
 import type { ClockStyle } from '../time/format.ts';
+import type { OvertimeRuleSet } from './overtime-rule-sets.ts';
+import type { DatedPlan } from './plans/pay-plan.ts';
 
 /**
  * What the pay engine takes and gives. Amounts are integer US cents, rates and percents decimal strings,
@@ -54,6 +57,9 @@ export interface DoneLine {
   visitId: string;
   serviceId: string;
   serviceName: string;
+  sizeClass: SizeClass;
+  /** Sold beside a package: counts for a bonus by add-ons. */
+  isAddOn: boolean;
   /** After discounts, before tax, tips and deposits. */
   commissionableCents: number;
   doneAt: string;
@@ -104,6 +110,42 @@ export interface PayRules {
   crewSplit: CrewSplit;
   /** A meal break at least this long, free of duty, is not worked (29 CFR 785.19). */
   mealBreakMinutes: number;
+  /** Punches count to the nearest so many minutes; null for the exact time (29 CFR 785.48(b)). */
+  punchRoundingMinutes: 5 | 6 | 15 | null;
+  premiumRounding: PremiumRounding;
+}
+
+/** Overtime premiums to the cent: half up like every line, or always up. */
+export type PremiumRounding = 'half_up' | 'up';
+
+/** Where a person works: rules that run beside the federal ones. Without one, the company's rules alone. */
+export interface PersonPlace {
+  personId: string;
+  placeId: string;
+  name: string;
+  /** The whole rule set, so that a locked week needs no list to be worked out again. */
+  ruleSet: OvertimeRuleSet;
+  /** Dollars an hour from dates on, oldest first; the company's wage holds where it is higher. */
+  minimumWages: { startsOn: string; amount: string }[];
+}
+
+/** What earlier workweeks of the same month leave to this one; a month is the workweeks that end in it. */
+export interface CarriedPay {
+  personId: string;
+  /** Draw paid beyond the commission earned so far, cents. */
+  drawDeficitCents: number;
+  /** The earlier workweeks of the month, oldest first. */
+  weeks: CarriedWeek[];
+}
+
+export interface CarriedWeek {
+  startsOn: string;
+  hours: string;
+  /** Hours times the part of the regular rate they carry on top: half for overtime, one for double time. */
+  premiumHours: string;
+  /** Commissionable cents and what was paid on them so far. */
+  tierBaseCents: number;
+  tierPaidCents: number;
 }
 
 export interface PayWeekInput {
@@ -119,6 +161,10 @@ export interface PayWeekInput {
   doneLines: DoneLine[];
   tips: PayTip[];
   adjustments: PayAdjustment[];
+  /** Plans that may be in force; a person without one is paid by rates. */
+  plans: DatedPlan[];
+  places: PersonPlace[];
+  carried: CarriedPay[];
   /** The instant that open entries are measured to, for a draft of the running week. */
   asOf: string;
 }
@@ -128,6 +174,15 @@ export type PayLineKind =
   | 'flat'
   | 'commission'
   | 'overtime_premium'
+  | 'salary'
+  | 'day_rate'
+  | 'job_rate'
+  | 'premium_pay' // by the hour, for a role or a shift
+  | 'plan_floor' // up to an hourly floor, a weekly guarantee or a draw; a draw paid back is negative
+  | 'rest_pay' // rest breaks of piece work, paid apart
+  | 'percentage_bonus' // of straight and overtime pay alike (29 CFR 778.210): outside
+  | 'commission_settlement' // a month's tiers, settled: outside this week's regular rate
+  | 'settlement_premium' // the overtime that a settlement brings to the weeks it belongs to
   | 'minimum_wage_make_up'
   | 'tip'
   | 'tip_already_received'
@@ -145,7 +200,7 @@ export interface WorkingStep {
 }
 
 export interface SourceRef {
-  kind: 'clock_entry' | 'job' | 'visit' | 'rate' | 'rule' | 'tip' | 'adjustment' | 'pay_line';
+  kind: 'clock_entry' | 'job' | 'visit' | 'rate' | 'rule' | 'tip' | 'adjustment' | 'pay_line' | 'plan';
   id: string;
   label: string;
 }
@@ -205,6 +260,8 @@ export interface PersonWeek {
   regularRate: string | null;
   lines: PayLine[];
   warnings: PayWarning[];
+  /** Only under a plan that settles by the month: what goes on to the next workweek of the month. */
+  carries?: Omit<CarriedWeek, 'startsOn' | 'hours'> & { drawDeficitCents: number };
   /** Sums of payable lines by group, cents. */
   totals: {
     hourly: number;

@@ -1,7 +1,7 @@
 import { dollars, fractionText, type Exact } from '../money/exact.ts';
-import { centsText, decimalText, shortText, toCents } from '../money/rounding.ts';
+import { centsText, decimalText, shortText, toCents, toCentsUp } from '../money/rounding.ts';
 import { aLine, totalCents } from './pay-line.ts';
-import type { PayLine, PayLineKind, PayPerson, SourceRef, WorkingStep } from './pay-week.types.ts';
+import type { PayLine, PayLineKind, PayPerson, PremiumRounding, SourceRef, WorkingStep } from './pay-week.types.ts';
 import type { WeekPremium } from './week-premium.ts';
 import { hoursAndMinutes, workedDays } from './working-words.ts';
 import type { WorkSpan } from './work-spans.ts';
@@ -12,37 +12,42 @@ export interface PremiumParts {
   hours: Exact;
   rate: Exact;
   premium: WeekPremium;
+  rounding: PremiumRounding;
+  /** Exact dollars of the included lines for hours that were not worked: no part of the rate. */
+  notWorked: Exact;
   /** Lines inside the regular rate, the make-up among them. */
   included: readonly PayLine[];
   /** Lines outside it, tips and all. */
   excluded: readonly PayLine[];
 }
 
-/** The overtime line with its working in the order a person would do it by hand; null when nothing is owed. */
-export function premiumLine(parts: PremiumParts): PayLine | null {
+/** The overtime line with its working in the order a person would do it by hand; nothing when nothing is owed. */
+export function premiumLine(parts: PremiumParts): PayLine[] {
   const { person, hours, rate, premium } = parts;
-  const amountCents = toCents(premium.premium);
-  if (amountCents === 0) return null;
-  return aLine({
-    key: 'overtime_premium',
-    personId: person.id,
-    kind: 'overtime_premium',
-    label: premium.split.double.gt(0) ? 'Overtime and double time premium' : 'Overtime, half the regular rate',
-    hours: fractionText(premium.split.overtime.add(premium.split.double)),
-    rate: fractionText(rate),
-    amountCents,
-    rule:
-      premium.ruleSet.key === 'us_federal'
-        ? '29 USC 207(a); 29 CFR 778.109 to 778.118'
-        : `${premium.ruleSet.name}; ${premium.ruleSet.source}`,
-    working: [
-      workedStep(parts),
-      ...includedSteps(parts.included),
-      ...excludedStep(parts.excluded),
-      ...rateSteps(parts, hours, rate),
-      ...premiumSteps(parts, amountCents),
-    ],
-  });
+  const amountCents = parts.rounding === 'up' ? toCentsUp(premium.premium) : toCents(premium.premium);
+  if (amountCents === 0) return [];
+  return [
+    aLine({
+      key: 'overtime_premium',
+      personId: person.id,
+      kind: 'overtime_premium',
+      label: premium.split.double.gt(0) ? 'Overtime and double time premium' : 'Overtime, half the regular rate',
+      hours: fractionText(premium.split.overtime.add(premium.split.double)),
+      rate: fractionText(rate),
+      amountCents,
+      rule:
+        premium.ruleSet.key === 'us_federal'
+          ? '29 USC 207(a); 29 CFR 778.109 to 778.118'
+          : `${premium.ruleSet.name}; ${premium.ruleSet.source}`,
+      working: [
+        workedStep(parts),
+        ...includedSteps(parts.included),
+        ...excludedStep(parts.excluded),
+        ...rateSteps(parts, hours, rate),
+        ...premiumSteps(parts, amountCents),
+      ],
+    }),
+  ];
 }
 
 function workedStep({ person, spans, hours }: PremiumParts): WorkingStep {
@@ -57,8 +62,14 @@ function workedStep({ person, spans, hours }: PremiumParts): WorkingStep {
 }
 
 const INCLUDED: [PayLineKind, string][] = [
+  ['salary', 'The salary of this week counts'],
+  ['day_rate', 'Day rates of this week count'],
   ['flat', 'Flat amounts of this week count'],
+  ['job_rate', 'Job rates of this week count'],
   ['commission', 'Commission of this week counts'],
+  ['plan_floor', 'What the plan adds or takes back counts'],
+  ['premium_pay', 'Premiums for a role or a shift count'],
+  ['rest_pay', 'Rest breaks paid apart count'],
   ['bonus', 'Bonuses of this week count'],
   ['minimum_wage_make_up', 'The make-up to the minimum wage counts'],
 ];
@@ -90,6 +101,11 @@ function includedSteps(included: readonly PayLine[]): WorkingStep[] {
 
 const EXCLUDED: [PayLineKind[], string, string][] = [
   [['tip', 'tip_already_received'], 'tips', 'Tips belong to the crew'],
+  [
+    ['commission_settlement', 'settlement_premium'],
+    'settled for the month',
+    'A settlement belongs to the weeks of its month',
+  ],
   [['correction'], 'corrections', 'A correction belongs to the week it mends'],
   [['discretionary_bonus'], 'discretionary bonus', 'A discretionary bonus was never promised'],
   [['reimbursement'], 'reimbursement', 'A reimbursement pays back an expense'],
@@ -114,10 +130,21 @@ function excludedStep(excluded: readonly PayLine[]): WorkingStep[] {
   ];
 }
 
-function rateSteps({ included }: PremiumParts, hours: Exact, rate: Exact): WorkingStep[] {
+function rateSteps({ included, notWorked }: PremiumParts, hours: Exact, rate: Exact): WorkingStep[] {
   const total = totalCents(included);
-  const quotient = dollars(total).div(hours);
-  const isRaised = rate.gt(quotient);
+  const counted = dollars(total).sub(notWorked);
+  const isRaised = rate.gt(counted.div(hours));
+  const missing: WorkingStep[] = notWorked.gt(0)
+    ? [
+        {
+          label: 'Less the salary for hours that were not worked',
+          note: 'The rate is the salary over the hours it covers (29 CFR 778.113)',
+          arithmetic: `${centsText(total)} less ${decimalText(notWorked, 4)}`,
+          result: decimalText(counted, 4),
+          sources: [],
+        },
+      ]
+    : [];
   return [
     {
       label: 'Together',
@@ -128,19 +155,20 @@ function rateSteps({ included }: PremiumParts, hours: Exact, rate: Exact): Worki
       result: centsText(total),
       sources: [],
     },
+    ...missing,
     {
       label: 'The regular rate',
       note: isRaised
         ? 'What an hour of this week was worth, raised to the minimum wage'
         : 'What an hour of this week was worth',
-      arithmetic: `${centsText(total)} divided by ${shortText(hours)} h`,
+      arithmetic: `${notWorked.gt(0) ? decimalText(counted, 4) : centsText(total)} divided by ${shortText(hours)} h`,
       result: decimalText(rate, 4),
       sources: [],
     },
   ];
 }
 
-function premiumSteps({ hours, premium }: PremiumParts, amountCents: number): WorkingStep[] {
+function premiumSteps({ hours, premium, rounding }: PremiumParts, amountCents: number): WorkingStep[] {
   const { ruleSet, split, rate, onBonus } = premium;
   const isFederal = ruleSet.key === 'us_federal';
   const where = isFederal
@@ -157,7 +185,7 @@ function premiumSteps({ hours, premium }: PremiumParts, amountCents: number): Wo
   return [
     {
       label: isFederal ? `Half of it, for the hours over ${ruleSet.weeklyHours}` : 'The premium on top',
-      note: `${where}. The whole hour is in the steps above already${bonusNote}`,
+      note: `${where}. The whole hour is in the steps above already${bonusNote}${rounding === 'up' ? '. Up to the next cent, as the company chose' : ''}`,
       arithmetic: parts.join(' + '),
       result: centsText(amountCents),
       sources: [{ kind: 'rule', id: ruleSet.key, label: ruleSet.name }],

@@ -1,4 +1,14 @@
-import type { DatedRate, DoneLine, PayAdjustment, PayEntry, PayTip, PayWeekInput } from './pay-week.types.ts';
+import type { DatedPlan } from './plans/pay-plan.ts';
+import type {
+  CarriedPay,
+  DatedRate,
+  DoneLine,
+  PayAdjustment,
+  PayEntry,
+  PayTip,
+  PayWeekInput,
+  PersonPlace,
+} from './pay-week.types.ts';
 import { entrySpan, secondsOf, type WeekGrid } from './work-spans.ts';
 
 /** One person's part of the week's input, in an order that does not depend on the order it came in. */
@@ -9,6 +19,9 @@ export interface PersonInput {
   adjustments: PayAdjustment[];
   /** The person's own rates and the company's. */
   rates: DatedRate[];
+  plans: DatedPlan[];
+  place: PersonPlace | null;
+  carried: CarriedPay | null;
 }
 
 /**
@@ -25,6 +38,9 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
       tips: [],
       adjustments: [],
       rates: [...companyRates],
+      plans: [],
+      place: null,
+      carried: null,
     };
     groups.set(personId, group);
     return group;
@@ -58,6 +74,9 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
   for (const item of [...input.adjustments].sort(by((adjustment) => adjustment.id)))
     of(item.personId).adjustments.push(item);
   for (const rate of input.rates) if (rate.personId !== null) of(rate.personId).rates.push(rate);
+  for (const plan of input.plans) of(plan.personId).plans.push(plan);
+  for (const place of input.places) of(place.personId).place = place;
+  for (const carried of input.carried) of(carried.personId).carried = carried;
   return of;
 }
 

@@ -17,7 +17,8 @@ export interface WeekPremium {
 }
 
 export interface PremiumQuestion {
-  ruleSetKey: string;
+  /** The place's rules; the federal ones run beside them. */
+  place: OvertimeRuleSet;
   /** The regular rate, exact dollars an hour. */
   rate: Exact;
   hoursByWorkday: readonly Exact[];
@@ -32,9 +33,8 @@ export interface PremiumQuestion {
  */
 export function weekPremium(question: PremiumQuestion): WeekPremium {
   const federal = federalPremium(question);
-  const ruleSet = overtimeRuleSet(question.ruleSetKey);
-  if (ruleSet.key === federal.ruleSet.key) return federal;
-  const local = localPremium(question, ruleSet);
+  if (question.place.key === federal.ruleSet.key) return federal;
+  const local = localPremium(question, question.place);
   return local.premium.lt(federal.premium) ? federal : local;
 }
 

@@ -8,17 +8,18 @@ const ADJUSTMENTS: readonly PayLineKind[] = [
   'paid_time_off',
   'deduction',
   'correction',
+  'percentage_bonus',
 ];
 
 /** Integer cents by group. Payable lines add up to the gross, always. */
 export function weekTotals(lines: readonly PayLine[]): PersonWeek['totals'] {
   const of = (...kinds: PayLineKind[]): number => totalCents(lines.filter((line) => kinds.includes(line.kind)));
   return {
-    hourly: of('hourly'),
-    flat: of('flat'),
-    commission: of('commission'),
-    overtimePremium: of('overtime_premium'),
-    makeUp: of('minimum_wage_make_up'),
+    hourly: of('hourly', 'salary', 'day_rate', 'premium_pay', 'rest_pay'),
+    flat: of('flat', 'job_rate'),
+    commission: of('commission', 'commission_settlement'),
+    overtimePremium: of('overtime_premium', 'settlement_premium'),
+    makeUp: of('minimum_wage_make_up', 'plan_floor'),
     tips: of('tip'),
     tipsAlreadyReceived: of('tip_already_received'),
     adjustments: of(...ADJUSTMENTS),

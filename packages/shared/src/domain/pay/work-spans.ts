@@ -6,6 +6,7 @@ import type { ClockKind, PayEntry, PayWeekInput } from './pay-week.types.ts';
 export interface WorkSpan {
   entryId: string;
   kind: ClockKind;
+  visitId: string | null;
   /** Company-zone date. */
   date: string;
   /** 0 to 6: the 24 hours from the workweek's own start time (California Labor Code 500). */
@@ -26,6 +27,7 @@ export interface WeekGrid {
 export interface CountedSpan {
   entryId: string;
   kind: ClockKind;
+  visitId: string | null;
   from: number;
   to: number;
 }
@@ -88,6 +90,7 @@ export function cutIntoDays(counted: readonly CountedSpan[], grid: WeekGrid): Wo
       spans.push({
         entryId: span.entryId,
         kind: span.kind,
+        visitId: span.visitId,
         date: cell.date,
         workday: cell.workday,
         from: start,

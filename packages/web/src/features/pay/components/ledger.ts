@@ -13,15 +13,29 @@ export interface LedgerGroup {
 }
 
 const GROUPS: { key: string; title: string; kinds: PayLineKind[] }[] = [
-  { key: 'hours', title: 'Hours', kinds: ['hourly', 'overtime_premium', 'minimum_wage_make_up'] },
-  { key: 'flat', title: 'Flat per service', kinds: ['flat'] },
-  { key: 'commission', title: 'Commission', kinds: ['commission'] },
+  {
+    key: 'hours',
+    title: 'Hours',
+    kinds: [
+      'hourly',
+      'salary',
+      'day_rate',
+      'premium_pay',
+      'rest_pay',
+      'plan_floor',
+      'overtime_premium',
+      'settlement_premium',
+      'minimum_wage_make_up',
+    ],
+  },
+  { key: 'flat', title: 'Flat per service', kinds: ['flat', 'job_rate'] },
+  { key: 'commission', title: 'Commission', kinds: ['commission', 'commission_settlement'] },
   { key: 'tips', title: 'Tips', kinds: ['tip'] },
   { key: 'received', title: 'Tips already received', kinds: ['tip_already_received'] },
   {
     key: 'adjustments',
     title: 'Adjustments',
-    kinds: ['bonus', 'discretionary_bonus', 'reimbursement', 'paid_time_off', 'deduction'],
+    kinds: ['bonus', 'percentage_bonus', 'discretionary_bonus', 'reimbursement', 'paid_time_off', 'deduction'],
   },
   { key: 'corrections', title: 'Corrections of earlier weeks', kinds: ['correction'] },
 ];
@@ -61,6 +75,9 @@ export function lineWords(line: PayLine, customers: Customers): string {
 /** How a line came about, in one glance: "42:15 at 19.50", "6% of 240.00". */
 export function howText(line: PayLine): string {
   const rate = line.rate === null ? null : exact(line.rate);
+  if (line.kind === 'percentage_bonus' && rate) return `${shortText(rate)}% of ${line.working[0]?.result ?? ''}`;
+  if (line.kind === 'salary' && line.hours) return `for ${hoursMinutes(line.hours)}`;
+  if (line.kind === 'day_rate') return line.working[0]?.arithmetic.replace(' times ', ' at ') ?? '';
   if (line.kind === 'overtime_premium' && rate && line.hours)
     return `${hoursMinutes(line.hours)} at ${decimalText(rate.div(2), 4)}`;
   if (line.kind === 'minimum_wage_make_up' && rate) return `to ${decimalText(rate, 2)} an hour`;
@@ -86,6 +103,15 @@ export function rateText(value: string | null): string {
 /** What a line's page is called. */
 export const kindTitles: Record<PayLineKind, string> = {
   hourly: 'Hours',
+  salary: 'Salary',
+  day_rate: 'Day rate',
+  job_rate: 'Job rate',
+  premium_pay: 'Premium',
+  plan_floor: 'Guarantee',
+  rest_pay: 'Rest breaks',
+  percentage_bonus: 'Bonus',
+  commission_settlement: 'Settlement',
+  settlement_premium: 'Overtime',
   flat: 'Flat amount',
   commission: 'Commission',
   overtime_premium: 'Overtime',

@@ -109,6 +109,8 @@ function sourceLink(source: SourceRef, line: PayLine, lines: readonly PayLine[])
         : { key: id, label, to: null };
     case 'rate':
       return { key: id, label: 'Dated rates', to: `${paths.rates}?rate=${id}` };
+    case 'plan':
+      return { key: id, label, to: `${paths.rates}?person=${line.personId}` };
     case 'rule':
       return { key: id, label, to: `${paths.rates}#rules` };
     case 'pay_line':

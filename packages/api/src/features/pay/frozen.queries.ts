@@ -1,0 +1,22 @@
+import type { Transaction } from 'sequelize';
+import type { PayLine, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import { PayLineRow, PayStatement } from '../../db/models/index.ts';
+
+/** The stored lines of a locked week, of everybody or of one person. */
+export async function readFrozen(
+  weekId: string,
+  personId: string | null,
+  tx?: Transaction,
+): Promise<{ people: PersonWeek[]; lineIds: Record<string, string> }> {
+  const where = { payWeekId: weekId, ...(personId && { personId }) };
+  const options = { where, transaction: tx ?? null };
+  const statements = await PayStatement.findAll(options);
+  const rows = await PayLineRow.findAll({ ...options, order: [['position', 'ASC']] });
+  const people = statements
+    .map((statement) => ({
+      ...(statement.summary as Omit<PersonWeek, 'lines'>),
+      lines: rows.filter((row) => row.personId === statement.personId).map((row): PayLine => row.line),
+    }))
+    .sort((a, b) => a.name.localeCompare(b.name));
+  return { people, lineIds: Object.fromEntries(rows.map((row) => [`${row.personId}:${row.key}`, row.id])) };
+}
