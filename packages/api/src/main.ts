@@ -51,9 +51,10 @@ async function main(): Promise<void> {
   await listen(app.server, config.port, config.host);
   const address = app.server.address();
   const port = typeof address === 'object' && address ? address.port : config.port;
-  process.stdout.write(`Driprail is ready at http://${config.host}:${port}\n`);
-  if (await hasDemoLogins()) process.stdout.write(demoSignIns);
-  if (await isSetUpNeeded()) process.stdout.write(`Set up the company with this one-time code: ${setUpCode.make()}\n`);
+  const code = (await isSetUpNeeded()) ? `Set up the company with this one-time code: ${setUpCode.make()}\n` : '';
+  const signIns = (await hasDemoLogins()) ? demoSignIns : '';
+  // In one piece: whoever waits for the ready line has the rest with it.
+  process.stdout.write(`Driprail is ready at http://${config.host}:${port}\n${signIns}${code}`);
 
   let isStopping = false;
   const stop = (): void => {

@@ -23,7 +23,8 @@ describe.concurrent.each(screens)('$role, $name', (screen) => {
   test('holds on a phone of 390 px', () => hold(screen, 'phone'));
 });
 
-describe.concurrent.each(screens.filter((screen) => screen.hasGrounds))('$role, $name', (screen) => {
+// One after another: pages of one context share where the choice of ground is kept.
+describe.each(screens.filter((screen) => screen.hasGrounds))('$role, $name', (screen) => {
   test.each(['night', 'sun'] as const)('can be read in the %s', async (ground) => {
     const context = await contextFor(screen.role, screen.isPhoneOnly ? 'phone' : 'desk');
     const page = await context.newPage();

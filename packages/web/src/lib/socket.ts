@@ -45,7 +45,8 @@ export function useLiveCache(client: QueryClient, userId: string | undefined, on
     let isEnded = false;
     void import('socket.io-client').then(({ io }) => {
       if (isEnded) return;
-      socket = io({ transports: ['websocket'], reconnectionDelayMax: 4000 });
+      // A try that hangs in a dead spot is given up early, so that the next one comes soon.
+      socket = io({ transports: ['websocket'], reconnectionDelayMax: 3000, timeout: 6000 });
       socket.on('connect', () => {
         setLive(true);
         // Hints may have been missed while the line was down.
