@@ -44,7 +44,7 @@ export function LoginsPage() {
           <div className="scroll-x">
             <Loaded query={logins} what="the logins">
               {({ logins: list }) => (
-                <table className="grid-t">
+                <table className="grid-t stacks">
                   <thead>
                     <tr>
                       <th>Name</th>

@@ -7,7 +7,7 @@ import FullCalendar from '@fullcalendar/react';
 import resourceTimeGridPlugin from '@fullcalendar/resource-timegrid';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { Move } from '@driprail/shared/domain/board/plan';
-import { formatClock } from '@driprail/shared/domain/time/format';
+import { formatClock, formatSpan } from '@driprail/shared/domain/time/format';
 import { addMinutes, clockOf, minutesBetween } from '@driprail/shared/domain/time/zone';
 import { useFormats } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
@@ -63,6 +63,17 @@ export const BoardCalendar = memo(function BoardCalendar({
   );
   const unplaced = useMemo(() => new Map(board.unplaced.map((visit) => [visit.id, visit])), [board.unplaced]);
   const troubled = useMemo(() => new Set(board.troubles.map((trouble) => trouble.visitId)), [board.troubles]);
+
+  // A mounted ticket keeps its element: what readers hear of it follows the visit.
+  useEffect(() => {
+    const span = (visit: PlacedVisit) => formatSpan(visit.from, visit.to, board.zone, board.clock);
+    for (const visit of visits.values()) {
+      const vanName = board.vans.find((van) => van.id === visit.vanId)?.name ?? '';
+      document
+        .querySelector(`[data-event-id="${visit.id}"]:not(.fc-event-mirror)`)
+        ?.setAttribute('aria-label', ticketLabel(visit, vanName, span(visit)));
+    }
+  }, [board.vans, board.zone, board.clock, visits]);
 
   useEffect(() => {
     calendar.current?.getApi().gotoDate(board.day);

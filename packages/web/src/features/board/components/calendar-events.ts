@@ -1,8 +1,9 @@
 import type { EventInput } from '@fullcalendar/core';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import { isMovable } from '@driprail/shared/domain/board/progress';
-import { addMinutes, instantOf, isBefore, minutesBetween } from '@driprail/shared/domain/time/zone';
+import { addMinutes, instantOf, isBefore, minutesBetween, overlaps } from '@driprail/shared/domain/time/zone';
 import type { Move } from '@driprail/shared/domain/board/plan';
+import type { PlacedVisit } from './board-model.ts';
 import { gapsOf, isPlacedVisit, lateOf, matchesFilter } from './board-model.ts';
 
 export interface Held extends Move {
@@ -30,24 +31,27 @@ export function calendarEvents(
   openId: string | null,
   held: Held | null,
 ): EventInput[] {
-  const tickets = board.visits.filter(isPlacedVisit).map((visit): EventInput => {
-    const isHeld = held?.visitId === visit.id;
-    return {
-      id: visit.id,
-      resourceId: isHeld ? held.vanId : visit.vanId,
-      start: isHeld ? held.from : visit.from,
-      end: isHeld ? held.to : visit.to,
-      editable: isMovable(visit.progress) && !board.isLocked,
-      classNames: [
-        'tk',
-        isHeld ? 'is-held' : classes[visit.progress],
-        lateOf(visit, now) > 0 ? 'is-late' : '',
-        visit.id === openId ? 'is-open' : '',
-        matchesFilter(visit, filter) ? '' : 'is-dim',
-      ].filter(Boolean),
-      extendedProps: { kind: 'visit' },
-    };
-  });
+  const tickets = board.visits
+    .filter(isPlacedVisit)
+    .filter((visit) => !isReplaced(visit, board))
+    .map((visit): EventInput => {
+      const isHeld = held?.visitId === visit.id;
+      return {
+        id: visit.id,
+        resourceId: isHeld ? held.vanId : visit.vanId,
+        start: isHeld ? held.from : visit.from,
+        end: isHeld ? held.to : visit.to,
+        editable: isMovable(visit.progress) && !board.isLocked,
+        classNames: [
+          'tk',
+          isHeld ? 'is-held' : classes[visit.progress],
+          lateOf(visit, now) > 0 ? 'is-late' : '',
+          visit.id === openId ? 'is-open' : '',
+          matchesFilter(visit, filter) ? '' : 'is-dim',
+        ].filter(Boolean),
+        extendedProps: { kind: 'visit' },
+      };
+    });
   const placing = held && !board.visits.some((visit) => visit.id === held.visitId) ? held : null;
   const ghost: EventInput[] = placing
     ? [
@@ -79,6 +83,14 @@ function gapEvents(board: BoardDto): EventInput[] {
     ].filter(Boolean),
     extendedProps: { kind: 'gap', gap },
   }));
+}
+
+/** A called-off visit whose time another has taken would only halve that one's width. */
+function isReplaced(visit: PlacedVisit, board: BoardDto): boolean {
+  if (visit.progress !== 'called_off') return false;
+  return board.visits
+    .filter(isPlacedVisit)
+    .some((other) => other.progress !== 'called_off' && other.vanId === visit.vanId && overlaps(other, visit));
 }
 
 /** Too low for a line of words; the drive stands in the ticket's sheet and list. */

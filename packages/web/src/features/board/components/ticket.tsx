@@ -29,7 +29,7 @@ export function Ticket({ visit, now, hasTrouble }: { visit: PlacedVisit; now: st
         {visit.parts > 1 ? `. Visit ${visit.part} of ${visit.parts}` : ''}
       </p>
       {hasTrouble ? <p className="ex">Trouble reported</p> : null}
-      <span className={minutesBetween(visit.from, visit.to) < 60 ? 'fl is-short' : 'fl'}>
+      <span className={minutesBetween(visit.from, visit.to) < 80 ? 'fl is-short' : 'fl'}>
         {visit.hasGateCode ? <Icon name="gate" title="Gate code" /> : null}
         {visit.hasWater ? null : <Icon name="nohose" title="No spigot: own water" />}
       </span>

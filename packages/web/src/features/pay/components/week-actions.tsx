@@ -21,7 +21,7 @@ export function WeekActions({ dto, toSettle, now, move }: Props) {
   const [isLocking, setLocking] = useState(false);
   const { week } = dto;
   const go = (to: 'draft' | 'checked' | 'locked') =>
-    move.mutate({ to, version: week.version }, { onSettled: () => setLocking(false) });
+    move.mutate({ to, version: week.version }, { onSettled: () => (to === 'locked' ? setLocking(false) : undefined) });
   const canCheck = !isRunning(week, now) && toSettle === 0;
   return (
     <>

@@ -34,7 +34,7 @@ export function PeoplePage() {
                 list.length === 0 ? (
                   <Empty>Nobody yet. Add who works here; a crew and a login come after.</Empty>
                 ) : (
-                  <table className="grid-t min-w-[640px]">
+                  <table className="grid-t stacks min-w-[640px] max-[900px]:min-w-0">
                     <thead>
                       <tr>
                         <th>Name</th>
