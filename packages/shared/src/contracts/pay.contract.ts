@@ -61,6 +61,8 @@ export const addRate = endpoint({
   response: z.object({ rate: rateDto }),
 });
 
+const punchRoundingMinutes = z.union([z.literal(5), z.literal(6), z.literal(15)]).nullable();
+export const premiumRoundings = ['half_up', 'up'] as const;
 export const payRulesDto = z.object({
   id,
   startsOn: day,
@@ -68,6 +70,9 @@ export const payRulesDto = z.object({
   minimumWage: z.string(),
   crewSplit: z.enum(['equal', 'weights', 'minutes']),
   mealBreakMinutes: z.int(),
+  /** Punches to the nearest so many minutes; null for exact time. */
+  punchRoundingMinutes,
+  premiumRounding: z.enum(premiumRoundings),
   /** ISO weekday, 1 Monday to 7 Sunday, and the clock time at which the workweek starts. */
   workweekStartsOn: z.int(),
   workweekStartsAt: clockTime,
@@ -92,6 +97,8 @@ export const addPayRules = endpoint({
     minimumWage: decimal.refine((v) => Number(v) >= 7.25, 'The federal minimum wage is 7.25 (29 USC 206).'),
     crewSplit: z.enum(['equal', 'weights', 'minutes']),
     mealBreakMinutes: z.int().min(20).max(120),
+    punchRoundingMinutes: punchRoundingMinutes.default(null),
+    premiumRounding: z.enum(premiumRoundings).default('half_up'),
     workweekStartsOn: z.int().min(1).max(7),
     workweekStartsAt: clockTime,
   }),

@@ -39,7 +39,8 @@ function settlesByMonth({ plan: { base } }: DatedPlan): boolean {
   return base.kind === 'draw' || (base.kind === 'tiered_percent' && base.period === 'month');
 }
 
-function carryOn(
+/** What a person's workweek leaves to the next one of the month, on top of what came into it. */
+export function carryOn(
   personId: string,
   startsOn: string,
   earlier: CarriedPay | undefined,

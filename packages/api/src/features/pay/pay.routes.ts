@@ -1,4 +1,6 @@
 import * as api from '@driprail/shared/contracts/pay.contract';
+import * as plans from '@driprail/shared/contracts/pay-plans.contract';
+import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
 import { todayOf } from '../../db/company.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import type { RouteTable } from '../../http/route.ts';
@@ -7,8 +9,11 @@ import { addAdjustment, removeAdjustment } from './adjustments.service.ts';
 import { payWeekCsv } from './export.ts';
 import { setWeekState } from './lock.service.ts';
 import { readPayWeek } from './pay-week.queries.ts';
+import { addPlace, addWage, listPersonPlaces, listPlaces, placePerson } from './places.service.ts';
+import { addPlan, listPlans } from './plans.service.ts';
 import { addRate, addRules, listRates, listRules } from './rates.service.ts';
 import { listStatements, readStatement } from './statements.queries.ts';
+import { tryWeeks } from './what-if.queries.ts';
 import { listWeeks } from './week-figures.queries.ts';
 import { weekAt } from './weeks.service.ts';
 
@@ -19,6 +24,14 @@ export function payRoutes(table: RouteTable): void {
   route(table, api.addRate, async ({ body }, ctx) => ({ rate: await addRate(ctx, body) }));
   route(table, api.listPayRules, async () => ({ rules: await listRules() }));
   route(table, api.addPayRules, async ({ body }, ctx) => ({ rules: await addRules(ctx, body) }));
+  route(table, plans.listPayPlans, async () => ({ plans: await listPlans() }));
+  route(table, plans.addPayPlan, async ({ body }, ctx) => ({ plan: await addPlan(ctx, body) }));
+  route(table, plans.listRuleSets, () => Promise.resolve({ ruleSets: [...OVERTIME_RULE_SETS] }));
+  route(table, plans.listPayPlaces, async () => ({ places: await listPlaces(), people: await listPersonPlaces() }));
+  route(table, plans.addPayPlace, async ({ body }, ctx) => ({ place: await addPlace(ctx, body) }));
+  route(table, plans.addPlaceWage, async ({ params, body }, ctx) => ({ place: await addWage(ctx, params.id, body) }));
+  route(table, plans.setPersonPlace, async ({ body }, ctx) => ({ people: await placePerson(ctx, body) }));
+  route(table, plans.whatIf, async ({ body }, { now }) => ({ weeks: await tryWeeks(body, now()) }));
   route(table, api.listPayWeeks, async (_input, { now }) => {
     return { weeks: await listWeeks(await todayOf(now())) };
   });

@@ -1,12 +1,12 @@
 import { v7 as uuid } from 'uuid';
 import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
-import { formatDate } from '@driprail/shared/domain/time/format';
 import { audit } from '../../db/audit.ts';
-import { PayRate, PayRuleSet, PayWeek } from '../../db/models/index.ts';
+import { PayRate, PayRuleSet } from '../../db/models/index.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
-import { conflict, unprocessable } from '../../http/errors.ts';
+import { conflict } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { refuseLockedDay } from './start-dates.ts';
 import type { Transaction } from 'sequelize';
 
 /** Dated rates, the newest first; they are never overwritten. */
@@ -43,7 +43,8 @@ export function addRate({ actor, now }: Ctx, fields: RateFields): Promise<RateDt
 export function listRules(id: string | null = null, tx?: Transaction): Promise<PayRulesDto[]> {
   return select<PayRulesDto>(
     `SELECT r.id, r.starts_on AS "startsOn", r.overtime_rule_set AS "overtimeRuleSet", trim_scale(r.minimum_wage)::text AS "minimumWage",
-            r.crew_split AS "crewSplit", r.meal_break_minutes AS "mealBreakMinutes", r.workweek_starts_on AS "workweekStartsOn",
+            r.crew_split AS "crewSplit", r.meal_break_minutes AS "mealBreakMinutes",
+            r.punch_rounding_minutes AS "punchRoundingMinutes", r.premium_rounding AS "premiumRounding", r.workweek_starts_on AS "workweekStartsOn",
             r.workweek_starts_at AS "workweekStartsAt", coalesce(u.name, '') AS "setBy"
        FROM pay_rules r LEFT JOIN users u ON u.id = r.set_by WHERE (:id::uuid IS NULL OR r.id = :id::uuid) ORDER BY r.starts_on DESC`,
     { id },
@@ -64,12 +65,4 @@ export function addRules({ actor, now }: Ctx, fields: Omit<PayRulesDto, 'id' | '
     if (!dto) throw new Error('the rules were just written');
     return dto;
   });
-}
-
-/** Before a locked week's end only corrections change what was paid. */
-async function refuseLockedDay(startsOn: string, tx: Transaction): Promise<void> {
-  const last = await PayWeek.findOne({ where: { state: 'locked' }, order: [['startsOn', 'DESC']], transaction: tx });
-  if (!last || startsOn > last.endsOn) return;
-  const message = `Weeks are locked to ${formatDate(last.endsOn)}. Start later, or add a correction to an open week.`;
-  throw unprocessable('locked_week', message, { fields: { startsOn: message } });
 }

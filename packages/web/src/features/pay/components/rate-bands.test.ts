@@ -55,6 +55,8 @@ describe('bands', () => {
       minimumWage,
       crewSplit: 'equal',
       mealBreakMinutes: 30,
+      punchRoundingMinutes: null,
+      premiumRounding: 'half_up' as const,
       workweekStartsOn: 1,
       workweekStartsAt: '00:00',
       setBy: '',
