@@ -9,6 +9,7 @@ import { clockRoutes } from './features/clock/index.ts';
 import { customersRoutes } from './features/customers/index.ts';
 import { payRoutes } from './features/pay/index.ts';
 import { peopleRoutes } from './features/people/index.ts';
+import { recordsRoutes } from './features/records/index.ts';
 import { runSheetRoutes } from './features/run-sheet/index.ts';
 import { servicesRoutes } from './features/service-menu/index.ts';
 import type { SetUpCode } from './features/settings/index.ts';
@@ -49,6 +50,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
     runSheetRoutes,
     clockRoutes,
     payRoutes,
+    recordsRoutes,
   ]) {
     mount(table);
   }

@@ -13,6 +13,7 @@ export interface SubjectFields {
   Statement: { personId: string; state: 'draft' | 'checked' | 'locked' };
   Login: { id: string };
   LocalMail: { id: string };
+  AuditEntry: { id: number };
 }
 export type SubjectName = keyof SubjectFields;
 export type Action = 'read' | 'create' | 'update' | 'remove' | 'plan' | 'mark' | 'tip';

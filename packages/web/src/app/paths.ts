@@ -24,5 +24,6 @@ export const paths = {
   settings: '/settings',
   logins: '/logins',
   account: '/account',
+  records: '/records',
   localMail: '/local-mail',
 };

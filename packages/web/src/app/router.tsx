@@ -149,6 +149,12 @@ export function createRouter() {
                   }),
                 },
                 {
+                  path: paths.records,
+                  lazy: async () => ({
+                    Component: (await import('../features/records/pages/records.page.tsx')).RecordsPage,
+                  }),
+                },
+                {
                   path: paths.localMail,
                   lazy: async () => ({
                     Component: (await import('../features/access/pages/local-mail.page.tsx')).LocalMailPage,

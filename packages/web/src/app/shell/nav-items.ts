@@ -27,6 +27,7 @@ export function menuItems(ability: AppAbility, hasLocalMail: boolean, personId: 
     ability.can('read', 'Rate') && { to: paths.rates, label: 'Rates and pay rules' },
     ability.can('update', 'Settings') && { to: paths.settings, label: 'Settings' },
     ability.can('read', 'Login') && { to: paths.logins, label: 'Logins' },
+    ability.can('read', 'AuditEntry') && { to: paths.records, label: 'Records' },
     hasLocalMail && { to: paths.localMail, label: 'Local mail' },
     { to: paths.account, label: 'Account and sessions' },
   ];
