@@ -17,7 +17,7 @@ export function openApiOf(endpoints: Endpoint[]): Record<string, unknown> {
 }
 
 function operation(endpoint: Endpoint): Record<string, unknown> {
-  const type = endpoint.format === 'csv' ? 'text/csv' : 'application/json';
+  const type = { json: 'application/json', csv: 'text/csv', pdf: 'application/pdf' }[endpoint.format];
   const body = schemaOf(endpoint.body, 'input');
   return {
     summary: endpoint.summary,

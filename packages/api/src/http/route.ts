@@ -61,6 +61,7 @@ function mount<E extends Endpoint>(
   table.router[endpoint.method](endpoint.path, async (req, res) => {
     const output = endpoint.response.parse(await answer(req, res));
     if (endpoint.format === 'csv') res.type('text/csv').send(output);
+    else if (endpoint.format === 'pdf') res.type('application/pdf').send(output);
     else res.json(output);
   });
 }

@@ -284,4 +284,13 @@ export const getStatement = endpoint({
   params: weekParam.extend({ personId: id }),
   response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string(), correctedLines, customers }),
 });
+export const getStatementPdf = endpoint({
+  method: 'get',
+  path: '/api/pay/statements/:startsOn/:personId/statement.pdf',
+  roles: everyone,
+  summary: 'The same statement as a PDF on Letter paper, fonts embedded.',
+  params: weekParam.extend({ personId: id }),
+  response: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
+  format: 'pdf',
+});
 export type StatementDto = z.infer<(typeof getStatement)['response']>;

@@ -1,7 +1,7 @@
 import * as api from '@driprail/shared/contracts/pay.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
-import { todayOf } from '../../db/company.ts';
+import { companyOf, todayOf } from '../../db/company.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
@@ -12,6 +12,7 @@ import { readPayWeek } from './pay-week.queries.ts';
 import { addPlace, addWage, listPersonPlaces, listPlaces, placePerson } from './places.service.ts';
 import { addPlan, listPlans } from './plans.service.ts';
 import { addRate, addRules, listRates, listRules } from './rates.service.ts';
+import { statementPdf } from './statement-pdf.ts';
 import { listStatements, readStatement } from './statements.queries.ts';
 import { tryWeeks } from './what-if.queries.ts';
 import { listWeeks } from './week-figures.queries.ts';
@@ -47,4 +48,8 @@ export function payRoutes(table: RouteTable): void {
   route(table, api.exportPayWeek, async ({ params }, { now }) => payWeekCsv(await read(params.startsOn, now())));
   route(table, api.listStatements, async (_input, ctx) => ({ statements: await listStatements(ctx) }));
   route(table, api.getStatement, ({ params }, ctx) => readStatement(ctx, params.startsOn, params.personId));
+  route(table, api.getStatementPdf, async ({ params }, ctx) => {
+    const statement = await readStatement(ctx, params.startsOn, params.personId);
+    return statementPdf(statement, (await companyOf()).zone);
+  });
 }

@@ -1,0 +1,42 @@
+import { beforeAll, expect, test } from 'vitest';
+import { ClockEntry, PayRate } from '../../db/models/index.ts';
+import { useApp } from '../../testing/app.ts';
+import { aCompany } from '../../testing/company.ts';
+import type { TestCompany } from '../../testing/company.ts';
+import { v7 as uuid } from 'uuid';
+
+const app = useApp();
+let company: TestCompany;
+beforeAll(async () => {
+  company = await aCompany(app);
+  const personId = company.people.sefa.id;
+  await PayRate.create({ id: uuid(), kind: 'hourly', personId, value: '20', startsOn: '2026-01-01' });
+  await ClockEntry.create({
+    id: uuid(),
+    personId,
+    kind: 'shop',
+    startedAt: new Date('2026-05-14T12:00:00Z'),
+    endedAt: new Date('2026-05-14T14:00:00Z'),
+  });
+});
+
+test('a statement is a PDF with its fonts in it, for the owner, not for others before the lock', async () => {
+  const path = `/api/pay/statements/2026-05-11/${company.people.sefa.id}/statement.pdf`;
+  const answer = await (
+    await company.owner()
+  )
+    .get(path)
+    .buffer(true)
+    .parse((res, done) => {
+      const parts: Buffer[] = [];
+      res.on('data', (part: Buffer) => parts.push(part));
+      res.on('end', () => done(null, Buffer.concat(parts)));
+    });
+  expect([answer.status, answer.type]).toEqual([200, 'application/pdf']);
+  const pdf = (answer.body as Buffer).toString('latin1');
+  expect(pdf.startsWith('%PDF-')).toBe(true);
+  expect(pdf).toMatch(/\/FontFile[23]/);
+  expect(pdf).toContain('RobotoFlex');
+  await (await company.sefa()).get(path).expect(403);
+  await (await company.idris()).get(path).expect(403);
+});
