@@ -1,10 +1,12 @@
 import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
 import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayPlanDto } from '@driprail/shared/contracts/pay-plans.contract';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { shortText } from '@driprail/shared/domain/money/rounding';
 import { formatClock, formatDate } from '@driprail/shared/domain/time/format';
 import type { ClockStyle } from '@driprail/shared/domain/time/format';
 import { rateText } from './ledger.ts';
+import { basePlanWords } from './plan-base-words.ts';
 import { rateKey } from './plan-words.ts';
 
 export type BandState = 'past' | 'now' | 'next';
@@ -58,6 +60,14 @@ function bandsOf<T extends Dated>(
       state,
     };
   });
+}
+
+/** A person's plans as one row; none without a plan. */
+export function planRows(plans: readonly PayPlanDto[], personId: string | null, today: string): BandRow[] {
+  const own = plans.filter((plan) => plan.personId === personId);
+  if (own.length === 0) return [];
+  const bands = bandsOf(own, today, (item) => basePlanWords(item.plan));
+  return [{ key: 'plan', title: 'Plan', note: 'goes before the rates', bands }];
 }
 
 /** What a rate says: "19.50", "6%", "12.00 a line"; a percent or flat amount of zero is none. */
@@ -133,6 +143,12 @@ export function ruleRows(rules: readonly PayRulesDto[], today: string, clock: Cl
     row('minimum', 'Minimum wage', 'each person, each week', (r) => rateText(r.minimumWage)),
     row('split', 'In a crew', 'how a job is shared', (r) => splitWords[r.crewSplit]),
     row('meal', 'Meal break', 'unpaid from this length on', (r) => `${r.mealBreakMinutes} min`),
+    row('punches', 'Punches', 'what the clock counts', (r) =>
+      r.punchRoundingMinutes === null ? 'Exact time' : `Nearest ${r.punchRoundingMinutes} min`,
+    ),
+    row('premium', 'Premium, rounded', 'to the cent, once a week', (r) =>
+      r.premiumRounding === 'up' ? 'Always up' : 'Half up',
+    ),
     row('week', 'Workweek', 'seven days, fixed', (r) => `${weekdayWords[r.workweekStartsOn - 1] ?? ''} ${startOf(r)}`),
   ];
 }

@@ -1,18 +1,21 @@
 import { Link } from 'react-router';
 import type { RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayPlanDto } from '@driprail/shared/contracts/pay-plans.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
+import { basePlanWords, planOn } from './plan-base-words.ts';
 import { planWords, ratesOn } from './plan-words.ts';
 import { rateWords } from './rate-bands.ts';
 
 interface Props {
   people: PersonDto[];
   rates: RateDto[];
+  plans: PayPlanDto[];
   today: string;
   chosenId: string | null;
 }
 
 /** How everybody is paid today; each name opens the bands behind it. */
-export function RatesNow({ people, rates, today, chosenId }: Props) {
+export function RatesNow({ people, rates, plans, today, chosenId }: Props) {
   const now = ratesOn(rates, today);
   const hourOf = (personId: string | null) =>
     now.find((r) => r.kind === 'hourly' && r.clockKind === null && r.personId === personId);
@@ -43,7 +46,8 @@ export function RatesNow({ people, rates, today, chosenId }: Props) {
             <td className="r t-fig">{company ? rateWords(company) : '–'}</td>
           </tr>
           {people.map((person) => {
-            const hour = hourOf(person.id) ?? company;
+            const planned = planOn(plans, person.id, today);
+            const hour = planned ? null : (hourOf(person.id) ?? company);
             return (
               <tr key={person.id}>
                 <th scope="row">
@@ -56,7 +60,9 @@ export function RatesNow({ people, rates, today, chosenId }: Props) {
                     <b>{person.name}</b>
                   </Link>
                 </th>
-                <td className="t-2">{planWords(rates, person.id, today, true)}</td>
+                <td className="t-2">
+                  {planned ? basePlanWords(planned.plan) : planWords(rates, person.id, today, true)}
+                </td>
                 <td className="r t-fig">{hour ? rateWords(hour) : '–'}</td>
               </tr>
             );

@@ -7,6 +7,10 @@ import { ApiError } from '../../../lib/call.ts';
 import { useAddRules } from '../api/rates.queries.ts';
 import { splitWords, weekdayWords } from './rate-bands.ts';
 
+function stepOf(text: string): PayRulesDto['punchRoundingMinutes'] {
+  return ([5, 6, 15] as const).find((minutes) => String(minutes) === text) ?? null;
+}
+
 /** New company rules from a day on, beginning from those in force. */
 export function RulesForm({
   current,
@@ -24,6 +28,8 @@ export function RulesForm({
     minimumWage: current?.minimumWage ?? '7.25',
     crewSplit: current?.crewSplit ?? 'equal',
     mealBreakMinutes: String(current?.mealBreakMinutes ?? 30),
+    punchRoundingMinutes: String(current?.punchRoundingMinutes ?? ''),
+    premiumRounding: current?.premiumRounding ?? ('half_up' as const),
     workweekStartsOn: current?.workweekStartsOn ?? 1,
     workweekStartsAt: current?.workweekStartsAt ?? '00:00',
   });
@@ -37,6 +43,7 @@ export function RulesForm({
           ...value,
           minimumWage: value.minimumWage.replace(/[$,\s]/g, ''),
           mealBreakMinutes: Number(value.mealBreakMinutes),
+          punchRoundingMinutes: stepOf(value.punchRoundingMinutes),
         };
         if (!add.isPending) add.mutate(body, { onSuccess: onDone });
       }}
@@ -86,6 +93,30 @@ export function RulesForm({
           onChange={(event) => setValue({ ...value, mealBreakMinutes: event.target.value })}
         />
         <SelectField
+          label="Punches count"
+          value={value.punchRoundingMinutes}
+          error={fields['punchRoundingMinutes']}
+          onChange={(event) => setValue({ ...value, punchRoundingMinutes: event.target.value })}
+        >
+          <option value="">exactly, to the second</option>
+          {[5, 6, 15].map((minutes) => (
+            <option key={minutes} value={minutes}>
+              to the nearest {minutes} minutes
+            </option>
+          ))}
+        </SelectField>
+        <SelectField
+          label="Overtime premiums round"
+          value={value.premiumRounding}
+          error={fields['premiumRounding']}
+          onChange={(event) =>
+            setValue({ ...value, premiumRounding: event.target.value as PayRulesDto['premiumRounding'] })
+          }
+        >
+          <option value="half_up">half up to the cent</option>
+          <option value="up">always up to the cent</option>
+        </SelectField>
+        <SelectField
           label="Workweek starts on"
           value={value.workweekStartsOn}
           error={fields['workweekStartsOn']}
@@ -105,6 +136,13 @@ export function RulesForm({
           onChange={(event) => setValue({ ...value, workweekStartsAt: event.target.value })}
         />
       </div>
+      {value.punchRoundingMinutes ? (
+        <p className="caution mt-4">
+          <b>Caution.</b> Rounded punches are tolerated only while they even out over time, for the person as much as
+          for the company (29 CFR 785.48(b)); some states do not allow them. The punches themselves are kept as they
+          were.
+        </p>
+      ) : null}
       <p className="caution mt-4">
         <b>Caution.</b> Driprail works out pay by the rules set here. It is not legal advice: states and towns add daily
         overtime, higher minimum wages, meal and rest rules. A workweek may be moved only for good, not to avoid

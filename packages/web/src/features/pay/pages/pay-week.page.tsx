@@ -10,6 +10,7 @@ import { Empty } from '../../../components/states.tsx';
 import { hoursMinutes, money, useFormats } from '../../../lib/format.ts';
 import { useNow } from '../../../lib/now.ts';
 import { useSetWeekState, weekQuery, weeksQuery } from '../api/pay.queries.ts';
+import { plansQuery } from '../api/plans.queries.ts';
 import { ratesQuery, rulesQuery } from '../api/rates.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
 import { AdjustmentSheet } from '../components/adjustment-sheet.tsx';
@@ -18,6 +19,7 @@ import { LateTape } from '../components/late-tape.tsx';
 import { PastWeeks } from '../components/past-weeks.tsx';
 import type { WeekFigures } from '../components/past-weeks.tsx';
 import { PersonSheet } from '../components/person-sheet.tsx';
+import { basePlanWords, planOn } from '../components/plan-base-words.ts';
 import { planWords, rulesOn } from '../components/plan-words.ts';
 import { StageRail } from '../components/stage-rail.tsx';
 import { TroubleTape } from '../components/trouble-tape.tsx';
@@ -56,6 +58,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
   const navigate = useNavigate();
   const [adjusting, setAdjusting] = useState<AdjustmentStart | null>(null);
   const rates = useQuery(ratesQuery).data?.rates;
+  const plans = useQuery(plansQuery).data?.plans ?? [];
   const rules = useQuery(rulesQuery).data?.rules;
   const move = useSetWeekState(dto.week.startsOn);
   const { week, people } = dto;
@@ -66,7 +69,11 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
   const picked = people.find((person) => person.personId === search.get('person'));
   const chosen = picked ?? people[0] ?? null;
   const next = chosen ? (people[people.indexOf(chosen) + 1] ?? null) : null;
-  const plan = (personId: string, isShort = false) => (rates ? planWords(rates, personId, week.endsOn, isShort) : '');
+  const plan = (personId: string, isShort = false) => {
+    const planned = planOn(plans, personId, week.startsOn);
+    if (planned) return basePlanWords(planned.plan);
+    return rates ? planWords(rates, personId, week.endsOn, isShort) : '';
+  };
   const adjust = (start: Partial<AdjustmentStart> & Pick<AdjustmentStart, 'personId' | 'name'>) =>
     setAdjusting({
       kind: week.state === 'locked' ? 'correction' : 'bonus',

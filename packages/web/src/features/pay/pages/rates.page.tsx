@@ -2,9 +2,10 @@ import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link, useSearchParams } from 'react-router';
 import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayPlan } from '@driprail/shared/domain/pay/plans/pay-plan';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { formatDate } from '@driprail/shared/domain/time/format';
-import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
+import { addDays, dayOf, weekStartOf } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
@@ -13,15 +14,19 @@ import { Sheet } from '../../../components/sheet.tsx';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { weeksQuery } from '../api/pay.queries.ts';
+import { plansQuery } from '../api/plans.queries.ts';
 import { payPeopleQuery, payServicesQuery, ratesQuery, rulesQuery } from '../api/rates.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
 import { BandChart } from '../components/band-chart.tsx';
 import { rateText } from '../components/ledger.ts';
 import { ratesOn, rulesOn } from '../components/plan-words.ts';
-import { rateRows, rateWords, ruleRows } from '../components/rate-bands.ts';
+import { planRows, rateRows, rateWords, ruleRows } from '../components/rate-bands.ts';
+import { PlacesSheet } from '../components/places-sheet.tsx';
+import { PlanForm } from '../components/plan-form.tsx';
 import { RateForm } from '../components/rate-form.tsx';
 import { RatesNow } from '../components/rates-now.tsx';
 import { RulesForm } from '../components/rules-form.tsx';
+import { WhatIf } from '../components/what-if.tsx';
 import { timeAxis } from '../components/time-axis.ts';
 import './rates.css';
 
@@ -39,18 +44,21 @@ export function RatesPage() {
 
 function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
   const { zone, clock } = useSession().company;
-  const today = dayOf(useNow(), zone);
+  const now = useNow();
+  const today = dayOf(now, zone);
   const [search, setSearch] = useSearchParams();
-  const [adding, setAdding] = useState<'rate' | 'rules' | null>(null);
+  const [adding, setAdding] = useState<'rate' | 'rules' | 'plan' | 'places' | 'trial' | null>(null);
+  const [trial, setTrial] = useState<PayPlan | null>(null);
   const people = useQuery(payPeopleQuery).data?.people ?? [];
   const services = useQuery(payServicesQuery).data?.services ?? [];
+  const plans = useQuery(plansQuery).data?.plans ?? [];
   const weeks = useQuery(weeksQuery).data?.weeks ?? [];
   const asked = rates.find((rate) => rate.id === search.get('rate'));
   const person = people.find((own) => own.id === (asked ? asked.personId : search.get('person'))) ?? null;
   const personId = person?.id ?? null;
   const shown = rates.filter((rate) => rate.personId === null || rate.personId === personId);
   const axis = timeAxis(
-    [...shown, ...rules].map((dated) => dated.startsOn),
+    [...shown, ...rules, ...plans.filter((plan) => plan.personId === personId)].map((dated) => dated.startsOn),
     today,
   );
   const locked = weeks.filter((week) => week.state === 'locked');
@@ -61,6 +69,11 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
       .at(-1) ?? null;
   const earliest = lockedTo ? addDays(lockedTo, 1) : today;
   const choose = (id: string) => setSearch(id ? { person: id } : {}, { replace: true, preventScrollReset: true });
+  const active = people.filter((own) => own.isActive);
+  const sums = sumsOf(rates, rules, personId, today);
+  const over = weeks.filter((week) => week.endsAt <= now).sort((a, b) => a.startsOn.localeCompare(b.startsOn));
+  const first = rulesOn(rules, today)?.workweekStartsOn ?? 1;
+  const nextWeek = lockedTo && lockedTo >= today ? earliest : weekStartOf(addDays(today, 6), first);
   return (
     <>
       <PageHead
@@ -83,13 +96,15 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
             </select>
           </>
         }
-        sums={sumsOf(rates, rules, personId, today)}
+        sums={sums}
         actions={
           <>
             <Link className="btn" to={paths.payWeeks}>
               Pay week
             </Link>
+            <Button onClick={() => setAdding('places')}>Places</Button>
             <Button onClick={() => setAdding('rules')}>New rules</Button>
+            <Button onClick={() => setAdding('plan')}>New plan</Button>
             <Button look="main" onClick={() => setAdding('rate')}>
               <Icon name="plus" /> New rate
             </Button>
@@ -100,7 +115,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
         <BandChart
           axis={axis}
           today={today}
-          rows={rateRows(rates, personId, today)}
+          rows={[...planRows(plans, personId, today), ...rateRows(rates, personId, today)]}
           rules={ruleRows(rules, today, clock)}
           askedId={asked?.id ?? null}
         />
@@ -123,13 +138,51 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
               payroll adviser before the first locked week.
             </p>
           </section>
-          <RatesNow people={people.filter((own) => own.isActive)} rates={rates} today={today} chosenId={personId} />
+          <RatesNow people={active} rates={rates} plans={plans} today={today} chosenId={personId} />
         </div>
+        {person && over.length > 0 ? (
+          <WhatIf
+            key={person.id}
+            person={person}
+            weeks={over}
+            now={{ hourly: sums[0]?.value ?? '', percent: sums[1]?.value ?? '' }}
+            plan={trial}
+            onChoosePlan={() => setAdding('trial')}
+            onDropPlan={() => setTrial(null)}
+          />
+        ) : null}
       </RailPage>
+      {adding === 'places' ? (
+        <Sheet title="Places" onClose={() => setAdding(null)} width={760}>
+          <PlacesSheet people={active} startsOn={nextWeek} />
+        </Sheet>
+      ) : null}
+      {adding === 'plan' || adding === 'trial' ? (
+        <Sheet title={adding === 'plan' ? 'New plan' : 'Plan to try'} onClose={() => setAdding(null)} width={720}>
+          <PlanForm
+            people={active}
+            services={services}
+            personId={personId}
+            startsOn={nextWeek}
+            onDone={(id) => {
+              setAdding(null);
+              choose(id);
+            }}
+            {...(adding === 'trial'
+              ? {
+                  onTry: (plan: PayPlan) => {
+                    setTrial(plan);
+                    setAdding(null);
+                  },
+                }
+              : {})}
+          />
+        </Sheet>
+      ) : null}
       {adding === 'rate' ? (
         <Sheet title="New rate" onClose={() => setAdding(null)} width={640}>
           <RateForm
-            people={people.filter((own) => own.isActive)}
+            people={active}
             services={services}
             personId={personId}
             startsOn={today > earliest ? today : earliest}

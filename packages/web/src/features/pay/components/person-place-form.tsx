@@ -1,0 +1,76 @@
+import { useState } from 'react';
+import type { PayPlaceDto } from '@driprail/shared/contracts/pay-plans.contract';
+import type { PersonDto } from '@driprail/shared/contracts/people.contract';
+import { Button } from '../../../components/button.tsx';
+import { SelectField, TextField } from '../../../components/field.tsx';
+import { ApiError } from '../../../lib/call.ts';
+import { useSetPersonPlace } from '../api/plans.queries.ts';
+
+interface Props {
+  people: PersonDto[];
+  places: PayPlaceDto[];
+  startsOn: string;
+  onDone: () => void;
+}
+
+/** Where a person works from a workweek on. */
+export function PersonPlaceForm({ people, places, startsOn, onDone }: Props) {
+  const set = useSetPersonPlace();
+  const [value, setValue] = useState({ personId: '', placeId: places[0]?.id ?? '', startsOn });
+  const fields = set.error instanceof ApiError ? set.error.fields : {};
+  return (
+    <form
+      noValidate
+      className="place-form"
+      onSubmit={(event) => {
+        event.preventDefault();
+        if (!set.isPending) set.mutate({ ...value, placeId: value.placeId || null }, { onSuccess: onDone });
+      }}
+    >
+      <h3>Where a person works</h3>
+      <div className="grid grid-cols-3 gap-3 max-[520px]:grid-cols-1">
+        <SelectField
+          label="Person"
+          value={value.personId}
+          error={fields['personId']}
+          onChange={(event) => setValue({ ...value, personId: event.target.value })}
+        >
+          <option value="">Choose</option>
+          {people.map((person) => (
+            <option key={person.id} value={person.id}>
+              {person.name}
+            </option>
+          ))}
+        </SelectField>
+        <SelectField
+          label="Works in"
+          value={value.placeId}
+          error={fields['placeId']}
+          onChange={(event) => setValue({ ...value, placeId: event.target.value })}
+        >
+          {places.map((place) => (
+            <option key={place.id} value={place.id}>
+              {place.name}
+            </option>
+          ))}
+          <option value="">the company’s rules alone</option>
+        </SelectField>
+        <TextField
+          label="From, the first day of a workweek"
+          type="date"
+          value={value.startsOn}
+          error={fields['startsOn']}
+          onChange={(event) => setValue({ ...value, startsOn: event.target.value })}
+        />
+      </div>
+      {set.error && Object.keys(fields).length === 0 ? (
+        <p className="tape mt-3" role="alert">
+          {set.error.message}
+        </p>
+      ) : null}
+      <Button type="submit" look="main" isBusy={set.isPending}>
+        Place person
+      </Button>
+    </form>
+  );
+}
