@@ -1,4 +1,4 @@
-import { createRequire } from 'node:module';
+import { createRequire as requireFrom } from 'node:module';
 import PDFDocument from 'pdfkit';
 import type { StatementDto } from '@driprail/shared/contracts/pay.contract';
 import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
@@ -8,7 +8,7 @@ import { formatDate, formatDay } from '@driprail/shared/domain/time/format';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 
 // One weight only ships for paper: rank is by size and by rules.
-const FONT = createRequire(import.meta.url).resolve('@fontsource/roboto-flex/files/roboto-flex-latin-400-normal.woff');
+const FONT = requireFrom(import.meta.url).resolve('@fontsource/roboto-flex/files/roboto-flex-latin-400-normal.woff');
 const PAGE = { left: 54, right: 558, top: 54, bottom: 738 };
 const COLUMNS = { date: 54, job: 108, label: 156, working: 330, amount: 558 };
 
@@ -28,7 +28,7 @@ export function statementPdf({ week, person, companyName, customers }: Statement
   text(
     doc,
     9,
-    `Week ${week.number}, ${formatDay(week.startsOn)} to ${formatDate(week.endsOn)}. ${shortText(exact(person.hoursWorked))} h worked, ${shortText(exact(person.overtimeHours))} h over the limit.`,
+    `Week ${week.number}, ${formatDay(week.startsOn)} to ${formatDate(week.endsOn)}. ${decimalText(exact(person.hoursWorked), 2)} h worked, ${decimalText(exact(person.overtimeHours), 2)} h over the limit.`,
   );
   hoursRow(doc, person.hoursByDay);
   for (const [group, lines] of groupsOf(person.lines)) {
