@@ -3,7 +3,7 @@ import PDFDocument from 'pdfkit';
 import type { StatementDto } from '@driprail/shared/contracts/pay.contract';
 import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
 import { exact } from '@driprail/shared/domain/money/exact';
-import { centsText, decimalText, shortText } from '@driprail/shared/domain/money/rounding';
+import { centsText, decimalText } from '@driprail/shared/domain/money/rounding';
 import { formatDate, formatDay } from '@driprail/shared/domain/time/format';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 
