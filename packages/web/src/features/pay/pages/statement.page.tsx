@@ -2,7 +2,7 @@ import { useQuery } from '@tanstack/react-query';
 import { useAbility } from '@casl/react';
 import { Link, useParams } from 'react-router';
 import type { AppAbility } from '@driprail/shared/authz/ability';
-import type { StatementDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayWeekDto, StatementDto } from '@driprail/shared/contracts/pay.contract';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
@@ -33,23 +33,20 @@ function OneStatement({ day, personId }: { day: string; personId: string }) {
   );
 }
 
+function statementsOf(dto: PayWeekDto, companyName: string): StatementDto[] {
+  const { week, correctedLines, customers } = dto;
+  return dto.people.flatMap((person) => {
+    const yearToDate = dto.yearsToDate[person.personId];
+    return yearToDate ? [{ week, person, companyName, correctedLines, customers, yearToDate }] : [];
+  });
+}
+
 function EveryStatement({ day }: { day: string }) {
   const { company } = useSession();
   const week = useQuery(weekQuery(day));
   return (
     <LoadedPage title="Statement" query={week} what="the pay week">
-      {(dto) => (
-        <Papers
-          week={dto.week}
-          statements={dto.people.map((person) => ({
-            week: dto.week,
-            person,
-            companyName: company.name,
-            correctedLines: dto.correctedLines,
-            customers: dto.customers,
-          }))}
-        />
-      )}
+      {(dto) => <Papers week={dto.week} statements={statementsOf(dto, company.name)} />}
     </LoadedPage>
   );
 }
@@ -80,9 +77,20 @@ function Papers({ week, statements }: { week: StatementDto['week']; statements: 
             { label: 'Over 40 h', value: hoursMinutes(hoursSum(people, 'overtimeHours')) },
           ]}
           actions={
-            <Button onClick={() => window.print()}>
-              <Icon name="print" /> {people.length === 1 ? 'Print statement' : `Print ${people.length} statements`}
-            </Button>
+            <>
+              {people.length === 1 && people[0] ? (
+                <a
+                  className="btn"
+                  href={pdfOf(week.startsOn, people[0].personId)}
+                  download={`statement-${week.startsOn}.pdf`}
+                >
+                  <Icon name="dn" /> PDF
+                </a>
+              ) : null}
+              <Button onClick={() => window.print()}>
+                <Icon name="print" /> {people.length === 1 ? 'Print statement' : `Print ${people.length} statements`}
+              </Button>
+            </>
           }
         />
       </div>
@@ -97,4 +105,8 @@ function Papers({ week, statements }: { week: StatementDto['week']; statements: 
       </RailPage>
     </>
   );
+}
+
+function pdfOf(startsOn: string, personId: string): string {
+  return `/api/pay/statements/${startsOn}/${personId}/statement.pdf`;
 }
