@@ -32,6 +32,17 @@ describe('the pay wall', () => {
   });
 });
 
+describe('the running week’s estimate', () => {
+  test.each([
+    ['technician, the own', technician, 'pt', true],
+    ['technician, another’s', technician, 'other', false],
+    ['dispatcher, the own', dispatcher, 'pd', false],
+    ['owner, who reads the pay week', owner, 'pt', false],
+  ] as const)('%s', (_name, actor, personId, isAllowed) => {
+    expect(abilityFor(actor).can('read', tag('Estimate', { personId }))).toBe(isAllowed);
+  });
+});
+
 describe('a technician', () => {
   const ability = abilityFor(technician);
   test('reads and marks visits of the own crew on near days only', () => {

@@ -41,6 +41,7 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
     allow('tip', 'Job', { crewPersonIds: { $all: [actor.personId] } });
     allow(['read', 'create'], 'ClockEntry', { personId: actor.personId });
     ownStatements(actor, allow);
+    allow('read', 'Estimate', { personId: actor.personId });
   },
 };
 

@@ -11,6 +11,8 @@ export interface SubjectFields {
   Rate: { id: string };
   PayWeek: { id: string };
   Statement: { personId: string; state: 'draft' | 'checked' | 'locked' };
+  /** The running week's pay, before it is locked. */
+  Estimate: { personId: string };
   Login: { id: string };
   LocalMail: { id: string };
   AuditEntry: { id: number };

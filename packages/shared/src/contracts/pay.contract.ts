@@ -174,6 +174,19 @@ const correctedLines = z.record(z.string(), correctedLine);
 /** Customers by job id, from today's rows: lines name them by job number only. */
 const customers = z.record(z.string(), z.string());
 export type CorrectedLine = z.infer<typeof correctedLine>;
+/** Locked weeks that end in the year of this week, up to it; the week itself counts while it is open too. */
+const yearToDate = z.object({
+  year: z.int(),
+  weeks: z.int(),
+  /** Exact hours, a fraction. */
+  hours: z.string(),
+  grossCents: z.int(),
+  tipCents: z.int(),
+  overtimePremiumCents: z.int(),
+});
+export type YearToDate = z.infer<typeof yearToDate>;
+/** By person. */
+const yearsToDate = z.record(z.string(), yearToDate);
 export const payWeekDto = z.object({
   week: payWeekHead,
   people: z.array(personWeek),
@@ -197,6 +210,7 @@ export const payWeekDto = z.object({
   ),
   correctedLines,
   customers,
+  yearsToDate,
   /** When the clock entries and jobs that warnings name took place, by their ids. */
   warningTimes: z.record(z.string(), instant),
 });
@@ -282,7 +296,14 @@ export const getStatement = endpoint({
   roles: everyone,
   summary: 'One person’s statement of a week: one’s own when locked, anybody’s for the owner.',
   params: weekParam.extend({ personId: id }),
-  response: z.object({ week: payWeekHead, person: personWeek, companyName: z.string(), correctedLines, customers }),
+  response: z.object({
+    week: payWeekHead,
+    person: personWeek,
+    companyName: z.string(),
+    correctedLines,
+    customers,
+    yearToDate,
+  }),
 });
 export const getStatementPdf = endpoint({
   method: 'get',
@@ -294,3 +315,24 @@ export const getStatementPdf = endpoint({
   format: 'pdf',
 });
 export type StatementDto = z.infer<(typeof getStatement)['response']>;
+
+export const getWeekSoFar = endpoint({
+  method: 'get',
+  path: '/api/pay/week-so-far',
+  roles: ['technician'],
+  summary: 'What one’s own running week comes to so far: an estimate until the week is locked.',
+  response: z.object({
+    startsOn: day,
+    endsOn: day,
+    number: z.int(),
+    asOf: instant,
+    isEstimate: z.literal(true),
+    hoursWorked: z.string(),
+    overtimeHours: z.string(),
+    grossCents: z.int(),
+    tipCents: z.int(),
+    /** What could still change it, in words. */
+    warnings: z.array(z.string()),
+  }),
+});
+export type WeekSoFar = z.infer<(typeof getWeekSoFar)['response']>;

@@ -9,6 +9,7 @@ import { correctedLinesOf, correctionsOfWeek, differences } from './corrections.
 import { readFrozen } from './frozen.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { salesOf } from './week-figures.queries.ts';
+import { yearsToDate } from './year-to-date.queries.ts';
 import { headOf } from './weeks.service.ts';
 
 /** A week as the owner sees it: computed while open, as it was frozen once locked. */
@@ -27,6 +28,7 @@ export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): P
     lateDifferences: frozen ? differences(frozen.people, computed.people, await correctionsOfWeek(week.id, tx)) : [],
     correctedLines: await correctedLinesOf(people, tx),
     customers: await customersOf(people, tx),
+    yearsToDate: await yearsToDate(week, people, tx),
     warningTimes: warningTimes(people, input),
   };
 }

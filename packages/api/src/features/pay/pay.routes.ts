@@ -14,6 +14,7 @@ import { addPlan, listPlans } from './plans.service.ts';
 import { addRate, addRules, listRates, listRules } from './rates.service.ts';
 import { statementPdf } from './statement-pdf.ts';
 import { listStatements, readStatement } from './statements.queries.ts';
+import { readWeekSoFar } from './week-so-far.queries.ts';
 import { tryWeeks } from './what-if.queries.ts';
 import { listWeeks } from './week-figures.queries.ts';
 import { weekAt } from './weeks.service.ts';
@@ -46,6 +47,7 @@ export function payRoutes(table: RouteTable): void {
     return okay;
   });
   route(table, api.exportPayWeek, async ({ params }, { now }) => payWeekCsv(await read(params.startsOn, now())));
+  route(table, api.getWeekSoFar, (_input, ctx) => readWeekSoFar(ctx));
   route(table, api.listStatements, async (_input, ctx) => ({ statements: await listStatements(ctx) }));
   route(table, api.getStatement, ({ params }, ctx) => readStatement(ctx, params.startsOn, params.personId));
   route(table, api.getStatementPdf, async ({ params }, ctx) => {

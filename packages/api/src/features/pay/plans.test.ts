@@ -2,7 +2,7 @@ import type TestAgent from 'supertest/lib/agent.js';
 import { beforeAll, describe, expect, test } from 'vitest';
 import { NO_EXTRAS } from '@driprail/shared/domain/pay/plans/pay-plan';
 import type { PlanBase } from '@driprail/shared/domain/pay/plans/pay-plan';
-import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayWeekDto, StatementDto } from '@driprail/shared/contracts/pay.contract';
 import type { WhatIfWeek } from '@driprail/shared/contracts/pay-plans.contract';
 import { select } from '../../db/sequelize.ts';
 import { useApp } from '../../testing/app.ts';
@@ -189,6 +189,23 @@ test('what if: both results side by side, from locked and open weeks, and nothin
     .send({ ...ask, ruleSetKey: 'us_zz' })
     .expect(422);
   expect(await rows()).toEqual(before);
+});
+
+test('a statement adds up the year to date, and the running week is an estimate for the person alone', async () => {
+  const sefa = await company.sefa();
+  const own = company.people.sefa.id;
+  const statement = await sefa.get(`/api/pay/statements/2026-05-11/${own}`).expect(200);
+  // Weeks 19 and 20 are locked, 420.00 each; weeks 16 and 17 never were.
+  expect((statement.body as StatementDto).yearToDate).toEqual({
+    ...{ year: 2026, weeks: 2, hours: '4', grossCents: 84_000, tipCents: 0, overtimePremiumCents: 0 },
+  });
+  const soFar = await sefa.get('/api/pay/week-so-far').expect(200);
+  expect(soFar.body).toMatchObject({ startsOn: '2026-06-08', isEstimate: true, grossCents: 0, hoursWorked: '0' });
+  app.time.now = '2026-06-04T12:00:00Z';
+  const running = await sefa.get('/api/pay/week-so-far').expect(200);
+  expect(running.body).toMatchObject({ startsOn: '2026-06-01', grossCents: 4500, hoursWorked: '9/4' });
+  await (await company.dispatcher()).get('/api/pay/week-so-far').expect(403);
+  expect(await select(`SELECT 1 FROM pay_weeks WHERE starts_on >= '2026-06-01'`)).toEqual([]);
 });
 
 test('what a technician may not do', async () => {

@@ -10,6 +10,7 @@ import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf } from './corrections.queries.ts';
 import { readFrozen } from './frozen.queries.ts';
 import { readPayWeek } from './pay-week.queries.ts';
+import { yearsToDate } from './year-to-date.queries.ts';
 import { headOf, weekAt } from './weeks.service.ts';
 
 interface StatementHead {
@@ -43,9 +44,12 @@ export function readStatement({ ability, now }: Ctx, day: string, personId: stri
         : (await readPayWeek(week, now(), tx)).people;
     const person = people.find((p) => p.personId === personId);
     if (!person) throw notFound('A statement of this person for that week');
+    const yearToDate = (await yearsToDate(week, [person], tx))[personId];
+    if (!yearToDate) throw new Error('a person with pay in the week has a year');
     return {
       week: await headOf(week, tx),
       person,
+      yearToDate,
       companyName: (await companyOf(tx)).name,
       correctedLines: await correctedLinesOf([person], tx),
       customers: await customersOf([person], tx),

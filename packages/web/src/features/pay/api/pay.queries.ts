@@ -5,6 +5,7 @@ import {
   addAdjustment,
   getPayWeek,
   getStatement,
+  getWeekSoFar,
   listPayWeeks,
   listStatements,
   removeAdjustment,
@@ -32,6 +33,11 @@ export const statementQuery = (startsOn: string, personId: string) =>
     queryKey: ['pay', 'statement', startsOn, personId],
     queryFn: ({ signal }) => call(getStatement, { params: { startsOn, personId } }, signal),
   });
+
+export const weekSoFarQuery = queryOptions({
+  queryKey: ['pay', 'week-so-far'],
+  queryFn: ({ signal }) => call(getWeekSoFar, {}, signal),
+});
 
 /** The answer is the newest state of its week; the other weeks' figures are fetched again. */
 function keep(client: QueryClient, week: PayWeekDto) {

@@ -65,7 +65,7 @@ export function PlacesSheet({ people, startsOn }: { people: PersonDto[]; startsO
           {open !== null && typeof open === 'object' ? (
             <WageForm key={open.id} place={open} startsOn={startsOn} onDone={close} />
           ) : null}
-          <p className="caution mt-4">
+          <p className="caution mt-4 mb-5">
             <b>Caution.</b> The federal rules always run beside a place’s, and the better is paid. Rules and wages of
             states and towns change: check each with the labor agency of the place, or ask a licensed payroll adviser.
           </p>

@@ -21,7 +21,7 @@ export function ServiceRows({ label, amountLabel, hasSizes, services, rows, faul
   const change = (at: number, part: Partial<ServiceRow>) =>
     onChange(rows.map((row, index) => (index === at ? { ...row, ...part } : row)));
   return (
-    <fieldset className="svc-rows mt-3">
+    <fieldset className="mt-3">
       <legend>{label}</legend>
       {rows.map((row, at) => (
         <div key={at} className={hasSizes ? 'svc-row has-sizes' : 'svc-row'}>

@@ -64,11 +64,35 @@ export function StatementPaper({ statement, hasLinks }: Props) {
       <p className="total">
         Gross <span className="t-level">{money(person.totals.gross)}</span>
       </p>
+      <YearLine statement={statement} />
       <p className="stmt-note">
         Gross pay in US dollars, before taxes and other withholding, which a licensed payroll processor works out.
         {person.regularRate ? ` The week’s regular rate is ${decimalText(exact(person.regularRate), 4)} an hour.` : ''}
       </p>
     </article>
+  );
+}
+
+function YearLine({ statement: { yearToDate } }: { statement: StatementDto }) {
+  const { year, weeks, hours, grossCents, tipCents, overtimePremiumCents } = yearToDate;
+  return (
+    <dl className="stmt-year">
+      <dt>
+        {year} to date, {weeks === 1 ? '1 week' : `${weeks} weeks`}
+      </dt>
+      <dd>
+        Gross <b>{money(grossCents)}</b>
+      </dd>
+      <dd>
+        Hours <b>{hoursMinutes(hours)}</b>
+      </dd>
+      <dd>
+        Overtime premium <b>{money(overtimePremiumCents)}</b>
+      </dd>
+      <dd>
+        Tips in the gross <b>{money(tipCents)}</b>
+      </dd>
+    </dl>
   );
 }
 

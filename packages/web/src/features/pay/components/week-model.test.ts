@@ -73,6 +73,7 @@ describe('what asks for somebody', () => {
     lateDifferences: [],
     correctedLines: {},
     customers: {},
+    yearsToDate: {},
     warningTimes: { e1: since },
   });
 

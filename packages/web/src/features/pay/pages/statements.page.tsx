@@ -1,5 +1,8 @@
+import { useAbility } from '@casl/react';
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
+import { tag } from '@driprail/shared/authz/ability';
+import type { AppAbility } from '@driprail/shared/authz/ability';
 import { formatDay } from '@driprail/shared/domain/time/format';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
@@ -9,6 +12,7 @@ import { Empty, Loaded } from '../../../components/states.tsx';
 import { money, useFormats } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { statementsQuery } from '../api/pay.queries.ts';
+import { WeekSoFar } from '../components/week-so-far.tsx';
 import { weekSpan } from '../components/week-model.ts';
 import './statement.css';
 
@@ -16,6 +20,7 @@ import './statement.css';
 export function StatementsPage() {
   const { user } = useSession();
   const { zone } = useFormats();
+  const ability = useAbility<AppAbility>();
   const statements = useQuery(statementsQuery);
   const list = statements.data?.statements ?? [];
   const year = list[0]?.startsOn.slice(0, 4) ?? '';
@@ -39,6 +44,7 @@ export function StatementsPage() {
       />
       <RailPage>
         <div className="my-pay">
+          {user.personId && ability.can('read', tag('Estimate', { personId: user.personId })) ? <WeekSoFar /> : null}
           <Loaded query={statements} what="your statements">
             {({ statements: own }) =>
               own.length === 0 || user.personId === null ? (
