@@ -30,7 +30,7 @@ function byRatio(inputs: ScenarioInputs): CheckResult {
     return { productFraction: '1/(N+1)', waterFraction: 'N/(N+1)', totalParts: 'N+1' };
   const ratio = chartRatio(text);
   const concentrate = inputs.volume('concentrate', 'product');
-  const size = inputs.volume('bottle', 'total', 'finished', 'fillTo', 'bucket', 'tank');
+  const size = inputs.volume('bottle', 'total', 'finished', 'fillTo', 'readyToUse', 'bucket', 'lance', 'tank');
   if (concentrate !== null && size !== null)
     throw new MixError('Give the size of the mix or the concentrate, not both.');
   const filled = inputs.volume('');

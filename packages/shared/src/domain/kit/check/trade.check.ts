@@ -74,8 +74,11 @@ function diluted(inputs: ScenarioInputs): CheckResult {
 }
 
 function perPackage(classes: readonly string[], packingGroup: string): CheckResult {
-  const groups: string[] = packingGroup.toUpperCase().match(/I+/g) ?? [];
-  if (groups.length === 0 || groups.some((group) => group.length > 3))
+  const groups = packingGroup
+    .toUpperCase()
+    .split(/[\s,/]+|\bOR\b|\bAND\b|\bPG\b/)
+    .filter((group) => group !== '');
+  if (groups.length === 0 || !groups.every((group) => ['I', 'II', 'III'].includes(group)))
     throw new ScenarioError('packingGroup is none of I, II and III.');
   if (classes.every((item) => CLASSES_BY_PACKING_GROUP.some((known) => known === item)))
     return ofGroup(groups.includes('I') ? 'I' : 'II');

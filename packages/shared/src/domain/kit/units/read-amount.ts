@@ -25,7 +25,7 @@ const UNIT_WORDS: [RegExp, VolumeUnit | WeightUnit][] = [
   [/^(oz \(weight\)|(weight|wt|dry|av) ?(oz|ounces?)|oz (wt|av))$/, 'oz (weight)'],
 ];
 
-const AMOUNT = /^(\d+(?:[.,]\d+)?)\s*(.+)$/;
+const AMOUNT = /^(\d+(?:[.,]\d+)?)\s*([^\d.,\s].*)$/;
 
 /** Reads "16 fl oz", "1,5 L" or "66 lb" exactly; "16 oz" is asked about, for it may be a volume or a weight. */
 export function readAmount(text: string): AmountReading {
