@@ -54,12 +54,12 @@ export function PeoplePage() {
                             {person.isActive ? '' : ', left'}
                           </td>
                           <td>{person.phone}</td>
-                          <td>{person.skills.map((skill) => skillNames[skill]).join(', ') || '–'}</td>
-                          <td>{person.loginRole ?? 'none'}</td>
+                          <td>{person.skills.map((skill) => skillNames[skill]).join(', ')}</td>
+                          <td>{person.loginRole}</td>
                           <td>
                             {person.timeOff[0]
-                              ? `${formatDate(person.timeOff[0].startsOn)}${person.timeOff.length > 1 ? ' and more' : ''}`
-                              : '–'}
+                              ? `Off from ${formatDate(person.timeOff[0].startsOn)}${person.timeOff.length > 1 ? ' and more' : ''}`
+                              : null}
                           </td>
                           <td className="r">
                             <Button look="bare" onClick={() => setEditingId(person.id)}>
