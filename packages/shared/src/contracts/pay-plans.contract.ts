@@ -160,3 +160,19 @@ export const whatIf = endpoint({
 });
 export type WhatIfBody = z.infer<(typeof whatIf)['body']>;
 export type WhatIfWeek = z.infer<(typeof whatIf)['response']>['weeks'][number];
+
+export const getCommissionTest = endpoint({
+  method: 'get',
+  path: '/api/pay/commission-test/:personId',
+  roles: owner,
+  summary: 'What the commission tests of 29 USC 207(i) come to over the last year’s locked weeks. It only informs.',
+  params: z.object({ personId: id }),
+  response: z.object({
+    weeks: z.int(),
+    commissionCents: z.int(),
+    otherCents: z.int(),
+    isMostlyCommission: z.boolean(),
+    overtimeWeeks: z.int(),
+    overtimeWeeksPassed: z.int(),
+  }),
+});

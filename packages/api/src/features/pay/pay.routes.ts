@@ -6,6 +6,7 @@ import { inTransaction } from '../../db/sequelize.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
 import { addAdjustment, removeAdjustment } from './adjustments.service.ts';
+import { testCommission } from './commission-test.queries.ts';
 import { payWeekCsv } from './export.ts';
 import { setWeekState } from './lock.service.ts';
 import { readPayWeek } from './pay-week.queries.ts';
@@ -33,6 +34,7 @@ export function payRoutes(table: RouteTable): void {
   route(table, plans.addPayPlace, async ({ body }, ctx) => ({ place: await addPlace(ctx, body) }));
   route(table, plans.addPlaceWage, async ({ params, body }, ctx) => ({ place: await addWage(ctx, params.id, body) }));
   route(table, plans.setPersonPlace, async ({ body }, ctx) => ({ people: await placePerson(ctx, body) }));
+  route(table, plans.getCommissionTest, ({ params }) => testCommission(params.personId));
   route(table, plans.whatIf, async ({ body }, { now }) => ({ weeks: await tryWeeks(body, now()) }));
   route(table, api.listPayWeeks, async (_input, { now }) => {
     return { weeks: await listWeeks(await todayOf(now())) };

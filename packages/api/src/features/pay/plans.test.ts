@@ -208,6 +208,11 @@ test('a statement adds up the year to date, and the running week is an estimate 
   expect(await select(`SELECT 1 FROM pay_weeks WHERE starts_on >= '2026-06-01'`)).toEqual([]);
 });
 
+test('the commission test informs from locked weeks', async () => {
+  const answer = await owner.get(`/api/pay/commission-test/${company.people.sefa.id}`).expect(200);
+  expect(answer.body).toMatchObject({ weeks: 2, commissionCents: 0, otherCents: 84_000, isMostlyCommission: false });
+});
+
 test('what a technician may not do', async () => {
   const sefa = await company.sefa();
   for (const path of ['plans', 'places', 'rule-sets']) await sefa.get(`/api/pay/${path}`).expect(403);

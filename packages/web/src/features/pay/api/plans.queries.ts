@@ -4,6 +4,7 @@ import {
   addPayPlace,
   addPayPlan,
   addPlaceWage,
+  getCommissionTest,
   listPayPlaces,
   listPayPlans,
   listRuleSets,
@@ -24,6 +25,12 @@ export const placesQuery = queryOptions({
   queryKey: ['pay', 'places'],
   queryFn: ({ signal }) => call(listPayPlaces, {}, signal),
 });
+
+export const commissionTestQuery = (personId: string) =>
+  queryOptions({
+    queryKey: ['pay', 'commission-test', personId],
+    queryFn: ({ signal }) => call(getCommissionTest, { params: { personId } }, signal),
+  });
 
 export type TrialBody = NonNullable<RequestOf<typeof whatIf>['body']>;
 /** Asks without saving; the last answer stays on the screen while the next one is worked out. */

@@ -17,6 +17,7 @@ import { weeksQuery } from '../api/pay.queries.ts';
 import { plansQuery } from '../api/plans.queries.ts';
 import { payPeopleQuery, payServicesQuery, ratesQuery, rulesQuery } from '../api/rates.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
+import { CommissionTest } from '../components/commission-test.tsx';
 import { BandChart } from '../components/band-chart.tsx';
 import { rateText } from '../components/ledger.ts';
 import { ratesOn, rulesOn } from '../components/plan-words.ts';
@@ -137,6 +138,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
               higher minimum wages, daily overtime, meal and rest rules, and how a change of pay is told. Ask a licensed
               payroll adviser before the first locked week.
             </p>
+            {person ? <CommissionTest person={person} /> : null}
           </section>
           <RatesNow people={active} rates={rates} plans={plans} today={today} chosenId={personId} />
         </div>
