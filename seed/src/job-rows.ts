@@ -5,7 +5,7 @@ import { ZONE, instant, minuteOf } from './calendar.ts';
 import type { DemoCustomer } from './customers.ts';
 import type { Menu } from './menu.ts';
 import { onMenu } from './menu.ts';
-import type { PlannedItem } from './plan-day.ts';
+import type { PlannedItem } from './offers.ts';
 import type { Random } from './random.ts';
 import type { DemoRows } from './rows.ts';
 import type { DemoVan } from './vans.ts';

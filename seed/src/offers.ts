@@ -1,9 +1,13 @@
 import type { DemoCustomer, DemoVehicle } from './customers.ts';
 import type { Menu, ServiceName } from './menu.ts';
 import { isPaintWork, onMenu } from './menu.ts';
-import type { PlannedItem } from './plan-day.ts';
 import type { Random } from './random.ts';
 import type { VanDay } from './vans.ts';
+
+export interface PlannedItem {
+  vehicle: DemoVehicle;
+  service: ServiceName;
+}
 
 /** What is asked for together and how often, by weight; invented. Paint work is asked for more often than it can be done. */
 const bundles: { services: ServiceName[]; weight: number }[] = [

@@ -5,17 +5,13 @@ import { minuteOf } from './calendar.ts';
 import { MEAL_AFTER, MEAL_MINUTES } from './meal.ts';
 import type { DemoCustomer, DemoVehicle } from './customers.ts';
 import type { LineRow, OrderedJob } from './job-rows.ts';
-import type { Menu, ServiceName } from './menu.ts';
+import type { Menu } from './menu.ts';
 import { isPaintWork, onMenu } from './menu.ts';
+import type { PlannedItem } from './offers.ts';
 import { offers } from './offers.ts';
 import { SHOP } from './places.ts';
 import type { Random } from './random.ts';
 import type { VanDay } from './vans.ts';
-
-export interface PlannedItem {
-  vehicle: DemoVehicle;
-  service: ServiceName;
-}
 
 /** One visit of a van's day; times are minutes from midnight. */
 export interface PlannedStop {

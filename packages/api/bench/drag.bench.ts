@@ -4,7 +4,7 @@ import type { Socket } from 'socket.io-client';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import { hintEvent } from '@driprail/shared/realtime/hints';
 import { boardSql, visitFrom, visitJson } from '../src/features/board/index.ts';
-import { asPositional } from './board.bench.ts';
+import { asPositional } from './bare-board.ts';
 import { inTurn, median } from './measure.ts';
 import type { Ratio } from './measure.ts';
 import type { BenchStage } from './stage.ts';

@@ -16,7 +16,7 @@ import { sessionChain } from '../src/http/session.ts';
 import { createLogger } from '../src/log.ts';
 import { localMail } from '../src/mail/transport.ts';
 import { cloneDatabase, ensureMigratedTemplate, testPostgresFromEnvironment } from '../src/testing/database.ts';
-import { mountBare } from './board.bench.ts';
+import { mountBare } from './bare-board.ts';
 
 export interface BenchStage {
   url: string;
