@@ -96,7 +96,11 @@ export function WhatIf({ person, weeks, now, plan, onChoosePlan, onDropPlan }: P
       </p>
       {hasFields ? null : (
         <Loaded query={answer} what="the trial">
-          {({ weeks: tried }) => <WhatIfTable name={person.name} weeks={tried} />}
+          {({ weeks: tried }) => (
+            <div className={answer.isPlaceholderData ? 'is-old' : ''} aria-busy={answer.isPlaceholderData}>
+              <WhatIfTable name={person.name} weeks={tried} />
+            </div>
+          )}
         </Loaded>
       )}
       <p className="t-2">

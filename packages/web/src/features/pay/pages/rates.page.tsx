@@ -23,6 +23,8 @@ import { rateText } from '../components/ledger.ts';
 import { ratesOn, rulesOn } from '../components/plan-words.ts';
 import { planRows, rateRows, rateWords, ruleRows } from '../components/rate-bands.ts';
 import { PlacesSheet } from '../components/places-sheet.tsx';
+import { planOn } from '../components/plan-base-words.ts';
+import { planKinds } from '../components/plan-draft.ts';
 import { PlanForm } from '../components/plan-form.tsx';
 import { RateForm } from '../components/rate-form.tsx';
 import { RatesNow } from '../components/rates-now.tsx';
@@ -71,7 +73,9 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
   const earliest = lockedTo ? addDays(lockedTo, 1) : today;
   const choose = (id: string) => setSearch(id ? { person: id } : {}, { replace: true, preventScrollReset: true });
   const active = people.filter((own) => own.isActive);
+  const planned = personId ? planOn(plans, personId, today) : null;
   const sums = sumsOf(rates, rules, personId, today);
+  const [hour, commission, minimum] = sums;
   const over = weeks.filter((week) => week.endsAt <= now).sort((a, b) => a.startsOn.localeCompare(b.startsOn));
   const first = rulesOn(rules, today)?.workweekStartsOn ?? 1;
   const nextWeek = lockedTo && lockedTo >= today ? earliest : weekStartOf(addDays(today, 6), first);
@@ -97,7 +101,9 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
             </select>
           </>
         }
-        sums={sums}
+        sums={
+          planned && minimum ? [{ label: 'Plan, now', value: planKinds[planned.plan.base.kind].label }, minimum] : sums
+        }
         actions={
           <>
             <Link className="btn" to={paths.payWeeks}>
@@ -147,7 +153,10 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
             key={person.id}
             person={person}
             weeks={over}
-            now={{ hourly: sums[0]?.value ?? '', percent: sums[1]?.value ?? '' }}
+            now={{
+              hourly: planned ? 'by the plan' : (hour?.value ?? ''),
+              percent: planned ? 'by the plan' : (commission?.value ?? ''),
+            }}
             plan={trial}
             onChoosePlan={() => setAdding('trial')}
             onDropPlan={() => setTrial(null)}
