@@ -93,7 +93,7 @@ export function oneInRatio(parts: Exact): DilutionRatio {
 
 function choice(waterParts: Exact, meaning?: string): RatioChoice {
   const ratio = { waterParts };
-  const parts = `${plainText(waterParts)} parts water to 1 part concentrate`;
+  const parts = `${plainText(waterParts)} ${waterParts.equals(ONE) ? 'part' : 'parts'} water to 1 part concentrate`;
   return { ratio, label: meaning ? `${meaning}: ${parts}` : `${parts} (${ratioText(ratio)})` };
 }
 
