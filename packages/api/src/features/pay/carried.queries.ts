@@ -4,7 +4,7 @@ import type { CarriedPay, PayWeekInput, PersonWeek } from '@driprail/shared/doma
 import type { DatedPlan } from '@driprail/shared/domain/pay/plans/pay-plan';
 import { addDays } from '@driprail/shared/domain/time/zone';
 import type { PayWeek } from '../../db/models/index.ts';
-import { readFrozen } from './frozen.queries.ts';
+import { frozenInput, readFrozen } from './frozen.queries.ts';
 import { weekAt } from './weeks.service.ts';
 
 /**
@@ -22,9 +22,9 @@ export async function carriedInto(
   if (monthly.size === 0 || monthOfWeek(before) !== monthOfWeek(week.startsOn)) return [];
   const prior = await weekAt(before, tx);
   if (prior.startsOn !== before) return [];
-  const isLocked = prior.state === 'locked';
-  const input = isLocked ? (prior.snapshot as PayWeekInput) : await inputOf(prior);
-  const people = isLocked ? (await readFrozen(prior.id, null, tx)).people : computePayWeek(input).people;
+  const frozen = frozenInput(prior);
+  const input = frozen ?? (await inputOf(prior));
+  const people = frozen ? (await readFrozen(prior.id, null, tx)).people : computePayWeek(input).people;
   return [...monthly].flatMap((personId) =>
     carryOn(
       personId,

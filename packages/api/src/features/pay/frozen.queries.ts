@@ -1,6 +1,14 @@
 import type { Transaction } from 'sequelize';
-import type { PayLine, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import { payEngine } from '@driprail/shared/domain/pay/pay-engines';
+import type { PayLine, PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import type { PayWeek } from '../../db/models/index.ts';
 import { PayLineRow, PayStatement } from '../../db/models/index.ts';
+
+/** The engine's input that a week was locked with; null while it is open, or when its engine is not kept. */
+export function frozenInput(week: PayWeek): PayWeekInput | null {
+  const isKept = week.state === 'locked' && payEngine(week.engineVersion ?? '') !== null;
+  return isKept ? (week.snapshot as PayWeekInput) : null;
+}
 
 /** The stored lines of a locked week, of everybody or of one person. */
 export async function readFrozen(

@@ -11,6 +11,7 @@ import type { PayWeek } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import { notFound, unprocessable } from '../../http/errors.ts';
 import { carryOn } from './carried.queries.ts';
+import { frozenInput } from './frozen.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { listPlaces } from './places.service.ts';
 import { weekAt } from './weeks.service.ts';
@@ -29,7 +30,7 @@ export function tryWeeks(body: WhatIfBody, now: Date): Promise<WhatIfWeek[]> {
     for (let day = body.from; day <= body.to || weeks.length === 0; day = addDays(day, 7)) {
       const week = await weekAt(day, tx);
       if (week.startsAt > now) break;
-      const input = week.state === 'locked' ? (week.snapshot as PayWeekInput) : await payInputOf(week, now, tx);
+      const input = frozenInput(week) ?? (await payInputOf(week, now, tx));
       if (before === null) carried = input.carried.filter((item) => item.personId === body.personId);
       else if (monthOfWeek(before) !== monthOfWeek(week.startsOn)) carried = [];
       before = week.startsOn;
