@@ -294,6 +294,14 @@ describe('deductions and warnings', () => {
     ]);
   });
 
+  it('writes clock times in warnings as the company does', () => {
+    const entries = [anEntry('2026-05-05T18:30:00.000Z', null)];
+    const asOf = '2026-05-05T19:30:00.000Z';
+    const said = (clock: '12' | '24') => ada(aWeek({ entries, asOf, clock })).warnings[0]?.message;
+    expect(said('24')).toContain('since Tue May 5 14:30.');
+    expect(said('12')).toContain('since Tue May 5 2:30 pm.');
+  });
+
   it('says once that a visit was done without clock time', () => {
     expect(codes(ada(aWeek({ doneLines: [aDoneLine(1, 100), { ...aDoneLine(1, 100), lineId: 'second' }] })))).toEqual([
       'done_without_clock',

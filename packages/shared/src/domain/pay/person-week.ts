@@ -132,6 +132,7 @@ function planWeek(
     doneLines: own.doneLines,
     split: input.rules.crewSplit,
     zone: input.zone,
+    clock: input.clock,
     carried: own.carried,
     mayCoverOtherTime: ruleSet.mayCoverOtherTime,
     salaryHoursAtMost: ruleSet.salaryHoursAtMost === null ? null : exact(ruleSet.salaryHoursAtMost),

@@ -1,5 +1,6 @@
 import { dollars, exact, fractionText, hoursOf } from '../../money/exact.ts';
 import { centsText, shortText, toCents } from '../../money/rounding.ts';
+import { formatClock } from '../../time/format.ts';
 import { instantOf } from '../../time/zone.ts';
 import { aLine, totalCents } from '../pay-line.ts';
 import type { PayLine } from '../pay-week.types.ts';
@@ -29,6 +30,7 @@ function premiumPay(week: PlanWeek, premium: Premium, index: number): PayLine[] 
   const amountCents = toCents(hours.mul(exact(premium.perHour)));
   if (amountCents === 0) return [];
   const { between } = premium;
+  const at = (time: string): string => formatClock(`2026-01-01T${time}:00Z`, 'utc', week.clock);
   return [
     aLine({
       key: `premium_pay:${index}`,
@@ -43,7 +45,7 @@ function premiumPay(week: PlanWeek, premium: Premium, index: number): PayLine[] 
       working: [
         {
           label: `Hours of ${week.person.name} with the premium`,
-          note: between ? `Worked between ${between.from} and ${between.to}` : 'By the clock',
+          note: between ? `Worked between ${at(between.from)} and ${at(between.to)}` : 'By the clock',
           arithmetic: hoursAndMinutes(hours),
           result: `${shortText(hours)} h`,
           sources: [...new Set(spans.map((span) => span.entryId))].map((id) => ({

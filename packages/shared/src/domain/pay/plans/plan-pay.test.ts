@@ -272,6 +272,9 @@ describe('what a plan adds', () => {
     const person = ada({ plans, entries: hoursOnJobs(8, 8, 8, 8, 8, 8) });
     expect(lineOf(person, 'premium_pay')).toMatchObject({ hours: '24', amountCents: 2400 });
     expect([person.regularRate, person.totals.gross]).toEqual(['17/2', 44_200]);
+    expect(lineOf(person, 'premium_pay')?.working[0]?.note).toBe('Worked between 12:00 and 23:59');
+    const american = ada({ plans, entries: hoursOnJobs(8), clock: '12' });
+    expect(lineOf(american, 'premium_pay')?.working[0]?.note).toBe('Worked between 12:00 pm and 11:59 pm');
   });
 
   it('29 CFR 778.210: 10 % of straight and overtime pay needs no recomputation (figures of a published article)', () => {

@@ -1,4 +1,5 @@
 import type { Exact } from '../../money/exact.ts';
+import type { ClockStyle } from '../../time/format.ts';
 import type { CarriedPay, CrewSplit, DoneLine, PayLine, PayPerson, SourceRef } from '../pay-week.types.ts';
 import type { WorkSpan } from '../work-spans.ts';
 import type { DatedPlan } from './pay-plan.ts';
@@ -12,6 +13,7 @@ export interface PlanWeek {
   hours: Exact;
   split: CrewSplit;
   zone: string;
+  clock: ClockStyle;
   /** Whether this is the last workweek that ends in its month. */
   settles: boolean;
   carried: CarriedPay | null;
