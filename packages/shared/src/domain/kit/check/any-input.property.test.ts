@@ -19,7 +19,26 @@ const SECTIONS: [string, readonly PublishedRow[]][] = [
 
 const anything = fc.oneof(
   fc.jsonValue({ maxDepth: 2 }),
-  fc.constantFrom(0, -1, 1e-7, 1e21, 1e308, '', '1:', ':', '1e9', 'NaN', '∞', '１：１０', null, [], {}),
+  fc.constantFrom(
+    0,
+    -1,
+    1e-7,
+    1e21,
+    1e308,
+    '',
+    '1:',
+    ':',
+    '1e9',
+    'NaN',
+    '∞',
+    '１：１０',
+    null,
+    [],
+    {},
+    [91, 0],
+    [0, -181],
+    [1e21, 0, -1],
+  ),
 );
 
 /** A published row with one of its fields replaced by anything at all. */
