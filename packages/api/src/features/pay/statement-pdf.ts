@@ -1,6 +1,6 @@
 import { createRequire as requireFrom } from 'node:module';
 import PDFDocument from 'pdfkit';
-import type { StatementDto } from '@driprail/shared/contracts/pay.contract';
+import type { StatementDto, YearToDate } from '@driprail/shared/contracts/pay.contract';
 import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { centsText, decimalText } from '@driprail/shared/domain/money/rounding';
@@ -15,7 +15,10 @@ const COLUMNS = { date: 54, job: 108, label: 156, working: 330, amount: 558 };
 type Document = InstanceType<typeof PDFDocument>;
 
 /** A pay statement on Letter paper, fonts embedded: every line with its job, totals double-ruled, page x of y. */
-export function statementPdf({ week, person, companyName, customers }: StatementDto, zone: string): Promise<Buffer> {
+export function statementPdf(
+  { week, person, companyName, customers, yearToDate }: StatementDto,
+  zone: string,
+): Promise<Buffer> {
   const doc = new PDFDocument({
     size: 'LETTER',
     margin: 54,
@@ -40,6 +43,7 @@ export function statementPdf({ week, person, companyName, customers }: Statement
     for (const line of lines) row(doc, line, line.jobId ? (customers[line.jobId] ?? '') : '');
   }
   total(doc, person.totals.gross);
+  text(doc, 9, yearWords(yearToDate));
   text(
     doc,
     8,
@@ -48,6 +52,11 @@ export function statementPdf({ week, person, companyName, customers }: Statement
   pageNumbers(doc);
   doc.end();
   return done;
+}
+
+function yearWords({ year, weeks, hours, grossCents, tipCents, overtimePremiumCents }: YearToDate): string {
+  const span = weeks === 1 ? '1 week' : `${weeks} weeks`;
+  return `${year} to date, ${span}: gross ${centsText(grossCents)}, ${decimalText(exact(hours), 2)} h, overtime premium ${centsText(overtimePremiumCents)}, tips in the gross ${centsText(tipCents)}.`;
 }
 
 function collected(doc: Document): Promise<Buffer> {
