@@ -40,6 +40,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   });
   accessRoutes(table, parts);
   loginsRoutes(table, parts);
+  payRoutes(table, parts);
   settingsRoutes(table, { code: parts.setUpCode, hasLocalMail: parts.hasLocalMail });
   for (const mount of [
     peopleRoutes,
@@ -49,7 +50,6 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
     boardRoutes,
     runSheetRoutes,
     clockRoutes,
-    payRoutes,
     recordsRoutes,
   ]) {
     mount(table);

@@ -1,6 +1,7 @@
 import type TestAgent from 'supertest/lib/agent.js';
 import { beforeAll, expect, test } from 'vitest';
 import type { PayWeekDto, StatementDto } from '@driprail/shared/contracts/pay.contract';
+import { OutboxMail } from '../../db/models/index.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
@@ -41,6 +42,11 @@ test('time written down after the lock shows as a difference until a correction 
   await clock('2026-05-04T13:00:00Z', '2026-05-04T15:00:00Z');
   await lockWeek('2026-05-04');
   await clock('2026-05-05T13:00:00Z', '2026-05-05T14:30:00Z');
+
+  const mails = await OutboxMail.findAll();
+  expect(mails.map((mail) => mail.recipient)).toEqual(['sefa@ternandtide.example']);
+  expect(first(mails).body).toContain(`/statements/2026-05-04/${personId}`);
+  expect(first(mails).body).not.toMatch(/\d\.\d\d/);
 
   const locked = await read('2026-05-04');
   // 2 h at 20.00 was locked; 3.5 h at 20.00 would be 70.00 (arithmetic).

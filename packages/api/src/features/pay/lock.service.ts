@@ -10,15 +10,17 @@ import { conflict, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { readPayWeek } from './pay-week.queries.ts';
+import { mailStatements } from './statement-mails.ts';
 import { weekOf } from './weeks.service.ts';
 
 type State = 'draft' | 'checked' | 'locked';
 
 /**
  * Moves a week along: draft, checked, locked; and from checked back to draft. Two owners locking at once lock once.
+ * @param baseUrl where the web app answers, for the mails that go out at the lock; without it none does
  * @throws 409 when the week changed meanwhile, 422 when it is not over or something must be settled first
  */
-export function setWeekState(ctx: Ctx, day: string, to: State, version: number): Promise<PayWeekDto> {
+export function setWeekState(ctx: Ctx, day: string, to: State, version: number, baseUrl?: string): Promise<PayWeekDto> {
   return inTransaction(async (tx) => {
     const found = await weekOf(day, tx);
     const week = await PayWeek.findByPk(found.id, { transaction: tx, lock: tx.LOCK.UPDATE, rejectOnEmpty: true });
@@ -33,8 +35,10 @@ export function setWeekState(ctx: Ctx, day: string, to: State, version: number):
         await readPayWeek(week, ctx.now(), tx),
       );
     if (to === 'checked') await check(tx, ctx, week);
-    else if (to === 'locked') await lock(tx, ctx, week);
-    else
+    else if (to === 'locked') {
+      const paid = await lock(tx, ctx, week);
+      if (baseUrl) await mailStatements(tx, ctx.now(), week, paid, baseUrl);
+    } else
       await week.update(
         { state: 'draft', checkedAt: null, checkedBy: null, version: week.version + 1 },
         { transaction: tx },
@@ -54,8 +58,8 @@ async function check(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promi
   hintAfterCommit(tx, ['owners'], 'pay', week.id, week.version);
 }
 
-/** Freezes lines, summaries and the input they were computed from. The triggers refuse every later change. */
-async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promise<void> {
+/** Freezes lines, summaries and the input they were computed from, and gives who is paid. The triggers refuse every later change. */
+async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promise<string[]> {
   if (week.state !== 'checked') throw unprocessable('not_checked', 'Mark the week as checked first.');
   refuseRunning(week, now(), 'locked');
   const input = await payInputOf(week, now(), tx);
@@ -91,7 +95,9 @@ async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promis
     },
     { transaction: tx },
   );
-  hintAfterCommit(tx, ['owners', { personIds: result.people.map((p) => p.personId) }], 'pay', week.id, week.version);
+  const personIds = result.people.map((person) => person.personId);
+  hintAfterCommit(tx, ['owners', { personIds }], 'pay', week.id, week.version);
+  return personIds;
 }
 
 async function compute(tx: Transaction, week: PayWeek, now: Date) {

@@ -1,3 +1,4 @@
+import type { Request } from 'express';
 import * as api from '@driprail/shared/contracts/pay.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
@@ -20,7 +21,11 @@ import { tryWeeks } from './what-if.queries.ts';
 import { listWeeks } from './week-figures.queries.ts';
 import { weekAt } from './weeks.service.ts';
 
-export function payRoutes(table: RouteTable): void {
+export interface PayOptions {
+  baseUrlOf: (req: Request) => string;
+}
+
+export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
   const read = (day: string, now: Date) => inTransaction(async (tx) => readPayWeek(await weekAt(day, tx), now, tx));
 
   route(table, api.listRates, async () => ({ rates: await listRates() }));
@@ -40,8 +45,8 @@ export function payRoutes(table: RouteTable): void {
     return { weeks: await listWeeks(await todayOf(now())) };
   });
   route(table, api.getPayWeek, ({ params }, { now }) => read(params.startsOn, now()));
-  route(table, api.setPayWeekState, ({ params, body }, ctx) =>
-    setWeekState(ctx, params.startsOn, body.to, body.version),
+  route(table, api.setPayWeekState, ({ params, body }, ctx, { req }) =>
+    setWeekState(ctx, params.startsOn, body.to, body.version, baseUrlOf(req)),
   );
   route(table, api.addAdjustment, ({ params, body }, ctx) => addAdjustment(ctx, params.startsOn, body));
   route(table, api.removeAdjustment, async ({ params }, ctx) => {
