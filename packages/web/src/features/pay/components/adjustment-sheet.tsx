@@ -1,10 +1,11 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { adjustmentKinds } from '@driprail/shared/contracts/pay.contract';
+import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { parseMoney } from '../../../lib/format.ts';
 import { useAddAdjustment, weekQuery, weeksQuery } from '../api/pay.queries.ts';
 import { adjustmentWords } from './adjustment-kinds.ts';
@@ -43,7 +44,7 @@ export function AdjustmentSheet({
   const mended = useQuery({ ...weekQuery(value.mends ?? ''), enabled: isCorrection && value.mends !== null });
   const lineIds = mended.data?.lineIds ?? {};
   const lineId = value.lineId || (value.lineKey ? (lineIds[`${value.personId}:${value.lineKey}`] ?? '') : '');
-  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  const fields = fieldsOf(add.error);
   const words = adjustmentWords[value.kind];
 
   const submit = () => {
@@ -149,11 +150,7 @@ export function AdjustmentSheet({
           </SelectField>
         ) : null}
         <p className="t-2 mt-3">{words.caution}</p>
-        {add.error && Object.keys(fields).length === 0 ? (
-          <p className="tape mt-3" role="alert">
-            {add.error.message}
-          </p>
-        ) : null}
+        <FormError error={add.error} />
         <SheetFoot>
           <Button onClick={() => onClose(null)}>Leave it</Button>
           <Button type="submit" look="main" isBusy={add.isPending}>

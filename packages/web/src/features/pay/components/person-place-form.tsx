@@ -1,9 +1,10 @@
 import { useState } from 'react';
 import type { PayPlaceDto } from '@driprail/shared/contracts/pay-plans.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
+import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { useSetPersonPlace } from '../api/plans.queries.ts';
 
 interface Props {
@@ -17,7 +18,7 @@ interface Props {
 export function PersonPlaceForm({ people, places, startsOn, onDone }: Props) {
   const set = useSetPersonPlace();
   const [value, setValue] = useState({ personId: '', placeId: places[0]?.id ?? '', startsOn });
-  const fields = set.error instanceof ApiError ? set.error.fields : {};
+  const fields = fieldsOf(set.error);
   return (
     <form
       noValidate
@@ -63,11 +64,7 @@ export function PersonPlaceForm({ people, places, startsOn, onDone }: Props) {
           onChange={(event) => setValue({ ...value, startsOn: event.target.value })}
         />
       </div>
-      {set.error && Object.keys(fields).length === 0 ? (
-        <p className="tape mt-3" role="alert">
-          {set.error.message}
-        </p>
-      ) : null}
+      <FormError error={set.error} />
       <Button type="submit" look="main" isBusy={set.isPending}>
         Place person
       </Button>

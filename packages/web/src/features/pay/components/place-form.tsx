@@ -1,8 +1,9 @@
 import { useState } from 'react';
 import type { OvertimeRuleSet } from '@driprail/shared/domain/pay/overtime-rule-sets';
+import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddPlace } from '../api/plans.queries.ts';
 
 interface Props {
@@ -19,7 +20,7 @@ export function PlaceForm({ ruleSets, startsOn, onDone }: Props) {
     ...{ weeklyOver: '40', dailyOver: '', doubleAfter: '', source: '' },
     ...{ hasSeventhDay: false, paysPieceRest: false, mayCoverOtherTime: true },
   });
-  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  const fields = fieldsOf(add.error);
   const isOwn = value.ruleSetKey === '';
   const chosen = ruleSets.find((set) => set.key === value.ruleSetKey);
   const submit = () => {
@@ -127,11 +128,7 @@ export function PlaceForm({ ruleSets, startsOn, onDone }: Props) {
           />
         </>
       ) : null}
-      {add.error && Object.keys(fields).length === 0 ? (
-        <p className="tape mt-3" role="alert">
-          {add.error.message}
-        </p>
-      ) : null}
+      <FormError error={add.error} />
       <Button type="submit" look="main" isBusy={add.isPending}>
         Add place
       </Button>

@@ -5,7 +5,7 @@ import type { PayPlan, PlanKind } from '@driprail/shared/domain/pay/plans/pay-pl
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddPlan } from '../api/plans.queries.ts';
 import { OtherTimeFields, PlanBaseFields } from './plan-base-fields.tsx';
 import { EMPTY_PLAN, moreKinds, plainKinds, planKinds, planOf } from './plan-draft.ts';
@@ -29,7 +29,7 @@ export function PlanForm({ people, services, personId, startsOn, onDone, onTry }
   const [who, setWho] = useState({ personId: personId ?? '', startsOn });
   const [draft, setDraft] = useState<PlanDraft>(EMPTY_PLAN);
   const [faults, setFaults] = useState<Record<string, string>>({});
-  const answered = add.error instanceof ApiError ? add.error.fields : {};
+  const answered = fieldsOf(add.error);
   const fault = (path: string) => faults[path] ?? answered[`plan.${path}`];
   const onChange = (part: Partial<PlanDraft>) => setDraft({ ...draft, ...part });
   const words = planKinds[draft.kind];

@@ -4,10 +4,11 @@ import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
 import type { RateDto } from '@driprail/shared/contracts/pay.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddRate } from '../api/rates.queries.ts';
 
 interface Props {
@@ -47,7 +48,7 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
     value: '',
     startsOn,
   });
-  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  const fields = fieldsOf(add.error);
   const isHourly = value.kind === 'hourly';
   const words = kinds[value.kind];
   const submit = () => {
@@ -149,11 +150,7 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
         A person’s own rate goes before the company’s, one for a service before one for all. Rates that change how
         somebody is paid often need notice in advance by state law: ask a licensed adviser.
       </p>
-      {add.error && Object.keys(fields).length === 0 ? (
-        <p className="tape mt-3" role="alert">
-          {add.error.message}
-        </p>
-      ) : null}
+      <FormError error={add.error} />
       <SheetFoot>
         <Button type="submit" look="main" isBusy={add.isPending}>
           Add rate

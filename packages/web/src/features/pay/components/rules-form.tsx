@@ -1,9 +1,10 @@
 import { useState } from 'react';
 import type { PayRulesDto } from '@driprail/shared/contracts/pay.contract';
+import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddRules } from '../api/rates.queries.ts';
 import { splitWords, weekdayWords } from './rate-bands.ts';
 
@@ -33,7 +34,7 @@ export function RulesForm({
     workweekStartsOn: current?.workweekStartsOn ?? 1,
     workweekStartsAt: current?.workweekStartsAt ?? '00:00',
   });
-  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  const fields = fieldsOf(add.error);
   return (
     <form
       noValidate
@@ -148,11 +149,7 @@ export function RulesForm({
         overtime, higher minimum wages, meal and rest rules. A workweek may be moved only for good, not to avoid
         overtime (29 CFR 778.105). Ask a licensed payroll adviser first.
       </p>
-      {add.error && Object.keys(fields).length === 0 ? (
-        <p className="tape mt-3" role="alert">
-          {add.error.message}
-        </p>
-      ) : null}
+      <FormError error={add.error} />
       <SheetFoot>
         <Button type="submit" look="main" isBusy={add.isPending}>
           Add rules

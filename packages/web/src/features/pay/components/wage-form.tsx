@@ -1,15 +1,16 @@
 import { useState } from 'react';
 import type { PayPlaceDto } from '@driprail/shared/contracts/pay-plans.contract';
+import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddWage } from '../api/plans.queries.ts';
 
 /** A place's minimum wage from a day on. */
 export function WageForm({ place, startsOn, onDone }: { place: PayPlaceDto; startsOn: string; onDone: () => void }) {
   const add = useAddWage();
   const [value, setValue] = useState({ startsOn, amount: '', source: '' });
-  const fields = add.error instanceof ApiError ? add.error.fields : {};
+  const fields = fieldsOf(add.error);
   return (
     <form
       noValidate
@@ -43,11 +44,7 @@ export function WageForm({ place, startsOn, onDone }: { place: PayPlaceDto; star
           onChange={(event) => setValue({ ...value, source: event.target.value })}
         />
       </div>
-      {add.error && Object.keys(fields).length === 0 ? (
-        <p className="tape mt-3" role="alert">
-          {add.error.message}
-        </p>
-      ) : null}
+      <FormError error={add.error} />
       <Button type="submit" look="main" isBusy={add.isPending}>
         Add minimum wage
       </Button>

@@ -7,7 +7,7 @@ import type { whatIf } from '@driprail/shared/contracts/pay-plans.contract';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { Loaded } from '../../../components/states.tsx';
-import { ApiError } from '../../../lib/call.ts';
+import { fieldsOf } from '../../../lib/fields.ts';
 import { ruleSetsQuery, whatIfQuery } from '../api/plans.queries.ts';
 import { basePlanWords } from './plan-base-words.ts';
 import { WhatIfTable } from './what-if-table.tsx';
@@ -38,7 +38,7 @@ export function WhatIf({ person, weeks, now, plan, onChoosePlan, onDropPlan }: P
     ...{ hourly: figure(trial.hourly), percent: figure(trial.percent), ruleSetKey: trial.ruleSetKey || null },
   });
   const answer = useQuery({ ...whatIfQuery(body), enabled: from !== '' });
-  const fields = answer.error instanceof ApiError ? answer.error.fields : {};
+  const fields = fieldsOf(answer.error);
   const hasFields = Object.keys(fields).length > 0;
   return (
     <section className="hung wi" aria-labelledby="what-if">

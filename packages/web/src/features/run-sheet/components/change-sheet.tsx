@@ -9,6 +9,7 @@ import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { useFormats } from '../../../lib/format.ts';
 import { useAskChange } from '../api/own-hours.queries.ts';
+import { Picks } from './picks.tsx';
 
 const reasons = ['Forgot to clock out', 'Forgot to press', 'Wrong kind', 'Break was shorter', 'Phone was off'];
 
@@ -59,19 +60,7 @@ export function ChangeSheet({ entry, onClose }: { entry: ClockEntryDto; onClose:
             onChange={(event) => setTo(event.target.value)}
           />
         </div>
-        <div className="grid grid-cols-2 gap-2">
-          {reasons.map((pick) => (
-            <button
-              key={pick}
-              type="button"
-              className={reason === pick ? 'btn is-picked' : 'btn'}
-              aria-pressed={reason === pick}
-              onClick={() => setReason(pick)}
-            >
-              {pick}
-            </button>
-          ))}
-        </div>
+        <Picks options={reasons} value={reason} onPick={setReason} className="grid grid-cols-2 gap-2" />
         <TextField
           label="Reason"
           value={reason}

@@ -3,6 +3,7 @@ import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract'
 import { Button } from '../../../components/button.tsx';
 import { CheckField, TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
+import { Picks } from './picks.tsx';
 
 const reasons = ['Weather', 'Out of time', 'Cure time', 'No water', 'Customer asked'];
 const spans = [30, 60, 90, 120, 180, 240];
@@ -42,34 +43,16 @@ export function PartDoneSheet({
           ))}
         </fieldset>
         <h3 className="sec">Why the rest is left</h3>
-        <div className="grid grid-cols-2 gap-2 my-2">
-          {reasons.map((pick) => (
-            <button
-              key={pick}
-              type="button"
-              className={reason === pick ? 'btn is-picked' : 'btn'}
-              aria-pressed={reason === pick}
-              onClick={() => setReason(pick)}
-            >
-              {pick}
-            </button>
-          ))}
-        </div>
+        <Picks options={reasons} value={reason} onPick={setReason} className="grid grid-cols-2 gap-2 my-2" />
         <TextField label="Reason" value={reason} onChange={(event) => setReason(event.target.value)} error={error} />
         <h3 className="sec mt-3">The rest takes about</h3>
-        <div className="grid grid-cols-3 gap-2 my-2">
-          {spans.map((span) => (
-            <button
-              key={span}
-              type="button"
-              className={minutes === span ? 'btn is-picked' : 'btn'}
-              aria-pressed={minutes === span}
-              onClick={() => setMinutes(span)}
-            >
-              {span < 60 ? `${span} min` : `${span / 60} h`}
-            </button>
-          ))}
-        </div>
+        <Picks
+          options={spans}
+          value={minutes}
+          onPick={setMinutes}
+          nameOf={(span) => (span < 60 ? `${span} min` : `${span / 60} h`)}
+          className="grid grid-cols-3 gap-2 my-2"
+        />
       </div>
       <SheetFoot>
         <Button

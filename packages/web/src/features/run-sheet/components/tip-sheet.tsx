@@ -5,6 +5,7 @@ import { CheckField, TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { parseMoney } from '../../../lib/format.ts';
 import { useRecordTip } from '../api/run-sheet.queries.ts';
+import { Picks } from './picks.tsx';
 
 const amounts = ['5', '10', '15', '20', '30', '40'];
 const methods = [
@@ -24,19 +25,7 @@ export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () =
     <Sheet title="Tip" onClose={onClose} width={460}>
       <div className="ph-sheet">
         <p className="t-2 mb-2">{visit.customerName}. Shared by the crew, never by the house.</p>
-        <div className="grid grid-cols-3 gap-2 mb-3">
-          {amounts.map((pick) => (
-            <button
-              key={pick}
-              type="button"
-              className={amount === pick ? 'btn is-picked' : 'btn'}
-              aria-pressed={amount === pick}
-              onClick={() => setAmount(pick)}
-            >
-              {pick}
-            </button>
-          ))}
-        </div>
+        <Picks options={amounts} value={amount} onPick={setAmount} className="grid grid-cols-3 gap-2 mb-3" />
         <TextField
           label="Amount"
           inputMode="decimal"
