@@ -62,6 +62,7 @@ export const addRate = endpoint({
 });
 
 const punchRoundingMinutes = z.union([z.literal(5), z.literal(6), z.literal(15)]).nullable();
+export const commissionEarned = ['done', 'paid'] as const;
 export const premiumRoundings = ['half_up', 'up'] as const;
 export const payRulesDto = z.object({
   id,
@@ -73,6 +74,8 @@ export const payRulesDto = z.object({
   /** Punches to the nearest so many minutes; null for exact time. */
   punchRoundingMinutes,
   premiumRounding: z.enum(premiumRoundings),
+  /** When commission is earned: the work is done, or the customer has paid. */
+  commissionEarned: z.enum(commissionEarned),
   /** ISO weekday, 1 Monday to 7 Sunday, and the clock time at which the workweek starts. */
   workweekStartsOn: z.int(),
   workweekStartsAt: clockTime,
@@ -99,6 +102,7 @@ export const addPayRules = endpoint({
     mealBreakMinutes: z.int().min(20).max(120),
     punchRoundingMinutes: punchRoundingMinutes.default(null),
     premiumRounding: z.enum(premiumRoundings).default('half_up'),
+    commissionEarned: z.enum(commissionEarned).default('done'),
     workweekStartsOn: z.int().min(1).max(7),
     workweekStartsAt: clockTime,
   }),

@@ -8,6 +8,8 @@ export const auditEntities = [
   'pay_rules',
   'pay_plan',
   'pay_adjustment',
+  'payday',
+  'job_paid',
   'clock_entry',
   'clock_request',
   'hours',

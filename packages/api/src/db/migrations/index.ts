@@ -3,7 +3,9 @@ import { company } from './2026-12-01-001-company.ts';
 import { work } from './2026-12-01-002-work.ts';
 import { hours } from './2026-12-01-004-hours.ts';
 import { payPlans } from './2026-12-01-005-pay-plans.ts';
+import { commissionWhenPaid } from './2026-12-01-008-commission-when-paid.ts';
+import { paydays } from './2026-12-01-006-paydays.ts';
 import { pay } from './2026-12-01-003-pay.ts';
 
 /** In the order in which they are run. */
-export const migrations: Migration[] = [company, work, pay, hours, payPlans];
+export const migrations: Migration[] = [company, work, pay, hours, payPlans, paydays, commissionWhenPaid];

@@ -1,6 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
-import type { CrewSplit, PremiumRounding } from '@driprail/shared/domain/pay/pay-week.types';
+import type { CommissionEarned, CrewSplit, PremiumRounding } from '@driprail/shared/domain/pay/pay-week.types';
 
 export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreationAttributes<PayRuleSet>> {
   declare id: string;
@@ -11,6 +11,7 @@ export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreation
   declare mealBreakMinutes: CreationOptional<number>;
   declare punchRoundingMinutes: CreationOptional<5 | 6 | 15 | null>;
   declare premiumRounding: CreationOptional<PremiumRounding>;
+  declare commissionEarned: CreationOptional<CommissionEarned>;
   declare workweekStartsOn: number;
   declare workweekStartsAt: CreationOptional<string>;
   declare setBy: CreationOptional<string | null>;
@@ -27,6 +28,7 @@ export function initPayRuleSet(sequelize: Sequelize): void {
       mealBreakMinutes: { type: DataTypes.INTEGER },
       punchRoundingMinutes: { type: DataTypes.INTEGER, allowNull: true },
       premiumRounding: { type: DataTypes.TEXT },
+      commissionEarned: { type: DataTypes.TEXT },
       workweekStartsOn: { type: DataTypes.INTEGER, allowNull: false },
       workweekStartsAt: { type: DataTypes.TEXT },
       setBy: { type: DataTypes.UUID, allowNull: true },

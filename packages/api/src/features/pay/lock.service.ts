@@ -2,6 +2,7 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { computePayWeek } from '@driprail/shared/domain/pay/compute-pay-week';
+import type { PayWeekInput } from '@driprail/shared/domain/pay/pay-week.types';
 import { audit } from '../../db/audit.ts';
 import { PayLineRow, PayStatement, PayWeek } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
@@ -63,6 +64,7 @@ async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promis
   if (week.state !== 'checked') throw unprocessable('not_checked', 'Mark the week as checked first.');
   refuseRunning(week, now(), 'locked');
   const input = await payInputOf(week, now(), tx);
+  await refuseBeforeSettled(input, tx);
   const result = computePayWeek(input);
   refuseUnsettled(result);
   for (const { lines, ...summary } of result.people) {
@@ -102,6 +104,15 @@ async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promis
 
 async function compute(tx: Transaction, week: PayWeek, now: Date) {
   return computePayWeek(await payInputOf(week, now, tx));
+}
+
+/** What customers paid for belongs to weeks whose pay must stand first. */
+async function refuseBeforeSettled({ settledCommissions = [] }: PayWeekInput, tx: Transaction): Promise<void> {
+  for (const { startsOn, number } of settledCommissions) {
+    const past = await PayWeek.findOne({ where: { startsOn, state: 'locked' }, transaction: tx });
+    if (past) continue;
+    throw unprocessable('earlier_open', `Lock week ${number} first: customers paid for its work in this week.`);
+  }
 }
 
 function refuseRunning(week: PayWeek, now: Date, what: string): void {

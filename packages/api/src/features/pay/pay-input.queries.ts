@@ -1,13 +1,21 @@
 import type { Transaction } from 'sequelize';
 import { splitByLargestRemainder } from '@driprail/shared/domain/money/largest-remainder';
 import { exact } from '@driprail/shared/domain/money/exact';
-import type { CrewShare, DoneLine, PayWeekInput, PersonPlace } from '@driprail/shared/domain/pay/pay-week.types';
+import type {
+  CrewShare,
+  DoneLine,
+  PayPerson,
+  PayWeekInput,
+  PersonPlace,
+  SettledCommission,
+} from '@driprail/shared/domain/pay/pay-week.types';
 import { ruleSetOf } from '@driprail/shared/domain/pay/own-rules';
 import type { OwnRules } from '@driprail/shared/domain/pay/own-rules';
 import { companyOf } from '../../db/company.ts';
 import type { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
 import { carriedInto } from './carried.queries.ts';
+import { settledCommissionsIn } from './deferred/settled.queries.ts';
 import { rulesOn } from './weeks.service.ts';
 
 interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
@@ -15,6 +23,7 @@ interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
   jobPrices: { lineId: string; priceCents: number }[];
   discountCents: number;
   crew: CrewShare[];
+  jobPaidAt: string | null;
 }
 
 interface GatheredPlace extends Omit<PersonPlace, 'ruleSet'> {
@@ -58,7 +67,7 @@ SELECT json_build_object(
       'serviceId', s.id, 'serviceName', s.name, 'sizeClass', l.size_class, 'isAddOn', s.kind = 'add_on', 'priceCents', l.price_cents, 'discountCents', j.discount_cents,
       'jobPrices', (SELECT json_agg(json_build_object('lineId', o.id, 'priceCents', o.price_cents) ORDER BY o.position, o.id)
          FROM job_lines o WHERE o.job_id = j.id),
-      'doneAt', to_json(l.finished_at) #>> '{}',
+      'doneAt', to_json(l.finished_at) #>> '{}', 'jobPaidAt', (SELECT to_json(jp.paid_at) #>> '{}' FROM jobs_paid jp WHERE jp.job_id = j.id),
       'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position) FROM visit_crew vc WHERE vc.visit_id = l.finished_visit_id), '[]'::json))
       ORDER BY l.finished_at, j.number, l.position)
      FROM line l JOIN jobs j ON j.id = l.job_id JOIN services s ON s.id = l.service_id), '[]'::json),
@@ -86,6 +95,22 @@ SELECT json_build_object(
 
 /** The engine's input for a week as the records stand at `asOf`. */
 export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): Promise<PayWeekInput> {
+  const { zone } = await companyOf(tx);
+  const input = await recordsOf(week, asOf, tx);
+  const settledCommissions = await settledCommissionsIn(week, zone, (past) => recordsOf(past, asOf, tx), tx);
+  if (settledCommissions.length === 0) return input;
+  return { ...input, people: withSettled(input.people, settledCommissions), settledCommissions };
+}
+
+/** Somebody whose commission is settled may have done nothing else in the week. */
+function withSettled(people: PayPerson[], settled: readonly SettledCommission[]): PayPerson[] {
+  const everyone = [...people, ...settled.flatMap((one) => one.input.people)];
+  const byId = new Map(everyone.map((person) => [person.id, person]));
+  return [...byId.values()].sort((a, b) => a.name.localeCompare(b.name) || a.id.localeCompare(b.id));
+}
+
+/** A week's own records, without what customers' payments settle from weeks before. */
+async function recordsOf(week: PayWeek, asOf: Date, tx?: Transaction): Promise<PayWeekInput> {
   const { zone, clock } = await companyOf(tx);
   const rules = await rulesOn(week.startsOn, tx);
   const startsAt = week.startsAt.toISOString();
@@ -97,7 +122,7 @@ export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): P
   );
   if (!row) throw new Error('a pay week gathers one row');
   const { lines, places, ...gathered } = row.gathered;
-  const carried = await carriedInto(week, gathered.plans, (prior) => payInputOf(prior, asOf, tx), tx);
+  const carried = await carriedInto(week, gathered.plans, (prior) => recordsOf(prior, asOf, tx), tx);
   return {
     startsAt,
     endsAt,
@@ -112,7 +137,7 @@ export async function payInputOf(week: PayWeek, asOf: Date, tx?: Transaction): P
       premiumRounding: rules.premiumRounding ?? 'half_up',
     },
     ...gathered,
-    doneLines: lines.map(toDoneLine),
+    doneLines: lines.map((line) => toDoneLine(line, rules.commissionEarned === 'paid' ? endsAt : null)),
     places: places.map(toPlace),
     carried,
     asOf: asOf.toISOString(),
@@ -123,12 +148,19 @@ function toPlace({ ruleSetKey, ownRules, ...place }: GatheredPlace): PersonPlace
   return { ...place, ruleSet: ruleSetOf(place.placeId, place.name, ruleSetKey, ownRules) };
 }
 
-/** A discount lowers each line of the job by its share of the price, to the cent. */
-function toDoneLine({ priceCents, jobPrices, discountCents, ...line }: GatheredLine): DoneLine {
+/**
+ * A discount lowers each line of the job by its share of the price, to the cent.
+ * @param paidBefore where commission is earned on payment: the instant by which the customer must have paid
+ */
+function toDoneLine(
+  { priceCents, jobPrices, discountCents, jobPaidAt, ...line }: GatheredLine,
+  paidBefore: string | null,
+): DoneLine {
   const shares = splitByLargestRemainder(
     discountCents,
     jobPrices.map((other) => exact(other.priceCents)),
   );
   const own = shares[jobPrices.findIndex((other) => other.lineId === line.lineId)] ?? 0;
-  return { ...line, commissionableCents: priceCents - own };
+  const waits = paidBefore !== null && (jobPaidAt === null || Date.parse(jobPaidAt) >= Date.parse(paidBefore));
+  return { ...line, commissionableCents: priceCents - own, ...(waits && { commissionWaits: true }) };
 }

@@ -1,5 +1,6 @@
 import type { Request } from 'express';
 import * as api from '@driprail/shared/contracts/pay.contract';
+import * as jobsPaid from '@driprail/shared/contracts/jobs-paid.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
 import { companyOf, todayOf } from '../../db/company.ts';
@@ -8,6 +9,8 @@ import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
 import { addAdjustment, removeAdjustment } from './adjustments.service.ts';
 import { testCommission } from './commission-test.queries.ts';
+import { jobsPaidLately, jobsWaiting } from './deferred/jobs-paid.queries.ts';
+import { markJobPaid, takeBackJobPaid } from './deferred/jobs-paid.service.ts';
 import { payWeekCsv } from './export.ts';
 import { setWeekState } from './lock.service.ts';
 import { readPayWeek } from './pay-week.queries.ts';
@@ -41,6 +44,15 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
   route(table, plans.setPersonPlace, async ({ body }, ctx) => ({ people: await placePerson(ctx, body) }));
   route(table, plans.getCommissionTest, ({ params }) => testCommission(params.personId));
   route(table, plans.whatIf, async ({ body }, { now }) => ({ weeks: await tryWeeks(body, now()) }));
+  route(table, jobsPaid.listJobsPaid, async () => ({ waiting: await jobsWaiting(), paid: await jobsPaidLately() }));
+  route(table, jobsPaid.markJobPaid, async ({ body }, ctx) => {
+    await markJobPaid(ctx, body.jobId, body.paidOn);
+    return okay;
+  });
+  route(table, jobsPaid.takeBackJobPaid, async ({ params }, ctx) => {
+    await takeBackJobPaid(ctx, params.jobId);
+    return okay;
+  });
   route(table, api.listPayWeeks, async (_input, { now }) => {
     return { weeks: await listWeeks(await todayOf(now())) };
   });

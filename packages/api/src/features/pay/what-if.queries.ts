@@ -44,7 +44,7 @@ export function tryWeeks(body: WhatIfBody, now: Date): Promise<WhatIfWeek[]> {
 }
 
 function onlyOf(input: PayWeekInput, personId: string): PayWeekInput {
-  return { ...input, people: input.people.filter((person) => person.id === personId) };
+  return { ...input, settledCommissions: [], people: input.people.filter((person) => person.id === personId) };
 }
 
 async function trialOf(body: WhatIfBody, tx: Transaction): Promise<Trial> {

@@ -1,6 +1,6 @@
 import { addDays, dayOf } from '../time/zone.ts';
 import { personWeek } from './person-week.ts';
-import type { PayWeekInput, PayWeekResult } from './pay-week.types.ts';
+import type { PayWeekInput, PayWeekResult, PersonWeek } from './pay-week.types.ts';
 import { weekGroups } from './week-groups.ts';
 import { weekGrid } from './work-spans.ts';
 
@@ -17,11 +17,15 @@ export function computePayWeek(input: PayWeekInput): PayWeekResult {
   const grid = weekGrid(input);
   const groups = weekGroups(input, grid);
   const startsOn = dayOf(input.startsAt, input.zone);
-  const shared = { input, grid, startsOn, settles: isLastOfMonth(startsOn) };
+  const shared = { input, grid, startsOn, settles: isLastOfMonth(startsOn), weekOf };
   return {
     engineVersion: ENGINE_VERSION,
     people: input.people.map((person) => personWeek(person, groups(person.id), shared)),
   };
+}
+
+function weekOf(input: PayWeekInput, personId: string): PersonWeek | undefined {
+  return computePayWeek({ ...input, people: input.people.filter((person) => person.id === personId) }).people[0];
 }
 
 /** A month is the workweeks whose last day lies in it; the last of them settles it. */

@@ -40,7 +40,8 @@ export interface LineShare {
  */
 export function jobLinePay(share: LineShare, rates: readonly DatedRate[]): PayLine[] {
   const { person, line, zone } = share;
-  return (['flat_service', 'commission_percent'] as const).flatMap((kind) => {
+  const kinds = line.commissionWaits ? (['flat_service'] as const) : (['flat_service', 'commission_percent'] as const);
+  return kinds.flatMap((kind) => {
     const rate = rateInForce(rates, {
       kind,
       personId: person.id,

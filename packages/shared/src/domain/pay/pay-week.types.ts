@@ -2,6 +2,9 @@ import type { SizeClass } from '../../contracts/fields.ts';
 import type { ClockStyle } from '../time/format.ts';
 import type { OvertimeRuleSet } from './overtime-rule-sets.ts';
 import type { DatedPlan } from './plans/pay-plan.ts';
+import type { NoShowTrip } from './time-off/no-show-trip.ts';
+import type { DatedShowUpRule } from './time-off/show-up-rule.ts';
+import type { TimeOffTaken } from './time-off/time-off-pay.ts';
 
 /**
  * What the pay engine takes and gives. Amounts are integer US cents, rates and percents decimal strings,
@@ -64,6 +67,20 @@ export interface DoneLine {
   commissionableCents: number;
   doneAt: string;
   crew: CrewShare[];
+  /** Commission by the rule "when paid", and the customer had not paid when the week ended. */
+  commissionWaits?: true;
+}
+
+/** Commission of a past week that became known in this one, because customers paid (29 CFR 778.119). */
+export interface SettledCommission {
+  personId: string;
+  /** The week in which the work was done. */
+  startsOn: string;
+  number: number;
+  /** That week as the person was paid for it, with what was settled into it since. */
+  input: PayWeekInput;
+  /** Its lines of which the customers have paid now. */
+  lineIds: string[];
 }
 
 export interface PayTip {
@@ -95,6 +112,8 @@ export interface PayAdjustment {
   amountCents: number;
   reason: string;
   correctsLineId: string | null;
+  /** Only for paid time off that was given in hours. */
+  timeOff?: TimeOffTaken | null;
 }
 
 export interface PayPerson {
@@ -114,6 +133,9 @@ export interface PayRules {
   punchRoundingMinutes: 5 | 6 | 15 | null;
   premiumRounding: PremiumRounding;
 }
+
+/** The week that commission belongs to by the written plan: of Done, or only once the customer has paid. */
+export type CommissionEarned = 'done' | 'paid';
 
 /** Overtime premiums to the cent: half up like every line, or always up. */
 export type PremiumRounding = 'half_up' | 'up';
@@ -165,6 +187,11 @@ export interface PayWeekInput {
   plans: DatedPlan[];
   places: PersonPlace[];
   carried: CarriedPay[];
+  /** Absent in weeks locked before there were such rules. */
+  showUpRules?: DatedShowUpRule[];
+  noShowTrips?: NoShowTrip[];
+  /** Absent where commission is earned when the work is done. */
+  settledCommissions?: SettledCommission[];
   /** The instant that open entries are measured to, for a draft of the running week. */
   asOf: string;
 }
@@ -181,9 +208,11 @@ export type PayLineKind =
   | 'plan_floor' // up to an hourly floor, a weekly guarantee or a draw; a draw paid back is negative
   | 'rest_pay' // rest breaks of piece work, paid apart
   | 'percentage_bonus' // of straight and overtime pay alike (29 CFR 778.210): outside
-  | 'commission_settlement' // a month's tiers, settled: outside this week's regular rate
+  | 'commission_settlement' // of a month's tiers or of past weeks: outside this week's regular rate
   | 'settlement_premium' // the overtime that a settlement brings to the weeks it belongs to
   | 'minimum_wage_make_up'
+  | 'show_up_pay' // for hours of a short day that were not worked (29 CFR 778.220): outside
+  | 'no_show_trip' // for a trip on which nobody was home: work done, so inside
   | 'tip'
   | 'tip_already_received'
   | AdjustmentKind;
@@ -260,6 +289,8 @@ export interface PersonWeek {
   regularRate: string | null;
   lines: PayLine[];
   warnings: PayWarning[];
+  /** Commission of finished work that waits until the customer pays; absent where none does. */
+  waiting?: { amountCents: number; jobs: { jobId: string; jobNumber: number }[] };
   /** Only under a plan that settles by the month: what goes on to the next workweek of the month. */
   carries?: Omit<CarriedWeek, 'startsOn' | 'hours'> & { drawDeficitCents: number };
   /** Sums of payable lines by group, cents. */

@@ -2,6 +2,8 @@ import { dollars, exact, fractionText, greatest, hoursOf, ZERO, type Exact } fro
 import { toCentsDown } from '../money/rounding.ts';
 import { additionLines, takingLines } from './adjustment-lines.ts';
 import { deductionRoom } from './deductions.ts';
+import { settledCommissionLines } from './deferred/settled-commission.ts';
+import { waitingCommission } from './deferred/waiting-commission.ts';
 import { datedPrice, hourlyPay } from './hourly-pay.ts';
 import { jobLinePay } from './job-line-pay.ts';
 import { makeUpLine } from './make-up-line.ts';
@@ -19,6 +21,7 @@ import { premiumLine } from './premium-line.ts';
 import { roundPunches } from './punch-rounding.ts';
 import { regularRate } from './regular-rate.ts';
 import { restPayLine } from './rest-pay-line.ts';
+import { shortDayLines, tripLines } from './time-off/week-lines.ts';
 import { tipLines } from './tip-lines.ts';
 import type { PersonInput } from './week-groups.ts';
 import { weekPremium, type WeekPremium } from './week-premium.ts';
@@ -34,6 +37,8 @@ export interface SharedWeek {
   startsOn: string;
   /** Whether the next workweek ends in another month. */
   settles: boolean;
+  /** Works out another week for one person, as this one is. */
+  weekOf: (input: PayWeekInput, personId: string) => PersonWeek | undefined;
 }
 
 /** One person's week in the order a person would work it by hand: hours, earnings, minimum wage, rate, overtime. */
@@ -50,9 +55,13 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
 
   const plan = planWeek(person, own, spans, hours, place, shared);
   const base = plan === null ? ratePay(person, own, spans, input) : planPay(plan);
+  const waiting = waitingCommission(own.doneLines, base.lines, (doneLines) =>
+    plan === null ? ratePay(person, { ...own, doneLines }, spans, input).lines : planPay({ ...plan, doneLines }).lines,
+  );
   const additions = additionLines(own.adjustments);
   const rest = ruleSet.paysPieceRest ? restPayLine(person, spans, base.lines, base.restPaid, minimumWage) : [];
-  const earned = [...base.lines, ...rest, ...additions.filter((line) => line.inRegularRate)];
+  const trips = tripLines(person, own, input);
+  const earned = [...base.lines, ...trips, ...rest, ...additions.filter((line) => line.inRegularRate)];
   const makeUp = makeUpLine(person, earned, hours, minimumWage);
   const included = makeUp === null ? earned : [...earned, makeUp];
 
@@ -71,8 +80,10 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
   const settled = plan === null || carries === null ? [] : settlementOf(plan, carries, shared.startsOn);
   const excluded = [
     ...settled,
+    ...own.settledCommissions.flatMap((one) => settledCommissionLines(person, one, shared.weekOf)),
     ...tipLines(person, own.tips, rules.crewSplit, zone),
     ...additions.filter((line) => !line.inRegularRate),
+    ...shortDayLines(person, own, { ...shared, spans, minimumWage }),
   ];
   const overtime =
     rate === null || premium === null
@@ -104,6 +115,7 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
       ...minimumWageWarning(person, makeUp),
       ...takings.warnings,
     ],
+    ...(waiting === null ? {} : { waiting }),
     ...(carries === null ? {} : { carries }),
     totals: weekTotals(lines),
   };

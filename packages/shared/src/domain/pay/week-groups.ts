@@ -1,4 +1,5 @@
 import type { DatedPlan } from './plans/pay-plan.ts';
+import type { NoShowTrip } from './time-off/no-show-trip.ts';
 import type {
   CarriedPay,
   DatedRate,
@@ -8,6 +9,7 @@ import type {
   PayTip,
   PayWeekInput,
   PersonPlace,
+  SettledCommission,
 } from './pay-week.types.ts';
 import { entrySpan, secondsOf, type WeekGrid } from './work-spans.ts';
 
@@ -22,6 +24,8 @@ export interface PersonInput {
   plans: DatedPlan[];
   place: PersonPlace | null;
   carried: CarriedPay | null;
+  noShowTrips: NoShowTrip[];
+  settledCommissions: SettledCommission[];
 }
 
 /**
@@ -41,6 +45,8 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
       plans: [],
       place: null,
       carried: null,
+      noShowTrips: [],
+      settledCommissions: [],
     };
     groups.set(personId, group);
     return group;
@@ -77,6 +83,17 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
   for (const plan of input.plans) of(plan.personId).plans.push(plan);
   for (const place of input.places) of(place.personId).place = place;
   for (const carried of input.carried) of(carried.personId).carried = carried;
+  for (const trip of [...(input.noShowTrips ?? [])].sort(
+    by(
+      (item) => item.calledOffAt,
+      (item) => item.visitId,
+    ),
+  )) {
+    const at = secondsOf(trip.calledOffAt);
+    if (at >= grid.from && at < grid.to) for (const personId of crewOf(trip)) of(personId).noShowTrips.push(trip);
+  }
+  for (const settled of [...(input.settledCommissions ?? [])].sort(by((item) => item.startsOn)))
+    of(settled.personId).settledCommissions.push(settled);
   return of;
 }
 

@@ -24,6 +24,7 @@ export function trialInput(input: PayWeekInput, personId: string, trial: Trial):
   return {
     ...input,
     people: input.people.filter((person) => person.id === personId),
+    settledCommissions: [],
     rates: trialRates(input, personId, trial),
     plans: plan === null ? own.map((item) => trialPlan(item, trial)) : [trialOf(personId, plan)],
     places: place === null ? input.places : [...others(input.places), { personId, ...place }],

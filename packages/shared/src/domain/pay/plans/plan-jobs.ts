@@ -2,10 +2,17 @@ import { linePay, sharedAmount } from '../job-line-pay.ts';
 import type { DoneLine, PayLine } from '../pay-week.types.ts';
 import { planSource, type PlanWeek } from './plan-week.ts';
 
+/** Finished lines that earn commission in this week. A draw and the tiers of a month are settled by what was done. */
+export function commissionLines({ doneLines, plan: { plan } }: PlanWeek): DoneLine[] {
+  const { base } = plan;
+  const isByDone = base.kind === 'draw' || (base.kind === 'tiered_percent' && base.period === 'month');
+  return doneLines.filter((line) => isByDone || !line.commissionWaits);
+}
+
 /** The plan's percentage of each finished line. */
 export function percentOfLines(week: PlanWeek, percent: string): PayLine[] {
   const { startsOn } = week.plan;
-  return week.doneLines.flatMap((line) =>
+  return commissionLines(week).flatMap((line) =>
     linePay(shareOf(week, line), { kind: 'commission', value: percent, startsOn, source: planSource(week.plan) }),
   );
 }

@@ -7,6 +7,7 @@ import { aLine } from '../pay-line.ts';
 import type { CarriedWeek, PayLine, WorkingStep } from '../pay-week.types.ts';
 import { rateText } from '../working-words.ts';
 import type { PlanOf } from './pay-plan.ts';
+import { commissionLines } from './plan-jobs.ts';
 import { planSource, type PlanWeek } from './plan-week.ts';
 
 type Tiered = PlanOf<'tiered_percent'>;
@@ -36,8 +37,9 @@ export function tieredCommission(base: Exact, terms: Pick<Tiered, 'tiers' | 'mod
 }
 
 /** The person's part of what the week's finished lines sold for, cents. */
-export function tierBase({ doneLines, person, split }: PlanWeek): number {
-  return doneLines.reduce(
+export function tierBase(week: PlanWeek): number {
+  const { person, split } = week;
+  return commissionLines(week).reduce(
     (total, line) => total + centsOf(shareEarning(line.commissionableCents, line.crew, split), person),
     0,
   );
