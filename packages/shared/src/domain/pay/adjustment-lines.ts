@@ -1,6 +1,7 @@
 import { centsText } from '../money/rounding.ts';
 import { aLine } from './pay-line.ts';
 import type { AdjustmentKind, PayAdjustment, PayLine, PayPerson, PayWarning } from './pay-week.types.ts';
+import { timeOffParts } from './time-off/time-off-pay.ts';
 
 const KIND: Record<AdjustmentKind, { label: string; note: string; rule: string }> = {
   bonus: {
@@ -96,5 +97,6 @@ function adjustmentLine(item: PayAdjustment, amountCents: number): PayLine {
         sources: [{ kind: 'adjustment', id: item.id, label: item.reason }],
       },
     ],
+    ...(item.timeOff ? timeOffParts(item, item.timeOff) : {}),
   });
 }

@@ -66,6 +66,7 @@ const INCLUDED: [PayLineKind, string][] = [
   ['day_rate', 'Day rates of this week count'],
   ['flat', 'Flat amounts of this week count'],
   ['job_rate', 'Job rates of this week count'],
+  ['no_show_trip', 'Trips on which nobody was home count'],
   ['commission', 'Commission of this week counts'],
   ['plan_floor', 'What the plan adds or takes back counts'],
   ['premium_pay', 'Premiums for a role or a shift count'],
@@ -110,6 +111,7 @@ const EXCLUDED: [PayLineKind[], string, string][] = [
   [['discretionary_bonus'], 'discretionary bonus', 'A discretionary bonus was never promised'],
   [['reimbursement'], 'reimbursement', 'A reimbursement pays back an expense'],
   [['paid_time_off'], 'paid time off', 'Paid time off was not worked'],
+  [['show_up_pay'], 'show-up pay', 'Show-up pay is for hours that were not worked'],
 ];
 
 function excludedStep(excluded: readonly PayLine[]): WorkingStep[] {

@@ -15,8 +15,8 @@ const ADJUSTMENTS: readonly PayLineKind[] = [
 export function weekTotals(lines: readonly PayLine[]): PersonWeek['totals'] {
   const of = (...kinds: PayLineKind[]): number => totalCents(lines.filter((line) => kinds.includes(line.kind)));
   return {
-    hourly: of('hourly', 'salary', 'day_rate', 'premium_pay', 'rest_pay'),
-    flat: of('flat', 'job_rate'),
+    hourly: of('hourly', 'salary', 'day_rate', 'premium_pay', 'rest_pay', 'show_up_pay'),
+    flat: of('flat', 'job_rate', 'no_show_trip'),
     commission: of('commission', 'commission_settlement'),
     overtimePremium: of('overtime_premium', 'settlement_premium'),
     makeUp: of('minimum_wage_make_up', 'plan_floor'),
