@@ -16,6 +16,7 @@ import type { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
 import { carriedInto } from './carried.queries.ts';
 import { settledCommissionsIn } from './deferred/settled.queries.ts';
+import { noShowTripsJson, noShowTripSql, showUpRulesJson, timeOffTakenJson } from './time-off/pay-input.sql.ts';
 import { rulesOn } from './weeks.service.ts';
 
 interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
@@ -31,7 +32,10 @@ interface GatheredPlace extends Omit<PersonPlace, 'ruleSet'> {
   ownRules: OwnRules | null;
 }
 
-type Gathered = Pick<PayWeekInput, 'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans'> & {
+type Gathered = Pick<
+  PayWeekInput,
+  'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans' | 'showUpRules' | 'noShowTrips'
+> & {
   lines: GatheredLine[];
   places: GatheredPlace[];
 };
@@ -48,9 +52,12 @@ WITH entry AS (
   SELECT l.* FROM job_lines l WHERE l.finished_at >= :startsAt AND l.finished_at < :endsAt
 ), tip AS (
   SELECT t.* FROM tips t WHERE t.received_at >= :startsAt AND t.received_at < :endsAt
+), trip AS (
+  ${noShowTripSql}
 ), paid AS (
   SELECT person_id FROM entry UNION SELECT vc.person_id FROM visit_crew vc JOIN line l ON l.finished_visit_id = vc.visit_id
   UNION SELECT vc.person_id FROM visit_crew vc JOIN visits v ON v.id = vc.visit_id JOIN tip t ON t.job_id = v.job_id
+  UNION SELECT vc.person_id FROM visit_crew vc JOIN trip t ON t.id = vc.visit_id
   UNION SELECT person_id FROM pay_adjustments WHERE pay_week_id = :weekId
 )
 SELECT json_build_object(
@@ -80,7 +87,7 @@ SELECT json_build_object(
                 AND st.starts_on <= (t.received_at AT TIME ZONE :zone)::date ORDER BY st.starts_on DESC LIMIT 1), true)), '[]'::json))
       ORDER BY t.received_at, t.id) FROM tip t JOIN jobs j ON j.id = t.job_id), '[]'::json),
   'adjustments', coalesce((SELECT json_agg(json_build_object('id', x.id, 'personId', x.person_id, 'kind', x.kind,
-      'amountCents', x.amount_cents, 'reason', x.reason, 'correctsLineId', x.corrects_line_id) ORDER BY x.at, x.id)
+      'amountCents', x.amount_cents, 'reason', x.reason, 'correctsLineId', x.corrects_line_id, 'timeOff', ${timeOffTakenJson}) ORDER BY x.at, x.id)
      FROM pay_adjustments x WHERE x.pay_week_id = :weekId), '[]'::json),
   'plans', coalesce((SELECT json_agg(json_build_object('id', p.id, 'personId', p.person_id, 'startsOn', p.starts_on, 'plan', p.plan)
       ORDER BY p.person_id) FROM (SELECT DISTINCT ON (person_id) * FROM pay_plans WHERE starts_on <= :startsOn
@@ -90,7 +97,9 @@ SELECT json_build_object(
       'minimumWages', coalesce((SELECT json_agg(json_build_object('startsOn', w.starts_on, 'amount', w.amount::text) ORDER BY w.starts_on)
          FROM pay_place_wages w WHERE w.place_id = pl.id), '[]'::json)) ORDER BY p.person_id)
       FROM (SELECT DISTINCT ON (person_id) * FROM person_places WHERE starts_on <= :startsOn ORDER BY person_id, starts_on DESC) p
-      JOIN pay_places pl ON pl.id = p.place_id), '[]'::json)
+      JOIN pay_places pl ON pl.id = p.place_id), '[]'::json),
+  'showUpRules', ${showUpRulesJson},
+  'noShowTrips', ${noShowTripsJson(crewJson)}
 ) AS gathered`;
 
 /** The engine's input for a week as the records stand at `asOf`. */
