@@ -34,6 +34,8 @@ function asAppError(error: unknown): AppError | null {
   if (error instanceof UniqueConstraintError) return conflict('duplicate', 'This is already there.');
   if (codeOf(error) === 'DR001')
     return unprocessable('locked_week', 'This pay week is locked and never changes. Add a correction to an open week.');
+  if (codeOf(error) === 'DR003')
+    return conflict('handed_over', 'This payday is handed over and never changes. Look at it again.');
   const status = (error as { status?: unknown }).status;
   if (status === 413) return new AppError(413, 'too_large', 'That is too large to send.');
   if (status === 415) return new AppError(415, 'unsupported', 'Send JSON.');

@@ -62,6 +62,7 @@ function mount<E extends Endpoint>(
     const output = endpoint.response.parse(await answer(req, res));
     if (endpoint.format === 'csv') res.type('text/csv').send(output);
     else if (endpoint.format === 'pdf') res.type('application/pdf').send(output);
+    else if (endpoint.format === 'zip') res.type('application/zip').send(output);
     else res.json(output);
   });
 }

@@ -21,6 +21,8 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
     allow(['read', 'create'], 'Rate');
     allow(['read', 'update'], 'PayWeek');
     allow('read', 'Statement');
+    allow(['read', 'create', 'update', 'remove'], 'Payday');
+    allow('read', 'PayRecord');
     allow(['read', 'create', 'update'], 'Login');
     allow('read', 'LocalMail');
     allow('read', 'AuditEntry');
@@ -55,7 +57,9 @@ function ownNear(personId: string, daysAhead: number) {
 }
 
 function ownStatements(actor: Actor, allow: Allow): void {
-  if (actor.personId) allow('read', 'Statement', { personId: actor.personId, state: 'locked' });
+  if (!actor.personId) return;
+  allow('read', 'Statement', { personId: actor.personId, state: 'locked' });
+  allow('read', 'PayRecord', { personId: actor.personId });
 }
 
 /** The rules of a login; the API applies them and hands the same ones to its screens. */

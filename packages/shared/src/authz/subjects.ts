@@ -13,6 +13,9 @@ export interface SubjectFields {
   Statement: { personId: string; state: 'draft' | 'checked' | 'locked' };
   /** The running week's pay, before it is locked. */
   Estimate: { personId: string };
+  Payday: { id: string };
+  /** Everything kept about one person's pay. */
+  PayRecord: { personId: string };
   Login: { id: string };
   LocalMail: { id: string };
   AuditEntry: { id: number };

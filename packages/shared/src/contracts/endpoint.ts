@@ -15,8 +15,8 @@ export interface Endpoint<P extends Part = Part, Q extends Part = Part, B extend
   query: Q;
   body: B;
   response: R;
-  /** `csv` answers text and `pdf` bytes; the response schema then describes those. */
-  format: 'json' | 'csv' | 'pdf';
+  /** `csv` answers text, `pdf` and `zip` bytes; the response schema then describes those. */
+  format: 'json' | 'csv' | 'pdf' | 'zip';
 }
 
 export type InputOf<E extends Endpoint> = {
@@ -48,7 +48,7 @@ export function endpoint<
   query?: Q;
   body?: B;
   response: R;
-  format?: 'json' | 'csv' | 'pdf';
+  format?: Endpoint['format'];
 }): Endpoint<P, Q, B, R> {
   return {
     params: nothing as unknown as P,

@@ -17,6 +17,8 @@ export const settingsDto = z.object({
   undoSeconds: z.int().min(0).max(600),
   /** Kinds of warning that are only saved with a reason. */
   reasonKinds: z.array(z.enum(warningCodes)),
+  /** Whether the mail at the lock names gross and hours beside the link; off to begin with, mail is not private. */
+  statementMailShowsFigures: z.boolean(),
   version: z.int(),
 });
 export type SettingsDto = z.infer<typeof settingsDto>;

@@ -13,6 +13,7 @@ export class CompanySettings extends Model<InferAttributes<CompanySettings>, Inf
   declare dayEndsAt: CreationOptional<string>;
   declare undoSeconds: CreationOptional<number>;
   declare reasonKinds: CreationOptional<string[]>;
+  declare statementMailShowsFigures: CreationOptional<boolean>;
   declare version: CreationOptional<number>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -31,6 +32,7 @@ export function initCompanySettings(sequelize: Sequelize): void {
       dayEndsAt: { type: DataTypes.TEXT },
       undoSeconds: { type: DataTypes.INTEGER },
       reasonKinds: { type: DataTypes.ARRAY(DataTypes.TEXT) },
+      statementMailShowsFigures: { type: DataTypes.BOOLEAN },
       version: { type: DataTypes.INTEGER },
       updatedAt: { type: DataTypes.DATE },
     },

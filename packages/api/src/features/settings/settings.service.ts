@@ -37,6 +37,7 @@ export function toSettingsDto(s: CompanySettings): SettingsDto {
     dayEndsAt: s.dayEndsAt,
     undoSeconds: s.undoSeconds,
     reasonKinds: s.reasonKinds as SettingsDto['reasonKinds'],
+    statementMailShowsFigures: s.statementMailShowsFigures,
     version: s.version,
   };
 }

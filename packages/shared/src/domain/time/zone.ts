@@ -12,6 +12,11 @@ export function clockOf(instant: string, zone: string): string {
   return inZone(instant, zone).toFormat('HH:mm');
 }
 
+/** Instant to the zone's date and clock time with its offset from UTC: "2026-05-14T07:30:00-04:00". */
+export function withOffset(instant: string, zone: string): string {
+  return inZone(instant, zone).toISO({ suppressMilliseconds: true }) ?? '';
+}
+
 /**
  * The instant of a clock time on a day. A time that a spring change skips moves on by the gap;
  * one that an autumn change repeats is the first of the two.

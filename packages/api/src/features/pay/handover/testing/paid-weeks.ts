@@ -1,0 +1,53 @@
+import type TestAgent from 'supertest/lib/agent.js';
+import { parse } from 'csv-parse/sync';
+import { v7 as uuid } from 'uuid';
+import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
+import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import { ClockEntry } from '../../../../db/models/index.ts';
+
+/** A clock entry of whole hours on a day of New York's summer time, from "07:00". */
+export async function worked(
+  personId: string,
+  day: string,
+  from: string,
+  to: string,
+  kind: ClockKindName = 'shop',
+): Promise<void> {
+  const at = (clock: string) => new Date(`${day}T${clock}:00-04:00`);
+  await ClockEntry.create({ id: uuid(), personId, kind, startedAt: at(from), endedAt: at(to) });
+}
+
+export async function hourly(owner: TestAgent, personId: string, value: string): Promise<void> {
+  const rate = { kind: 'hourly', personId, serviceId: null, clockKind: null, value, startsOn: '2026-01-01' };
+  await owner.post('/api/pay/rates').send(rate).expect(200);
+}
+
+export async function readWeek(owner: TestAgent, day: string): Promise<PayWeekDto> {
+  return (await owner.get(`/api/pay/weeks/${day}`).expect(200)).body as PayWeekDto;
+}
+
+export async function lockWeek(owner: TestAgent, day: string): Promise<PayWeekDto> {
+  for (const to of ['checked', 'locked']) {
+    const { week } = await readWeek(owner, day);
+    await owner.post(`/api/pay/weeks/${day}/state`).send({ to, version: week.version }).expect(200);
+  }
+  return readWeek(owner, day);
+}
+
+/** What an endpoint answers as bytes. */
+export async function bytesOf(agent: TestAgent, path: string): Promise<{ status: number; type: string; body: Buffer }> {
+  const answer = await agent
+    .get(path)
+    .buffer(true)
+    .parse((res, done) => {
+      const parts: Buffer[] = [];
+      res.on('data', (part: Buffer) => parts.push(part));
+      res.on('end', () => done(null, Buffer.concat(parts)));
+    });
+  return { status: answer.status, type: answer.type, body: answer.body as Buffer };
+}
+
+/** Rows of a file by column name. */
+export function rowsOf(csv: string): Record<string, string>[] {
+  return parse(csv, { columns: true, record_delimiter: '\r\n' });
+}
