@@ -1,6 +1,16 @@
-import { centsText } from '../money/rounding.ts';
+import { exact } from '../money/exact.ts';
+import { centsText, shortText } from '../money/rounding.ts';
 import { aLine } from './pay-line.ts';
-import type { AdjustmentKind, PayAdjustment, PayLine, PayPerson, PayWarning } from './pay-week.types.ts';
+import type {
+  AdjustmentKind,
+  CountedAmount,
+  PayAdjustment,
+  PayLine,
+  PayPerson,
+  PayWarning,
+  SourceRef,
+} from './pay-week.types.ts';
+import { rateText } from './working-words.ts';
 import { timeOffParts } from './time-off/time-off-pay.ts';
 
 const KIND: Record<AdjustmentKind, { label: string; note: string; rule: string }> = {
@@ -20,6 +30,11 @@ const KIND: Record<AdjustmentKind, { label: string; note: string; rule: string }
     note: 'Not hours worked, so it stays out of the regular rate',
     rule: '29 CFR 778.218',
   },
+  refund: {
+    label: 'Refund to a customer',
+    note: 'Lowers the commission of the week in which it became known, by the written plan; no other pay',
+    rule: '29 CFR 778.121',
+  },
   deduction: {
     label: 'Deduction',
     note: 'Never below the minimum wage, never out of overtime',
@@ -34,7 +49,9 @@ const KIND: Record<AdjustmentKind, { label: string; note: string; rule: string }
 
 /** Adjustments that add to pay; bonuses alone count in the regular rate. */
 export function additionLines(adjustments: readonly PayAdjustment[]): PayLine[] {
-  return adjustments.filter((item) => !takesAway(item)).map((item) => adjustmentLine(item, item.amountCents));
+  return adjustments
+    .filter((item) => item.kind !== 'refund' && !takesAway(item))
+    .map((item) => adjustmentLine(item, item.amountCents));
 }
 
 export interface Takings {
@@ -48,28 +65,59 @@ export interface Takings {
  * @param roomCents whole cents that may be taken in all
  */
 export function takingLines(person: PayPerson, adjustments: readonly PayAdjustment[], roomCents: number): Takings {
+  return taken(adjustments.filter(takesAway), roomCents, (item, wanted, most) =>
+    refusal(
+      person,
+      `"${item.reason}" would take ${centsText(wanted)} from ${person.name}; at most ${centsText(most)} may be taken this week without cutting into the minimum wage or overtime (29 CFR 531.35, 531.37).`,
+    ),
+  );
+}
+
+/**
+ * Customers' refunds off this week's commission, as far as it reaches; they lower the regular rate with it.
+ * @param commissionCents what commission adds to this week's pay above what is promised without it
+ */
+export function refundLines(
+  person: PayPerson,
+  adjustments: readonly PayAdjustment[],
+  commissionCents: number,
+): Takings {
+  const refunds = adjustments.filter((item) => item.kind === 'refund');
+  return taken(refunds, commissionCents, (item, wanted, most) =>
+    refusal(
+      person,
+      `The refund "${item.reason}" would take ${centsText(wanted)} from ${person.name}; this week’s commission allows ${centsText(most)}. Hourly pay, floors and overtime stay whole (29 CFR 778.121).`,
+    ),
+  );
+}
+
+function taken(
+  adjustments: readonly PayAdjustment[],
+  roomCents: number,
+  refuse: (item: PayAdjustment, wanted: number, most: number) => PayWarning,
+): Takings {
   const result: Takings = { lines: [], warnings: [] };
   let room = roomCents;
-  for (const item of adjustments.filter(takesAway)) {
+  for (const item of adjustments) {
     const wanted = Math.abs(item.amountCents);
     const taken = Math.min(wanted, room);
     room -= taken;
     if (taken > 0) result.lines.push(adjustmentLine(item, -taken));
-    if (taken < wanted) result.warnings.push(refusal(person, item, wanted, taken));
+    if (taken < wanted) result.warnings.push(refuse(item, wanted, taken));
   }
   return result;
 }
 
 function takesAway(item: PayAdjustment): boolean {
-  return item.kind === 'deduction' || item.amountCents < 0;
+  return item.kind === 'deduction' || (item.kind !== 'refund' && item.amountCents < 0);
 }
 
-function refusal(person: PayPerson, item: PayAdjustment, wanted: number, taken: number): PayWarning {
+function refusal(person: PayPerson, message: string): PayWarning {
   return {
     code: 'deduction_refused',
     personId: person.id,
     isBlocking: false,
-    message: `"${item.reason}" would take ${centsText(wanted)} from ${person.name}; at most ${centsText(taken)} may be taken this week without cutting into the minimum wage or overtime (29 CFR 531.35, 531.37).`,
+    message,
     entryId: null,
     jobId: null,
   };
@@ -85,18 +133,31 @@ function adjustmentLine(item: PayAdjustment, amountCents: number): PayLine {
     kind: item.kind,
     label: item.reason === '' ? label : `${label}: ${item.reason}`,
     amountCents,
-    inRegularRate: item.kind === 'bonus' && amountCents > 0,
+    inRegularRate: item.kind === 'refund' || (item.kind === 'bonus' && amountCents > 0),
     correctsLineId: item.correctsLineId,
     rule,
     working: [
       {
         label,
         note: isLimited ? `${note}. ${centsText(Math.abs(wanted))} was asked; this much may be taken` : note,
-        arithmetic: centsText(wanted),
+        arithmetic: item.counted ? countedText(item.counted) : centsText(wanted),
         result: centsText(amountCents),
-        sources: [{ kind: 'adjustment', id: item.id, label: item.reason }],
+        sources: [
+          { kind: 'adjustment', id: item.id, label: item.reason },
+          ...(item.counted ? [countedSource(item.counted)] : []),
+        ],
       },
     ],
     ...(item.timeOff ? timeOffParts(item, item.timeOff) : {}),
   });
+}
+
+/** "42.5 miles times 0.725". */
+function countedText({ unit, quantity, value }: CountedAmount): string {
+  const count = shortText(exact(quantity));
+  return `${count} ${count === '1' ? unit : `${unit}s`} times ${rateText(value)}`;
+}
+
+function countedSource({ rateId, value, startsOn }: CountedAmount): SourceRef {
+  return { kind: 'rate', id: rateId, label: `${rateText(value)} since ${startsOn}` };
 }

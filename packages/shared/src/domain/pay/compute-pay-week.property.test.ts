@@ -129,7 +129,11 @@ describe('random weeks', { timeout: PATIENCE }, () => {
           rates: input.rates.map((rate) => ({ ...rate, value: (Number(rate.value) + more / 100).toFixed(2) })),
         };
         const before = gross(input);
-        gross(raised).forEach((cents, index) => expect(cents).toBeGreaterThanOrEqual(before[index] ?? 0));
+        gross(raised).forEach((cents, index) => {
+          // Shares by largest remainder: a larger whole may move the odd cent of a shared line to another of the crew.
+          const shared = input.doneLines.filter((line) => line.crew.length > 1).length;
+          expect(cents).toBeGreaterThanOrEqual((before[index] ?? 0) - 2 * shared);
+        });
       }),
       RUNS,
     );

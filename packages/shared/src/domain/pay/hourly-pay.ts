@@ -3,7 +3,7 @@ import { centsText, shortText, toCents } from '../money/rounding.ts';
 import { formatDate } from '../time/format.ts';
 import { rateInForce } from './dated-rates.ts';
 import { aLine } from './pay-line.ts';
-import type { DatedRate, PayLine, PayPerson, SourceRef } from './pay-week.types.ts';
+import type { DatedRate, DoneLine, PayLine, PayPerson, SourceRef } from './pay-week.types.ts';
 import { hoursAndMinutes, kindWords, rateSource, rateText, workedDays } from './working-words.ts';
 import type { WorkSpan } from './work-spans.ts';
 
@@ -54,26 +54,43 @@ export function hourlyPay(
   return { lines, unpaidHours, restPaid };
 }
 
-/** The dated rate for a piece of worked time, as a price. */
-export function datedPrice(person: PayPerson, rates: readonly DatedRate[]): (span: WorkSpan) => TimePrice | null {
+/**
+ * The dated rate for a piece of worked time, as a price. Time on a visit whose finished services have an hourly rate
+ * of their own takes the best of them.
+ */
+export function datedPrice(
+  person: PayPerson,
+  rates: readonly DatedRate[],
+  doneLines: readonly DoneLine[],
+): (span: WorkSpan) => TimePrice | null {
   return (span) => {
-    const rate = rateInForce(rates, {
-      kind: 'hourly',
-      personId: person.id,
-      serviceId: null,
-      clockKind: span.kind,
-      date: span.date,
+    const own = span.kind === 'job' ? doneLines.filter((line) => line.visitId === span.visitId) : [];
+    const question = { kind: 'hourly', personId: person.id, clockKind: span.kind, date: span.date } as const;
+    const found = [null, ...new Set(own.map((line) => line.serviceId))].flatMap((serviceId) => {
+      const rate = rateInForce(rates, { ...question, serviceId });
+      return rate === null ? [] : [rate];
     });
+    const ofServices = found.filter((rate) => rate.serviceId !== null);
+    const rate = best(ofServices.length > 0 ? ofServices : found);
     if (rate === null) return null;
+    const service = own.find((line) => line.serviceId === rate.serviceId)?.serviceName;
+    const what = service ?? (rate.clockKind === null ? null : kindWords(rate.clockKind));
     return {
       key: `hourly:${rate.id}:${rate.clockKind ?? 'all'}`,
-      label: rate.clockKind === null ? 'Hours by the clock' : `${kindWords(rate.clockKind)}, by the clock`,
+      label: what === null ? 'Hours by the clock' : `${what}, by the clock`,
       value: rate.value,
       startsOn: rate.startsOn,
       source: rateSource(rate),
       rule: RULE,
     };
   };
+}
+
+function best(rates: readonly DatedRate[]): DatedRate | null {
+  return rates.reduce<DatedRate | null>(
+    (most, rate) => (most === null || exact(rate.value).gt(exact(most.value)) ? rate : most),
+    null,
+  );
 }
 
 /** Worked time times a price. */

@@ -66,7 +66,7 @@ export function linePay(share: LineShare, price: LinePrice): PayLine[] {
   if (exact(price.value).lte(0)) return [];
   const isFlat = price.kind === 'flat';
   const value = exact(price.value);
-  const wholeCents = toCents(isFlat ? value : dollars(line.commissionableCents).mul(value).div(100));
+  const wholeCents = toCents(isFlat ? value : dollars(commissionBase(line)).mul(value).div(100));
   const shares = shareEarning(wholeCents, line.crew, split);
   const amountCents = centsOf(shares, person);
   if (amountCents === 0) return [];
@@ -90,6 +90,11 @@ export function linePay(share: LineShare, price: LinePrice): PayLine[] {
       ],
     }),
   ];
+}
+
+/** What commission is a percentage of, cents: after discounts and, where the company takes it off, product cost. */
+export function commissionBase({ commissionableCents, productCostCents = 0 }: DoneLine): number {
+  return Math.max(0, commissionableCents - productCostCents);
 }
 
 export function centsOf(shares: readonly PersonShare[], person: PayPerson): number {
@@ -179,14 +184,25 @@ function percentSteps(line: DoneLine, { value, startsOn, source }: LinePrice, wh
       result: centsText(line.commissionableCents),
       sources: [jobSource(line)],
     },
+    ...(line.productCostCents ? [costStep(line, line.productCostCents)] : []),
     {
       label: 'Commission on the line',
       note: `${percent} since ${formatDate(startsOn)}`,
-      arithmetic: `${percent} of ${centsText(line.commissionableCents)}`,
+      arithmetic: `${percent} of ${centsText(commissionBase(line))}`,
       result: centsText(wholeCents),
       sources: [source],
     },
   ];
+}
+
+function costStep(line: DoneLine, costCents: number): WorkingStep {
+  return {
+    label: 'Less its product cost',
+    note: 'The company takes the service’s dated product cost off first',
+    arithmetic: `${centsText(line.commissionableCents)} less ${centsText(costCents)}`,
+    result: centsText(commissionBase(line)),
+    sources: [],
+  };
 }
 
 export function jobSource(line: DoneLine): SourceRef {

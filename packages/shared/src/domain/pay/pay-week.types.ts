@@ -25,7 +25,13 @@ export interface PayEntry {
   interrupted: boolean;
 }
 
-export type RateKind = 'hourly' | 'commission_percent' | 'flat_service';
+export type RateKind =
+  | 'hourly'
+  | 'commission_percent'
+  | 'flat_service'
+  | 'product_cost' // dollars a finished line, off what commission is a percentage of
+  | 'mileage' // dollars a mile, paid back
+  | 'per_review'; // dollars a review, a promised bonus
 
 /** One dated rate. The most exact one that has started applies: person and service, person, company and service, company. */
 export interface DatedRate {
@@ -33,7 +39,7 @@ export interface DatedRate {
   kind: RateKind;
   personId: string | null;
   serviceId: string | null;
-  /** Only for hourly rates: a kind of work paid at its own rate. */
+  /** Only for hourly rates: a kind of work, or a service, paid at its own rate. */
   clockKind: ClockKind | null;
   /** Dollars an hour, percent (6 is 6 %), or dollars a finished line; a decimal string. */
   value: string;
@@ -67,6 +73,8 @@ export interface DoneLine {
   commissionableCents: number;
   doneAt: string;
   crew: CrewShare[];
+  /** What its products cost by the dated rates, cents: off the commission's base. */
+  productCostCents?: number;
   /** Commission by the rule "when paid", and the customer had not paid when the week ended. */
   commissionWaits?: true;
 }
@@ -92,6 +100,8 @@ export interface PayTip {
   receivedAt: string;
   /** Cash kept on the spot: shown, adds nothing to what is to be paid. */
   alreadyReceived: boolean;
+  /** Meant for one of the crew by the customer; counts where the rule says so. */
+  forPersonId?: string | null;
   /** Only people who may share tips, in crew order. */
   crew: CrewShare[];
 }
@@ -101,6 +111,7 @@ export type AdjustmentKind =
   | 'discretionary_bonus' // 29 CFR 778.211: outside
   | 'reimbursement' // 29 CFR 778.217: outside
   | 'paid_time_off' // 29 CFR 778.218: outside
+  | 'refund' // negative; a customer's refund, off this week's commission alone (29 CFR 778.121)
   | 'deduction' // negative; never below the minimum wage or into overtime (29 CFR 531.35, .37)
   | 'correction'; // names a line of a locked week: outside this week's regular rate
 
@@ -112,8 +123,21 @@ export interface PayAdjustment {
   amountCents: number;
   reason: string;
   correctsLineId: string | null;
+  /** Where the amount is a count times a dated rate. */
+  counted?: CountedAmount | null;
   /** Only for paid time off that was given in hours. */
   timeOff?: TimeOffTaken | null;
+}
+
+/** Miles driven or reviews received, times the rate of their day. */
+export interface CountedAmount {
+  unit: 'mile' | 'review';
+  /** Decimal. */
+  quantity: string;
+  rateId: string;
+  /** Decimal dollars each. */
+  value: string;
+  startsOn: string;
 }
 
 export interface PayPerson {
@@ -132,6 +156,15 @@ export interface PayRules {
   /** Punches count to the nearest so many minutes; null for the exact time (29 CFR 785.48(b)). */
   punchRoundingMinutes: 5 | 6 | 15 | null;
   premiumRounding: PremiumRounding;
+  /** Absent: tips are shared by the crew and card tips are paid whole. */
+  tips?: TipRules;
+}
+
+export interface TipRules {
+  /** A tip meant for one of the crew goes to that person, or is shared like the rest. */
+  goTo: 'crew' | 'person';
+  /** The card fee that really comes off, percent; only where the place allows it. */
+  cardFeePercent: string;
 }
 
 /** The week that commission belongs to by the written plan: of Done, or only once the customer has paid. */
@@ -190,6 +223,8 @@ export interface PayWeekInput {
   /** Absent in weeks locked before there were such rules. */
   showUpRules?: DatedShowUpRule[];
   noShowTrips?: NoShowTrip[];
+  /** Whose overtime goes by the rate in effect, by an agreement made before the work (29 USC 207(g)(2)). */
+  ratesInEffect?: { personId: string; signedOn: string }[];
   /** Absent where commission is earned when the work is done. */
   settledCommissions?: SettledCommission[];
   /** The instant that open entries are measured to, for a draft of the running week. */

@@ -1,6 +1,6 @@
 import { dollars, exact, fractionText, greatest, hoursOf, ZERO, type Exact } from '../money/exact.ts';
 import { toCentsDown } from '../money/rounding.ts';
-import { additionLines, takingLines } from './adjustment-lines.ts';
+import { additionLines, refundLines, takingLines, type Takings } from './adjustment-lines.ts';
 import { deductionRoom } from './deductions.ts';
 import { settledCommissionLines } from './deferred/settled-commission.ts';
 import { waitingCommission } from './deferred/waiting-commission.ts';
@@ -8,9 +8,10 @@ import { datedPrice, hourlyPay } from './hourly-pay.ts';
 import { jobLinePay } from './job-line-pay.ts';
 import { makeUpLine } from './make-up-line.ts';
 import { countEntries } from './meal-breaks.ts';
+import type { OvertimeRuleSet } from './overtime-rule-sets.ts';
 import { totalCents } from './pay-line.ts';
 import { clocklessJobWarnings, entryWarnings, minimumWageWarning, unpaidHoursWarning } from './pay-warnings.ts';
-import type { PayLine, PayPerson, PayWeekInput, PersonWeek } from './pay-week.types.ts';
+import type { DoneLine, PayLine, PayPerson, PayWeekInput, PersonWeek } from './pay-week.types.ts';
 import { placeRules, type PlaceRules } from './place-rules.ts';
 import { planInForce } from './plans/pay-plan.ts';
 import { percentageOfTotal } from './plans/plan-extras.ts';
@@ -22,7 +23,8 @@ import { roundPunches } from './punch-rounding.ts';
 import { regularRate } from './regular-rate.ts';
 import { restPayLine } from './rest-pay-line.ts';
 import { shortDayLines, tripLines } from './time-off/week-lines.ts';
-import { tipLines } from './tip-lines.ts';
+import { rateInEffectPremium } from './rate-in-effect-premium.ts';
+import { tipLines, type TipTerms } from './tip-lines.ts';
 import type { PersonInput } from './week-groups.ts';
 import { weekPremium, type WeekPremium } from './week-premium.ts';
 import { weekTotals } from './week-totals.ts';
@@ -55,18 +57,25 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
 
   const plan = planWeek(person, own, spans, hours, place, shared);
   const base = plan === null ? ratePay(person, own, spans, input) : planPay(plan);
-  const waiting = waitingCommission(own.doneLines, base.lines, (doneLines) =>
-    plan === null ? ratePay(person, { ...own, doneLines }, spans, input).lines : planPay({ ...plan, doneLines }).lines,
-  );
+  const payOf = (doneLines: DoneLine[]) =>
+    plan === null ? ratePay(person, { ...own, doneLines }, spans, input).lines : planPay({ ...plan, doneLines }).lines;
+  const waiting = waitingCommission(own.doneLines, base.lines, payOf);
+  const refunds = refundsOf(person, own, base.lines, payOf);
   const additions = additionLines(own.adjustments);
   const rest = ruleSet.paysPieceRest ? restPayLine(person, spans, base.lines, base.restPaid, minimumWage) : [];
   const trips = tripLines(person, own, input);
-  const earned = [...base.lines, ...trips, ...rest, ...additions.filter((line) => line.inRegularRate)];
+  const earned = [
+    ...base.lines,
+    ...refunds.lines,
+    ...trips,
+    ...rest,
+    ...additions.filter((line) => line.inRegularRate),
+  ];
   const makeUp = makeUpLine(person, earned, hours, minimumWage);
   const included = makeUp === null ? earned : [...earned, makeUp];
 
   const rate = regularRate(dollars(totalCents(included)).sub(base.notWorked), hours, minimumWage);
-  const premium =
+  const average =
     rate === null
       ? null
       : weekPremium({
@@ -76,12 +85,20 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
           minimumWage,
           bonusCents: totalCents(included.filter((line) => line.kind === 'bonus')),
         });
+  const isAgreed = own.hasRateInEffect && plan === null && ruleSet.key === 'us_federal';
+  const premium =
+    average !== null && isAgreed
+      ? rateInEffectPremium({
+          ...{ average, spans, included, hours, minimumWage },
+          priceOf: datedPrice(person, own.rates, own.doneLines),
+        })
+      : average;
   const carries = carriesOf(base, premium);
   const settled = plan === null || carries === null ? [] : settlementOf(plan, carries, shared.startsOn);
   const excluded = [
     ...settled,
     ...own.settledCommissions.flatMap((one) => settledCommissionLines(person, one, shared.weekOf)),
-    ...tipLines(person, own.tips, rules.crewSplit, zone),
+    ...tipLines(person, own.tips, tipTerms(input, ruleSet)),
     ...additions.filter((line) => !line.inRegularRate),
     ...shortDayLines(person, own, { ...shared, spans, minimumWage }),
   ];
@@ -113,6 +130,7 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
       ...clocklessJobWarnings(person, own.doneLines, own.entries),
       ...unpaidHoursWarning(person, base.unpaidHours),
       ...minimumWageWarning(person, makeUp),
+      ...refunds.warnings,
       ...takings.warnings,
     ],
     ...(waiting === null ? {} : { waiting }),
@@ -121,10 +139,27 @@ export function personWeek(person: PayPerson, own: PersonInput, shared: SharedWe
   };
 }
 
+/** Refunds take no more than what commission adds to the week: floors and guarantees stay whole. */
+function refundsOf(
+  person: PayPerson,
+  own: PersonInput,
+  lines: readonly PayLine[],
+  payOf: (doneLines: DoneLine[]) => PayLine[],
+): Takings {
+  if (!own.adjustments.some((item) => item.kind === 'refund')) return { lines: [], warnings: [] };
+  const without = payOf(own.doneLines.map((line) => ({ ...line, commissionableCents: 0 })));
+  return refundLines(person, own.adjustments, Math.max(0, totalCents(lines) - totalCents(without)));
+}
+
+function tipTerms({ rules, zone }: PayWeekInput, place: OvertimeRuleSet): TipTerms {
+  const { goTo, cardFeePercent } = rules.tips ?? { goTo: 'crew', cardFeePercent: '0' };
+  return { split: rules.crewSplit, zone, goTo, cardFeePercent: exact(cardFeePercent), place };
+}
+
 /** Pay by the dated rates of the person and the company. */
 function ratePay(person: PayPerson, own: PersonInput, spans: readonly WorkSpan[], input: PayWeekInput): BasePay {
   const { rules, zone } = input;
-  const byClock = hourlyPay(person, spans, datedPrice(person, own.rates));
+  const byClock = hourlyPay(person, spans, datedPrice(person, own.rates, own.doneLines));
   const byLine = own.doneLines.flatMap((line) => jobLinePay({ person, line, split: rules.crewSplit, zone }, own.rates));
   return { ...byClock, lines: [...byClock.lines, ...byLine], notWorked: ZERO, carries: null };
 }

@@ -3,7 +3,7 @@ import { centsText, decimalText, shortText, toCents, toCentsUp } from '../money/
 import { aLine, totalCents } from './pay-line.ts';
 import type { PayLine, PayLineKind, PayPerson, PremiumRounding, SourceRef, WorkingStep } from './pay-week.types.ts';
 import type { WeekPremium } from './week-premium.ts';
-import { hoursAndMinutes, workedDays } from './working-words.ts';
+import { hoursAndMinutes, rateText, workedDays } from './working-words.ts';
 import type { WorkSpan } from './work-spans.ts';
 
 export interface PremiumParts {
@@ -35,8 +35,9 @@ export function premiumLine(parts: PremiumParts): PayLine[] {
       hours: fractionText(premium.split.overtime.add(premium.split.double)),
       rate: fractionText(rate),
       amountCents,
-      rule:
-        premium.ruleSet.key === 'us_federal'
+      rule: premium.inEffect
+        ? '29 USC 207(g)(2); 29 CFR 778.419'
+        : premium.ruleSet.key === 'us_federal'
           ? '29 USC 207(a); 29 CFR 778.109 to 778.118'
           : `${premium.ruleSet.name}; ${premium.ruleSet.source}`,
       working: [
@@ -68,6 +69,7 @@ const INCLUDED: [PayLineKind, string][] = [
   ['job_rate', 'Job rates of this week count'],
   ['no_show_trip', 'Trips on which nobody was home count'],
   ['commission', 'Commission of this week counts'],
+  ['refund', 'Refunds to customers lower it'],
   ['plan_floor', 'What the plan adds or takes back counts'],
   ['premium_pay', 'Premiums for a role or a shift count'],
   ['rest_pay', 'Rest breaks paid apart count'],
@@ -104,8 +106,8 @@ const EXCLUDED: [PayLineKind[], string, string][] = [
   [['tip', 'tip_already_received'], 'tips', 'Tips belong to the crew'],
   [
     ['commission_settlement', 'settlement_premium'],
-    'settled for the month',
-    'A settlement belongs to the weeks of its month',
+    'settled for other weeks',
+    'A settlement belongs to the weeks in which it was earned',
   ],
   [['correction'], 'corrections', 'A correction belongs to the week it mends'],
   [['discretionary_bonus'], 'discretionary bonus', 'A discretionary bonus was never promised'],
@@ -171,7 +173,8 @@ function rateSteps({ included, notWorked }: PremiumParts, hours: Exact, rate: Ex
 }
 
 function premiumSteps({ hours, premium, rounding }: PremiumParts, amountCents: number): WorkingStep[] {
-  const { ruleSet, split, rate, onBonus } = premium;
+  const { ruleSet, split, rate, onBonus, inEffect } = premium;
+  if (inEffect) return [inEffectStep(inEffect, premium, amountCents)];
   const isFederal = ruleSet.key === 'us_federal';
   const where = isFederal
     ? `${shortText(hours)} less ${ruleSet.weeklyHours} is ${shortText(split.overtime)} h`
@@ -193,6 +196,24 @@ function premiumSteps({ hours, premium, rounding }: PremiumParts, amountCents: n
       sources: [{ kind: 'rule', id: ruleSet.key, label: ruleSet.name }],
     },
   ];
+}
+
+function inEffectStep(
+  { parts, onOther }: NonNullable<WeekPremium['inEffect']>,
+  { ruleSet, split }: WeekPremium,
+  amountCents: number,
+): WorkingStep {
+  const other = onOther.gt(0) ? [`${decimalText(onOther, 4)} half time on other pay`] : [];
+  return {
+    label: `Half of the rate in effect, for the hours over ${ruleSet.weeklyHours}`,
+    note: `${shortText(split.overtime)} h, the last of the week, each at the rate it was worked at, by an agreement made before the work`,
+    arithmetic: [
+      ...parts.map(({ hours, rate }) => `half of ${rateText(rate)} times ${shortText(hours)} h`),
+      ...other,
+    ].join(' + '),
+    result: centsText(amountCents),
+    sources: [{ kind: 'rule', id: 'rate_in_effect', label: 'Agreement on the rate in effect' }],
+  };
 }
 
 function lineSource(line: PayLine): SourceRef {

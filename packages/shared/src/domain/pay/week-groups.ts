@@ -1,3 +1,7 @@
+import { exact } from '../money/exact.ts';
+import { toCents } from '../money/rounding.ts';
+import { dayOf } from '../time/zone.ts';
+import { rateInForce } from './dated-rates.ts';
 import type { DatedPlan } from './plans/pay-plan.ts';
 import type { NoShowTrip } from './time-off/no-show-trip.ts';
 import type {
@@ -26,6 +30,8 @@ export interface PersonInput {
   carried: CarriedPay | null;
   noShowTrips: NoShowTrip[];
   settledCommissions: SettledCommission[];
+  /** Whether an agreement on the rate in effect was signed before the week. */
+  hasRateInEffect: boolean;
 }
 
 /**
@@ -47,6 +53,7 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
       carried: null,
       noShowTrips: [],
       settledCommissions: [],
+      hasRateInEffect: false,
     };
     groups.set(personId, group);
     return group;
@@ -67,7 +74,9 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
     ),
   )) {
     const done = secondsOf(line.doneAt);
-    if (done >= grid.from && done < grid.to) for (const personId of crewOf(line)) of(personId).doneLines.push(line);
+    if (done < grid.from || done >= grid.to) continue;
+    const costed = withProductCost(line, companyRates, input.zone);
+    for (const personId of crewOf(line)) of(personId).doneLines.push(costed);
   }
   for (const tip of [...input.tips].sort(
     by(
@@ -82,6 +91,9 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
   for (const rate of input.rates) if (rate.personId !== null) of(rate.personId).rates.push(rate);
   for (const plan of input.plans) of(plan.personId).plans.push(plan);
   for (const place of input.places) of(place.personId).place = place;
+  const startsOn = dayOf(input.startsAt, input.zone);
+  for (const { personId, signedOn } of input.ratesInEffect ?? [])
+    if (signedOn <= startsOn) of(personId).hasRateInEffect = true;
   for (const carried of input.carried) of(carried.personId).carried = carried;
   for (const trip of [...(input.noShowTrips ?? [])].sort(
     by(
@@ -95,6 +107,13 @@ export function weekGroups(input: PayWeekInput, grid: WeekGrid): (personId: stri
   for (const settled of [...(input.settledCommissions ?? [])].sort(by((item) => item.startsOn)))
     of(settled.personId).settledCommissions.push(settled);
   return of;
+}
+
+function withProductCost(line: DoneLine, rates: readonly DatedRate[], zone: string): DoneLine {
+  const { serviceId, doneAt } = line;
+  const date = dayOf(doneAt, zone);
+  const rate = rateInForce(rates, { kind: 'product_cost', personId: '', serviceId, clockKind: null, date });
+  return rate === null ? line : { ...line, productCostCents: toCents(exact(rate.value)) };
 }
 
 function crewOf({ crew }: Pick<DoneLine, 'crew'>): Set<string> {

@@ -12,6 +12,8 @@ export interface WeekPremium {
   rate: Exact;
   /** Overtime on a flat-sum bonus where the place works it out apart; a part of the premium. */
   onBonus: Exact;
+  /** By agreement: the overtime hours by the rate in effect, and half time on other pay. */
+  inEffect?: { parts: { hours: Exact; rate: string }[]; onOther: Exact };
   /** Exact dollars owed on top of straight pay. */
   premium: Exact;
 }

@@ -17,7 +17,7 @@ export function weekTotals(lines: readonly PayLine[]): PersonWeek['totals'] {
   return {
     hourly: of('hourly', 'salary', 'day_rate', 'premium_pay', 'rest_pay', 'show_up_pay'),
     flat: of('flat', 'job_rate', 'no_show_trip'),
-    commission: of('commission', 'commission_settlement'),
+    commission: of('commission', 'commission_settlement', 'refund'),
     overtimePremium: of('overtime_premium', 'settlement_premium'),
     makeUp: of('minimum_wage_make_up', 'plan_floor'),
     tips: of('tip'),

@@ -42,7 +42,14 @@ function trialOf(personId: string, plan: PayPlan): DatedPlan {
 
 /** Rates of the person and the company at the tried values; where none applied, the person gets one. */
 function trialRates({ rates }: PayWeekInput, personId: string, { hourly, percent }: Trial): PayWeekInput['rates'] {
-  const tried = { hourly, commission_percent: percent, flat_service: null };
+  const tried = {
+    hourly,
+    commission_percent: percent,
+    flat_service: null,
+    product_cost: null,
+    mileage: null,
+    per_review: null,
+  };
   const replaced = rates.map((rate) => {
     const value = tried[rate.kind];
     const isOwn = rate.personId === null || rate.personId === personId;

@@ -1,4 +1,4 @@
-import type { PayLineKind, PayTip, PersonWeek } from '../pay-week.types.ts';
+import type { PayLine, PayLineKind, PayTip, PersonWeek } from '../pay-week.types.ts';
 import { premiumSplit, type PremiumFacts } from './premium-split.ts';
 
 /** What a payroll processor is handed apart; cents but for `tips_already_received` all of it is in the gross. */
@@ -36,7 +36,9 @@ const KIND_OF_LINE: Record<PayLineKind, PayKind | 'premium' | 'tip'> = {
   job_rate: 'flat',
   no_show_trip: 'flat',
   commission: 'commission',
+  refund: 'commission',
   commission_settlement: 'commission',
+  refund: 'commission',
   bonus: 'bonus',
   percentage_bonus: 'percentage_bonus',
   discretionary_bonus: 'discretionary_bonus',
@@ -60,8 +62,8 @@ const TIP_KINDS: Record<PayTip['method'], PayKind> = {
 };
 
 export interface KindFacts extends PremiumFacts {
-  /** How a tip came, by its id. */
-  tipMethod: (tipId: string) => PayTip['method'];
+  /** How the tip of a line came. */
+  tipMethod: (line: PayLine) => PayTip['method'];
 }
 
 /** A person's week by kind of pay, cents. All but the tips already received add up to the gross, always. */
@@ -73,7 +75,7 @@ export function kindsOfPay(
   for (const line of week.lines) {
     const kind = KIND_OF_LINE[line.kind];
     if (kind === 'premium') continue;
-    sums[kind === 'tip' ? TIP_KINDS[facts.tipMethod(line.key.slice('tip:'.length))] : kind] += line.amountCents;
+    sums[kind === 'tip' ? TIP_KINDS[facts.tipMethod(line)] : kind] += line.amountCents;
   }
   const { flsaCents, stateOnlyCents } = premiumSplit(week, facts);
   return { ...sums, flsa_premium: flsaCents, state_only_premium: stateOnlyCents };

@@ -95,7 +95,9 @@ describe('random weeks with plans and places', { timeout: PATIENCE }, () => {
           const was = before[at];
           // What a draw takes back is limited by commission, so a raise may bring more of it back, never below the draw.
           if (!was || input.plans[at]?.plan.base.kind === 'draw') return;
-          expect(person.totals.gross).toBeGreaterThanOrEqual(was.totals.gross);
+          // Shares by largest remainder: a larger whole may move the odd cent of a shared line to another of the crew.
+          const shared = input.doneLines.filter((line) => line.crew.length > 1).length;
+          expect(person.totals.gross).toBeGreaterThanOrEqual(was.totals.gross - 2 * shared);
         });
       }),
       RUNS,

@@ -2,7 +2,7 @@ import { dollars, exact, least, sum, ZERO, type Exact } from '../../money/exact.
 import { centsText, decimalText, shortText, toCents } from '../../money/rounding.ts';
 import { formatDay } from '../../time/format.ts';
 import { shareEarning } from '../crew-shares.ts';
-import { centsOf, jobSource } from '../job-line-pay.ts';
+import { centsOf, commissionBase, jobSource } from '../job-line-pay.ts';
 import { aLine } from '../pay-line.ts';
 import type { CarriedWeek, PayLine, WorkingStep } from '../pay-week.types.ts';
 import { rateText } from '../working-words.ts';
@@ -40,7 +40,7 @@ export function tieredCommission(base: Exact, terms: Pick<Tiered, 'tiers' | 'mod
 export function tierBase(week: PlanWeek): number {
   const { person, split } = week;
   return commissionLines(week).reduce(
-    (total, line) => total + centsOf(shareEarning(line.commissionableCents, line.crew, split), person),
+    (total, line) => total + centsOf(shareEarning(commissionBase(line), line.crew, split), person),
     0,
   );
 }
