@@ -21,6 +21,7 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
     allow(['read', 'create'], 'Rate');
     allow(['read', 'update'], 'PayWeek');
     allow('read', 'Statement');
+    allow('read', 'TimeOffBalance');
     allow(['read', 'create', 'update', 'remove'], 'Payday');
     allow('read', 'PayRecord');
     allow(['read', 'create', 'update'], 'Login');
@@ -59,6 +60,7 @@ function ownNear(personId: string, daysAhead: number) {
 function ownStatements(actor: Actor, allow: Allow): void {
   if (!actor.personId) return;
   allow('read', 'Statement', { personId: actor.personId, state: 'locked' });
+  allow('read', 'TimeOffBalance', { personId: actor.personId });
   allow('read', 'PayRecord', { personId: actor.personId });
 }
 

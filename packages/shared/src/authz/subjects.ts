@@ -13,6 +13,8 @@ export interface SubjectFields {
   Statement: { personId: string; state: 'draft' | 'checked' | 'locked' };
   /** The running week's pay, before it is locked. */
   Estimate: { personId: string };
+  /** Hours of paid time off and how they came about. */
+  TimeOffBalance: { personId: string };
   Payday: { id: string };
   /** Everything kept about one person's pay. */
   PayRecord: { personId: string };

@@ -4,6 +4,7 @@ import { clockKinds } from './clock.contract.ts';
 import { cents, clockTime, day, decimal, done, id, instant, shortText } from './fields.ts';
 import { everyone } from '../authz/actor.ts';
 import type { PayLine, PayWarning, PersonWeek } from '../domain/pay/pay-week.types.ts';
+import { statementTimeOff } from '../domain/pay/time-off/statement-time-off.ts';
 
 export const rateKinds = ['hourly', 'commission_percent', 'flat_service'] as const;
 export const rateDto = z.object({
@@ -249,6 +250,8 @@ export const addAdjustment = endpoint({
       kind: z.enum(adjustmentKinds),
       amountCents: cents.refine((v) => v !== 0, 'Give an amount.'),
       reason: shortText.min(1, 'Say what it is for.'),
+  /** Balances of paid time off by person; of a locked week as they were when it was locked. */
+  timeOff: z.record(z.string(), z.array(statementTimeOff)),
       correctsLineId: id.nullable(),
     })
     .refine((a) => (a.kind === 'deduction' ? a.amountCents < 0 : a.kind === 'correction' || a.amountCents > 0), {
@@ -340,3 +343,4 @@ export const getWeekSoFar = endpoint({
   }),
 });
 export type WeekSoFar = z.infer<(typeof getWeekSoFar)['response']>;
+    timeOff: z.array(statementTimeOff),

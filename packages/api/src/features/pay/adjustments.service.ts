@@ -63,7 +63,8 @@ export function removeAdjustment({ actor, now }: Ctx, id: string): Promise<void>
   });
 }
 
-function refuseLocked(week: PayWeek): void {
+/** @throws 422 */
+export function refuseLocked(week: PayWeek): void {
   if (week.state === 'locked')
     throw unprocessable('locked_week', 'A locked week never changes. Add a correction to an open week.');
 }

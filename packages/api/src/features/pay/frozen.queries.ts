@@ -1,6 +1,7 @@
 import type { Transaction } from 'sequelize';
 import { payEngine } from '@driprail/shared/domain/pay/pay-engines';
 import type { PayLine, PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import type { StatementTimeOff } from '@driprail/shared/domain/pay/time-off/statement-time-off';
 import type { PayWeek } from '../../db/models/index.ts';
 import { PayLineRow, PayStatement } from '../../db/models/index.ts';
 
@@ -15,7 +16,12 @@ export async function readFrozen(
   weekId: string,
   personId: string | null,
   tx?: Transaction,
-): Promise<{ people: PersonWeek[]; lineIds: Record<string, string> }> {
+): Promise<{
+  people: PersonWeek[];
+  lineIds: Record<string, string>;
+  /** Balances by person as the statements showed them. */
+  timeOff: Record<string, StatementTimeOff[]>;
+}> {
   const where = { payWeekId: weekId, ...(personId && { personId }) };
   const options = { where, transaction: tx ?? null };
   const statements = await PayStatement.findAll(options);
@@ -26,5 +32,11 @@ export async function readFrozen(
       lines: rows.filter((row) => row.personId === statement.personId).map((row): PayLine => row.line),
     }))
     .sort((a, b) => a.name.localeCompare(b.name));
-  return { people, lineIds: Object.fromEntries(rows.map((row) => [`${row.personId}:${row.key}`, row.id])) };
+  return {
+    people,
+    lineIds: Object.fromEntries(rows.map((row) => [`${row.personId}:${row.key}`, row.id])),
+    timeOff: Object.fromEntries(
+      statements.map(({ personId: of, timeOff }) => [of, (timeOff ?? []) as StatementTimeOff[]]),
+    ),
+  };
 }

@@ -11,6 +11,7 @@ import { conflict, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { readPayWeek } from './pay-week.queries.ts';
+import { statementTimeOffOf } from './time-off/statement-time-off.queries.ts';
 import { mailStatements } from './statement-mails.ts';
 import { weekOf } from './weeks.service.ts';
 
@@ -67,9 +68,16 @@ async function lock(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promis
   await refuseBeforeSettled(input, tx);
   const result = computePayWeek(input);
   refuseUnsettled(result);
+  const timeOff = await statementTimeOffOf(week, result.people, tx);
   for (const { lines, ...summary } of result.people) {
     await PayStatement.create(
-      { payWeekId: week.id, personId: summary.personId, grossCents: summary.totals.gross, summary },
+      {
+        payWeekId: week.id,
+        personId: summary.personId,
+        grossCents: summary.totals.gross,
+        summary,
+        timeOff: timeOff[summary.personId] ?? [],
+      },
       { transaction: tx },
     );
     await PayLineRow.bulkCreate(

@@ -8,6 +8,7 @@ import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf, correctionsOfWeek, differences } from './corrections.queries.ts';
 import { readFrozen } from './frozen.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
+import { statementTimeOffOf } from './time-off/statement-time-off.queries.ts';
 import { salesOf } from './week-figures.queries.ts';
 import { yearsToDate } from './year-to-date.queries.ts';
 import { headOf } from './weeks.service.ts';
@@ -29,6 +30,7 @@ export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): P
     correctedLines: await correctedLinesOf(people, tx),
     customers: await customersOf(people, tx),
     yearsToDate: await yearsToDate(week, people, tx),
+    timeOff: frozen?.timeOff ?? (await statementTimeOffOf(week, people, tx)),
     warningTimes: warningTimes(people, input),
   };
 }

@@ -26,6 +26,7 @@ import { listWeeks } from './week-figures.queries.ts';
 import { weekAt } from './weeks.service.ts';
 
 export interface PayOptions {
+import { timeOffRoutes } from './time-off/time-off.routes.ts';
   baseUrlOf: (req: Request) => string;
 }
 
@@ -76,3 +77,4 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
     return statementPdf(statement, (await companyOf()).zone);
   });
 }
+  timeOffRoutes(table);

@@ -38,10 +38,8 @@ export function readStatement({ ability, now }: Ctx, day: string, personId: stri
   return inTransaction(async (tx) => {
     const week = await weekAt(day, tx);
     authorize(ability, 'read', tag('Statement', { personId, state: week.state }));
-    const people =
-      week.state === 'locked'
-        ? (await readFrozen(week.id, personId, tx)).people
-        : (await readPayWeek(week, now(), tx)).people;
+    const { people, timeOff } =
+      week.state === 'locked' ? await readFrozen(week.id, personId, tx) : await readPayWeek(week, now(), tx);
     const person = people.find((p) => p.personId === personId);
     if (!person) throw notFound('A statement of this person for that week');
     const yearToDate = (await yearsToDate(week, [person], tx))[personId];
@@ -50,6 +48,7 @@ export function readStatement({ ability, now }: Ctx, day: string, personId: stri
       week: await headOf(week, tx),
       person,
       yearToDate,
+      timeOff: timeOff[personId] ?? [],
       companyName: (await companyOf(tx)).name,
       correctedLines: await correctedLinesOf([person], tx),
       customers: await customersOf([person], tx),
