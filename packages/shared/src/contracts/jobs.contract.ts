@@ -155,6 +155,8 @@ export const recordTip = endpoint({
     amountCents: positiveCents.min(1, 'Give the amount of the tip.'),
     method: z.enum(['card', 'cash', 'invoice']),
     alreadyReceived: z.boolean(),
+    /** One of the crew whom the customer meant; counts where the company's rule says so. */
+    forPersonId: id.nullable().default(null),
   }),
   response: z.object({ ok: z.literal(true) }),
 });

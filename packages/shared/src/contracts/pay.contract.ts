@@ -6,7 +6,18 @@ import { everyone } from '../authz/actor.ts';
 import type { PayLine, PayWarning, PersonWeek } from '../domain/pay/pay-week.types.ts';
 import { statementTimeOff } from '../domain/pay/time-off/statement-time-off.ts';
 
-export const rateKinds = ['hourly', 'commission_percent', 'flat_service'] as const;
+export const rateKinds = [
+  'hourly',
+  'commission_percent',
+  'flat_service',
+  'product_cost',
+  'mileage',
+  'per_review',
+] as const;
+/** Of the whole company alone. */
+const companyRates: readonly string[] = ['product_cost', 'mileage'];
+const serviceRates: readonly string[] = ['flat_service', 'product_cost'];
+const noServiceRates: readonly string[] = ['mileage', 'per_review'];
 export const rateDto = z.object({
   id,
   kind: z.enum(rateKinds),
@@ -26,7 +37,7 @@ export const listRates = endpoint({
   method: 'get',
   path: '/api/pay/rates',
   roles: owner,
-  summary: 'Every dated rate: hourly, flat per service, commission percent.',
+  summary: 'Every dated rate: hourly, flat per service, commission percent, product cost, a mile, a review.',
   response: z.object({ rates: z.array(rateDto) }),
 });
 export const addRate = endpoint({
@@ -51,18 +62,27 @@ export const addRate = endpoint({
       path: ['clockKind'],
       message: 'Only an hourly rate goes by kind of work.',
     })
-    .refine((r) => r.kind !== 'hourly' || r.serviceId === null, {
-      path: ['serviceId'],
-      message: 'An hourly rate does not go by service.',
+    .refine((r) => r.serviceId === null || r.clockKind === null, {
+      path: ['clockKind'],
+      message: 'Choose a kind of work or a service, not both.',
     })
-    .refine((r) => r.kind !== 'flat_service' || r.serviceId !== null, {
+    .refine((r) => !noServiceRates.includes(r.kind) || r.serviceId === null, {
       path: ['serviceId'],
-      message: 'Choose the service that the flat rate pays for.',
+      message: 'This does not go by service.',
+    })
+    .refine((r) => !serviceRates.includes(r.kind) || r.serviceId !== null, {
+      path: ['serviceId'],
+      message: 'Choose the service that this is for.',
+    })
+    .refine((r) => !companyRates.includes(r.kind) || r.personId === null, {
+      path: ['personId'],
+      message: 'This holds for the whole company.',
     }),
   response: z.object({ rate: rateDto }),
 });
 
 const punchRoundingMinutes = z.union([z.literal(5), z.literal(6), z.literal(15)]).nullable();
+export const tipsGoTo = ['crew', 'person'] as const;
 export const commissionEarned = ['done', 'paid'] as const;
 export const premiumRoundings = ['half_up', 'up'] as const;
 export const payRulesDto = z.object({
@@ -77,6 +97,10 @@ export const payRulesDto = z.object({
   premiumRounding: z.enum(premiumRoundings),
   /** When commission is earned: the work is done, or the customer has paid. */
   commissionEarned: z.enum(commissionEarned),
+  /** A tip meant for one of the crew: that person's, or shared like the rest. */
+  tipsGoTo: z.enum(tipsGoTo),
+  /** The card fee that really comes off a card tip, percent; "0" for none. */
+  tipCardFeePercent: z.string(),
   /** ISO weekday, 1 Monday to 7 Sunday, and the clock time at which the workweek starts. */
   workweekStartsOn: z.int(),
   workweekStartsAt: clockTime,
@@ -104,6 +128,8 @@ export const addPayRules = endpoint({
     punchRoundingMinutes: punchRoundingMinutes.default(null),
     premiumRounding: z.enum(premiumRoundings).default('half_up'),
     commissionEarned: z.enum(commissionEarned).default('done'),
+    tipsGoTo: z.enum(tipsGoTo).default('crew'),
+    tipCardFeePercent: decimal.refine((v) => Number(v) <= 10, 'At most 10 percent.').default('0'),
     workweekStartsOn: z.int().min(1).max(7),
     workweekStartsAt: clockTime,
   }),
@@ -139,9 +165,17 @@ export const adjustmentKinds = [
   'discretionary_bonus',
   'reimbursement',
   'paid_time_off',
+  'refund',
   'deduction',
   'correction',
 ] as const;
+/** An amount that is a count times the dated rate of a day. */
+const countedBody = z.strictObject({
+  unit: z.enum(['mile', 'review']),
+  quantity: decimal.refine((v) => Number(v) > 0, 'Give how many.'),
+  /** The rate of this day counts. */
+  on: day,
+});
 export const adjustmentDto = z.object({
   id,
   personId: id,
@@ -216,6 +250,8 @@ export const payWeekDto = z.object({
   correctedLines,
   customers,
   yearsToDate,
+  /** Balances of paid time off by person; of a locked week as they were when it was locked. */
+  timeOff: z.record(z.string(), z.array(statementTimeOff)),
   /** When the clock entries and jobs that warnings name took place, by their ids. */
   warningTimes: z.record(z.string(), instant),
 });
@@ -238,6 +274,7 @@ export const setPayWeekState = endpoint({
   body: z.strictObject({ to: z.enum(payWeekStates), version: z.int() }),
   response: payWeekDto,
 });
+const takingKinds: readonly string[] = ['deduction', 'refund'];
 export const addAdjustment = endpoint({
   method: 'post',
   path: '/api/pay/weeks/:startsOn/adjustments',
@@ -248,15 +285,28 @@ export const addAdjustment = endpoint({
     .strictObject({
       personId: id,
       kind: z.enum(adjustmentKinds),
-      amountCents: cents.refine((v) => v !== 0, 'Give an amount.'),
+      /** Null where it is counted. */
+      amountCents: cents.refine((v) => v !== 0, 'Give an amount.').nullable(),
       reason: shortText.min(1, 'Say what it is for.'),
-  /** Balances of paid time off by person; of a locked week as they were when it was locked. */
-  timeOff: z.record(z.string(), z.array(statementTimeOff)),
       correctsLineId: id.nullable(),
+      counted: countedBody.nullable().default(null),
+      refundReasonId: id.nullable().default(null),
     })
-    .refine((a) => (a.kind === 'deduction' ? a.amountCents < 0 : a.kind === 'correction' || a.amountCents > 0), {
+    .refine((a) => (a.amountCents === null) === (a.counted !== null), {
       path: ['amountCents'],
-      message: 'A deduction is below zero, everything else but a correction above.',
+      message: 'Give an amount.',
+    })
+    .refine(({ kind, amountCents: v }) => v === null || kind === 'correction' || v < 0 === takingKinds.includes(kind), {
+      path: ['amountCents'],
+      message: 'A deduction or refund is below zero, everything else but a correction above.',
+    })
+    .refine((a) => a.counted === null || a.kind === (a.counted.unit === 'mile' ? 'reimbursement' : 'bonus'), {
+      path: ['kind'],
+      message: 'Miles are a reimbursement, reviews a bonus.',
+    })
+    .refine((a) => (a.kind === 'refund') === (a.refundReasonId !== null), {
+      path: ['refundReasonId'],
+      message: 'Choose why the customer was refunded.',
     })
     .refine((a) => a.kind !== 'correction' || a.correctsLineId !== null, {
       path: ['correctsLineId'],
@@ -310,6 +360,7 @@ export const getStatement = endpoint({
     correctedLines,
     customers,
     yearToDate,
+    timeOff: z.array(statementTimeOff),
   }),
 });
 export const getStatementPdf = endpoint({
@@ -343,4 +394,3 @@ export const getWeekSoFar = endpoint({
   }),
 });
 export type WeekSoFar = z.infer<(typeof getWeekSoFar)['response']>;
-    timeOff: z.array(statementTimeOff),

@@ -10,6 +10,8 @@ export const auditEntities = [
   'pay_adjustment',
   'payday',
   'job_paid',
+  'pay_agreement',
+  'refund_reason',
   'clock_entry',
   'clock_request',
   'hours',

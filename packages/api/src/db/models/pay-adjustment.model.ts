@@ -1,6 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
-import type { AdjustmentKind } from '@driprail/shared/domain/pay/pay-week.types';
+import type { AdjustmentKind, CountedAmount } from '@driprail/shared/domain/pay/pay-week.types';
 import type { TimeOffTaken } from '@driprail/shared/domain/pay/time-off/time-off-pay';
 import type { TimeOffKind } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 
@@ -17,6 +17,9 @@ export class PayAdjustment extends Model<InferAttributes<PayAdjustment>, InferCr
   declare amountCents: number;
   declare reason: string;
   declare correctsLineId: CreationOptional<string | null>;
+  /** The count and the rate that an amount stands for. */
+  declare counted: CreationOptional<CountedAmount | null>;
+  declare refundReasonId: CreationOptional<string | null>;
   /** The hours that an amount of paid time off stands for; all five or none. */
   declare timeOffKind: CreationOptional<TimeOffKind | null>;
   declare timeOffHours: CreationOptional<string | null>;
@@ -37,6 +40,8 @@ export function initPayAdjustment(sequelize: Sequelize): void {
       amountCents: { type: DataTypes.BIGINT, allowNull: false },
       reason: { type: DataTypes.TEXT, allowNull: false },
       correctsLineId: { type: DataTypes.UUID, allowNull: true },
+      counted: { type: DataTypes.JSONB, allowNull: true },
+      refundReasonId: { type: DataTypes.UUID, allowNull: true },
       timeOffKind: { type: DataTypes.TEXT, allowNull: true },
       timeOffHours: { type: DataTypes.TEXT, allowNull: true },
       timeOffOn: { type: DataTypes.DATEONLY, allowNull: true },

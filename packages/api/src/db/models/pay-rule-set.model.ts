@@ -1,6 +1,11 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
-import type { CommissionEarned, CrewSplit, PremiumRounding } from '@driprail/shared/domain/pay/pay-week.types';
+import type {
+  CommissionEarned,
+  CrewSplit,
+  PremiumRounding,
+  TipRules,
+} from '@driprail/shared/domain/pay/pay-week.types';
 
 export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreationAttributes<PayRuleSet>> {
   declare id: string;
@@ -12,6 +17,8 @@ export class PayRuleSet extends Model<InferAttributes<PayRuleSet>, InferCreation
   declare punchRoundingMinutes: CreationOptional<5 | 6 | 15 | null>;
   declare premiumRounding: CreationOptional<PremiumRounding>;
   declare commissionEarned: CreationOptional<CommissionEarned>;
+  declare tipsGoTo: CreationOptional<TipRules['goTo']>;
+  declare tipCardFeePercent: CreationOptional<string>;
   declare workweekStartsOn: number;
   declare workweekStartsAt: CreationOptional<string>;
   declare setBy: CreationOptional<string | null>;
@@ -29,6 +36,8 @@ export function initPayRuleSet(sequelize: Sequelize): void {
       punchRoundingMinutes: { type: DataTypes.INTEGER, allowNull: true },
       premiumRounding: { type: DataTypes.TEXT },
       commissionEarned: { type: DataTypes.TEXT },
+      tipsGoTo: { type: DataTypes.TEXT },
+      tipCardFeePercent: { type: DataTypes.DECIMAL(14, 6) },
       workweekStartsOn: { type: DataTypes.INTEGER, allowNull: false },
       workweekStartsAt: { type: DataTypes.TEXT },
       setBy: { type: DataTypes.UUID, allowNull: true },

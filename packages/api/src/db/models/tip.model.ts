@@ -8,6 +8,7 @@ export class Tip extends Model<InferAttributes<Tip>, InferCreationAttributes<Tip
   declare method: 'card' | 'cash' | 'invoice';
   declare alreadyReceived: CreationOptional<boolean>;
   declare receivedAt: Date;
+  declare forPersonId: CreationOptional<string | null>;
   declare userId: string;
 }
 
@@ -20,6 +21,7 @@ export function initTip(sequelize: Sequelize): void {
       method: { type: DataTypes.TEXT, allowNull: false },
       alreadyReceived: { type: DataTypes.BOOLEAN },
       receivedAt: { type: DataTypes.DATE, allowNull: false },
+      forPersonId: { type: DataTypes.UUID, allowNull: true },
       userId: { type: DataTypes.UUID, allowNull: false },
     },
     { sequelize, modelName: 'Tip', tableName: 'tips', underscored: true, timestamps: false },

@@ -14,6 +14,7 @@ export interface TipFields {
   amountCents: number;
   method: 'card' | 'cash' | 'invoice';
   alreadyReceived: boolean;
+  forPersonId: string | null;
 }
 
 /** Records a tip once; it belongs to the crew of the job's visits. */
@@ -31,6 +32,10 @@ export async function recordTip(ctx: Ctx, jobId: string, tip: TipFields): Promis
     const subject = tag('Job', { id: jobId, crewPersonIds });
     if (!job || (ctx.actor.role === 'technician' && ctx.ability.cannot('tip', subject))) throw notFound('That job');
     authorize(ctx.ability, 'tip', subject);
+    if (tip.forPersonId !== null && !crewPersonIds.includes(tip.forPersonId)) {
+      const message = 'Choose one of the crew of this job.';
+      throw unprocessable('not_in_crew', message, { fields: { forPersonId: message } });
+    }
     const { key: _key, ...fields } = tip;
     const id = uuid();
     await Tip.create({ id, jobId, ...fields, receivedAt: ctx.now(), userId: ctx.actor.userId }, { transaction: tx });

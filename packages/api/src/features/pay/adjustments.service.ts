@@ -8,15 +8,20 @@ import { inTransaction } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { countedAmount, refuseRefund } from './adjustment-terms.ts';
+import type { CountedFields } from './adjustment-terms.ts';
 import { readPayWeek } from './pay-week.queries.ts';
 import { weekOf } from './weeks.service.ts';
 
 export interface AdjustmentFields {
   personId: string;
   kind: AdjustmentKind;
-  amountCents: number;
+  /** Null where it is counted. */
+  amountCents: number | null;
   reason: string;
   correctsLineId: string | null;
+  counted: CountedFields | null;
+  refundReasonId: string | null;
 }
 
 /** Adds an amount with its reason to an open week; what was checked must be checked again. */
@@ -27,8 +32,12 @@ export function addAdjustment({ actor, now }: Ctx, day: string, fields: Adjustme
     refuseLocked(week);
     if (!(await Person.findByPk(fields.personId, { transaction: tx }))) throw notFound('That person');
     if (fields.correctsLineId) await refuseForeignLine(fields, week.id, tx);
+    if (fields.refundReasonId) await refuseRefund(fields.personId, fields.refundReasonId, week.startsOn, tx);
+    const amount = fields.counted
+      ? await countedAmount(fields.personId, fields.counted, tx)
+      : { amountCents: fields.amountCents ?? 0, counted: null };
     const row = await PayAdjustment.create(
-      { id: uuid(), payWeekId: week.id, ...fields, userId: actor.userId, at: now() },
+      { id: uuid(), payWeekId: week.id, ...fields, ...amount, userId: actor.userId, at: now() },
       { transaction: tx },
     );
     await week.update(
@@ -37,6 +46,7 @@ export function addAdjustment({ actor, now }: Ctx, day: string, fields: Adjustme
     );
     await audit(tx, { userId: actor.userId, at: now() }, 'pay_adjustment', row.id, 'added', {
       ...fields,
+      ...amount,
       week: week.startsOn,
     });
     hintAfterCommit(tx, ['owners'], 'pay', week.id, week.version);

@@ -34,7 +34,7 @@ interface GatheredPlace extends Omit<PersonPlace, 'ruleSet'> {
 
 type Gathered = Pick<
   PayWeekInput,
-  'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans' | 'showUpRules' | 'noShowTrips'
+  'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans' | 'ratesInEffect' | 'showUpRules' | 'noShowTrips'
 > & {
   lines: GatheredLine[];
   places: GatheredPlace[];
@@ -79,7 +79,7 @@ SELECT json_build_object(
       ORDER BY l.finished_at, j.number, l.position)
      FROM line l JOIN jobs j ON j.id = l.job_id JOIN services s ON s.id = l.service_id), '[]'::json),
   'tips', coalesce((SELECT json_agg(json_build_object('id', t.id, 'jobId', j.id, 'jobNumber', j.number, 'amountCents', t.amount_cents,
-      'method', t.method, 'receivedAt', to_json(t.received_at) #>> '{}', 'alreadyReceived', t.already_received,
+      'method', t.method, 'receivedAt', to_json(t.received_at) #>> '{}', 'alreadyReceived', t.already_received, 'forPersonId', t.for_person_id,
       'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position)
          FROM (SELECT DISTINCT ON (vc.person_id) vc.* FROM visit_crew vc JOIN visits v ON v.id = vc.visit_id WHERE v.job_id = t.job_id
                 ORDER BY vc.person_id, v.part) vc
@@ -87,8 +87,11 @@ SELECT json_build_object(
                 AND st.starts_on <= (t.received_at AT TIME ZONE :zone)::date ORDER BY st.starts_on DESC LIMIT 1), true)), '[]'::json))
       ORDER BY t.received_at, t.id) FROM tip t JOIN jobs j ON j.id = t.job_id), '[]'::json),
   'adjustments', coalesce((SELECT json_agg(json_build_object('id', x.id, 'personId', x.person_id, 'kind', x.kind,
-      'amountCents', x.amount_cents, 'reason', x.reason, 'correctsLineId', x.corrects_line_id, 'timeOff', ${timeOffTakenJson}) ORDER BY x.at, x.id)
+      'amountCents', x.amount_cents, 'reason', x.reason, 'correctsLineId', x.corrects_line_id, 'counted', x.counted, 'timeOff', ${timeOffTakenJson}) ORDER BY x.at, x.id)
      FROM pay_adjustments x WHERE x.pay_week_id = :weekId), '[]'::json),
+  'ratesInEffect', coalesce((SELECT json_agg(json_build_object('personId', a.person_id, 'signedOn', a.signed_on) ORDER BY a.person_id)
+     FROM (SELECT DISTINCT ON (person_id) * FROM pay_agreements WHERE kind = 'rate_in_effect' AND starts_on <= :startsOn
+      ORDER BY person_id, starts_on DESC) a WHERE a.signed_on IS NOT NULL), '[]'::json),
   'plans', coalesce((SELECT json_agg(json_build_object('id', p.id, 'personId', p.person_id, 'startsOn', p.starts_on, 'plan', p.plan)
       ORDER BY p.person_id) FROM (SELECT DISTINCT ON (person_id) * FROM pay_plans WHERE starts_on <= :startsOn
       ORDER BY person_id, starts_on DESC) p), '[]'::json),
@@ -144,6 +147,7 @@ async function recordsOf(week: PayWeek, asOf: Date, tx?: Transaction): Promise<P
       mealBreakMinutes: rules.mealBreakMinutes ?? 30,
       punchRoundingMinutes: rules.punchRoundingMinutes ?? null,
       premiumRounding: rules.premiumRounding ?? 'half_up',
+      tips: { goTo: rules.tipsGoTo ?? 'crew', cardFeePercent: rules.tipCardFeePercent ?? '0' },
     },
     ...gathered,
     doneLines: lines.map((line) => toDoneLine(line, rules.commissionEarned === 'paid' ? endsAt : null)),

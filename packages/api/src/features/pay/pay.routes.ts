@@ -1,5 +1,6 @@
 import type { Request } from 'express';
 import * as api from '@driprail/shared/contracts/pay.contract';
+import * as agreements from '@driprail/shared/contracts/pay-agreements.contract';
 import * as jobsPaid from '@driprail/shared/contracts/jobs-paid.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
@@ -8,6 +9,8 @@ import { inTransaction } from '../../db/sequelize.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
 import { addAdjustment, removeAdjustment } from './adjustments.service.ts';
+import { addAgreement, listAgreements } from './agreements/agreements.service.ts';
+import { addRefundReason, listRefundReasons } from './agreements/refund-reasons.service.ts';
 import { testCommission } from './commission-test.queries.ts';
 import { jobsPaidLately, jobsWaiting } from './deferred/jobs-paid.queries.ts';
 import { markJobPaid, takeBackJobPaid } from './deferred/jobs-paid.service.ts';
@@ -23,10 +26,10 @@ import { listStatements, readStatement } from './statements.queries.ts';
 import { readWeekSoFar } from './week-so-far.queries.ts';
 import { tryWeeks } from './what-if.queries.ts';
 import { listWeeks } from './week-figures.queries.ts';
+import { timeOffRoutes } from './time-off/time-off.routes.ts';
 import { weekAt } from './weeks.service.ts';
 
 export interface PayOptions {
-import { timeOffRoutes } from './time-off/time-off.routes.ts';
   baseUrlOf: (req: Request) => string;
 }
 
@@ -46,6 +49,14 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
   route(table, plans.setPersonPlace, async ({ body }, ctx) => ({ people: await placePerson(ctx, body) }));
   route(table, plans.getCommissionTest, ({ params }) => testCommission(params.personId));
   route(table, plans.whatIf, async ({ body }, { now }) => ({ weeks: await tryWeeks(body, now()) }));
+  route(table, agreements.listAgreements, async () => ({
+    agreements: await listAgreements(),
+    refundReasons: await listRefundReasons(),
+  }));
+  route(table, agreements.addAgreement, async ({ body }, ctx) => ({ agreement: await addAgreement(ctx, body) }));
+  route(table, agreements.addRefundReason, async ({ body }, ctx) => ({
+    refundReason: await addRefundReason(ctx, body),
+  }));
   route(table, jobsPaid.listJobsPaid, async () => ({ waiting: await jobsWaiting(), paid: await jobsPaidLately() }));
   route(table, jobsPaid.markJobPaid, async ({ body }, ctx) => {
     await markJobPaid(ctx, body.jobId, body.paidOn);
@@ -69,6 +80,7 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
   });
   route(table, api.exportPayWeek, async ({ params }, { now }) => linesCsv([await read(params.startsOn, now())]));
   handoverRoutes(table);
+  timeOffRoutes(table);
   route(table, api.getWeekSoFar, (_input, ctx) => readWeekSoFar(ctx));
   route(table, api.listStatements, async (_input, ctx) => ({ statements: await listStatements(ctx) }));
   route(table, api.getStatement, ({ params }, ctx) => readStatement(ctx, params.startsOn, params.personId));
@@ -77,4 +89,3 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
     return statementPdf(statement, (await companyOf()).zone);
   });
 }
-  timeOffRoutes(table);

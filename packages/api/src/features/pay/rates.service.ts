@@ -45,7 +45,7 @@ export function listRules(id: string | null = null, tx?: Transaction): Promise<P
     `SELECT r.id, r.starts_on AS "startsOn", r.overtime_rule_set AS "overtimeRuleSet", trim_scale(r.minimum_wage)::text AS "minimumWage",
             r.crew_split AS "crewSplit", r.meal_break_minutes AS "mealBreakMinutes",
             r.punch_rounding_minutes AS "punchRoundingMinutes", r.premium_rounding AS "premiumRounding",
-            r.commission_earned AS "commissionEarned", r.workweek_starts_on AS "workweekStartsOn",
+            r.commission_earned AS "commissionEarned", r.tips_go_to AS "tipsGoTo", trim_scale(r.tip_card_fee_percent)::text AS "tipCardFeePercent", r.workweek_starts_on AS "workweekStartsOn",
             r.workweek_starts_at AS "workweekStartsAt", coalesce(u.name, '') AS "setBy"
        FROM pay_rules r LEFT JOIN users u ON u.id = r.set_by WHERE (:id::uuid IS NULL OR r.id = :id::uuid) ORDER BY r.starts_on DESC`,
     { id },
