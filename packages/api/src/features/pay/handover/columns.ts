@@ -11,7 +11,7 @@ type Columns<Name extends string> = readonly (readonly [name: Name, meaning: str
 const KIND_MEANINGS: Record<PayKind, string> = {
   straight_pay: 'Hours, salary, day rates, premiums for a role or shift, rest breaks paid apart',
   flat: 'Flat amounts, job rates, trips on which nobody was home',
-  commission: 'Commission, that of a month settled or paid for later with it',
+  commission: 'Commission with what is settled later, less what customers’ refunds take off it',
   bonus: 'Bonuses inside the regular rate (29 CFR 778.208 to 778.211)',
   percentage_bonus: 'A percentage of all earnings; carries its own overtime (29 CFR 778.210)',
   discretionary_bonus: 'Discretionary bonuses, outside the regular rate (29 CFR 778.211)',
@@ -77,6 +77,32 @@ export const hourColumns = [
   ['ended', 'The same'],
   ['hours', 'Hours that counted, 4 places; 0.0000 for a break that is not worked'],
   ['worked', 'yes or no: whether it counted as worked time'],
+] as const satisfies Columns<string>;
+
+/** clock-entries.csv in a person’s own export: a row per entry as it stands, beside what was recorded first. */
+export const clockColumns = [
+  version,
+  ['entry_id', 'Names the entry in clock-corrections.json and audit.json'],
+  ['kind', 'Kind of clock entry'],
+  ['job', 'Job number, where the entry was on a job'],
+  ['started', 'Date and time with the offset from UTC'],
+  ['ended', 'The same; empty while it runs'],
+  ['original_kind', 'As first recorded; empty when the entry was written down later'],
+  ['original_started', 'As first recorded'],
+  ['original_ended', 'As first recorded'],
+  ['corrections', 'How many; each stands in clock-corrections.json'],
+  ['last_reason', 'Why it was corrected last'],
+] as const satisfies Columns<string>;
+
+/** tips.csv in a person’s own export: a row per tip and locked week. */
+export const tipColumns = [
+  version,
+  ['week_start', 'First day of the workweek'],
+  ['date', 'When it was received'],
+  ['job', 'Job number'],
+  ['method', 'card, cash or invoice'],
+  ['own_share', 'Dollars; the own share alone'],
+  ['paid_out', 'no for tips received on the spot'],
 ] as const satisfies Columns<string>;
 
 /** lines.csv, and the week’s export.csv: a row per person and line. Older than the version column, so without one. */

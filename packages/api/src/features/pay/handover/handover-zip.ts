@@ -26,16 +26,17 @@ export async function handoverZip(ctx: Ctx, weeks: readonly LockedWeek[]): Promi
   return zipOf(files, ctx.now());
 }
 
-/** A PDF per person and week. Customers stay out: their names are nobody’s business outside the company. */
+/** A PDF per person and week, of the lines given. Customers stay out: their names are nobody’s business outside the company. */
 export async function statementFiles(ctx: Ctx, weeks: readonly LockedWeek[]): Promise<ZipFiles> {
   const { zone } = await companyOf();
   const files: ZipFiles = {};
   for (const { week, people } of weeks) {
-    for (const { personId, name } of people) {
-      const statement = await readStatement(ctx, week.startsOn, personId);
+    for (const person of people) {
+      const { personId, name } = person;
+      const statement = { ...(await readStatement(ctx, week.startsOn, personId)), person, customers: {} };
       const path = `statements/${week.startsOn}-${pathPart(name)}`;
       const free = `${path}.pdf` in files ? `${path}-${personId.slice(-6)}` : path;
-      files[`${free}.pdf`] = await statementPdf({ ...statement, customers: {} }, zone);
+      files[`${free}.pdf`] = await statementPdf(statement, zone);
     }
   }
   return files;

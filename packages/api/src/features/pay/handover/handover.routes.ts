@@ -8,6 +8,7 @@ import { hoursCsv } from './hours-csv.ts';
 import { kindsCsv } from './kinds-csv.ts';
 import { hoursBefore, jobNumbersOf, weekToHandOver, weeksOfPayday, type LockedWeek } from './locked-weeks.queries.ts';
 import { listPaydayPeople, listPaydays, listWaitingWeeks, onePayday } from './paydays.queries.ts';
+import { personZip } from './person-zip.ts';
 import { changePayday, handOverPayday, makePayday, removePayday } from './paydays.service.ts';
 
 /** Paydays, and the files that go to the payroll processor. */
@@ -39,4 +40,5 @@ export function handoverRoutes(table: RouteTable): void {
   route(table, api.exportWeekKinds, async ({ params }, ctx) => kinds(await week(ctx, params.startsOn)));
   route(table, api.exportWeekHours, async ({ params }, ctx) => hours(await week(ctx, params.startsOn)));
   route(table, api.exportWeekAll, async ({ params }, ctx) => handoverZip(ctx, await week(ctx, params.startsOn)));
+  route(table, api.exportPersonPay, ({ params }, ctx) => personZip(ctx, params.personId));
 }

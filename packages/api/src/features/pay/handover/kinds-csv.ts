@@ -1,6 +1,6 @@
 import { exact, sum } from '@driprail/shared/domain/money/exact';
 import { addKinds, kindsOfPay, payKinds, type KindSums } from '@driprail/shared/domain/pay/handover/kinds-of-pay';
-import type { PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
+import type { PayLine, PayTip, PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
 import { EXPORT_SCHEMA_VERSION, kindColumns, namesOf, peopleColumns } from './columns.ts';
 import { csvText, fourPlaces, harmless, plainCents } from './csv.ts';
 import type { HoursBefore, LockedWeek } from './locked-weeks.queries.ts';
@@ -64,10 +64,13 @@ function kindsOf({ input }: LockedWeek, person: PersonWeek, hours: HoursBefore):
       if (startsOn === undefined) return [...(carried?.weeks ?? []).map((week) => week.hours), person.hoursWorked];
       return [hours(person.personId, startsOn)].filter((known) => known !== undefined);
     },
-    tipMethod: (tipId) => {
-      const tip = input.tips.find((one) => one.id === tipId);
-      if (!tip) throw new Error(`the locked week keeps no tip ${tipId}`);
-      return tip.method;
-    },
+    tipMethod: (line) => tipMethodOf(input, line),
   });
+}
+
+/** How the tip of a locked line came. */
+export function tipMethodOf({ tips }: Pick<PayWeekInput, 'tips'>, { key }: Pick<PayLine, 'key'>): PayTip['method'] {
+  const tip = tips.find((one) => key === `tip:${one.id}`);
+  if (!tip) throw new Error(`the locked week keeps no record of ${key}`);
+  return tip.method;
 }

@@ -38,7 +38,6 @@ const KIND_OF_LINE: Record<PayLineKind, PayKind | 'premium' | 'tip'> = {
   commission: 'commission',
   refund: 'commission',
   commission_settlement: 'commission',
-  refund: 'commission',
   bonus: 'bonus',
   percentage_bonus: 'percentage_bonus',
   discretionary_bonus: 'discretionary_bonus',

@@ -5,16 +5,17 @@ import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
 import { ClockEntry } from '../../../../db/models/index.ts';
 
-/** A clock entry of whole hours on a day of New York's summer time, from "07:00". */
+/** A clock entry on a day of New York’s summer time, from "07:00" to "12:30". */
 export async function worked(
   personId: string,
   day: string,
   from: string,
   to: string,
   kind: ClockKindName = 'shop',
+  visitId: string | null = null,
 ): Promise<void> {
   const at = (clock: string) => new Date(`${day}T${clock}:00-04:00`);
-  await ClockEntry.create({ id: uuid(), personId, kind, startedAt: at(from), endedAt: at(to) });
+  await ClockEntry.create({ id: uuid(), personId, kind, visitId, startedAt: at(from), endedAt: at(to) });
 }
 
 export async function hourly(owner: TestAgent, personId: string, value: string): Promise<void> {
