@@ -5,6 +5,7 @@ import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { centsText, decimalText } from '@driprail/shared/domain/money/rounding';
 import { formatDate, formatDay } from '@driprail/shared/domain/time/format';
+import { timeOffKindNames } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 
 // One weight only ships for paper: rank is by size and by rules.
@@ -16,7 +17,7 @@ type Document = InstanceType<typeof PDFDocument>;
 
 /** A pay statement on Letter paper, fonts embedded: every line with its job, totals double-ruled, page x of y. */
 export function statementPdf(
-  { week, person, companyName, customers, yearToDate }: StatementDto,
+  { week, person, companyName, customers, yearToDate, timeOff }: StatementDto,
   zone: string,
 ): Promise<Buffer> {
   const doc = new PDFDocument({
@@ -44,6 +45,7 @@ export function statementPdf(
   }
   total(doc, person.totals.gross);
   text(doc, 9, yearWords(yearToDate));
+  if (timeOff.length > 0) text(doc, 9, timeOffWords(timeOff, week.state === 'locked'));
   text(
     doc,
     8,
@@ -57,6 +59,22 @@ export function statementPdf(
 function yearWords({ year, weeks, hours, grossCents, tipCents, overtimePremiumCents }: YearToDate): string {
   const span = weeks === 1 ? '1 week' : `${weeks} weeks`;
   return `${year} to date, ${span}: gross ${centsText(grossCents)}, ${decimalText(exact(hours), 2)} h, overtime premium ${centsText(overtimePremiumCents)}, tips in the gross ${centsText(tipCents)}.`;
+}
+
+/** "Sick: earned 1.33 h, taken 8.00 h, balance 12.00 h." by kind. */
+function timeOffWords(rows: StatementDto['timeOff'], isLocked: boolean): string {
+  const words = rows.map(({ kind, earned, taken, adjusted, lost, balance }) => {
+    const parts = [
+      ['earned', earned],
+      ['taken', taken],
+      ['set by the owner', adjusted],
+      ['not kept', lost],
+      ['balance', balance],
+    ] as const;
+    const said = parts.filter(([name, hours]) => name === 'balance' || !exact(hours).equals(0));
+    return `${timeOffKindNames[kind]}: ${said.map(([name, hours]) => `${name} ${decimalText(exact(hours), 2)} h`).join(', ')}`;
+  });
+  return `Paid time off${isLocked ? '' : ', expected until the week is locked'}. ${words.join('. ')}.`;
 }
 
 function collected(doc: Document): Promise<Buffer> {
@@ -102,7 +120,9 @@ const groupNames: Partial<Record<PayLine['kind'], string>> = {
   hourly: 'Hours',
   overtime_premium: 'Hours',
   minimum_wage_make_up: 'Hours',
+  show_up_pay: 'Hours',
   flat: 'Flat',
+  no_show_trip: 'Flat',
   commission: 'Commission',
   tip: 'Tips',
   tip_already_received: 'Tips',

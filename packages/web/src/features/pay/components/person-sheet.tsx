@@ -10,6 +10,7 @@ import { Icon, Mark } from '../../../components/icon.tsx';
 import { money } from '../../../lib/format.ts';
 import { useRemoveAdjustment } from '../api/pay.queries.ts';
 import { ledgerGroups } from './ledger.ts';
+import { StatementBalances } from './time-off/statement-balances.tsx';
 import { LedgerSection, LineCells } from './ledger-line.tsx';
 
 interface Props {
@@ -52,6 +53,7 @@ export function PersonSheet({ dto, person, next, plan, minimumWage, isPicked, on
       </p>
       <Checks person={person} minimumWage={minimumWage} />
       <div className="foot no-print">
+      <StatementBalances rows={dto.timeOff[person.personId] ?? []} isExpected={week.state !== 'locked'} />
         <Link className="btn" to={paths.statement(week.startsOn, person.personId)}>
           <Icon name="print" /> Print statement
         </Link>

@@ -8,6 +8,7 @@ import { dayOf } from '@driprail/shared/domain/time/zone';
 import { hoursMinutes, money, useFormats } from '../../../lib/format.ts';
 import { ledgerGroups } from './ledger.ts';
 import { LedgerSection, LineCells } from './ledger-line.tsx';
+import { StatementBalances } from './time-off/statement-balances.tsx';
 import { dayHead, weekSpan } from './week-model.ts';
 import { WorkingSteps } from './working-steps.tsx';
 
@@ -66,6 +67,7 @@ export function StatementPaper({ statement, hasLinks }: Props) {
       </p>
       <YearLine statement={statement} />
       <p className="stmt-note">
+      <StatementBalances rows={statement.timeOff} isExpected={week.state !== 'locked'} />
         Gross pay in US dollars, before taxes and other withholding, which a licensed payroll processor works out.
         {person.regularRate ? ` The week’s regular rate is ${decimalText(exact(person.regularRate), 4)} an hour.` : ''}
       </p>

@@ -74,6 +74,7 @@ describe('what asks for somebody', () => {
     correctedLines: {},
     customers: {},
     yearsToDate: {},
+    timeOff: {},
     warningTimes: { e1: since },
   });
 

@@ -4,6 +4,7 @@ import { Link, useNavigate, useParams, useSearchParams } from 'react-router';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { addDays } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
+import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Empty } from '../../../components/states.tsx';
@@ -23,6 +24,7 @@ import { basePlanWords, planOn } from '../components/plan-base-words.ts';
 import { planWords, rulesOn } from '../components/plan-words.ts';
 import { StageRail } from '../components/stage-rail.tsx';
 import { TroubleTape } from '../components/trouble-tape.tsx';
+import { TimeOffSheet } from '../components/time-off/time-off-sheet.tsx';
 import { WeekActions } from '../components/week-actions.tsx';
 import {
   hoursSum,
@@ -58,6 +60,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
   const navigate = useNavigate();
   const [adjusting, setAdjusting] = useState<AdjustmentStart | null>(null);
   const rates = useQuery(ratesQuery).data?.rates;
+  const [isPayingOff, setPayingOff] = useState(false);
   const plans = useQuery(plansQuery).data?.plans ?? [];
   const rules = useQuery(rulesQuery).data?.rules;
   const move = useSetWeekState(dto.week.startsOn);
@@ -133,6 +136,13 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
             )}
           </div>
           {chosen ? (
+            {week.state === 'locked' ? null : (
+              <p className="no-print mt-3">
+                <Button onClick={() => setPayingOff(true)}>
+                  <Icon name="plus" /> Pay time off
+                </Button>
+              </p>
+            )}
             <PersonSheet
               dto={dto}
               person={chosen}
@@ -148,6 +158,9 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
       </RailPage>
       {adjusting ? <AdjustmentSheet start={adjusting} onClose={closeSheet} /> : null}
     </>
+      {isPayingOff ? (
+        <TimeOffSheet personId={null} startsOn={week.startsOn} onClose={() => setPayingOff(false)} />
+      ) : null}
   );
 }
 

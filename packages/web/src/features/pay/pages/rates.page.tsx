@@ -31,6 +31,7 @@ import { RatesNow } from '../components/rates-now.tsx';
 import { RulesForm } from '../components/rules-form.tsx';
 import { WhatIf } from '../components/what-if.tsx';
 import { timeAxis } from '../components/time-axis.ts';
+import { TimeOffPart } from '../components/time-off/time-off-part.tsx';
 import './rates.css';
 
 /** Start-dated rates of a person or the company, and the company's pay rules: history, now, and to come. */
@@ -150,6 +151,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
         </div>
         {person && over.length > 0 ? (
           <WhatIf
+        <TimeOffPart people={active} person={person} today={today} nextWeek={nextWeek} earliest={earliest} />
             key={person.id}
             person={person}
             weeks={over}

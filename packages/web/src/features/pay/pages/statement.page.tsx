@@ -37,7 +37,8 @@ function statementsOf(dto: PayWeekDto, companyName: string): StatementDto[] {
   const { week, correctedLines, customers } = dto;
   return dto.people.flatMap((person) => {
     const yearToDate = dto.yearsToDate[person.personId];
-    return yearToDate ? [{ week, person, companyName, correctedLines, customers, yearToDate }] : [];
+    const timeOff = dto.timeOff[person.personId] ?? [];
+    return yearToDate ? [{ week, person, companyName, correctedLines, customers, yearToDate, timeOff }] : [];
   });
 }
 

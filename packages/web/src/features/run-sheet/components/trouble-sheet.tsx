@@ -21,7 +21,7 @@ export function TroubleSheet({
   isBusy: boolean;
   error: string | undefined;
   onSend: (trouble: { trouble: Trouble; reason: string }) => void;
-  onCallOff: (reason: string) => void;
+  onCallOff: (trouble: { trouble: Trouble; reason: string }) => void;
   onClose: () => void;
 }) {
   const [trouble, setTrouble] = useState<Trouble | null>(null);
@@ -63,7 +63,9 @@ export function TroubleSheet({
           <Button
             isBusy={isBusy}
             disabled={trouble === null}
-            onClick={() => trouble && onCallOff([troubleNames[trouble], note.trim()].filter(Boolean).join(': '))}
+            onClick={() =>
+              trouble && onCallOff({ trouble, reason: [troubleNames[trouble], note.trim()].filter(Boolean).join(': ') })
+            }
           >
             Call the visit off
           </Button>

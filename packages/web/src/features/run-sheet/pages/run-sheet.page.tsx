@@ -158,7 +158,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
           error={press.error?.message}
           onClose={close}
           onSend={(trouble) => press.mutate({ visit: shown, kind: 'trouble', ...trouble }, { onSuccess: close })}
-          onCallOff={(reason) => press.mutate({ visit: shown, kind: 'call_off', reason }, { onSuccess: close })}
+          onCallOff={(trouble) => press.mutate({ visit: shown, kind: 'call_off', ...trouble }, { onSuccess: close })}
         />
       ) : null}
       {shown && panel?.kind === 'part_done' ? (
@@ -170,7 +170,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
           onSend={(part) => press.mutate({ visit: shown, kind: 'part_done', ...part }, { onSuccess: close })}
         />
       ) : null}
-      {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} onClose={close} /> : null}
+      {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} tipsGoTo={sheet.tipsGoTo} onClose={close} /> : null}
       {shown && panel?.kind === 'look' ? (
         <Sheet title={shown.customerName} onClose={close} width={480}>
           <div className="ph-sheet pb-4">
