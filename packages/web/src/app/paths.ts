@@ -16,6 +16,7 @@ export const paths = {
   people: '/people',
   payWeeks: '/pay',
   payWeek: (day: string) => `/pay/${day}`,
+  paydays: '/pay/paydays',
   payWorking: (day: string, personId: string) => `/pay/${day}/${personId}`,
   rates: '/pay-rates',
   hours: '/hours',

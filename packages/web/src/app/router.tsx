@@ -103,6 +103,12 @@ export function createRouter() {
                   }),
                 },
                 {
+                  path: paths.paydays,
+                  lazy: async () => ({
+                    Component: (await import('../features/pay/pages/paydays.page.tsx')).PaydaysPage,
+                  }),
+                },
+                {
                   path: `${paths.payWeeks}/:day`,
                   lazy: async () => ({
                     Component: (await import('../features/pay/pages/pay-week.page.tsx')).PayWeekPage,

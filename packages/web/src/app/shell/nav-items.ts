@@ -24,6 +24,7 @@ export function navItems(ability: AppAbility, rides: boolean): NavItem[] {
 export function menuItems(ability: AppAbility, hasLocalMail: boolean, personId: string | null): NavItem[] {
   const items: (NavItem | false)[] = [
     personId !== null && { to: paths.statements, label: 'My pay' },
+    ability.can('read', 'Payday') && { to: paths.paydays, label: 'Paydays' },
     ability.can('read', 'Rate') && { to: paths.rates, label: 'Rates and pay rules' },
     ability.can('update', 'Settings') && { to: paths.settings, label: 'Settings' },
     ability.can('read', 'Login') && { to: paths.logins, label: 'Logins' },

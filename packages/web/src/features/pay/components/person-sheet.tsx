@@ -11,6 +11,7 @@ import { money } from '../../../lib/format.ts';
 import { useRemoveAdjustment } from '../api/pay.queries.ts';
 import { ledgerGroups } from './ledger.ts';
 import { StatementBalances } from './time-off/statement-balances.tsx';
+import { PayRecord } from './paydays/pay-record.tsx';
 import { LedgerSection, LineCells } from './ledger-line.tsx';
 
 interface Props {
@@ -52,14 +53,15 @@ export function PersonSheet({ dto, person, next, plan, minimumWage, isPicked, on
         Gross <span className="t-level">{money(person.totals.gross)}</span>
       </p>
       <Checks person={person} minimumWage={minimumWage} />
-      <div className="foot no-print">
       <StatementBalances rows={dto.timeOff[person.personId] ?? []} isExpected={week.state !== 'locked'} />
+      <div className="foot no-print">
         <Link className="btn" to={paths.statement(week.startsOn, person.personId)}>
           <Icon name="print" /> Print statement
         </Link>
         <Button onClick={onAdjust}>
           <Icon name="plus" /> {week.state === 'locked' ? 'Correction' : 'Adjustment'}
         </Button>
+        <PayRecord personId={person.personId} name={person.name} />
         {next ? (
           <Link className="btn bare" to={`?person=${next.personId}`} replace preventScrollReset>
             Next: {next.name.split(' ')[0]} <Icon name="down" />

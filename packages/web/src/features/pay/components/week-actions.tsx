@@ -7,6 +7,7 @@ import { Icon } from '../../../components/icon.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { money } from '../../../lib/format.ts';
 import type { useSetWeekState } from '../api/pay.queries.ts';
+import { FilesMenu } from './paydays/files-menu.tsx';
 import { isRunning, weekSpan, weekSums } from './week-model.ts';
 
 interface Props {
@@ -25,9 +26,20 @@ export function WeekActions({ dto, toSettle, now, move }: Props) {
   const canCheck = !isRunning(week, now) && toSettle === 0;
   return (
     <>
-      <a className="btn" href={`/api/pay/weeks/${week.startsOn}/export.csv`} download={`pay-week-${week.startsOn}.csv`}>
-        <Icon name="dn" /> CSV
-      </a>
+      <Link className="btn" to={paths.paydays}>
+        Paydays
+      </Link>
+      {week.state === 'locked' ? (
+        <FilesMenu week={week} />
+      ) : (
+        <a
+          className="btn"
+          href={`/api/pay/weeks/${week.startsOn}/export.csv`}
+          download={`pay-week-${week.startsOn}.csv`}
+        >
+          <Icon name="dn" /> CSV
+        </a>
+      )}
       <Link className="btn" to={paths.statement(week.startsOn, 'all')}>
         <Icon name="print" /> Print all statements
       </Link>

@@ -13,6 +13,7 @@ import { money, useFormats } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { statementsQuery } from '../api/pay.queries.ts';
 import { TimeOffBalances } from '../components/time-off/time-off-balances.tsx';
+import { PayRecord } from '../components/paydays/pay-record.tsx';
 import { WeekSoFar } from '../components/week-so-far.tsx';
 import { weekSpan } from '../components/week-model.ts';
 import './statement.css';
@@ -46,10 +47,10 @@ export function StatementsPage() {
       <RailPage>
         <div className="my-pay">
           {user.personId && ability.can('read', tag('Estimate', { personId: user.personId })) ? <WeekSoFar /> : null}
-          <Loaded query={statements} what="your statements">
           {user.personId && ability.can('read', tag('TimeOffBalance', { personId: user.personId })) ? (
             <TimeOffBalances personId={user.personId} title="My paid time off" />
           ) : null}
+          <Loaded query={statements} what="your statements">
             {({ statements: own }) =>
               own.length === 0 || user.personId === null ? (
                 <Empty>No statements yet. Each week’s statement is here once the week is locked.</Empty>
@@ -72,6 +73,9 @@ export function StatementsPage() {
               )
             }
           </Loaded>
+          {user.personId && ability.can('read', tag('PayRecord', { personId: user.personId })) ? (
+            <PayRecord personId={user.personId} name={user.name} isOwn />
+          ) : null}
         </div>
       </RailPage>
     </>

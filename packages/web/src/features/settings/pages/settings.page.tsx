@@ -125,6 +125,18 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
             />
           ))}
         </fieldset>
+        <fieldset>
+          <legend className="sec w-full">Mail when a pay week is locked</legend>
+          <CheckField
+            label="Names gross and hours beside the link to the statement"
+            checked={value.statementMailShowsFigures}
+            onChange={(event) => setValue({ ...value, statementMailShowsFigures: event.target.checked })}
+          />
+          <p className="caution mt-2">
+            <b>Caution.</b> Mail is not private: it may be read on shared phones and on its way. Without this the mail
+            is a link, and the figures stay behind the sign-in.
+          </p>
+        </fieldset>
         <p className="t-2">
           Overtime, minimum wage, the crew split and the workweek are dated rules of pay:{' '}
           <Link to={paths.rates}>Rates and pay rules</Link>.
