@@ -144,6 +144,8 @@ export const addVisit = endpoint({
   }),
   response: z.object({ job: jobDto }),
 });
+/** A tip meant for one of the crew: shared by the crew all the same, or that person's. */
+export const tipsGoTo = ['crew', 'person'] as const;
 export const recordTip = endpoint({
   method: 'post',
   path: '/api/jobs/:id/tips',

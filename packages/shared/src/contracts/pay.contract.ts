@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
 import { clockKinds } from './clock.contract.ts';
 import { cents, clockTime, day, decimal, done, id, instant, shortText } from './fields.ts';
+import { tipsGoTo } from './jobs.contract.ts';
 import { everyone } from '../authz/actor.ts';
 import type { PayLine, PayWarning, PersonWeek } from '../domain/pay/pay-week.types.ts';
 import { statementTimeOff } from '../domain/pay/time-off/statement-time-off.ts';
@@ -82,7 +83,6 @@ export const addRate = endpoint({
 });
 
 const punchRoundingMinutes = z.union([z.literal(5), z.literal(6), z.literal(15)]).nullable();
-export const tipsGoTo = ['crew', 'person'] as const;
 export const commissionEarned = ['done', 'paid'] as const;
 export const premiumRoundings = ['half_up', 'up'] as const;
 export const payRulesDto = z.object({

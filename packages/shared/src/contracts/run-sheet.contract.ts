@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
 import { clockStateDto } from './clock.contract.ts';
 import { day, id, instant, shortText } from './fields.ts';
+import { tipsGoTo } from './jobs.contract.ts';
 import { visitDto } from './visit.dto.ts';
 import { everyone } from '../authz/actor.ts';
 import { progressActions } from '../domain/board/progress.ts';
@@ -54,6 +55,8 @@ export const runSheetDto = z.object({
   crewNames: z.array(z.string()),
   visits: z.array(runVisitDto),
   clock: clockStateDto.nullable(),
+  /** Whether a tip may be meant for one of the crew. */
+  tipsGoTo: z.enum(tipsGoTo).default('crew'),
 });
 export type RunSheetDto = z.infer<typeof runSheetDto>;
 

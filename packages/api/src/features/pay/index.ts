@@ -1,5 +1,5 @@
 export { payRoutes } from './pay.routes.ts';
 export { addRate, addRules } from './rates.service.ts';
 export { setWeekState } from './lock.service.ts';
-export { workweekRuleOn } from './weeks.service.ts';
+export { rulesOn, workweekRuleOn } from './weeks.service.ts';
 export { verifyWeeks } from './verify.ts';

@@ -6,6 +6,7 @@ import { select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { forbidden, unprocessable } from '../../http/errors.ts';
 import { clockOfPerson } from '../clock/index.ts';
+import { rulesOn } from '../pay/index.ts';
 import { readRunRows, toRunVisit } from './run-visits.queries.ts';
 
 /** One's own crew's day. @throws 403 for a technician's days that are not near, 422 without a person behind the login */
@@ -26,6 +27,7 @@ export async function readRunSheet({ actor, now }: Ctx, day: string): Promise<Ru
     crewNames: riding?.names ?? [],
     visits: rows.map((row) => toRunVisit(row, { now: now(), zone, undoSeconds })),
     clock: await clockOfPerson(personId, now()),
+    tipsGoTo: (await rulesOn(day)).tipsGoTo,
   };
 }
 

@@ -33,11 +33,11 @@ const sefa = async () => {
 const agree = (more: object) =>
   owner.post('/api/pay/agreements').send({ personId, kind: 'refunds', note: 'Paper in the office folder', ...more });
 const reason = async (name: string, lowersCommission: boolean) => {
-  const { body } = await owner
+  const answer = await owner
     .post('/api/pay/refund-reasons')
     .send({ name, lowersCommission, startsOn: '2026-01-01' })
     .expect(200);
-  return (body as { refundReason: RefundReasonDto }).refundReason;
+  return (answer.body as { refundReason: RefundReasonDto }).refundReason;
 };
 
 describe('rates of other things', () => {

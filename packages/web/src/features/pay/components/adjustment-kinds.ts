@@ -31,6 +31,12 @@ export const adjustmentWords: Record<AdjustmentKindName, KindWords> = {
     caution: 'Not hours worked, so it stays out of the regular rate (29 CFR 778.218).',
     picks: ['Sick day', 'Vacation day', 'Holiday'],
   },
+  refund: {
+    label: 'Refund to a customer',
+    caution:
+      'Lowers this week’s commission alone, never hourly pay, floors or paid overtime, and only by a plan the person signed (29 CFR 778.121). Some states forbid it: ask a licensed adviser.',
+    picks: ['Job refunded', 'Part of the job refunded'],
+  },
   deduction: {
     label: 'Deduction',
     caution:
@@ -43,4 +49,27 @@ export const adjustmentWords: Record<AdjustmentKindName, KindWords> = {
       'Names the locked line and stays out of this week’s regular rate. Late hours may have made overtime in their own week: the difference shown on the locked week counts that.',
     picks: ['Time written down late', 'Wrong rate', 'Line left out', 'Price changed'],
   },
+};
+
+/** Kinds whose amount is typed without a sign and taken off. */
+export function takesOff(kind: AdjustmentKindName): boolean {
+  return kind === 'deduction' || kind === 'refund';
+}
+
+export function addWords(kind: AdjustmentKindName): string {
+  if (kind === 'correction') return 'Add correction';
+  if (kind === 'refund') return 'Add refund';
+  return kind === 'deduction' ? 'Add deduction' : 'Add amount';
+}
+
+export interface CountedUnit {
+  unit: 'mile' | 'review';
+  label: string;
+  quantity: string;
+}
+
+/** Kinds whose amount may be a count times a dated rate. */
+export const countedUnits: Partial<Record<AdjustmentKindName, CountedUnit>> = {
+  bonus: { unit: 'review', label: 'Count reviews, by the dated rate', quantity: 'Reviews' },
+  reimbursement: { unit: 'mile', label: 'Count miles, by the dated rate', quantity: 'Miles' },
 };

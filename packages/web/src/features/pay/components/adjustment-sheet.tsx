@@ -8,9 +8,12 @@ import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { parseMoney } from '../../../lib/format.ts';
 import { useAddAdjustment, weekQuery, weeksQuery } from '../api/pay.queries.ts';
-import { adjustmentWords } from './adjustment-kinds.ts';
+import { addWords, adjustmentWords, countedUnits, takesOff } from './adjustment-kinds.ts';
 import type { AdjustmentKindName } from './adjustment-kinds.ts';
+import { RefundReasonField } from './agreements/refund-reason-field.tsx';
+import { CountedFields } from './counted-fields.tsx';
 import { CorrectedLineField } from './corrected-line-field.tsx';
+import { TimeOffSheet } from './time-off/time-off-sheet.tsx';
 import { openWeeks, weekSpan } from './week-model.ts';
 
 export interface AdjustmentStart {
@@ -37,28 +40,59 @@ export function AdjustmentSheet({
   const add = useAddAdjustment();
   const weeks = useQuery(weeksQuery);
   const open = openWeeks(weeks.data?.weeks ?? []);
-  const [value, setValue] = useState({ ...start, reason: '', lineId: '' });
+  const [value, setValue] = useState({
+    ...start,
+    reason: '',
+    lineId: '',
+    isCounted: false,
+    quantity: '',
+    on: '',
+    refundReasonId: '',
+  });
   const [amountError, setAmountError] = useState<string | undefined>();
+  const [isByHand, setByHand] = useState(false);
   const startsOn = value.startsOn ?? open[0]?.startsOn ?? '';
   const isCorrection = value.kind === 'correction';
-  const mended = useQuery({ ...weekQuery(value.mends ?? ''), enabled: isCorrection && value.mends !== null });
+  const namesLine = isCorrection || value.kind === 'refund';
+  const mended = useQuery({ ...weekQuery(value.mends ?? ''), enabled: namesLine && value.mends !== null });
   const lineIds = mended.data?.lineIds ?? {};
   const lineId = value.lineId || (value.lineKey ? (lineIds[`${value.personId}:${value.lineKey}`] ?? '') : '');
   const fields = fieldsOf(add.error);
   const words = adjustmentWords[value.kind];
 
+  const unit = countedUnits[value.kind];
+  const isCounted = unit !== undefined && value.isCounted;
+  const on = value.on || startsOn;
+
   const submit = () => {
-    const cents = parseMoney(value.amount);
-    setAmountError(cents === null ? 'Give an amount like 24.00.' : undefined);
-    if (cents === null || add.isPending) return;
-    const amountCents = value.kind === 'deduction' ? -Math.abs(cents) : cents;
+    const cents = isCounted ? null : parseMoney(value.amount);
+    setAmountError(cents === null && !isCounted ? 'Give an amount like 24.00.' : undefined);
+    if ((cents === null && !isCounted) || add.isPending) return;
+    const amountCents = cents !== null && takesOff(value.kind) ? -Math.abs(cents) : cents;
     const { personId, kind, reason } = value;
-    const correctsLineId = isCorrection && lineId !== '' ? lineId : null;
-    add.mutate(
-      { startsOn, body: { personId, kind, amountCents, reason, correctsLineId } },
-      { onSuccess: () => onClose(startsOn) },
-    );
+    const body = {
+      ...{ personId, kind, amountCents, reason },
+      correctsLineId: namesLine && lineId !== '' ? lineId : null,
+      counted: isCounted ? { unit: unit.unit, quantity: value.quantity.replace(/[,\s]/g, ''), on } : null,
+      refundReasonId: kind === 'refund' ? value.refundReasonId || null : null,
+    };
+    add.mutate({ startsOn, body }, { onSuccess: () => onClose(startsOn) });
   };
+
+  if (value.kind === 'paid_time_off' && !isByHand)
+    return (
+      <TimeOffSheet personId={value.personId} startsOn={value.startsOn} onClose={onClose}>
+        <p className="t-2">
+          For <b className="t-name text-ink">{value.name}</b>.{' '}
+          <button type="button" className="link" onClick={() => setValue({ ...value, kind: start.kind })}>
+            Another kind
+          </button>{' '}
+          <button type="button" className="link" onClick={() => setByHand(true)}>
+            An amount instead of hours
+          </button>
+        </p>
+      </TimeOffSheet>
+    );
 
   return (
     <Sheet title={isCorrection ? 'Correct' : 'Adjust'} onClose={() => onClose(null)} width={620}>
@@ -88,14 +122,17 @@ export function AdjustmentSheet({
           <TextField
             label="Amount, dollars"
             inputMode="decimal"
-            value={value.amount}
+            value={isCounted ? '' : value.amount}
+            disabled={isCounted}
             error={amountError ?? fields['amountCents']}
             hint={
               isCorrection
                 ? 'With a minus sign it takes away.'
-                : value.kind === 'deduction'
+                : takesOff(value.kind)
                   ? 'Is taken off.'
-                  : undefined
+                  : isCounted
+                    ? 'Counted below.'
+                    : undefined
             }
             onChange={(event) => {
               setValue({ ...value, amount: event.target.value });
@@ -103,7 +140,24 @@ export function AdjustmentSheet({
             }}
           />
         </div>
-        {isCorrection ? (
+        {unit ? (
+          <CountedFields
+            words={unit}
+            value={value}
+            on={on}
+            errors={fields}
+            onChange={(parts) => setValue({ ...value, ...parts })}
+          />
+        ) : null}
+        {value.kind === 'refund' ? (
+          <RefundReasonField
+            day={startsOn}
+            value={value.refundReasonId}
+            error={fields['refundReasonId']}
+            onChange={(refundReasonId) => setValue({ ...value, refundReasonId })}
+          />
+        ) : null}
+        {namesLine ? (
           <CorrectedLineField
             personId={value.personId}
             weeks={(weeks.data?.weeks ?? []).filter((week) => week.state === 'locked' && week.startsOn < startsOn)}
@@ -154,7 +208,7 @@ export function AdjustmentSheet({
         <SheetFoot>
           <Button onClick={() => onClose(null)}>Leave it</Button>
           <Button type="submit" look="main" isBusy={add.isPending}>
-            {isCorrection ? 'Add correction' : value.kind === 'deduction' ? 'Add deduction' : 'Add amount'}
+            {addWords(value.kind)}
           </Button>
         </SheetFoot>
       </form>

@@ -26,10 +26,11 @@ const GROUPS: { key: string; title: string; kinds: PayLineKind[] }[] = [
       'overtime_premium',
       'settlement_premium',
       'minimum_wage_make_up',
+      'show_up_pay',
     ],
   },
-  { key: 'flat', title: 'Flat per service', kinds: ['flat', 'job_rate'] },
-  { key: 'commission', title: 'Commission', kinds: ['commission', 'commission_settlement'] },
+  { key: 'flat', title: 'Flat per service', kinds: ['flat', 'job_rate', 'no_show_trip'] },
+  { key: 'commission', title: 'Commission', kinds: ['commission', 'commission_settlement', 'refund'] },
   { key: 'tips', title: 'Tips', kinds: ['tip'] },
   { key: 'received', title: 'Tips already received', kinds: ['tip_already_received'] },
   {
@@ -86,7 +87,8 @@ export function howText(line: PayLine): string {
     const isShared = line.working.length > 2;
     return `${isShared ? 'share of ' : ''}${shortText(rate)}% of ${line.working[0]?.result ?? ''}`;
   }
-  if (line.kind === 'flat' && rate) return line.working.length > 1 ? `share of ${rateText(line.rate)}` : 'flat';
+  if ((line.kind === 'flat' || line.kind === 'no_show_trip') && rate)
+    return line.working.length > 1 ? `share of ${rateText(line.rate)}` : 'flat';
   if (line.kind === 'tip' || line.kind === 'tip_already_received')
     return line.working.length > 1 ? `share of ${line.working[0]?.result ?? ''}` : '';
   return '';
@@ -122,6 +124,9 @@ export const kindTitles: Record<PayLineKind, string> = {
   discretionary_bonus: 'Bonus',
   reimbursement: 'Paid back',
   paid_time_off: 'Time off',
+  refund: 'Refund',
+  no_show_trip: 'No-show trip',
+  show_up_pay: 'Show-up pay',
   deduction: 'Deduction',
   correction: 'Correction',
 };

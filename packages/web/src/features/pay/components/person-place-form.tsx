@@ -22,7 +22,7 @@ export function PersonPlaceForm({ people, places, startsOn, onDone }: Props) {
   return (
     <form
       noValidate
-      className="place-form"
+      className="dated-form"
       onSubmit={(event) => {
         event.preventDefault();
         if (!set.isPending) set.mutate({ ...value, placeId: value.placeId || null }, { onSuccess: onDone });

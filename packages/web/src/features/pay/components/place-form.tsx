@@ -53,7 +53,7 @@ export function PlaceForm({ ruleSets, startsOn, onDone }: Props) {
   return (
     <form
       noValidate
-      className="place-form"
+      className="dated-form"
       onSubmit={(event) => {
         event.preventDefault();
         submit();

@@ -30,7 +30,7 @@ export function PlacesSheet({ people, startsOn }: { people: PersonDto[]; startsO
           {found.places.length === 0 ? (
             <Empty>No places yet. Everybody is paid by the company’s rules alone.</Empty>
           ) : (
-            <ul className="place-list">
+            <ul className="dated-list">
               {found.places.map((place) => (
                 <li key={place.id}>
                   <b>{place.name}</b>

@@ -20,7 +20,7 @@ export function rateKey({ kind, personId, serviceId, clockKind }: RateDto): stri
 /** How a person is paid on a day, in a few words: "19.50 an hour, 6% on 3 services"; short, "Hourly, 6% on 3 services". */
 export function planWords(rates: readonly RateDto[], personId: string, day: string, isShort = false): string {
   const own = ratesOn(rates, day).filter((rate) => rate.personId === null || rate.personId === personId);
-  const hourly = own.filter((rate) => rate.kind === 'hourly' && rate.clockKind === null);
+  const hourly = own.filter((rate) => rate.kind === 'hourly' && rate.clockKind === null && rate.serviceId === null);
   const hour = hourly.find((rate) => rate.personId !== null) ?? hourly[0];
   const hourWords = isShort ? 'Hourly' : `${rateText(hour?.value ?? null)} an hour`;
   const parts = [hour ? hourWords : 'No hourly rate', ...commissionWords(own)];

@@ -77,7 +77,7 @@ export function rateWords({ kind, value }: Pick<RateDto, 'kind' | 'value'>): str
   return kind === 'commission_percent' ? `${shortText(exact(value))}%` : rateText(value);
 }
 
-const order = { hourly: 0, commission_percent: 1, flat_service: 2 };
+const order = { hourly: 0, commission_percent: 1, flat_service: 2, product_cost: 3, per_review: 4, mileage: 5 };
 
 /** The rows of a person, the person's own first and then the company's; or of the company alone. */
 export function rateRows(rates: readonly RateDto[], personId: string | null, today: string): BandRow[] {
@@ -103,14 +103,23 @@ export function rateRows(rates: readonly RateDto[], personId: string | null, tod
     }));
 }
 
+const titles = {
+  commission_percent: 'Commission',
+  flat_service: 'Flat per line',
+  product_cost: 'Product cost',
+  per_review: 'Bonus per review',
+  mileage: 'A mile',
+};
+
 function rowTitle({ kind, clockKind }: RateDto): string {
-  if (kind === 'commission_percent') return 'Commission';
-  if (kind === 'flat_service') return 'Flat per line';
+  if (kind !== 'hourly') return titles[kind];
   return clockKind ? `${clockKindNames[clockKind]}, by the hour` : 'By the hour';
 }
 
 function scopeWords({ kind, clockKind }: RateDto): string {
   if (kind === 'commission_percent') return 'every service';
+  if (kind === 'mileage') return 'own car, paid back';
+  if (kind === 'per_review') return 'promised';
   return clockKind ? 'only this kind' : 'all worked time';
 }
 
@@ -148,6 +157,16 @@ export function ruleRows(rules: readonly PayRulesDto[], today: string, clock: Cl
     ),
     row('premium', 'Premium, rounded', 'to the cent, once a week', (r) =>
       r.premiumRounding === 'up' ? 'Always up' : 'Half up',
+    ),
+    row('earned', 'Commission', 'is earned when', (r) =>
+      r.commissionEarned === 'paid' ? 'The customer has paid' : 'The work is done',
+    ),
+    row(
+      'tips',
+      'Tips',
+      'always the crew’s',
+      (r) => (r.tipsGoTo === 'person' ? 'Whom the customer meant' : 'Shared by the crew'),
+      (r) => (exact(r.tipCardFeePercent).gt(0) ? `card fee ${shortText(exact(r.tipCardFeePercent))}%` : ''),
     ),
     row('week', 'Workweek', 'seven days, fixed', (r) => `${weekdayWords[r.workweekStartsOn - 1] ?? ''} ${startOf(r)}`),
   ];

@@ -23,7 +23,7 @@ const kinds: Record<RateDto['kind'], { label: string; value: string; hint: strin
   hourly: {
     label: 'By the hour',
     value: 'Dollars an hour',
-    hint: 'Every worked hour, travel and shop time too, unless a kind of work has its own.',
+    hint: 'Every worked hour, travel and shop time too, unless a kind of work or a service has its own. A service’s rate pays for the time on visits that finished it.',
   },
   commission_percent: {
     label: 'Commission, percent of the line',
@@ -34,6 +34,21 @@ const kinds: Record<RateDto['kind'], { label: string; value: string; hint: strin
     label: 'Flat per finished line',
     value: 'Dollars a line',
     hint: 'For each finished line of the service, shared in the crew. 0 ends it.',
+  },
+  product_cost: {
+    label: 'Product cost, off the commission’s base',
+    value: 'Dollars a line',
+    hint: 'Comes off what a finished line of the service sold for, before the percentage. 0 ends it.',
+  },
+  per_review: {
+    label: 'Bonus per review',
+    value: 'Dollars a review',
+    hint: 'Promised, so it counts in the regular rate (29 CFR 778.211). Reviews are counted when the bonus is added to a week.',
+  },
+  mileage: {
+    label: 'A mile in one’s own car',
+    value: 'Dollars a mile',
+    hint: 'Paid back, not wages (29 CFR 778.217). Miles are counted when they are added to a week.',
   },
 };
 
@@ -50,14 +65,17 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
   });
   const fields = fieldsOf(add.error);
   const isHourly = value.kind === 'hourly';
+  const forCompany = value.kind === 'product_cost' || value.kind === 'mileage';
+  const goesByService = value.kind !== 'mileage' && value.kind !== 'per_review';
+  const needsService = value.kind === 'flat_service' || value.kind === 'product_cost';
   const words = kinds[value.kind];
   const submit = () => {
     if (add.isPending) return;
     add.mutate(
       {
         kind: value.kind,
-        personId: value.personId || null,
-        serviceId: isHourly ? null : value.serviceId || null,
+        personId: forCompany ? null : value.personId || null,
+        serviceId: goesByService ? value.serviceId || null : null,
         clockKind: isHourly ? value.clockKind || null : null,
         value: value.value.replace(/[$%,\s]/g, ''),
         startsOn: value.startsOn,
@@ -76,7 +94,8 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
       <div className="grid grid-cols-2 gap-3 max-[520px]:grid-cols-1">
         <SelectField
           label="For"
-          value={value.personId}
+          value={forCompany ? '' : value.personId}
+          disabled={forCompany}
           error={fields['personId']}
           onChange={(event) => setValue({ ...value, personId: event.target.value })}
         >
@@ -113,21 +132,22 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
               </option>
             ))}
           </SelectField>
-        ) : (
+        ) : null}
+        {goesByService ? (
           <SelectField
             label="Service"
             value={value.serviceId}
             error={fields['serviceId']}
             onChange={(event) => setValue({ ...value, serviceId: event.target.value })}
           >
-            <option value="">{value.kind === 'flat_service' ? 'Choose the service' : 'Every service'}</option>
+            <option value="">{needsService ? 'Choose the service' : isHourly ? 'Any time' : 'Every service'}</option>
             {services.map((service) => (
               <option key={service.id} value={service.id}>
                 {service.name}
               </option>
             ))}
           </SelectField>
-        )}
+        ) : null}
         <div className="grid grid-cols-2 gap-3">
           <TextField
             label={words.value}

@@ -31,6 +31,9 @@ export function RulesForm({
     mealBreakMinutes: String(current?.mealBreakMinutes ?? 30),
     punchRoundingMinutes: String(current?.punchRoundingMinutes ?? ''),
     premiumRounding: current?.premiumRounding ?? ('half_up' as const),
+    commissionEarned: current?.commissionEarned ?? ('done' as const),
+    tipsGoTo: current?.tipsGoTo ?? ('crew' as const),
+    tipCardFeePercent: current?.tipCardFeePercent ?? '0',
     workweekStartsOn: current?.workweekStartsOn ?? 1,
     workweekStartsAt: current?.workweekStartsAt ?? '00:00',
   });
@@ -44,6 +47,7 @@ export function RulesForm({
           ...value,
           minimumWage: value.minimumWage.replace(/[$,\s]/g, ''),
           mealBreakMinutes: Number(value.mealBreakMinutes),
+          tipCardFeePercent: value.tipCardFeePercent.replace(/[%\s]/g, '') || '0',
           punchRoundingMinutes: stepOf(value.punchRoundingMinutes),
         };
         if (!add.isPending) add.mutate(body, { onSuccess: onDone });
@@ -118,6 +122,33 @@ export function RulesForm({
           <option value="up">always up to the cent</option>
         </SelectField>
         <SelectField
+          label="Commission is earned"
+          value={value.commissionEarned}
+          error={fields['commissionEarned']}
+          onChange={(event) =>
+            setValue({ ...value, commissionEarned: event.target.value as PayRulesDto['commissionEarned'] })
+          }
+        >
+          <option value="done">when the work is done</option>
+          <option value="paid">when the customer has paid</option>
+        </SelectField>
+        <SelectField
+          label="A tip meant for one of the crew"
+          value={value.tipsGoTo}
+          error={fields['tipsGoTo']}
+          onChange={(event) => setValue({ ...value, tipsGoTo: event.target.value as PayRulesDto['tipsGoTo'] })}
+        >
+          <option value="crew">is shared by the crew</option>
+          <option value="person">goes to that person</option>
+        </SelectField>
+        <TextField
+          label="Card fee taken off card tips, percent"
+          inputMode="decimal"
+          value={value.tipCardFeePercent}
+          error={fields['tipCardFeePercent']}
+          onChange={(event) => setValue({ ...value, tipCardFeePercent: event.target.value })}
+        />
+        <SelectField
           label="Workweek starts on"
           value={value.workweekStartsOn}
           error={fields['workweekStartsOn']}
@@ -142,6 +173,19 @@ export function RulesForm({
           <b>Caution.</b> Rounded punches are tolerated only while they even out over time, for the person as much as
           for the company (29 CFR 785.48(b)); some states do not allow them. The punches themselves are kept as they
           were.
+        </p>
+      ) : null}
+      {value.commissionEarned === 'paid' ? (
+        <p className="caution mt-4">
+          <b>Caution.</b> Commission then waits until you mark the job as paid, and is settled with the overtime it
+          brings to the week of the work (29 CFR 778.119). Every week still meets the minimum wage on its own payday.
+          The written plan has to say so, and some states set when commission is earned.
+        </p>
+      ) : null}
+      {Number(value.tipCardFeePercent) > 0 ? (
+        <p className="caution mt-4">
+          <b>Caution.</b> At most what the card really costs may come off, never below the minimum wage (DOL Fact Sheet
+          #15); some states, California among them, forbid it, and a place with such rules pays the whole tip.
         </p>
       ) : null}
       <p className="caution mt-4">

@@ -65,13 +65,27 @@ export function StatementPaper({ statement, hasLinks }: Props) {
       <p className="total">
         Gross <span className="t-level">{money(person.totals.gross)}</span>
       </p>
+      <WaitingLine person={person} />
       <YearLine statement={statement} />
-      <p className="stmt-note">
       <StatementBalances rows={statement.timeOff} isExpected={week.state !== 'locked'} />
+      <p className="stmt-note">
         Gross pay in US dollars, before taxes and other withholding, which a licensed payroll processor works out.
         {person.regularRate ? ` The week’s regular rate is ${decimalText(exact(person.regularRate), 4)} an hour.` : ''}
       </p>
     </article>
+  );
+}
+
+/** Commission that is earned once customers pay: shown, in no sum. */
+function WaitingLine({ person: { waiting } }: { person: StatementDto['person'] }) {
+  if (!waiting) return null;
+  const numbers = waiting.jobs.map((job) => job.jobNumber).join(', ');
+  return (
+    <p className="stmt-note">
+      Commission of {money(waiting.amountCents)} waits until the customer pays (
+      {waiting.jobs.length === 1 ? 'job' : 'jobs'} {numbers}); it is settled in the week the payment comes in, with the
+      overtime it brings.
+    </p>
   );
 }
 

@@ -14,7 +14,7 @@ export function WageForm({ place, startsOn, onDone }: { place: PayPlaceDto; star
   return (
     <form
       noValidate
-      className="place-form"
+      className="dated-form"
       onSubmit={(event) => {
         event.preventDefault();
         const body = { ...value, amount: value.amount.replace(/[$,\s]/g, '') };

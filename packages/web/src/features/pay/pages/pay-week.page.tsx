@@ -16,6 +16,7 @@ import { ratesQuery, rulesQuery } from '../api/rates.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
 import { AdjustmentSheet } from '../components/adjustment-sheet.tsx';
 import type { AdjustmentStart } from '../components/adjustment-sheet.tsx';
+import { WaitingTape } from '../components/jobs-paid/waiting-tape.tsx';
 import { LateTape } from '../components/late-tape.tsx';
 import { PastWeeks } from '../components/past-weeks.tsx';
 import type { WeekFigures } from '../components/past-weeks.tsx';
@@ -23,8 +24,8 @@ import { PersonSheet } from '../components/person-sheet.tsx';
 import { basePlanWords, planOn } from '../components/plan-base-words.ts';
 import { planWords, rulesOn } from '../components/plan-words.ts';
 import { StageRail } from '../components/stage-rail.tsx';
-import { TroubleTape } from '../components/trouble-tape.tsx';
 import { TimeOffSheet } from '../components/time-off/time-off-sheet.tsx';
+import { TroubleTape } from '../components/trouble-tape.tsx';
 import { WeekActions } from '../components/week-actions.tsx';
 import {
   hoursSum,
@@ -59,8 +60,8 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
   const [search] = useSearchParams();
   const navigate = useNavigate();
   const [adjusting, setAdjusting] = useState<AdjustmentStart | null>(null);
-  const rates = useQuery(ratesQuery).data?.rates;
   const [isPayingOff, setPayingOff] = useState(false);
+  const rates = useQuery(ratesQuery).data?.rates;
   const plans = useQuery(plansQuery).data?.plans ?? [];
   const rules = useQuery(rulesQuery).data?.rules;
   const move = useSetWeekState(dto.week.startsOn);
@@ -118,6 +119,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
               </p>
             ) : null}
             <TroubleTape dto={dto} warnings={warnings} />
+            <WaitingTape rules={rules ?? []} />
             <LateTape
               late={dto.lateDifferences}
               onCorrect={({ personId, name, nowCents, lockedCents, correctedCents }) =>
@@ -134,8 +136,6 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
                 <WeekTable dto={dto} chosenId={chosen?.personId ?? null} now={now} plan={(id) => plan(id, true)} />
               </div>
             )}
-          </div>
-          {chosen ? (
             {week.state === 'locked' ? null : (
               <p className="no-print mt-3">
                 <Button onClick={() => setPayingOff(true)}>
@@ -143,6 +143,8 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
                 </Button>
               </p>
             )}
+          </div>
+          {chosen ? (
             <PersonSheet
               dto={dto}
               person={chosen}
@@ -156,11 +158,11 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
           <PastWeeks weeks={weeks} here={{ startsOn: week.startsOn, share }} />
         </div>
       </RailPage>
-      {adjusting ? <AdjustmentSheet start={adjusting} onClose={closeSheet} /> : null}
-    </>
       {isPayingOff ? (
         <TimeOffSheet personId={null} startsOn={week.startsOn} onClose={() => setPayingOff(false)} />
       ) : null}
+      {adjusting ? <AdjustmentSheet start={adjusting} onClose={closeSheet} /> : null}
+    </>
   );
 }
 

@@ -18,6 +18,7 @@ import { plansQuery } from '../api/plans.queries.ts';
 import { payPeopleQuery, payServicesQuery, ratesQuery, rulesQuery } from '../api/rates.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
 import { CommissionTest } from '../components/commission-test.tsx';
+import { AgreementsSheet } from '../components/agreements/agreements-sheet.tsx';
 import { BandChart } from '../components/band-chart.tsx';
 import { rateText } from '../components/ledger.ts';
 import { ratesOn, rulesOn } from '../components/plan-words.ts';
@@ -30,8 +31,8 @@ import { RateForm } from '../components/rate-form.tsx';
 import { RatesNow } from '../components/rates-now.tsx';
 import { RulesForm } from '../components/rules-form.tsx';
 import { WhatIf } from '../components/what-if.tsx';
-import { timeAxis } from '../components/time-axis.ts';
 import { TimeOffPart } from '../components/time-off/time-off-part.tsx';
+import { timeAxis } from '../components/time-axis.ts';
 import './rates.css';
 
 /** Start-dated rates of a person or the company, and the company's pay rules: history, now, and to come. */
@@ -51,7 +52,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
   const now = useNow();
   const today = dayOf(now, zone);
   const [search, setSearch] = useSearchParams();
-  const [adding, setAdding] = useState<'rate' | 'rules' | 'plan' | 'places' | 'trial' | null>(null);
+  const [adding, setAdding] = useState<'rate' | 'rules' | 'plan' | 'places' | 'papers' | 'trial' | null>(null);
   const [trial, setTrial] = useState<PayPlan | null>(null);
   const people = useQuery(payPeopleQuery).data?.people ?? [];
   const services = useQuery(payServicesQuery).data?.services ?? [];
@@ -111,6 +112,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
               Pay week
             </Link>
             <Button onClick={() => setAdding('places')}>Places</Button>
+            <Button onClick={() => setAdding('papers')}>Agreements</Button>
             <Button onClick={() => setAdding('rules')}>New rules</Button>
             <Button onClick={() => setAdding('plan')}>New plan</Button>
             <Button look="main" onClick={() => setAdding('rate')}>
@@ -149,9 +151,9 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
           </section>
           <RatesNow people={active} rates={rates} plans={plans} today={today} chosenId={personId} />
         </div>
+        <TimeOffPart people={active} person={person} today={today} nextWeek={nextWeek} earliest={earliest} />
         {person && over.length > 0 ? (
           <WhatIf
-        <TimeOffPart people={active} person={person} today={today} nextWeek={nextWeek} earliest={earliest} />
             key={person.id}
             person={person}
             weeks={over}
@@ -168,6 +170,11 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
       {adding === 'places' ? (
         <Sheet title="Places" onClose={() => setAdding(null)} width={760}>
           <PlacesSheet people={active} startsOn={nextWeek} />
+        </Sheet>
+      ) : null}
+      {adding === 'papers' ? (
+        <Sheet title="Agreements and refunds" onClose={() => setAdding(null)} width={760}>
+          <AgreementsSheet people={active} personId={personId} startsOn={nextWeek} today={today} />
         </Sheet>
       ) : null}
       {adding === 'plan' || adding === 'trial' ? (
@@ -221,7 +228,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
 
 function sumsOf(rates: RateDto[], rules: PayRulesDto[], personId: string | null, today: string) {
   const now = ratesOn(rates, today).filter((rate) => rate.personId === null || rate.personId === personId);
-  const hourly = now.filter((rate) => rate.kind === 'hourly' && rate.clockKind === null);
+  const hourly = now.filter((rate) => rate.kind === 'hourly' && rate.clockKind === null && rate.serviceId === null);
   const hour = hourly.find((rate) => rate.personId !== null) ?? hourly[0];
   const percents = now.filter((rate) => rate.kind === 'commission_percent');
   const own = percents.filter((rate) => rate.personId !== null);

@@ -1,7 +1,7 @@
 import { useState } from 'react';
-import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
+import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { Button } from '../../../components/button.tsx';
-import { CheckField, TextField } from '../../../components/field.tsx';
+import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { parseMoney } from '../../../lib/format.ts';
 import { useRecordTip } from '../api/run-sheet.queries.ts';
@@ -15,10 +15,19 @@ const methods = [
 ] as const;
 
 /** A tip belongs to the crew. Cash kept on the spot is recorded and adds nothing to what is to be paid. */
-export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () => void }) {
+export function TipSheet({
+  visit,
+  tipsGoTo,
+  onClose,
+}: {
+  visit: RunVisitDto;
+  tipsGoTo: RunSheetDto['tipsGoTo'];
+  onClose: () => void;
+}) {
   const [amount, setAmount] = useState('');
   const [method, setMethod] = useState<'cash' | 'card' | 'invoice'>('cash');
   const [isKept, setKept] = useState(true);
+  const [forPersonId, setFor] = useState<string | null>(null);
   const tip = useRecordTip(visit);
   const cents = parseMoney(amount);
   return (
@@ -47,6 +56,20 @@ export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () =
             </button>
           ))}
         </div>
+        {tipsGoTo === 'person' && visit.crew.length > 1 ? (
+          <SelectField
+            label="Meant for"
+            value={forPersonId ?? ''}
+            onChange={(event) => setFor(event.target.value || null)}
+          >
+            <option value="">The crew</option>
+            {visit.crew.map((member) => (
+              <option key={member.personId} value={member.personId}>
+                {member.name}
+              </option>
+            ))}
+          </SelectField>
+        ) : null}
         {method === 'cash' ? (
           <CheckField
             label="Kept by the crew on the spot"
@@ -62,7 +85,7 @@ export function TipSheet({ visit, onClose }: { visit: RunVisitDto; onClose: () =
           disabled={cents === null || cents <= 0}
           onClick={() =>
             tip.mutate(
-              { amountCents: cents ?? 0, method, alreadyReceived: method === 'cash' && isKept },
+              { amountCents: cents ?? 0, method, alreadyReceived: method === 'cash' && isKept, forPersonId },
               { onSuccess: onClose },
             )
           }
