@@ -7,7 +7,19 @@ import { commissionWhenPaid } from './2026-12-01-008-commission-when-paid.ts';
 import { paidTimeOff } from './2026-12-01-007-paid-time-off.ts';
 import { paydays } from './2026-12-01-006-paydays.ts';
 import { payFacts } from './2026-12-01-009-pay-facts.ts';
+import { checkedFigures } from './2026-12-01-010-checked-figures.ts';
 import { pay } from './2026-12-01-003-pay.ts';
 
 /** In the order in which they are run. */
-export const migrations: Migration[] = [company, work, pay, hours, payPlans, paydays, paidTimeOff, commissionWhenPaid, payFacts];
+export const migrations: Migration[] = [
+  company,
+  work,
+  pay,
+  hours,
+  payPlans,
+  paydays,
+  paidTimeOff,
+  commissionWhenPaid,
+  payFacts,
+  checkedFigures,
+];

@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { PersonFigures } from '@driprail/shared/domain/pay/week-difference';
 
 export class PayWeek extends Model<InferAttributes<PayWeek>, InferCreationAttributes<PayWeek>> {
   declare id: string;
@@ -14,6 +15,8 @@ export class PayWeek extends Model<InferAttributes<PayWeek>, InferCreationAttrib
   declare lockedBy: CreationOptional<string | null>;
   declare engineVersion: CreationOptional<string | null>;
   declare snapshot: CreationOptional<object | null>;
+  /** The figures as they were when the week was last checked. */
+  declare lastChecked: CreationOptional<{ at: string; people: PersonFigures[] } | null>;
   declare version: CreationOptional<number>;
 }
 
@@ -32,6 +35,7 @@ export function initPayWeek(sequelize: Sequelize): void {
       lockedBy: { type: DataTypes.UUID, allowNull: true },
       engineVersion: { type: DataTypes.TEXT, allowNull: true },
       snapshot: { type: DataTypes.JSONB, allowNull: true },
+      lastChecked: { type: DataTypes.JSONB, allowNull: true },
       version: { type: DataTypes.INTEGER },
     },
     { sequelize, modelName: 'PayWeek', tableName: 'pay_weeks', underscored: true, timestamps: false },

@@ -52,9 +52,16 @@ export function setWeekState(ctx: Ctx, day: string, to: State, version: number, 
 
 async function check(tx: Transaction, { actor, now }: Ctx, week: PayWeek): Promise<void> {
   refuseRunning(week, now(), 'checked');
-  refuseUnsettled(await compute(tx, week, now()));
+  const result = await compute(tx, week, now());
+  refuseUnsettled(result);
+  const people = result.people.map(({ personId, name, hoursWorked, totals }) => ({
+    ...{ personId, name, hoursWorked, totals },
+  }));
   await week.update(
-    { state: 'checked', checkedAt: now(), checkedBy: actor.userId, version: week.version + 1 },
+    {
+      ...{ state: 'checked', checkedAt: now(), checkedBy: actor.userId, version: week.version + 1 },
+      lastChecked: { at: now().toISOString(), people },
+    },
     { transaction: tx },
   );
   hintAfterCommit(tx, ['owners'], 'pay', week.id, week.version);

@@ -2,6 +2,7 @@ import type { Request } from 'express';
 import * as api from '@driprail/shared/contracts/pay.contract';
 import * as agreements from '@driprail/shared/contracts/pay-agreements.contract';
 import * as jobsPaid from '@driprail/shared/contracts/jobs-paid.contract';
+import { getPayDifference } from '@driprail/shared/contracts/pay-difference.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
 import { companyOf, todayOf } from '../../db/company.ts';
@@ -16,6 +17,7 @@ import { jobsPaidLately, jobsWaiting } from './deferred/jobs-paid.queries.ts';
 import { markJobPaid, takeBackJobPaid } from './deferred/jobs-paid.service.ts';
 import { linesCsv } from './export.ts';
 import { handoverRoutes } from './handover/handover.routes.ts';
+import { readDifference } from './difference.queries.ts';
 import { setWeekState } from './lock.service.ts';
 import { readPayWeek } from './pay-week.queries.ts';
 import { addPlace, addWage, listPersonPlaces, listPlaces, placePerson } from './places.service.ts';
@@ -70,6 +72,7 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
     return { weeks: await listWeeks(await todayOf(now())) };
   });
   route(table, api.getPayWeek, ({ params }, { now }) => read(params.startsOn, now()));
+  route(table, getPayDifference, ({ params, query }, { now }) => readDifference(params.startsOn, query.against, now()));
   route(table, api.setPayWeekState, ({ params, body }, ctx, { req }) =>
     setWeekState(ctx, params.startsOn, body.to, body.version, baseUrlOf(req)),
   );

@@ -42,7 +42,15 @@ function untouched({ startsOn, endsOn, startsAt, endsAt }: Workweek): PayWeek {
   const bounds = { startsAt: new Date(startsAt), endsAt: new Date(endsAt) };
   return PayWeek.build({
     ...{ id: uuid(), startsOn, endsOn, ...bounds, state: 'draft', version: 0 },
-    ...{ checkedAt: null, checkedBy: null, lockedAt: null, lockedBy: null, engineVersion: null, snapshot: null },
+    ...{
+      checkedAt: null,
+      checkedBy: null,
+      lockedAt: null,
+      lockedBy: null,
+      engineVersion: null,
+      snapshot: null,
+      lastChecked: null,
+    },
   });
 }
 

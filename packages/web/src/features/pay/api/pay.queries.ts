@@ -1,6 +1,7 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
 import type { QueryClient } from '@tanstack/react-query';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
+import { getPayDifference } from '@driprail/shared/contracts/pay-difference.contract';
 import {
   addAdjustment,
   getPayWeek,
@@ -23,6 +24,11 @@ export const weekQuery = (startsOn: string) =>
     queryKey: ['pay', 'week', startsOn],
     queryFn: ({ signal }) => call(getPayWeek, { params: { startsOn } }, signal),
     enabled: startsOn !== '',
+  });
+export const differenceQuery = (startsOn: string, against: 'week_before' | 'last_checked') =>
+  queryOptions({
+    queryKey: ['pay', 'difference', startsOn, against],
+    queryFn: ({ signal }) => call(getPayDifference, { params: { startsOn }, query: { against } }, signal),
   });
 export const statementsQuery = queryOptions({
   queryKey: ['pay', 'statements'],

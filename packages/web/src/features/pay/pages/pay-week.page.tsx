@@ -36,6 +36,7 @@ import {
   weekSpan,
   weekSums,
 } from '../components/week-model.ts';
+import { WeekDifference } from '../components/week-difference.tsx';
 import { WeekTable } from '../components/week-table.tsx';
 import './pay.css';
 import './pay-week.css';
@@ -136,6 +137,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
                 <WeekTable dto={dto} chosenId={chosen?.personId ?? null} now={now} plan={(id) => plan(id, true)} />
               </div>
             )}
+            {people.length === 0 ? null : <WeekDifference week={week} />}
             {week.state === 'locked' ? null : (
               <p className="no-print mt-3">
                 <Button onClick={() => setPayingOff(true)}>
