@@ -11,6 +11,7 @@ import { writePeople } from './people.ts';
 import { Rota } from './plan-day.ts';
 import type { DemoRows } from './rows.ts';
 import { idsFrom, noRows } from './rows.ts';
+import { writeTimeOffPay } from './time-off-rows.ts';
 import { writeToday } from './today.ts';
 import { writeVans } from './vans.ts';
 
@@ -47,6 +48,7 @@ export function buildDemo(now: Date): Demo {
   writeHistory(book, people, vans, rota);
   writeComingDays(book, people, vans, customers, rota);
   writePay(book, people);
+  writeTimeOffPay(book, people);
   rows.jobs.sort((a, b) => a.createdAt.getTime() - b.createdAt.getTime());
   return { calendar, rows, ownerUserId: people.ownerUserId };
 }

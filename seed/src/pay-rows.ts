@@ -1,7 +1,6 @@
 import type { AdjustmentKind } from '@driprail/shared/domain/pay/pay-week.types';
 import { workweekOf } from '@driprail/shared/domain/time/workweek';
 import { addDays } from '@driprail/shared/domain/time/zone';
-import { RESTED } from './away.ts';
 import { PAST_WEEKS, ZONE, instant, minuteOf } from './calendar.ts';
 import type { Book } from './job-rows.ts';
 import type { ServiceName } from './menu.ts';
@@ -68,7 +67,6 @@ interface Added {
 const added: Added[] = [
   { weeksAgo: 11, name: 'Sefa Lund', kind: 'bonus', cents: 5000, reason: 'Five reviews in a month, as promised' },
   { weeksAgo: 9, name: 'Tomas Reyes', kind: 'reimbursement', cents: 2340, reason: 'Fuel paid at the pump' },
-  { weeksAgo: 7, name: RESTED, kind: 'paid_time_off', cents: 76_800, reason: 'Vacation, 40 h at 19.20' },
   { weeksAgo: 5, name: 'Idris Vale', kind: 'bonus', cents: 7500, reason: 'Taught Lio Fenn the wheels, as agreed' },
   { weeksAgo: 4, name: 'Cal Webb', kind: 'deduction', cents: -2400, reason: 'Work boots, half of 48.00' },
   {

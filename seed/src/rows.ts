@@ -39,6 +39,8 @@ export interface DemoRows {
   payRules: Row<models.PayRuleSet>[];
   payWeeks: Row<models.PayWeek>[];
   payAdjustments: Row<models.PayAdjustment>[];
+  timeOffRules: Row<models.TimeOffRuleRow>[];
+  timeOffAdjustments: Row<models.TimeOffAdjustment>[];
 }
 
 export function noRows(): DemoRows {
@@ -68,6 +70,8 @@ export function noRows(): DemoRows {
     payRules: [],
     payWeeks: [],
     payAdjustments: [],
+    timeOffRules: [],
+    timeOffAdjustments: [],
   };
 }
 

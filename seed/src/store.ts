@@ -36,5 +36,7 @@ export function storeRows(rows: DemoRows, passwordHash: string): Promise<void> {
     await models.PayRuleSet.bulkCreate(rows.payRules, options);
     await models.PayWeek.bulkCreate(rows.payWeeks, options);
     await models.PayAdjustment.bulkCreate(rows.payAdjustments, options);
+    await models.TimeOffRuleRow.bulkCreate(rows.timeOffRules, options);
+    await models.TimeOffAdjustment.bulkCreate(rows.timeOffAdjustments, options);
   });
 }

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import type { ReactNode } from 'react';
 import { useQuery } from '@tanstack/react-query';
-import type { TimeOffQuote } from '@driprail/shared/contracts/time-off.contract';
+import type { TimeOffQuote, TimeOffWarning } from '@driprail/shared/contracts/time-off.contract';
 import { timeOffKindNames, timeOffKinds } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import type { TimeOffKind } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { dayOf } from '@driprail/shared/domain/time/zone';
@@ -30,6 +30,17 @@ interface Props {
   onClose: (addedTo: string | null) => void;
 }
 
+interface Draft {
+  personId: string;
+  kind: TimeOffKind;
+  /** As typed. */
+  hours: string;
+  on: string;
+  startsOn: string;
+  /** By the code of the warning that each accepts. */
+  reasons: Partial<Record<TimeOffWarning['code'], string>>;
+}
+
 const HOURS = /^\d{1,2}(\.\d{1,4})?$/;
 
 /** Pays hours off: the balance and what the hours come to stand there before anything is saved. */
@@ -39,9 +50,8 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
   const today = dayOf(useNow(), zone);
   const people = (useQuery(payPeopleQuery).data?.people ?? []).filter((person) => person.isActive);
   const open = openWeeks(useQuery(weeksQuery).data?.weeks ?? []);
-  const [value, setValue] = useState({
-    ...{ personId: personId ?? '', kind: 'sick' as TimeOffKind, hours: '8', on: '', startsOn: asked ?? '' },
-    reasons: {} as Record<string, string>,
+  const [value, setValue] = useState<Draft>({
+    ...{ personId: personId ?? '', kind: 'sick', hours: '8', on: '', startsOn: asked ?? '', reasons: {} },
   });
   const week = open.find((one) => one.startsOn === value.startsOn) ?? open[0];
   const startsOn = week?.startsOn ?? '';
@@ -55,7 +65,7 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
   const fields = { ...fieldsOf(quote.error), ...fieldsOf(take.error) };
   const found = isReady && quote.error === null ? quote.data : undefined;
   const warnings = found?.warnings ?? [];
-  const change = (next: Partial<typeof value>) => {
+  const change = (next: Partial<Draft>) => {
     if (take.error) take.reset();
     setValue({ ...value, ...next });
   };
