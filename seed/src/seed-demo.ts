@@ -1,6 +1,7 @@
 import { hashPassword } from '@driprail/api/features/access/index';
 import { isSetUpNeeded } from '@driprail/api/features/settings/index';
 import { buildDemo } from './build-demo.ts';
+import { handOverWeeks } from './hand-over.ts';
 import { lockWeeks } from './lock-weeks.ts';
 import { storeRows } from './store.ts';
 
@@ -16,5 +17,6 @@ export async function seedDemo({ now }: { now: Date }): Promise<boolean> {
   const demo = buildDemo(now);
   await storeRows(demo.rows, await hashPassword(DEMO_PASSWORD));
   await lockWeeks(demo);
+  await handOverWeeks(demo);
   return true;
 }

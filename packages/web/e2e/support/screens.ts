@@ -56,6 +56,7 @@ async function openVisitPath(context: BrowserContext): Promise<string> {
   return `/board?visit=${board.visits.find((visit) => visit.customerName === 'Odette Yarrow')?.id ?? ''}`;
 }
 
+const openFiles = (page: Page) => page.locator('.files-menu summary').click();
 const press = (name: string) => (page: Page) => page.getByRole('button', { name, exact: true }).first().click();
 
 const door: Screen[] = [
@@ -82,6 +83,8 @@ const office: Screen[] = [
   { name: 'service', role: 'owner', path: '/service-menu', open: press('Edit') },
   { name: 'pay-week', role: 'owner', path: `/pay/${LAST_WEEK}` },
   { name: 'pay-week-locked', role: 'owner', path: `/pay/${LOCKED_WEEK}` },
+  { name: 'pay-week-files', role: 'owner', path: `/pay/${LOCKED_WEEK}`, open: openFiles },
+  { name: 'paydays', role: 'owner', path: '/pay/paydays', hasGrounds: true },
   { name: 'pay-working', role: 'owner', path: async (context) => `/pay/${LAST_WEEK}/${await somebodyId(context)}` },
   { name: 'pay-rates', role: 'owner', path: '/pay-rates' },
   {

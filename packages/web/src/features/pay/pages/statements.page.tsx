@@ -43,6 +43,11 @@ export function StatementsPage() {
                 { label: 'Statements', value: list.length },
               ]
         }
+        actions={
+          user.personId && ability.can('read', tag('PayRecord', { personId: user.personId })) ? (
+            <PayRecord personId={user.personId} name={user.name} isOwn />
+          ) : null
+        }
       />
       <RailPage>
         <div className="my-pay">
@@ -73,9 +78,6 @@ export function StatementsPage() {
               )
             }
           </Loaded>
-          {user.personId && ability.can('read', tag('PayRecord', { personId: user.personId })) ? (
-            <PayRecord personId={user.personId} name={user.name} isOwn />
-          ) : null}
         </div>
       </RailPage>
     </>

@@ -1,10 +1,13 @@
 import { useState } from 'react';
 import type { HandoverWeek, PaydayDto } from '@driprail/shared/contracts/handover.contract';
+import { dayOf } from '@driprail/shared/domain/time/zone';
 import { Button } from '../../../../components/button.tsx';
 import { TextField } from '../../../../components/field.tsx';
 import { FormError } from '../../../../components/form-error.tsx';
+import { SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
-import { money } from '../../../../lib/format.ts';
+import { money, useFormats } from '../../../../lib/format.ts';
+import { useNow } from '../../../../lib/now.ts';
 import { useSavePayday } from '../../api/paydays.queries.ts';
 import { weekSpan } from '../week-model.ts';
 import { paydayFor, tickedAtFirst } from './payday-model.ts';
@@ -23,11 +26,17 @@ export function PaydayForm({ payday, weeks, onDone }: Props) {
   const [ticked, setTicked] = useState(payday ? payday.weeks.map((week) => week.startsOn) : tickedAtFirst(weeks));
   const [date, setDate] = useState<string | null>(payday?.paysOn ?? null);
   const [note, setNote] = useState(payday?.note ?? '');
-  const paysOn = date ?? paydayFor(weeks, ticked);
+  const today = dayOf(useNow(), useFormats().zone);
+  const paysOn = date ?? paydayFor(weeks, ticked, today);
   const fields = fieldsOf(save.error);
   const tick = (startsOn: string, isTicked: boolean) =>
     setTicked(isTicked ? [...ticked, startsOn].sort() : ticked.filter((day) => day !== startsOn));
   const count = ticked.length === 1 ? '1 week' : `${ticked.length} weeks`;
+  const send = (
+    <Button type="submit" look="main" isBusy={save.isPending}>
+      {payday ? 'Save payday' : `Make a payday of ${count}`}
+    </Button>
+  );
   return (
     <form
       noValidate
@@ -78,11 +87,7 @@ export function PaydayForm({ payday, weeks, onDone }: Props) {
         />
       </div>
       <FormError error={save.error} />
-      <div className="pd-send">
-        <Button type="submit" look="main" isBusy={save.isPending}>
-          {payday ? 'Save payday' : `Make a payday of ${count}`}
-        </Button>
-      </div>
+      {payday ? <SheetFoot>{send}</SheetFoot> : <div className="pd-send">{send}</div>}
     </form>
   );
 }

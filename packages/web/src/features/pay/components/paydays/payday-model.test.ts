@@ -11,9 +11,11 @@ const week = (number: number, startsOn: string, endsOn: string) => ({
 const weeks = [week(18, '2026-04-27', '2026-05-03'), week(19, '2026-05-04', '2026-05-10')];
 
 test('the payday is the Friday after the newest ticked week, a week later for one that ends on a Friday', () => {
-  expect(paydayFor(weeks, ['2026-04-27', '2026-05-04'])).toBe('2026-05-15');
-  expect(paydayFor(weeks, ['2026-04-27'])).toBe('2026-05-08');
-  expect(paydayFor(weeks, [])).toBe('');
+  const monday = '2026-05-11';
+  expect(paydayFor(weeks, ['2026-04-27', '2026-05-04'], monday)).toBe('2026-05-15');
+  expect(paydayFor(weeks, [], monday)).toBe('');
+  expect(paydayFor(weeks, ['2026-04-27'], '2026-05-08')).toBe('2026-05-08');
+  expect(paydayFor(weeks, ['2026-04-27'], '2026-05-09')).toBe('2026-05-15');
   expect(fridayAfter('2026-05-15')).toBe('2026-05-22');
   expect(fridayAfter('2026-05-14')).toBe('2026-05-15');
 });

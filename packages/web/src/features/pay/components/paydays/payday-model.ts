@@ -15,11 +15,13 @@ export function tickedAtFirst(waiting: readonly HandoverWeek[]): string[] {
   return waiting.length <= TICKED_AT_MOST ? waiting.map((week) => week.startsOn) : [];
 }
 
-/** The payday that goes with ticked weeks: the Friday after the newest ends; empty without any. */
-export function paydayFor(weeks: readonly HandoverWeek[], ticked: readonly string[]): string {
+/** The payday that goes with ticked weeks: the Friday after the newest ends, the coming one when that is past; empty without any. */
+export function paydayFor(weeks: readonly HandoverWeek[], ticked: readonly string[], today: string): string {
   const ends = weeks.filter((week) => ticked.includes(week.startsOn)).map((week) => week.endsOn);
   const last = ends.sort().at(-1);
-  return last ? fridayAfter(last) : '';
+  if (!last) return '';
+  const friday = fridayAfter(last);
+  return friday < today ? fridayAfter(addDays(today, -1)) : friday;
 }
 
 /** "Week 18" or "Weeks 18, 19 and 20". */

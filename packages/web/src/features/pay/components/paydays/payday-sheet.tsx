@@ -41,10 +41,7 @@ export function PaydaySheet({ payday, waiting, onRemoved }: Props) {
             : 'Not handed over yet'}
         </span>
       </p>
-      <Loaded query={people} what="who is paid">
-        {(found) => <PaydayTable payday={found.payday} people={found.people} />}
-      </Loaded>
-      <h3 className="sec mt-5">Files for the payroll processor</h3>
+      <h3 className="sec">Files for the payroll processor</h3>
       <HandoverFiles base={`/api/pay/paydays/${payday.id}`} name={`payday-${payday.paysOn}`} />
       {payday.handedOverAt ? null : (
         <div className="pd-foot">
@@ -57,6 +54,9 @@ export function PaydaySheet({ payday, waiting, onRemoved }: Props) {
           </Button>
         </div>
       )}
+      <Loaded query={people} what="who is paid">
+        {(found) => <PaydayTable payday={found.payday} people={found.people} />}
+      </Loaded>
       {open === 'change' ? (
         <Sheet title={date} onClose={close} width={520}>
           <PaydayForm payday={payday} weeks={byStart([...payday.weeks, ...waiting])} onDone={close} />
