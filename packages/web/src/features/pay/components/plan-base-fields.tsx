@@ -1,4 +1,5 @@
-import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
+import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
+import { DraftRows } from './draft-rows.tsx';
 import { planKinds } from './plan-draft.ts';
 import type { PlanDraft } from './plan-draft.ts';
 
@@ -50,17 +51,34 @@ export function PlanBaseFields({ draft, fault, onChange }: PlanPartProps) {
 }
 
 function TierFields({ draft, fault, onChange }: PlanPartProps) {
-  const tierFault = [0, 1, 2, 3, 4, 5, 6, 7]
-    .flatMap((at) => [fault(`base.tiers.${at}.over`), fault(`base.tiers.${at}.percent`)])
-    .find((found) => found !== undefined);
   return (
     <>
-      <TextArea
-        label="Tiers, one a line: sold over, percent"
-        rows={4}
-        value={draft.tiers}
-        error={fault('base.tiers') ?? tierFault}
-        onChange={(event) => onChange({ tiers: event.target.value })}
+      <DraftRows
+        label="Tiers of what was sold"
+        addLabel="Add a tier"
+        className="has-tier"
+        rows={draft.tiers}
+        empty={{ over: '', percent: '' }}
+        error={fault('base.tiers')}
+        onChange={(tiers) => onChange({ tiers })}
+        fields={(row, change, at) => (
+          <>
+            <TextField
+              label="Sold over, dollars"
+              inputMode="decimal"
+              value={row.over}
+              error={fault(`base.tiers.${at}.over`)}
+              onChange={(event) => change({ over: event.target.value })}
+            />
+            <TextField
+              label="Percent"
+              inputMode="decimal"
+              value={row.percent}
+              error={fault(`base.tiers.${at}.percent`)}
+              onChange={(event) => change({ percent: event.target.value })}
+            />
+          </>
+        )}
       />
       <div>
         <SelectField

@@ -27,12 +27,28 @@ test('what is missing is said at its field', () => {
   ]);
 });
 
-test('tiers are typed one a line', () => {
-  const { plan } = planOf({ ...filled('tiered_percent'), tiers: '0, 6\n2000; 8.5%' });
+test('tiers are lines of a threshold and a percentage', () => {
+  const tiers = [
+    { over: '0', percent: '6' },
+    { over: '$2,000', percent: '8.5%' },
+  ];
+  const { plan } = planOf({ ...filled('tiered_percent'), tiers });
   expect(plan && basePlanWords(plan)).toBe('6% over 0.00, 8.5% over 2000.00, marginal, by the week');
 });
 
 test('a salary says the hours it covers', () => {
   const { plan } = planOf({ ...filled('salary'), values: { amount: '900', coversHours: '45' } });
   expect(plan && basePlanWords(plan)).toBe('900.00 weekly for 45 h a week');
+});
+
+test('premiums are lines of their own, for a kind of work or some hours', () => {
+  const lead = { label: 'Lead', perHour: '$1.50', kind: '', from: '', to: '' };
+  const late = { label: 'Evening', perHour: '2', kind: 'job', from: '18:00', to: '22:00' };
+  const { plan } = planOf({ ...filled('hourly'), premiums: [lead, late] });
+  expect(plan?.extras.premiums).toEqual([
+    { label: 'Lead', perHour: '1.50', kinds: [], between: null },
+    { label: 'Evening', perHour: '2', kinds: ['job'], between: { from: '18:00', to: '22:00' } },
+  ]);
+  const { faults } = planOf({ ...filled('hourly'), premiums: [{ ...late, to: '' }] });
+  expect(faults).toHaveProperty(['extras.premiums.0.between.to']);
 });

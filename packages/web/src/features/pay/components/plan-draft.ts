@@ -100,6 +100,22 @@ export interface ServiceRow {
   amount: string;
 }
 
+export interface TierRow {
+  over: string;
+  percent: string;
+}
+
+export interface PremiumRow {
+  label: string;
+  perHour: string;
+  /** A kind of worked time, or empty for all. */
+  kind: string;
+  from: string;
+  to: string;
+}
+
+export const EMPTY_PREMIUM: PremiumRow = { label: '', perHour: '', kind: '', from: '', to: '' };
+
 /** What is typed; numbers stay text until the plan is made. */
 export interface PlanDraft {
   kind: PlanKind;
@@ -109,13 +125,12 @@ export interface PlanDraft {
   isAgreed: boolean;
   signedOn: string;
   agreement: string;
-  /** One tier a line: "over, percent". */
-  tiers: string;
+  tiers: TierRow[];
   tierMode: string;
   tierPeriod: string;
   flats: ServiceRow[];
   hourlyByService: ServiceRow[];
-  premium: { label: string; perHour: string; from: string; to: string };
+  premiums: PremiumRow[];
   trainingHourly: string;
   helperHourly: string;
   perAddOn: string;
@@ -131,12 +146,15 @@ export const EMPTY_PLAN: PlanDraft = {
   isAgreed: false,
   signedOn: '',
   agreement: '',
-  tiers: '0, 6\n2000, 8',
+  tiers: [
+    { over: '0', percent: '6' },
+    { over: '2000', percent: '8' },
+  ],
   tierMode: 'marginal',
   tierPeriod: 'week',
   flats: [],
   hourlyByService: [],
-  premium: { label: '', perHour: '', from: '', to: '' },
+  premiums: [],
   trainingHourly: '',
   helperHourly: '',
   perAddOn: '',
@@ -175,26 +193,17 @@ function otherOf({ otherHourly, isAgreed, signedOn, agreement }: PlanDraft): obj
   return { hourly: figure(otherHourly), agreement: isAgreed ? { signedOn, note: agreement } : null };
 }
 
-function tiersOf(text: string): object[] {
-  const lines = text.split('\n').filter((line) => line.trim() !== '');
-  return lines.map((line) => {
-    const [over = '', percent = ''] = line.split(/[,;\t]/);
-    return { over: figure(over), percent: figure(percent) };
-  });
+function tiersOf(rows: readonly TierRow[]): object[] {
+  return rows.map(({ over, percent }) => ({ over: figure(over), percent: figure(percent) }));
 }
 
 function extrasOf(draft: PlanDraft): object {
-  const { premium, attendance } = draft;
+  const { attendance } = draft;
   return {
-    premiums:
-      premium.perHour === ''
-        ? []
-        : [
-            {
-              ...{ label: premium.label, perHour: figure(premium.perHour), kinds: [] },
-              between: premium.from === '' ? null : { from: premium.from, to: premium.to },
-            },
-          ],
+    premiums: draft.premiums.map(({ label, perHour, kind, from, to }) => ({
+      ...{ label, perHour: figure(perHour), kinds: kind === '' ? [] : [kind] },
+      between: from === '' && to === '' ? null : { from, to },
+    })),
     trainingHourly: maybe(draft.trainingHourly),
     helperHourly: maybe(draft.helperHourly),
     hourlyByService: draft.hourlyByService.map((row) => ({ serviceId: row.serviceId, hourly: figure(row.amount) })),

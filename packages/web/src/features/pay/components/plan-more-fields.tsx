@@ -1,11 +1,12 @@
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { TextField } from '../../../components/field.tsx';
 import type { PlanPartProps } from './plan-base-fields.tsx';
+import { PremiumRows } from './premium-rows.tsx';
 import { ServiceRows } from './service-rows.tsx';
 
 /** What a plan may add: premiums, rates of their own, promised bonuses. */
 export function PlanMoreFields({ draft, fault, onChange, services }: PlanPartProps & { services: ServiceDto[] }) {
-  const { premium, attendance } = draft;
+  const { attendance } = draft;
   const plain = (key: 'trainingHourly' | 'helperHourly' | 'perAddOn' | 'percentOfTotal', label: string) => (
     <TextField
       label={label}
@@ -19,33 +20,6 @@ export function PlanMoreFields({ draft, fault, onChange, services }: PlanPartPro
     <details className="mt-4">
       <summary>More: premiums, bonuses, rates of their own</summary>
       <div className="grid grid-cols-2 gap-3 mt-3 max-[520px]:grid-cols-1">
-        <TextField
-          label="Role or shift premium, name"
-          value={premium.label}
-          error={fault('extras.premiums.0.label')}
-          onChange={(event) => onChange({ premium: { ...premium, label: event.target.value } })}
-        />
-        <TextField
-          label="Premium, dollars an hour"
-          inputMode="decimal"
-          value={premium.perHour}
-          error={fault('extras.premiums.0.perHour')}
-          onChange={(event) => onChange({ premium: { ...premium, perHour: event.target.value } })}
-        />
-        <TextField
-          label="Only from"
-          type="time"
-          value={premium.from}
-          error={fault('extras.premiums.0.between.from')}
-          onChange={(event) => onChange({ premium: { ...premium, from: event.target.value } })}
-        />
-        <TextField
-          label="to"
-          type="time"
-          value={premium.to}
-          error={fault('extras.premiums.0.between.to') ?? fault('extras.premiums.0.between')}
-          onChange={(event) => onChange({ premium: { ...premium, to: event.target.value } })}
-        />
         {plain('trainingHourly', 'Training, dollars an hour')}
         {plain('helperHourly', 'Helping as a trainee, dollars an hour')}
         {plain('perAddOn', 'Bonus per add-on finished, dollars')}
@@ -67,6 +41,7 @@ export function PlanMoreFields({ draft, fault, onChange, services }: PlanPartPro
           onChange={(event) => onChange({ attendance: { ...attendance, days: event.target.value } })}
         />
       </div>
+      <PremiumRows draft={draft} fault={fault} onChange={onChange} />
       <ServiceRows
         label="Services with an hourly rate of their own"
         amountLabel="Dollars an hour"

@@ -1,8 +1,7 @@
 import { sizeClassNames, sizeClasses } from '@driprail/shared/contracts/fields';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
-import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
-import { Icon } from '../../../components/icon.tsx';
+import { DraftRows } from './draft-rows.tsx';
 import type { ServiceRow } from './plan-draft.ts';
 
 interface Props {
@@ -18,18 +17,22 @@ interface Props {
 
 /** Amounts by service, and by size class where that matters. */
 export function ServiceRows({ label, amountLabel, hasSizes, services, rows, fault, onChange }: Props) {
-  const change = (at: number, part: Partial<ServiceRow>) =>
-    onChange(rows.map((row, index) => (index === at ? { ...row, ...part } : row)));
   return (
-    <fieldset className="mt-3">
-      <legend>{label}</legend>
-      {rows.map((row, at) => (
-        <div key={at} className={hasSizes ? 'svc-row has-sizes' : 'svc-row'}>
+    <DraftRows
+      label={label}
+      addLabel="Add a service"
+      className={hasSizes ? 'has-sizes' : ''}
+      rows={rows}
+      empty={{ serviceId: '', sizeClass: '', amount: '' }}
+      error={fault('')}
+      onChange={onChange}
+      fields={(row, change, at) => (
+        <>
           <SelectField
             label="Service"
             value={row.serviceId}
             error={fault(`${at}.serviceId`)}
-            onChange={(event) => change(at, { serviceId: event.target.value })}
+            onChange={(event) => change({ serviceId: event.target.value })}
           >
             <option value="">Choose</option>
             {services.map((service) => (
@@ -42,7 +45,7 @@ export function ServiceRows({ label, amountLabel, hasSizes, services, rows, faul
             <SelectField
               label="Size"
               value={row.sizeClass}
-              onChange={(event) => change(at, { sizeClass: event.target.value })}
+              onChange={(event) => change({ sizeClass: event.target.value })}
             >
               <option value="">All sizes</option>
               {sizeClasses.map((size) => (
@@ -57,25 +60,10 @@ export function ServiceRows({ label, amountLabel, hasSizes, services, rows, faul
             inputMode="decimal"
             value={row.amount}
             error={fault(`${at}.${hasSizes ? 'amount' : 'hourly'}`)}
-            onChange={(event) => change(at, { amount: event.target.value })}
+            onChange={(event) => change({ amount: event.target.value })}
           />
-          <Button
-            look="bare"
-            aria-label={`Take out line ${at + 1}`}
-            onClick={() => onChange(rows.filter((_row, index) => index !== at))}
-          >
-            <Icon name="x" />
-          </Button>
-        </div>
-      ))}
-      {fault('') ? (
-        <p className="tape err" role="alert">
-          {fault('')}
-        </p>
-      ) : null}
-      <Button onClick={() => onChange([...rows, { serviceId: '', sizeClass: '', amount: '' }])}>
-        <Icon name="plus" /> Add a service
-      </Button>
-    </fieldset>
+        </>
+      )}
+    />
   );
 }

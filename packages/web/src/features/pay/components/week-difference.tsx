@@ -15,7 +15,7 @@ import { differenceQuery } from '../api/pay.queries.ts';
 type Against = 'week_before' | 'last_checked';
 
 const partWords: Record<PersonDifference['parts'][number]['part'], string> = {
-  hourly: 'hours',
+  hourly: 'hourly pay',
   flat: 'flat amounts',
   commission: 'commission',
   overtimePremium: 'overtime',
@@ -58,15 +58,15 @@ function Compared({ week, against }: { week: PayWeekHead; against: Against }) {
           return <Empty>This week was not checked yet. Once it was, later changes show here.</Empty>;
         if (dto.people.length === 0) return <Empty>Nothing changed: all {dto.unchanged} people are the same.</Empty>;
         return (
-          <table className="grid-t stacks">
+          <table className="grid-t">
             <caption className="t-2">
               <Sides dto={dto} />
             </caption>
             <thead>
               <tr>
                 <th>Name</th>
-                <th className="r">Before</th>
-                <th className="r">Now</th>
+                <th className="r was">Before</th>
+                <th className="r was">Now</th>
                 <th className="r">Difference</th>
                 <th>In</th>
               </tr>
@@ -108,8 +108,8 @@ function Row({ startsOn, person }: { startsOn: string; person: PersonDifference 
       <td>
         <Link to={`${paths.payWeek(startsOn)}?person=${personId}`}>{name}</Link>
       </td>
-      <td className="r">{before ? money(before.grossCents) : '–'}</td>
-      <td className="r">{after ? money(after.grossCents) : '–'}</td>
+      <td className="r was">{before ? money(before.grossCents) : '–'}</td>
+      <td className="r was">{after ? money(after.grossCents) : '–'}</td>
       <td className="r">
         <b>{signed(cents)}</b>
       </td>

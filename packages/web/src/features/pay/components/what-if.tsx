@@ -8,10 +8,13 @@ import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
-import { ruleSetsQuery, whatIfQuery } from '../api/plans.queries.ts';
+import { placesQuery, ruleSetsQuery, whatIfQuery } from '../api/plans.queries.ts';
 import { basePlanWords } from './plan-base-words.ts';
+import { splitWords } from './rate-bands.ts';
 import { WhatIfTable } from './what-if-table.tsx';
 import './what-if.css';
+
+const crewSplits = ['equal', 'weights', 'minutes'] as const;
 
 export type Tried = OutputOf<typeof whatIf>['weeks'];
 
@@ -29,13 +32,17 @@ interface Props {
 /** Other pay tried on past weeks, side by side with what was paid. Nothing is saved, nobody is told. */
 export function WhatIf({ person, weeks, now, plan, onChoosePlan, onDropPlan }: Props) {
   const ruleSets = useQuery(ruleSetsQuery).data?.ruleSets ?? [];
-  const [trial, setTrial] = useState({ hourly: '', percent: '', ruleSetKey: '' });
+  const [trial, setTrial] = useState({ hourly: '', percent: '', where: '', minimumWage: '', crewSplit: '' });
+  const places = useQuery(placesQuery).data?.places ?? [];
   const [from, setFrom] = useState(weeks.at(-8)?.startsOn ?? weeks[0]?.startsOn ?? '');
   const to = weeks.at(-1)?.startsOn ?? '';
   const figure = (text: string) => text.replace(/[$%,\s]/g, '') || null;
   const body = useDeferredValue({
     ...{ personId: person.id, from, to, plan },
-    ...{ hourly: figure(trial.hourly), percent: figure(trial.percent), ruleSetKey: trial.ruleSetKey || null },
+    ...{ hourly: figure(trial.hourly), percent: figure(trial.percent), minimumWage: figure(trial.minimumWage) },
+    placeId: places.some((place) => place.id === trial.where) ? trial.where : null,
+    ruleSetKey: ruleSets.some((set) => set.key === trial.where) ? trial.where : null,
+    crewSplit: crewSplits.find((split) => split === trial.crewSplit) ?? null,
   });
   const answer = useQuery({ ...whatIfQuery(body), enabled: from !== '' });
   const fields = fieldsOf(answer.error);
@@ -63,15 +70,47 @@ export function WhatIf({ person, weeks, now, plan, onChoosePlan, onDropPlan }: P
           onChange={(event) => setTrial({ ...trial, percent: event.target.value })}
         />
         <SelectField
-          label="Overtime rules"
-          value={trial.ruleSetKey}
+          label="Place or overtime rules"
+          value={trial.where}
           error={fields['ruleSetKey']}
-          onChange={(event) => setTrial({ ...trial, ruleSetKey: event.target.value })}
+          onChange={(event) => setTrial({ ...trial, where: event.target.value })}
         >
           <option value="">as they are</option>
-          {ruleSets.map((set) => (
-            <option key={set.key} value={set.key}>
-              {set.name}
+          {places.length > 0 ? (
+            <optgroup label="Places">
+              {places.map((place) => (
+                <option key={place.id} value={place.id}>
+                  {place.name}
+                </option>
+              ))}
+            </optgroup>
+          ) : null}
+          <optgroup label="Overtime rules">
+            {ruleSets.map((set) => (
+              <option key={set.key} value={set.key}>
+                {set.name}
+              </option>
+            ))}
+          </optgroup>
+        </SelectField>
+        <TextField
+          label="Minimum wage"
+          inputMode="decimal"
+          placeholder="as it was"
+          value={trial.minimumWage}
+          error={fields['minimumWage']}
+          onChange={(event) => setTrial({ ...trial, minimumWage: event.target.value })}
+        />
+        <SelectField
+          label="In a crew"
+          value={trial.crewSplit}
+          error={fields['crewSplit']}
+          onChange={(event) => setTrial({ ...trial, crewSplit: event.target.value })}
+        >
+          <option value="">shared as it was</option>
+          {crewSplits.map((split) => (
+            <option key={split} value={split}>
+              {splitWords[split].toLowerCase()}
             </option>
           ))}
         </SelectField>

@@ -14,7 +14,7 @@ import { Sheet } from '../../../components/sheet.tsx';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { weeksQuery } from '../api/pay.queries.ts';
-import { plansQuery } from '../api/plans.queries.ts';
+import { placesQuery, plansQuery } from '../api/plans.queries.ts';
 import { payPeopleQuery, payServicesQuery, ratesQuery, rulesQuery } from '../api/rates.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
 import { CommissionTest } from '../components/commission-test.tsx';
@@ -24,6 +24,7 @@ import { rateText } from '../components/ledger.ts';
 import { ratesOn, rulesOn } from '../components/plan-words.ts';
 import { planRows, rateRows, rateWords, ruleRows } from '../components/rate-bands.ts';
 import { PlacesSheet } from '../components/places-sheet.tsx';
+import { minimumWageOn } from '../components/minimum-wage.ts';
 import { planOn } from '../components/plan-base-words.ts';
 import { planKinds } from '../components/plan-draft.ts';
 import { PlanForm } from '../components/plan-form.tsx';
@@ -57,6 +58,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
   const people = useQuery(payPeopleQuery).data?.people ?? [];
   const services = useQuery(payServicesQuery).data?.services ?? [];
   const plans = useQuery(plansQuery).data?.plans ?? [];
+  const places = useQuery(placesQuery).data;
   const weeks = useQuery(weeksQuery).data?.weeks ?? [];
   const asked = rates.find((rate) => rate.id === search.get('rate'));
   const person = people.find((own) => own.id === (asked ? asked.personId : search.get('person'))) ?? null;
@@ -76,7 +78,13 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
   const choose = (id: string) => setSearch(id ? { person: id } : {}, { replace: true, preventScrollReset: true });
   const active = people.filter((own) => own.isActive);
   const planned = personId ? planOn(plans, personId, today) : null;
-  const sums = sumsOf(rates, rules, personId, today);
+  const companyWage = rulesOn(rules, today)?.minimumWage ?? null;
+  const sums = sumsOf(
+    rates,
+    places ? minimumWageOn(places, companyWage, personId, today) : companyWage,
+    personId,
+    today,
+  );
   const [hour, commission, minimum] = sums;
   const over = weeks.filter((week) => week.endsAt <= now).sort((a, b) => a.startsOn.localeCompare(b.startsOn));
   const first = rulesOn(rules, today)?.workweekStartsOn ?? 1;
@@ -226,7 +234,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
   );
 }
 
-function sumsOf(rates: RateDto[], rules: PayRulesDto[], personId: string | null, today: string) {
+function sumsOf(rates: RateDto[], minimum: string | null, personId: string | null, today: string) {
   const now = ratesOn(rates, today).filter((rate) => rate.personId === null || rate.personId === personId);
   const hourly = now.filter((rate) => rate.kind === 'hourly' && rate.clockKind === null && rate.serviceId === null);
   const hour = hourly.find((rate) => rate.personId !== null) ?? hourly[0];
@@ -235,7 +243,6 @@ function sumsOf(rates: RateDto[], rules: PayRulesDto[], personId: string | null,
   const words = [
     ...new Set((own.length > 0 ? own : percents).filter((rate) => exact(rate.value).gt(0)).map(rateWords)),
   ];
-  const minimum = rulesOn(rules, today)?.minimumWage;
   return [
     { label: 'An hour, now', value: hour ? rateWords(hour) : '–' },
     { label: 'Commission, now', value: words.join(', ') || '–' },
