@@ -16,7 +16,7 @@ import type { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
 import { carriedInto } from './carried.queries.ts';
 import { settledCommissionsIn } from './deferred/settled.queries.ts';
-import { noShowTripsJson, noShowTripSql, showUpRulesJson, timeOffTakenJson } from './time-off/pay-input.sql.ts';
+import { daysAwayJson, noShowTripsJson, noShowTripSql, showUpRulesJson, timeOffTakenJson } from './time-off/pay-input.sql.ts';
 import { rulesOn } from './weeks.service.ts';
 
 interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
@@ -34,7 +34,7 @@ interface GatheredPlace extends Omit<PersonPlace, 'ruleSet'> {
 
 type Gathered = Pick<
   PayWeekInput,
-  'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans' | 'ratesInEffect' | 'showUpRules' | 'noShowTrips'
+  'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans' | 'ratesInEffect' | 'showUpRules' | 'noShowTrips' | 'daysAway'
 > & {
   lines: GatheredLine[];
   places: GatheredPlace[];
@@ -102,6 +102,7 @@ SELECT json_build_object(
       FROM (SELECT DISTINCT ON (person_id) * FROM person_places WHERE starts_on <= :startsOn ORDER BY person_id, starts_on DESC) p
       JOIN pay_places pl ON pl.id = p.place_id), '[]'::json),
   'showUpRules', ${showUpRulesJson},
+  'daysAway', ${daysAwayJson},
   'noShowTrips', ${noShowTripsJson(crewJson)}
 ) AS gathered`;
 

@@ -223,6 +223,8 @@ export interface PayWeekInput {
   /** Absent in weeks locked before there were such rules. */
   showUpRules?: DatedShowUpRule[];
   noShowTrips?: NoShowTrip[];
+  /** Days away that were written down: who left for one was not sent home. Both ends included. */
+  daysAway?: { personId: string; startsOn: string; endsOn: string }[];
   /** Whose overtime goes by the rate in effect, by an agreement made before the work (29 USC 207(g)(2)). */
   ratesInEffect?: { personId: string; signedOn: string }[];
   /** Absent where commission is earned when the work is done. */

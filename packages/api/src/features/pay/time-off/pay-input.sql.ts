@@ -18,5 +18,10 @@ export const noShowTripsJson = (crewJson: string): string => `coalesce((SELECT j
     'crew', coalesce((SELECT json_agg(${crewJson} ORDER BY vc.position) FROM visit_crew vc WHERE vc.visit_id = t.id), '[]'::json))
     ORDER BY t.progress_since, t.id) FROM trip t JOIN jobs j ON j.id = t.job_id), '[]'::json)`;
 
+/** Days away that touch the week; they matter to show-up pay alone. */
+export const daysAwayJson = `coalesce((SELECT json_agg(json_build_object('personId', a.person_id, 'startsOn', a.starts_on,
+    'endsOn', a.ends_on) ORDER BY a.person_id, a.starts_on) FROM time_off a
+    WHERE a.ends_on >= :startsOn AND a.starts_on < :startsOn::date + 8 AND EXISTS (SELECT 1 FROM show_up_rules)), '[]'::json)`;
+
 export const showUpRulesJson = `coalesce((SELECT json_agg(json_build_object('id', r.id, 'placeId', r.place_id,
     'startsOn', r.starts_on, 'rule', r.rule) ORDER BY r.starts_on, r.id) FROM show_up_rules r), '[]'::json)`;

@@ -1,8 +1,8 @@
 import type { Transaction } from 'sequelize';
 import { Op } from 'sequelize';
 import type { TimeOffQuote } from '@driprail/shared/contracts/time-off.contract';
-import { exact, fractionText } from '@driprail/shared/domain/money/exact';
-import { shortText } from '@driprail/shared/domain/money/rounding';
+import { exact, fractionText, type Exact } from '@driprail/shared/domain/money/exact';
+import { decimalText } from '@driprail/shared/domain/money/rounding';
 import type { DatedRate } from '@driprail/shared/domain/pay/pay-week.types';
 import { hourlyRateInForce } from '@driprail/shared/domain/pay/time-off/hourly-rate-in-force';
 import type { HourlyRate } from '@driprail/shared/domain/pay/time-off/hourly-rate-in-force';
@@ -10,7 +10,7 @@ import { lowestBalance, timeOffBalance } from '@driprail/shared/domain/pay/time-
 import { timeOffCents } from '@driprail/shared/domain/pay/time-off/time-off-pay';
 import { timeOffKindNames, timeOffRuleOn, timeOffRuleWords } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import type { DatedTimeOffRule, TimeOffKind } from '@driprail/shared/domain/pay/time-off/time-off-rule';
-import { formatDate, formatDay } from '@driprail/shared/domain/time/format';
+import { formatDate, formatDay, formatMinutes } from '@driprail/shared/domain/time/format';
 import { PayPlanRow, PayRate, Person, TimeOff } from '../../../db/models/index.ts';
 import type { PayWeek } from '../../../db/models/index.ts';
 import { inTransaction } from '../../../db/sequelize.ts';
@@ -77,7 +77,7 @@ export async function quoteOf(week: PayWeek, taking: TakingFields, tx: Transacti
         ? [
             {
               code: 'over_balance' as const,
-              message: `${person.name} has ${shortText(timeOffBalance(before ?? []))} h of ${words(kind)} time; this is ${shortText(left.neg())} h more.`,
+              message: `${person.name} has ${lengthOf(timeOffBalance(before ?? []))} of ${words(kind)} time; this is ${lengthOf(left.neg())} more.`,
             },
           ]
         : []),
@@ -91,6 +91,11 @@ export async function quoteOf(week: PayWeek, taking: TakingFields, tx: Transacti
         : []),
     ],
   };
+}
+
+/** "7 h 50", minutes half up. */
+function lengthOf(hours: Exact): string {
+  return formatMinutes(Number(decimalText(hours.mul(60), 0)));
 }
 
 function words(kind: TimeOffKind): string {

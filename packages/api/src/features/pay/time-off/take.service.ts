@@ -67,6 +67,6 @@ async function queueTakings(tx: Transaction, personId: string): Promise<void> {
 function refuseUnreasoned({ warnings }: Quote, { accept }: Taking): void {
   const [open] = warnings.filter(({ code }) => !accept.some((one) => one.code === code));
   if (!open) return;
-  const message = `${open.message} Give a reason to go on.`;
-  throw unprocessable('needs_reason', message, { fields: { accept: message, [open.code]: message } });
+  const reason = 'Give a reason to go on.';
+  throw unprocessable('needs_reason', `${open.message} ${reason}`, { fields: { accept: reason, [open.code]: reason } });
 }

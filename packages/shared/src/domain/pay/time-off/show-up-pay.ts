@@ -23,8 +23,8 @@ export interface ShowUpWeek {
   /** A day that still runs at its `asOf` is not short yet. */
   grid: WeekGrid;
   minimumWage: Exact;
-  /** Days on which hours off are paid: leaving for them is not being sent home. */
-  daysOff: ReadonlySet<string>;
+  /** Days of paid hours off and days away: leaving for them is not being sent home. */
+  isOff: (day: string) => boolean;
   rateOn: (day: string) => HourlyRate | null;
 }
 
@@ -36,7 +36,7 @@ export interface ShowUpWeek {
 export function showUpLines(week: ShowUpWeek): PayLine[] {
   return [...secondsByShift(week)].flatMap(([day, seconds]) => {
     const dated = showUpRuleOn(week.rules, 'show_up', week.placeId, day);
-    if (dated === null || week.daysOff.has(day) || !isOver(day, week)) return [];
+    if (dated === null || week.isOff(day) || !isOver(day, week)) return [];
     const worked = hoursOf(seconds);
     const missing = exact(dated.rule.hours).sub(worked);
     const rate = week.rateOn(day);

@@ -143,12 +143,15 @@ describe('show-up pay', () => {
     expect(ada({ rates, showUpRules: upTo('2') }).lines).toEqual([]);
   });
 
-  test('waits for a day’s end, and for days with paid hours off there is none', () => {
+  test('waits for a day’s end, and for days with paid hours off or written down as away there is none', () => {
     const entries = aWorkedWeek([60, 60]);
     const running = ada({ entries, rates, showUpRules: upTo('2'), asOf: '2026-05-05T14:00:00.000Z' });
     expect(linesOf(running, 'show_up_pay').map((line) => line.workedOn)).toEqual(['2026-05-04']);
     const left = ada({ entries, rates, showUpRules: upTo('2'), adjustments: [hoursOff('7', '12', '2026-05-04')] });
     expect(linesOf(left, 'show_up_pay').map((line) => line.workedOn)).toEqual(['2026-05-05']);
+    const daysAway = [{ personId: 'ada', startsOn: '2026-05-05', endsOn: '2026-05-08' }];
+    const away = ada({ entries, rates, showUpRules: upTo('2'), daysAway });
+    expect(linesOf(away, 'show_up_pay').map((line) => line.workedOn)).toEqual(['2026-05-04']);
   });
 
   test('looks at a shift past midnight and over the week’s edge as one', () => {

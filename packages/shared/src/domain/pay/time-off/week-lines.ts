@@ -35,12 +35,15 @@ export function shortDayLines(
   const rules = input.showUpRules ?? [];
   if (rules.length === 0) return [];
   const { rates, plans } = own;
+  const away = (input.daysAway ?? []).filter((days) => days.personId === person.id);
   return showUpLines({
     ...{ person, spans, rules, grid, minimumWage },
     entries: own.entries,
     placeId: own.place?.placeId ?? null,
     zone: input.zone,
-    daysOff: new Set(own.adjustments.flatMap((item) => item.timeOff?.on ?? [])),
+    isOff: (day) =>
+      own.adjustments.some((item) => item.timeOff?.on === day) ||
+      away.some(({ startsOn: first, endsOn: last }) => first <= day && day <= last),
     rateOn: (on) => hourlyRateInForce({ personId: person.id, weekStartsOn: startsOn, on, rates, plans }),
   });
 }

@@ -109,7 +109,7 @@ export function ShowUpRuleForm({
       <p className="t-2 mt-3">
         {value.pays === 'no_show_trip'
           ? 'Paid when a visit is called off after Arrived and Nobody home was reported. It pays for work done, so it counts in the regular rate.'
-          : 'Hours that were not worked stay out of the regular rate and overtime (29 CFR 778.220). A day on which hours off are paid, and a day paid by a salary or day rate, gets none.'}
+          : 'Hours that were not worked stay out of the regular rate and overtime (29 CFR 778.220). Nobody was sent home on a day with paid hours off or a day away: write the day under People when somebody leaves early by own wish. A salary or day rate pays its days whole.'}
       </p>
       <FormError error={add.error} />
       <SheetFoot>
