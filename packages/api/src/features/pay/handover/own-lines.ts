@@ -1,20 +1,21 @@
-import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
+import type { PayLine, WorkingStep } from '@driprail/shared/domain/pay/pay-week.types';
 
-const SHARE = 'The share of ';
+/** How the engine names the step that shares work or a tip in a crew, and how it writes a share. */
+const SHARE_STEP = 'The share of ';
+const SHARE_WORDS = /^(half|1 of \d+ equal shares|\S+ of \S+ (minutes|parts)) of /;
 
 /**
  * A line of shared work as its own person may carry it away: the own share, without the whole amount and the others'
  * weights or minutes, from which their pay could be worked out.
  */
 export function ownPart(line: PayLine): PayLine {
-  const share = line.working.findIndex((step) => step.label.startsWith(SHARE));
-  if (share < 0) return line;
-  return {
-    ...line,
-    working: line.working
-      .slice(share)
-      .map((step, index) => (index > 0 ? step : { ...step, note: 'Shared in the crew', arithmetic: 'own share' })),
-  };
+  const share = line.working.findIndex((step) => step.label.startsWith(SHARE_STEP));
+  return { ...line, working: line.working.slice(Math.max(0, share)).map(withoutOthers) };
+}
+
+function withoutOthers(step: WorkingStep): WorkingStep {
+  if (!SHARE_WORDS.test(step.arithmetic)) return step;
+  return { ...step, note: 'Shared in the crew', arithmetic: 'own share' };
 }
 
 /** How a locked line was worked, in words and figures; ids of the records behind it stay inside. */

@@ -1,4 +1,7 @@
 import { select } from '../../../db/sequelize.ts';
+import { listPersonPlaces } from '../places.service.ts';
+import { listPlans } from '../plans.service.ts';
+import { listRates, listRules } from '../rates.service.ts';
 
 /** Who did something, without naming anybody: the person, the owner, the desk, or the program. */
 const bySql = (user: string) =>
@@ -35,31 +38,42 @@ export function clockRecords(personId: string): Promise<ClockRecord[]> {
   );
 }
 
-/** The dated terms a person was paid by, oldest first: own and the company's rates, plans, places and rules. */
+/** The dated terms a person was paid by: own and the company's rates and rules, plans, places, agreements, hours off. */
 export async function termsOf(personId: string) {
-  const rates = await select(
-    `SELECT r.starts_on AS "startsOn", CASE WHEN r.person_id IS NULL THEN 'the company' ELSE 'the person' END AS "for", r.kind,
-            s.name AS service, r.clock_kind AS "clockKind", trim_scale(r.value)::text AS value
-       FROM pay_rates r LEFT JOIN services s ON s.id = r.service_id
-      WHERE r.person_id IS NULL OR r.person_id = :personId ORDER BY r.starts_on, r.id`,
+  const isOwn = (row: { personId: string | null }) => row.personId === personId;
+  const timeOff = {
+    days: await select(
+      'SELECT starts_on AS "startsOn", ends_on AS "endsOn", note FROM time_off WHERE person_id = :personId ORDER BY starts_on',
+      { personId },
+    ),
+    rules: await select(
+      `SELECT kind, CASE WHEN person_id IS NULL THEN 'the company' ELSE 'the person' END AS "for", starts_on AS "startsOn", rule
+         FROM time_off_rules WHERE person_id IS NULL OR person_id = :personId ORDER BY starts_on, id`,
+      { personId },
+    ),
+    adjustments: await select(
+      `SELECT kind, on_date AS "on", hours, reason, at FROM time_off_adjustments WHERE person_id = :personId ORDER BY at, id`,
+      { personId },
+    ),
+  };
+  const agreements = await select(
+    `SELECT kind, starts_on AS "startsOn", signed_on AS "signedOn", note FROM pay_agreements WHERE person_id = :personId
+      ORDER BY starts_on, id`,
     { personId },
   );
-  const plans = await select(
-    `SELECT starts_on AS "startsOn", plan FROM pay_plans WHERE person_id = :personId ORDER BY starts_on`,
-    { personId },
-  );
-  const places = await select(
-    `SELECT p.starts_on AS "startsOn", pl.name, pl.rule_set_key AS "ruleSet", pl.own_rules AS "ownRules"
-       FROM person_places p LEFT JOIN pay_places pl ON pl.id = p.place_id WHERE p.person_id = :personId ORDER BY p.starts_on`,
-    { personId },
-  );
-  const rules = await select(
-    `SELECT starts_on AS "startsOn", overtime_rule_set AS "overtimeRuleSet", trim_scale(minimum_wage)::text AS "minimumWage",
-            crew_split AS "crewSplit", meal_break_minutes AS "mealBreakMinutes", punch_rounding_minutes AS "punchRoundingMinutes",
-            premium_rounding AS "premiumRounding", workweek_starts_on AS "workweekStartsOn", workweek_starts_at AS "workweekStartsAt"
-       FROM pay_rules ORDER BY starts_on`,
-  );
-  return { rates, plans, places, rules };
+  return {
+    rates: (await listRates()).filter((rate) => rate.personId === null || isOwn(rate)).map(unsigned),
+    plans: (await listPlans()).filter(isOwn).map(unsigned),
+    places: (await listPersonPlaces()).filter(isOwn).map(unsigned),
+    rules: (await listRules()).map(unsigned),
+    agreements,
+    timeOff,
+  };
+}
+
+/** Terms without who set them: that login's name is another person's. */
+function unsigned<T extends { setBy?: string }>({ setBy: _login, ...terms }: T): Omit<T, 'setBy'> {
+  return terms;
 }
 
 /** What a person said of the own hours, and what was asked or proposed to be changed in them. */
@@ -82,7 +96,8 @@ export function auditOf(personId: string): Promise<Record<string, unknown>[]> {
   return select(
     `SELECT a.at, ${bySql('u')} AS by, a.entity, a.entity_id AS "entityId", a.action, a.details
        FROM audit_entries a LEFT JOIN users u ON u.id = a.user_id
-      WHERE (a.entity IN ('pay_rate', 'pay_plan', 'person_place', 'hours') AND a.details->>'personId' = :personId::text)
+      WHERE (a.entity IN ('pay_rate', 'pay_plan', 'person_place', 'pay_agreement', 'time_off_rule', 'time_off_adjustment', 'hours')
+              AND a.details->>'personId' = :personId::text)
          OR (a.entity = 'pay_adjustment' AND a.entity_id IN (SELECT o.entity_id FROM audit_entries o
                WHERE o.entity = 'pay_adjustment' AND o.details->>'personId' = :personId::text))
          OR (a.entity = 'clock_entry' AND a.entity_id IN (SELECT e.id::text FROM clock_entries e WHERE e.person_id = :personId))

@@ -32,7 +32,7 @@ export async function personZip(ctx: Ctx, personId: string): Promise<Buffer> {
     people: people.map((one) => ({ ...one, lines: one.lines.map(ownPart) })),
   }));
   const entries = await clockRecords(personId);
-  const { rates, plans, places, rules } = await termsOf(personId);
+  const { rates, plans, places, rules, agreements, timeOff } = await termsOf(personId);
   const { hours, requests } = await wordsOf(personId);
   const files: ZipFiles = {
     'README.txt': personReadme(name, person.name),
@@ -47,6 +47,8 @@ export async function personZip(ctx: Ctx, personId: string): Promise<Buffer> {
     'plans.json': json(plans),
     'places.json': json(places),
     'rules.json': json(rules),
+    'agreements.json': json(agreements),
+    'time-off.json': json(timeOff),
     'hours-words.json': json({ said: hours, requests }),
     'audit.json': json(await auditOf(personId)),
     ...(await statementFiles(ctx, own)),

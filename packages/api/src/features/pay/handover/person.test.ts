@@ -96,9 +96,17 @@ const jsonOf = <T>(text: string | undefined) => JSON.parse(text ?? 'null') as T;
 test('a person’s own export holds statements, lines, hours, terms, the clock in both versions, tips and the audit', async () => {
   const zip = await open(sefa, company.people.sefa.id);
   expect(Object.keys(zip).sort()).toEqual([
-    ...['README.txt', 'audit.json', 'clock-corrections.json', 'clock-entries.csv', 'hours-words.json', 'hours.csv'],
+    ...[
+      'README.txt',
+      'agreements.json',
+      'audit.json',
+      'clock-corrections.json',
+      'clock-entries.csv',
+      'hours-words.json',
+      'hours.csv',
+    ],
     ...['kinds.csv', 'lines.csv', 'places.json', 'plans.json', 'rates.json', 'rules.json'],
-    ...['statements/2026-05-11-sefa-lund.pdf', 'tips.csv', 'workings.json'],
+    ...['statements/2026-05-11-sefa-lund.pdf', 'time-off.json', 'tips.csv', 'workings.json'],
   ]);
   expect(zip['statements/2026-05-11-sefa-lund.pdf']?.startsWith('%PDF-')).toBe(true);
   // 10 % of 240.00 is 24.00, half is 12.00; 20.01 in half with the odd cent to the first of the crew (arithmetic).
@@ -128,8 +136,8 @@ test('a person’s own export holds statements, lines, hours, terms, the clock i
     ...['pay_week checked', 'pay_week locked'],
   ]);
   expect(jsonOf<unknown[]>(zip['rates.json'])).toMatchObject([
-    { for: 'the person', value: '20' },
-    { for: 'the company', value: '10' },
+    { personId: null, kind: 'commission_percent', value: '10' },
+    { personId: company.people.sefa.id, kind: 'hourly', value: '20' },
   ]);
 });
 

@@ -43,6 +43,8 @@ export function personReadme(companyName: string, personName: string): string {
     'rates.json              Dated rates, the own and the company’s.',
     'plans.json, places.json Dated plans of pay and places of work.',
     'rules.json              The company’s dated rules of pay.',
+    'agreements.json         What was agreed to in writing.',
+    'time-off.json           Days off, the rules of hours off, and changes of their balance.',
     'hours-words.json        What was said of the hours, and changes asked for.',
     'audit.json              Who changed what about this pay, and when.',
     ...columnWords(['kinds.csv', 'lines.csv', 'hours.csv', 'clock-entries.csv', 'tips.csv']),
