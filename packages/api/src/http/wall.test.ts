@@ -87,6 +87,10 @@ test('a dispatcher’s answers hold no rate, commission or pay, nor a key for on
     '/api/pay/weeks/2026-05-11',
     '/api/pay/weeks/2026-05-11/export.csv',
     '/api/pay/rules',
+    '/api/pay/paydays',
+    '/api/pay/weeks/2026-05-11/kinds.csv',
+    '/api/pay/weeks/2026-05-11/export.zip',
+    `/api/pay/people/${company.people.sefa.id}/export.zip`,
   ]) {
     await agents.dispatcher.get(path).expect(403);
   }

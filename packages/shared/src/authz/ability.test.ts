@@ -17,6 +17,7 @@ describe('the pay wall', () => {
     const ability = abilityFor(actor);
     expect(ability.can('read', 'Rate')).toBe(isAllowed);
     expect(ability.can('read', 'PayWeek')).toBe(isAllowed);
+    expect(ability.can('read', 'Payday')).toBe(isAllowed);
     expect(ability.can('update', 'Login')).toBe(isAllowed);
   });
 
@@ -30,6 +31,17 @@ describe('the pay wall', () => {
     }
     expect(abilityFor(owner).can('read', tag('Statement', { personId: 'other', state: 'draft' }))).toBe(true);
   });
+});
+
+test('what is kept about one’s pay is one’s own, and the owner’s to hand out', () => {
+  for (const actor of [dispatcher, technician]) {
+    const ability = abilityFor(actor);
+    expect(ability.can('read', tag('PayRecord', { personId: actor.personId ?? '' }))).toBe(true);
+    expect(ability.can('read', tag('PayRecord', { personId: 'other' }))).toBe(false);
+  }
+  expect(abilityFor(owner).can('read', tag('PayRecord', { personId: 'other' }))).toBe(true);
+  const rider: Actor = { userId: 'x', personId: null, role: 'technician' };
+  expect(abilityFor(rider).can('read', 'PayRecord')).toBe(false);
 });
 
 describe('the running week’s estimate', () => {
