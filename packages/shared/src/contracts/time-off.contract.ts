@@ -139,6 +139,8 @@ export const quoteTimeOff = endpoint({
   params: z.object({ startsOn: day }),
   query: taking,
   response: z.object({
+    /** Exact. */
+    hours: z.string(),
     /** Exact dollars an hour. */
     rate: z.string(),
     rateWords: z.string(),

@@ -29,8 +29,6 @@ export interface TakingFields {
 }
 
 export interface Quote extends TimeOffQuote {
-  /** Exact. */
-  hours: string;
   ruleId: string;
 }
 

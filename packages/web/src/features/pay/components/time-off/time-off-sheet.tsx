@@ -64,6 +64,8 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
   const balances = useQuery(balancesQuery(value.personId)).data?.balances ?? [];
   const fields = { ...fieldsOf(quote.error), ...fieldsOf(take.error) };
   const found = isReady && quote.error === null ? quote.data : undefined;
+  // While the next answer is worked out the last one stays on the screen, dimmed, and can’t be paid.
+  const isNew = found !== undefined && !quote.isPlaceholderData;
   const warnings = found?.warnings ?? [];
   const change = (next: Partial<Draft>) => {
     if (take.error) take.reset();
@@ -145,7 +147,7 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
             </SelectField>
           ) : null}
         </div>
-        {found ? <QuoteWords quote={found} hours={hours} /> : null}
+        {found ? <QuoteWords quote={found} isOld={quote.isPlaceholderData} /> : null}
         {warnings.map(({ code, message }) => (
           <TextField
             key={code}
@@ -165,8 +167,8 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
         <FormError error={take.error} />
         <SheetFoot>
           <Button onClick={() => onClose(null)}>Leave it</Button>
-          <Button type="submit" look="main" isBusy={take.isPending} disabled={!found}>
-            {found ? `Pay ${hoursMinutes(hours)} h, ${money(found.amountCents)}` : 'Pay the hours'}
+          <Button type="submit" look="main" isBusy={take.isPending} disabled={!isNew}>
+            {found && isNew ? `Pay ${hoursMinutes(hours)} h, ${money(found.amountCents)}` : 'Pay the hours'}
           </Button>
         </SheetFoot>
       </form>
@@ -174,15 +176,15 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
   );
 }
 
-function QuoteWords({ quote, hours }: { quote: TimeOffQuote; hours: string }) {
+function QuoteWords({ quote, isOld }: { quote: TimeOffQuote; isOld: boolean }) {
   return (
-    <dl className="to-quote" aria-label="What this comes to">
+    <dl className={isOld ? 'to-quote is-old' : 'to-quote'} aria-label="What this comes to" aria-busy={isOld}>
       <div>
         <dt>There now</dt>
         <dd>{hoursMinutes(quote.balance)} h</dd>
       </div>
       <div>
-        <dt>{`${hoursMinutes(hours)} h at ${rateText(quote.rate)}`}</dt>
+        <dt>{`${hoursMinutes(quote.hours)} h at ${rateText(quote.rate)}`}</dt>
         <dd>{money(quote.amountCents)}</dd>
       </div>
       <div>
