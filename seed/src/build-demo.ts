@@ -8,6 +8,7 @@ import type { Book } from './job-rows.ts';
 import { writeMenu } from './menu.ts';
 import { writePay } from './pay-rows.ts';
 import { writePeople } from './people.ts';
+import { writePlans } from './plan-rows.ts';
 import { Rota } from './plan-day.ts';
 import type { DemoRows } from './rows.ts';
 import { idsFrom, noRows } from './rows.ts';
@@ -48,6 +49,7 @@ export function buildDemo(now: Date): Demo {
   writeHistory(book, people, vans, rota);
   writeComingDays(book, people, vans, customers, rota);
   writePay(book, people);
+  writePlans(book, people);
   writeTimeOffPay(book, people);
   rows.jobs.sort((a, b) => a.createdAt.getTime() - b.createdAt.getTime());
   return { calendar, rows, ownerUserId: people.ownerUserId };

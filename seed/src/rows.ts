@@ -39,6 +39,9 @@ export interface DemoRows {
   payRules: Row<models.PayRuleSet>[];
   payWeeks: Row<models.PayWeek>[];
   payAdjustments: Row<models.PayAdjustment>[];
+  payPlans: Row<models.PayPlanRow>[];
+  payAgreements: Row<models.PayAgreement>[];
+  refundReasons: Row<models.RefundReason>[];
   timeOffRules: Row<models.TimeOffRuleRow>[];
   timeOffAdjustments: Row<models.TimeOffAdjustment>[];
 }
@@ -70,6 +73,9 @@ export function noRows(): DemoRows {
     payRules: [],
     payWeeks: [],
     payAdjustments: [],
+    payPlans: [],
+    payAgreements: [],
+    refundReasons: [],
     timeOffRules: [],
     timeOffAdjustments: [],
   };

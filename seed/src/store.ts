@@ -36,6 +36,9 @@ export function storeRows(rows: DemoRows, passwordHash: string): Promise<void> {
     await models.PayRuleSet.bulkCreate(rows.payRules, options);
     await models.PayWeek.bulkCreate(rows.payWeeks, options);
     await models.PayAdjustment.bulkCreate(rows.payAdjustments, options);
+    await models.PayPlanRow.bulkCreate(rows.payPlans, options);
+    await models.PayAgreement.bulkCreate(rows.payAgreements, options);
+    await models.RefundReason.bulkCreate(rows.refundReasons, options);
     await models.TimeOffRuleRow.bulkCreate(rows.timeOffRules, options);
     await models.TimeOffAdjustment.bulkCreate(rows.timeOffAdjustments, options);
   });
