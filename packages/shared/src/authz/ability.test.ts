@@ -55,6 +55,18 @@ describe('the running week’s estimate', () => {
   });
 });
 
+describe('balances of paid time off', () => {
+  test.each([
+    ['technician, the own', technician, 'pt', true],
+    ['technician, another’s', technician, 'other', false],
+    ['dispatcher, the own', dispatcher, 'pd', true],
+    ['dispatcher, another’s', dispatcher, 'pt', false],
+    ['owner, anybody’s', owner, 'pt', true],
+  ] as const)('%s', (_name, actor, personId, isAllowed) => {
+    expect(abilityFor(actor).can('read', tag('TimeOffBalance', { personId }))).toBe(isAllowed);
+  });
+});
+
 describe('a technician', () => {
   const ability = abilityFor(technician);
   test('reads and marks visits of the own crew on near days only', () => {
