@@ -5,7 +5,8 @@ import { OutboxMail } from '../../db/models/index.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
-import { hourly, lockWeek, worked } from './handover/testing/paid-weeks.ts';
+import { payWeeks } from '../../testing/pay-weeks.ts';
+import { hourly, worked } from './handover/testing/paid-weeks.ts';
 
 const app = useApp();
 let company: TestCompany;
@@ -31,7 +32,7 @@ const mailed = async (week: string, to: string) => {
 
 test('the mail at the lock is a link without figures, until the owner chooses otherwise', async () => {
   await worked(company.people.sefa.id, '2026-04-27', '07:00', '09:30');
-  await lockWeek(owner, '2026-04-27');
+  await payWeeks(owner).lock('2026-04-27');
   const plain = await mailed('2026-04-27', 'sefa@ternandtide.example');
   expect(plain).toContain(`/statements/2026-04-27/${company.people.sefa.id}`);
   expect(plain).not.toMatch(/\d\.\d\d|[Gg]ross/);
@@ -39,7 +40,7 @@ test('the mail at the lock is a link without figures, until the owner chooses ot
   await show(true);
   await worked(company.people.sefa.id, '2026-05-04', '07:00', '09:30');
   await worked(company.people.idris.id, '2026-05-04', '07:00', '08:00');
-  await lockWeek(owner, '2026-05-04');
+  await payWeeks(owner).lock('2026-05-04');
   // 2.5 h at 20.00 and 1 h at 30.00 (arithmetic); each mail has the own figures alone.
   const sefa = await mailed('2026-05-04', 'sefa@ternandtide.example');
   expect(sefa).toContain('is ready. Gross 50.00 for 2.50 h, before any withholding. Sign in to read it:');
@@ -49,6 +50,6 @@ test('the mail at the lock is a link without figures, until the owner chooses ot
   await show(false);
   await worked(company.people.sefa.id, '2026-05-11', '07:00', '09:30');
   app.time.now = '2026-05-18T12:00:00Z';
-  await lockWeek(owner, '2026-05-11');
+  await payWeeks(owner).lock('2026-05-11');
   expect(await mailed('2026-05-11', 'sefa@ternandtide.example')).not.toMatch(/\d\.\d\d|[Gg]ross/);
 });

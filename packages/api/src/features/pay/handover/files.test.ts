@@ -1,6 +1,6 @@
 import type TestAgent from 'supertest/lib/agent.js';
 import { strFromU8, unzipSync } from 'fflate';
-import { beforeAll, describe, expect, test } from 'vitest';
+import { beforeAll, expect, test } from 'vitest';
 import { v4 as key } from 'uuid';
 import type { PaydayDto } from '@driprail/shared/contracts/handover.contract';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
@@ -9,8 +9,9 @@ import { decimalText } from '@driprail/shared/domain/money/rounding';
 import { useApp } from '../../../testing/app.ts';
 import { aCompany, first } from '../../../testing/company.ts';
 import type { TestCompany } from '../../../testing/company.ts';
+import { aDoneJob, payWeeks } from '../../../testing/pay-weeks.ts';
 import { plainCents } from './csv.ts';
-import { bytesOf, hourly, lockWeek, readWeek, rowsOf, worked } from './testing/paid-weeks.ts';
+import { bytesOf, hourly, rowsOf, worked } from './testing/paid-weeks.ts';
 
 const app = useApp();
 let company: TestCompany;
@@ -40,6 +41,10 @@ beforeAll(async () => {
   }
   await worked(idris.id, '2026-04-28', '07:00', '18:00');
   await worked(sefa.id, '2026-04-28', '22:00', '23:59');
+  const wren = { name: '@Wren "Q", Calder', phone: '', skills: [], isTrainee: false, isActive: true, sharesTips: true };
+  const made = (await owner.post('/api/people').send(wren).expect(200)).body as { person: { id: string } };
+  await hourly(owner, made.person.id, '18');
+  await worked(made.person.id, '2026-05-12', '07:00', '08:00');
   await driveAndTip();
   const add = (kind: string, amountCents: number) =>
     owner
@@ -51,33 +56,18 @@ beforeAll(async () => {
   await add('discretionary_bonus', 2500);
   for (const day of ['2026-04-27', '2026-05-04', '2026-05-11']) {
     if (day === '2026-05-11') app.time.now = '2026-05-18T12:00:00Z';
-    await lockWeek(owner, day);
+    await payWeeks(owner).lock(day);
   }
   const named = { paysOn: '2026-05-22', note: '', weeks: ['2026-04-27', '2026-05-04', '2026-05-11'] };
   payday = ((await owner.post('/api/pay/paydays').send(named).expect(200)).body as { payday: PaydayDto }).payday;
-  weeks = await Promise.all(named.weeks.map((day) => readWeek(owner, day)));
+  weeks = await Promise.all(named.weeks.map(payWeeks(owner).read));
 });
 
 /** A job of today done by Sefa, with a tip by card and cash kept on the spot. */
 async function driveAndTip(): Promise<void> {
-  const { visit, job } = await company.aJob();
-  const times = { from: '2026-05-14T15:30:00Z', to: '2026-05-14T17:00:00Z' };
-  const move = { visitId: visit.id, planVersion: 0, vanId: company.vans.gannet.id, ...times };
-  await owner
-    .post('/api/board/moves')
-    .send({ moves: [move] })
-    .expect(200);
+  const { visit, job } = await aDoneJob(app, company, owner);
   await worked(company.people.sefa.id, '2026-05-14', '11:30', '12:30', 'job', visit.id);
   const sefa = await company.sefa();
-  for (const [kind, time] of [
-    ['set_off', '15:10'],
-    ['arrive', '15:20'],
-    ['start_work', '15:30'],
-    ['finish', '16:30'],
-  ]) {
-    app.time.now = `2026-05-14T${time}:00Z`;
-    await sefa.post(`/api/visits/${visit.id}/actions`).send({ key: key(), kind, deviceAt: app.time.now }).expect(200);
-  }
   for (const [method, amountCents, alreadyReceived] of [
     ['card', 1500, false],
     ['invoice', 300, false],
@@ -184,6 +174,7 @@ test('the archive holds a PDF per statement, the files and a README; no customer
     'statements/2026-04-27-sefa-lund.pdf',
     'statements/2026-05-04-sefa-lund.pdf',
     'statements/2026-05-11-sefa-lund.pdf',
+    'statements/2026-05-11-wren-q-calder.pdf',
   ]);
   const read = (name: string) => strFromU8(zip[name] ?? new Uint8Array());
   for (const [name, bytes] of Object.entries(zip)) {
@@ -212,13 +203,13 @@ test('the archive holds a PDF per statement, the files and a README; no customer
   );
 });
 
-describe('a name that begins like a formula', () => {
-  test('is text in every file', async () => {
-    const { sefa } = company.people;
-    const rows = rowsOf(await text('/api/pay/weeks/2026-05-04/export.csv'));
-    expect(rows.map((row) => row['description'])).toContain('Reimbursement: =HYPERLINK("x")');
-    expect(rows.every((row) => row['person'] === sefa.name)).toBe(true);
-  });
+test('a name that begins like a formula is text in every file', async () => {
+  const name = `'@Wren "Q", Calder`;
+  for (const file of ['kinds.csv', 'lines.csv', 'hours.csv']) {
+    const rows = rowsOf(await text(`/api/pay/paydays/${payday.id}/${file}`));
+    const persons = new Set(rows.map((row) => row['person']));
+    expect([...persons].sort()).toEqual([name, 'Idris Vale', 'Sefa Lund']);
+  }
 });
 
 test('files are the owner’s alone', async () => {

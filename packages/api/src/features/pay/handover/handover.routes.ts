@@ -1,4 +1,6 @@
 import * as api from '@driprail/shared/contracts/handover.contract';
+import { tag } from '@driprail/shared/authz/ability';
+import { authorize } from '../../../authz/authorize.ts';
 import type { Ctx } from '../../../http/context.ts';
 import type { RouteTable } from '../../../http/route.ts';
 import { okay, route } from '../../../http/route.ts';
@@ -13,11 +15,14 @@ import { changePayday, handOverPayday, makePayday, removePayday } from './payday
 
 /** Paydays, and the files that go to the payroll processor. */
 export function handoverRoutes(table: RouteTable): void {
-  route(table, api.listPaydays, async () => ({ waiting: await listWaitingWeeks(), paydays: await listPaydays() }));
-  route(table, api.getPayday, async ({ params: { id } }) => ({
-    payday: await onePayday(id),
-    people: await listPaydayPeople(id),
-  }));
+  route(table, api.listPaydays, async (_input, { ability }) => {
+    authorize(ability, 'read', 'Payday');
+    return { waiting: await listWaitingWeeks(), paydays: await listPaydays() };
+  });
+  route(table, api.getPayday, async ({ params: { id } }, { ability }) => {
+    authorize(ability, 'read', tag('Payday', { id }));
+    return { payday: await onePayday(id), people: await listPaydayPeople(id) };
+  });
   route(table, api.makePayday, async ({ body }, ctx) => ({ payday: await makePayday(ctx, body) }));
   route(table, api.changePayday, async ({ params, body: { version, ...fields } }, ctx) => ({
     payday: await changePayday(ctx, params.id, fields, version),

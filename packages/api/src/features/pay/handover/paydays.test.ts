@@ -7,7 +7,8 @@ import { select } from '../../../db/sequelize.ts';
 import { useApp } from '../../../testing/app.ts';
 import { aCompany, first } from '../../../testing/company.ts';
 import type { TestCompany } from '../../../testing/company.ts';
-import { hourly, lockWeek, worked } from './testing/paid-weeks.ts';
+import { payWeeks } from '../../../testing/pay-weeks.ts';
+import { hourly, worked } from './testing/paid-weeks.ts';
 
 const app = useApp();
 const WEEKS = ['2026-04-13', '2026-04-20', '2026-04-27', '2026-05-04'] as const;
@@ -19,7 +20,7 @@ beforeAll(async () => {
   await hourly(owner, company.people.sefa.id, '20');
   for (const day of WEEKS) {
     await worked(company.people.sefa.id, day, '07:00', '09:00');
-    await lockWeek(owner, day);
+    await payWeeks(owner).lock(day);
   }
 });
 

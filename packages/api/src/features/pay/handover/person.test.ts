@@ -5,7 +5,8 @@ import { v4 as key } from 'uuid';
 import { useApp } from '../../../testing/app.ts';
 import { aCompany, first } from '../../../testing/company.ts';
 import type { TestCompany } from '../../../testing/company.ts';
-import { bytesOf, hourly, lockWeek, rowsOf, worked } from './testing/paid-weeks.ts';
+import { aDoneJob, payWeeks } from '../../../testing/pay-weeks.ts';
+import { bytesOf, hourly, rowsOf, worked } from './testing/paid-weeks.ts';
 
 const app = useApp();
 let company: TestCompany;
@@ -31,22 +32,7 @@ beforeAll(async () => {
     .put(`/api/vans/${vans.gannet.id}/crew/2026-05-14`)
     .send({ members: [people.sefa, people.idris].map(({ id }) => ({ personId: id, ...shift })) })
     .expect(200);
-  const { visit, job } = await company.aJob();
-  const move = { visitId: visit.id, planVersion: 0, vanId: vans.gannet.id };
-  const times = { from: '2026-05-14T15:30:00Z', to: '2026-05-14T17:00:00Z' };
-  await owner
-    .post('/api/board/moves')
-    .send({ moves: [{ ...move, ...times }] })
-    .expect(200);
-  for (const [kind, time] of [
-    ['set_off', '15:10'],
-    ['arrive', '15:20'],
-    ['start_work', '15:30'],
-    ['finish', '16:30'],
-  ]) {
-    app.time.now = `2026-05-14T${time}:00Z`;
-    await sefa.post(`/api/visits/${visit.id}/actions`).send({ key: key(), kind, deviceAt: app.time.now }).expect(200);
-  }
+  const { visit, job } = await aDoneJob(app, company, owner);
   const tip = { key: key(), amountCents: 2001, method: 'card', alreadyReceived: false };
   await sefa.post(`/api/jobs/${job.id}/tips`).send(tip).expect(200);
   await worked(people.sefa.id, '2026-05-14', '11:30', '12:30', 'job', visit.id);
@@ -60,7 +46,7 @@ beforeAll(async () => {
       .expect(200);
   }
   app.time.now = '2026-05-18T12:00:00Z';
-  await lockWeek(owner, '2026-05-11');
+  await payWeeks(owner).lock('2026-05-11');
 });
 
 /** Time written down by the dispatcher, and corrected by the owner. */

@@ -1,7 +1,6 @@
 import type TestAgent from 'supertest/lib/agent.js';
 import { parse } from 'csv-parse/sync';
 import { v7 as uuid } from 'uuid';
-import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
 import { ClockEntry } from '../../../../db/models/index.ts';
 
@@ -21,18 +20,6 @@ export async function worked(
 export async function hourly(owner: TestAgent, personId: string, value: string): Promise<void> {
   const rate = { kind: 'hourly', personId, serviceId: null, clockKind: null, value, startsOn: '2026-01-01' };
   await owner.post('/api/pay/rates').send(rate).expect(200);
-}
-
-export async function readWeek(owner: TestAgent, day: string): Promise<PayWeekDto> {
-  return (await owner.get(`/api/pay/weeks/${day}`).expect(200)).body as PayWeekDto;
-}
-
-export async function lockWeek(owner: TestAgent, day: string): Promise<PayWeekDto> {
-  for (const to of ['checked', 'locked']) {
-    const { week } = await readWeek(owner, day);
-    await owner.post(`/api/pay/weeks/${day}/state`).send({ to, version: week.version }).expect(200);
-  }
-  return readWeek(owner, day);
 }
 
 /** What an endpoint answers as bytes. */
