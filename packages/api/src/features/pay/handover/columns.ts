@@ -35,7 +35,7 @@ const kindMeanings: Columns<PayKind | 'gross'> = [
   ['gross', 'Gross pay before withholding: the columns from straight_pay on, less tips_already_received'],
 ];
 
-const version = ['schema_version', `Of these columns; ${EXPORT_SCHEMA_VERSION} as documented here`] as const;
+const version = ['schema_version', `Version of these columns, ${EXPORT_SCHEMA_VERSION} as told here`] as const;
 
 /** kinds.csv: a row per person and week. */
 export const kindColumns = [

@@ -1,7 +1,7 @@
 import { expect, test } from 'vitest';
 import { computePayWeek } from '@driprail/shared/domain/pay/compute-pay-week';
 import type { CrewSplit } from '@driprail/shared/domain/pay/pay-week.types';
-import { aDoneLine, aRate, aTip, aWeek } from '@driprail/shared/domain/pay/testing/pay-week.factory';
+import { aDoneLine, aRate, aTip, aWeek, aWorkedWeek } from '@driprail/shared/domain/pay/testing/pay-week.factory';
 import { ownPart } from './own-lines.ts';
 
 test.each([['equal'], ['weights'], ['minutes']] as [CrewSplit][])(
@@ -27,3 +27,14 @@ test.each([['equal'], ['weights'], ['minutes']] as [CrewSplit][])(
     expect(lines.map(ownPart).every((line) => line.working.at(-1)?.arithmetic === 'own share')).toBe(true);
   },
 );
+
+test('the own overtime and commission alone keep their whole working', () => {
+  const week = aWeek({
+    entries: aWorkedWeek([600, 600, 600, 600, 600]),
+    rates: [aRate('hourly', '20'), aRate('commission_percent', '10')],
+    doneLines: [aDoneLine(1, 43_210)],
+  });
+  const lines = computePayWeek(week).people[0]?.lines ?? [];
+  expect(lines.map((line) => line.kind)).toEqual(['hourly', 'commission', 'overtime_premium']);
+  expect(lines.map(ownPart)).toEqual(lines);
+});

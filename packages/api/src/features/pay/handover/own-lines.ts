@@ -2,7 +2,7 @@ import type { PayLine, WorkingStep } from '@driprail/shared/domain/pay/pay-week.
 
 /** How the engine names the step that shares work or a tip in a crew, and how it writes a share. */
 const SHARE_STEP = 'The share of ';
-const SHARE_WORDS = /^(half|1 of \d+ equal shares|\S+ of \S+ (minutes|parts)) of /;
+const SHARE_WORDS = /^(half|1 of \d+ equal shares|\S+ of \S+ (minutes|parts)) of -?[\d,]+\.\d\d$/;
 
 /**
  * A line of shared work as its own person may carry it away: the own share, without the whole amount and the others'
