@@ -44,7 +44,7 @@ export function naivePlanWeek(
     const lack = promised60 - earned * 60n;
     return lack > 0n ? (lack + 59n) / 60n : 0n;
   };
-  let included = 0n;
+  let included: bigint;
   let notWorked = { over: 0n, by: 1n };
   switch (base.kind) {
     case 'hourly':
