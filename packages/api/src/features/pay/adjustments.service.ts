@@ -40,10 +40,7 @@ export function addAdjustment({ actor, now }: Ctx, day: string, fields: Adjustme
       { id: uuid(), payWeekId: week.id, ...fields, ...amount, userId: actor.userId, at: now() },
       { transaction: tx },
     );
-    await week.update(
-      { state: 'draft', checkedAt: null, checkedBy: null, version: week.version + 1 },
-      { transaction: tx },
-    );
+    await backToDraft(week, tx);
     await audit(tx, { userId: actor.userId, at: now() }, 'pay_adjustment', row.id, 'added', {
       ...fields,
       ...amount,
@@ -61,16 +58,19 @@ export function removeAdjustment({ actor, now }: Ctx, id: string): Promise<void>
     const week = await PayWeek.findByPk(row.payWeekId, { transaction: tx, lock: tx.LOCK.UPDATE, rejectOnEmpty: true });
     refuseLocked(week);
     await row.destroy({ transaction: tx });
-    await week.update(
-      { state: 'draft', checkedAt: null, checkedBy: null, version: week.version + 1 },
-      { transaction: tx },
-    );
+    await backToDraft(week, tx);
     await audit(tx, { userId: actor.userId, at: now() }, 'pay_adjustment', id, 'removed', {
       amountCents: row.amountCents,
       reason: row.reason,
     });
     hintAfterCommit(tx, ['owners'], 'pay', week.id, week.version);
   });
+}
+
+/** What was checked must be checked again. */
+export async function backToDraft(week: PayWeek, tx: Transaction): Promise<void> {
+  const version = week.version + 1;
+  await week.update({ state: 'draft', checkedAt: null, checkedBy: null, version }, { transaction: tx });
 }
 
 /** @throws 422 */

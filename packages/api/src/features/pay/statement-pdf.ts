@@ -67,7 +67,7 @@ function timeOffWords(rows: StatementDto['timeOff'], isLocked: boolean): string 
     const parts = [
       ['earned', earned],
       ['taken', taken],
-      ['set by the owner', adjusted],
+      ['changed by the owner', adjusted],
       ['not kept', lost],
       ['balance', balance],
     ] as const;

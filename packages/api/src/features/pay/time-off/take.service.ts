@@ -8,7 +8,7 @@ import { inTransaction } from '../../../db/sequelize.ts';
 import type { Ctx } from '../../../http/context.ts';
 import { unprocessable } from '../../../http/errors.ts';
 import { hintAfterCommit } from '../../../realtime/hints.ts';
-import { refuseLocked } from '../adjustments.service.ts';
+import { backToDraft, refuseLocked } from '../adjustments.service.ts';
 import { readPayWeek } from '../pay-week.queries.ts';
 import { weekOf } from '../weeks.service.ts';
 import { quoteOf } from './quote.queries.ts';
@@ -43,10 +43,7 @@ export function takeTimeOff({ actor, now }: Ctx, day: string, taking: Taking): P
       },
       { transaction: tx },
     );
-    await week.update(
-      { state: 'draft', checkedAt: null, checkedBy: null, version: week.version + 1 },
-      { transaction: tx },
-    );
+    await backToDraft(week, tx);
     await audit(tx, { userId: actor.userId, at: now() }, 'pay_adjustment', row.id, 'hours off taken', {
       ...{ personId, kind, on, hours: quote.hours, rate: quote.rate, amountCents: quote.amountCents },
       ...{ ruleId: quote.ruleId, week: week.startsOn, accepted },

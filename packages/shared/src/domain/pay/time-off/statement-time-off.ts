@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import { exact } from '../../money/exact.ts';
 import { timeOffKinds, type TimeOffKind } from './time-off-rule.ts';
 import type { TimeOffWeek } from './time-off-ledger.ts';
 
@@ -22,9 +21,4 @@ export function statementRow(kind: TimeOffKind, weeks: readonly TimeOffWeek[]): 
   if (!week || weeks.every(({ moves }) => moves.length === 0)) return null;
   const { earned, taken, adjusted, lost, balance } = week;
   return { kind, earned, taken, adjusted, lost, balance };
-}
-
-/** Whether anything but the balance is there to be said of the week. */
-export function hasMoved({ earned, taken, adjusted, lost }: StatementTimeOff): boolean {
-  return [earned, taken, adjusted, lost].some((hours) => !exact(hours).equals(0));
 }

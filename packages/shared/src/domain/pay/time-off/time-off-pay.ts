@@ -20,7 +20,7 @@ export interface TimeOffTaken {
   rateWords: string;
 }
 
-export const TIME_OFF_RULE = '29 CFR 778.218, 778.219';
+const TIME_OFF_RULE = '29 CFR 778.218, 778.219';
 
 /** Hours times the rate, rounded once, half up. */
 export function timeOffCents({ hours, rate }: Pick<TimeOffTaken, 'hours' | 'rate'>): number {

@@ -43,7 +43,7 @@ export function StatementBalances({ rows, isExpected }: { rows: readonly Stateme
 
 function OtherMoves({ row: { adjusted, lost } }: { row: StatementTimeOff }) {
   const words = [
-    exact(adjusted).equals(0) ? '' : `set by the owner ${hoursMinutes(adjusted)}`,
+    exact(adjusted).equals(0) ? '' : `changed by the owner ${hoursMinutes(adjusted)}`,
     exact(lost).equals(0) ? '' : `over the limit, not kept ${hoursMinutes(lost)}`,
   ].filter(Boolean);
   return words.length === 0 ? null : <small>{words.join(', ')}</small>;

@@ -11,7 +11,7 @@ import './time-off.css';
 const moveWords: Record<TimeOffMoveKind, string> = {
   earned: 'Earned',
   given: 'Given',
-  adjusted: 'Set by the owner',
+  adjusted: 'Changed by the owner',
   taken: 'Taken',
   carry_lost: 'Left behind at the new year',
   cap_lost: 'Over the cap, not kept',

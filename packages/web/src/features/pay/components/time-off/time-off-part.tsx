@@ -56,7 +56,7 @@ export function TimeOffPart({ people, person, today, nextWeek, earliest }: Props
         <Button onClick={() => setAdding('show-up')}>
           <Icon name="plus" /> Show-up rule
         </Button>
-        {person ? <Button onClick={() => setAdding('ledger')}>Set a balance</Button> : null}
+        {person ? <Button onClick={() => setAdding('ledger')}>Adjust balance</Button> : null}
       </header>
       <div className="to-cols">
         <Loaded query={rules} what="the rules of time off">
@@ -82,7 +82,7 @@ export function TimeOffPart({ people, person, today, nextWeek, earliest }: Props
         </Sheet>
       ) : null}
       {adding === 'ledger' && person ? (
-        <Sheet title="Set a balance" onClose={close} width={620}>
+        <Sheet title="Adjust balance" onClose={close} width={620}>
           <LedgerAdjustForm personId={person.id} on={today > earliest ? today : earliest} onDone={close} />
         </Sheet>
       ) : null}

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { useEffect, useRef, useState } from 'react';
 import type { ReactNode } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import type { TimeOffQuote, TimeOffWarning } from '@driprail/shared/contracts/time-off.contract';
@@ -67,6 +67,10 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
   // While the next answer is worked out the last one stays on the screen, dimmed, and can’t be paid.
   const isNew = found !== undefined && !quote.isPlaceholderData;
   const warnings = found?.warnings ?? [];
+  const form = useRef<HTMLFormElement>(null);
+  useEffect(() => {
+    if (take.error) form.current?.querySelector('[aria-invalid]')?.scrollIntoView({ block: 'center' });
+  }, [take.error]);
   const change = (next: Partial<Draft>) => {
     if (take.error) take.reset();
     setValue({ ...value, ...next });
@@ -75,6 +79,7 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
   return (
     <Sheet title="Time off" onClose={() => onClose(null)} width={620}>
       <form
+        ref={form}
         noValidate
         onSubmit={(event) => {
           event.preventDefault();
