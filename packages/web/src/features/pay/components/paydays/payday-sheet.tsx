@@ -55,7 +55,11 @@ export function PaydaySheet({ payday, waiting, onRemoved }: Props) {
         </div>
       )}
       <Loaded query={people} what="who is paid">
-        {(found) => <PaydayTable payday={found.payday} people={found.people} />}
+        {(found) => (
+          <div className="pd-scroll">
+            <PaydayTable payday={found.payday} people={found.people} />
+          </div>
+        )}
       </Loaded>
       {open === 'change' ? (
         <Sheet title={date} onClose={close} width={520}>
