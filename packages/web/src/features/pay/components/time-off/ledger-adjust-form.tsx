@@ -1,12 +1,12 @@
 import { useState } from 'react';
-import { timeOffKindNames, timeOffKinds } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import type { TimeOffKind } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { FormError } from '../../../../components/form-error.tsx';
 import { Button } from '../../../../components/button.tsx';
-import { SelectField, TextField } from '../../../../components/field.tsx';
+import { TextField } from '../../../../components/field.tsx';
 import { SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { useAdjustTimeOff } from '../../api/time-off.queries.ts';
+import { KindField } from './kind-field.tsx';
 
 /** An opening balance or a correction of a person's hours; it stays in the ledger with its reason. */
 export function LedgerAdjustForm({ personId, on, onDone }: { personId: string; on: string; onDone: () => void }) {
@@ -23,18 +23,12 @@ export function LedgerAdjustForm({ personId, on, onDone }: { personId: string; o
       }}
     >
       <div className="grid grid-cols-3 gap-3 max-[520px]:grid-cols-1">
-        <SelectField
+        <KindField
           label="Kind"
           value={value.kind}
           error={fields['kind']}
-          onChange={(event) => setValue({ ...value, kind: event.target.value as TimeOffKind })}
-        >
-          {timeOffKinds.map((kind) => (
-            <option key={kind} value={kind}>
-              {timeOffKindNames[kind]}
-            </option>
-          ))}
-        </SelectField>
+          onChange={(kind) => setValue({ ...value, kind })}
+        />
         <TextField
           label="Hours"
           inputMode="decimal"

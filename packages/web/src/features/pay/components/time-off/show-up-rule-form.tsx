@@ -7,6 +7,7 @@ import { SelectField, TextField } from '../../../../components/field.tsx';
 import { SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { useAddShowUpRule } from '../../api/time-off.queries.ts';
+import { StartField } from './start-field.tsx';
 
 type Pays = 'show_up' | 'no_show_trip' | 'no show_up' | 'no no_show_trip';
 const paysWords: Record<Pays, string> = {
@@ -63,13 +64,7 @@ export function ShowUpRuleForm({
             </option>
           ))}
         </SelectField>
-        <TextField
-          label="From, the first day of a workweek"
-          type="date"
-          value={value.startsOn}
-          error={fields['startsOn']}
-          onChange={(event) => set({ startsOn: event.target.value })}
-        />
+        <StartField value={value.startsOn} error={fields['startsOn']} onChange={(from) => set({ startsOn: from })} />
         {value.pays === 'show_up' ? (
           <TextField
             label="Hours a day that are paid at least"

@@ -1,6 +1,5 @@
 import { useState } from 'react';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
-import { timeOffKindNames, timeOffKinds } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import type { TimeOffKind, TimeOffRule } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { FormError } from '../../../../components/form-error.tsx';
 import { Button } from '../../../../components/button.tsx';
@@ -8,6 +7,8 @@ import { SelectField, TextArea, TextField } from '../../../../components/field.t
 import { SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { useAddTimeOffRule } from '../../api/time-off.queries.ts';
+import { KindField } from './kind-field.tsx';
+import { StartField } from './start-field.tsx';
 
 type By = TimeOffRule['earning']['by'];
 const byWords: Record<By, string> = {
@@ -49,18 +50,7 @@ export function TimeOffRuleForm({ people, personId, startsOn, onDone }: Props) {
       }}
     >
       <div className="grid grid-cols-2 gap-3 max-[520px]:grid-cols-1">
-        <SelectField
-          label="Kind"
-          value={value.kind}
-          error={fields['kind']}
-          onChange={(event) => set({ kind: event.target.value as TimeOffKind })}
-        >
-          {timeOffKinds.map((kind) => (
-            <option key={kind} value={kind}>
-              {timeOffKindNames[kind]}
-            </option>
-          ))}
-        </SelectField>
+        <KindField label="Kind" value={value.kind} error={fields['kind']} onChange={(kind) => set({ kind })} />
         <SelectField
           label="For"
           value={value.personId}
@@ -74,13 +64,7 @@ export function TimeOffRuleForm({ people, personId, startsOn, onDone }: Props) {
             </option>
           ))}
         </SelectField>
-        <TextField
-          label="From, the first day of a workweek"
-          type="date"
-          value={value.startsOn}
-          error={fields['startsOn']}
-          onChange={(event) => set({ startsOn: event.target.value })}
-        />
+        <StartField value={value.startsOn} error={fields['startsOn']} onChange={(from) => set({ startsOn: from })} />
         <SelectField label="Earned by" value={value.by} onChange={(event) => set({ by: event.target.value as By })}>
           {(Object.keys(byWords) as By[]).map((by) => (
             <option key={by} value={by}>

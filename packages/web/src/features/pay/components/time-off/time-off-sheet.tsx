@@ -2,7 +2,6 @@ import { useEffect, useRef, useState } from 'react';
 import type { ReactNode } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import type { TimeOffQuote, TimeOffWarning } from '@driprail/shared/contracts/time-off.contract';
-import { timeOffKindNames, timeOffKinds } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import type { TimeOffKind } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { FormError } from '../../../../components/form-error.tsx';
@@ -18,6 +17,7 @@ import { payPeopleQuery } from '../../api/rates.queries.ts';
 import { balancesQuery, quoteQuery, useTakeTimeOff } from '../../api/time-off.queries.ts';
 import { rateText } from '../ledger.ts';
 import { openWeeks, weekSpan } from '../week-model.ts';
+import { KindField } from './kind-field.tsx';
 import './time-off.css';
 
 interface Props {
@@ -106,22 +106,16 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
               ))}
             </SelectField>
           ) : null}
-          <SelectField
+          <KindField
             label="Time off"
             value={kind}
             error={fields['kind']}
-            onChange={(event) => change({ kind: event.target.value as TimeOffKind })}
-          >
-            {timeOffKinds.map((one) => {
+            more={(one) => {
               const balance = balances.find((own) => own.kind === one)?.balance;
-              return (
-                <option key={one} value={one}>
-                  {timeOffKindNames[one]}
-                  {balance === undefined ? '' : `, ${hoursMinutes(balance)} h there`}
-                </option>
-              );
-            })}
-          </SelectField>
+              return balance === undefined ? '' : `, ${hoursMinutes(balance)} h there`;
+            }}
+            onChange={(next) => change({ kind: next })}
+          />
           <TextField
             label="Day"
             type="date"
