@@ -16,6 +16,23 @@ beforeAll(async () => {
      SELECT gen_random_uuid(), id, :personId, 0, 'hourly', 100, true, '{}' FROM pay_weeks`,
     { personId: company.people.sefa.id },
   );
+  const { job } = await company.aJob();
+  const ids = { jobId: job.id, personId: company.people.sefa.id };
+  await select(
+    `INSERT INTO tips (id, job_id, amount_cents, method, received_at, user_id)
+     SELECT gen_random_uuid(), :jobId, 500, 'card', '2026-05-05T12:00:00Z', id FROM users LIMIT 1`,
+    ids,
+  );
+  await select(
+    `INSERT INTO jobs_paid (job_id, paid_at, recorded_by, recorded_at)
+     SELECT :jobId, '2026-05-05T12:00:00Z', id, now() FROM users LIMIT 1`,
+    ids,
+  );
+  await select(
+    `INSERT INTO clock_entries (id, person_id, kind, started_at, ended_at)
+     VALUES (gen_random_uuid(), :personId, 'shop', '2026-05-05T12:00:00Z', '2026-05-05T13:00:00Z')`,
+    ids,
+  );
   await select(`UPDATE pay_weeks SET state = 'locked'`);
 });
 
@@ -43,6 +60,11 @@ describe('a locked week never changes', () => {
       'an adjustment',
       `INSERT INTO pay_adjustments SELECT gen_random_uuid(), w.id, l.person_id, 'bonus', 100, 'x', null, w.locked_by, now() FROM pay_weeks w, pay_lines l`,
     ],
+    ['a tip it paid', `UPDATE tips SET amount_cents = 100`],
+    ['a tip it paid, taken away', `DELETE FROM tips`],
+    ['a payment it settled', `DELETE FROM jobs_paid`],
+    ['a clock entry, taken away', `DELETE FROM clock_entries`],
+    ['a clock entry, but by a correction', `UPDATE clock_entries SET ended_at = '2026-05-05T14:00:00Z'`],
     ['a statement', `INSERT INTO pay_statements SELECT w.id, l.person_id, 1, '{}' FROM pay_weeks w, pay_lines l`],
   ])('%s', async (_what, sql) => {
     await expect(select(sql)).rejects.toMatchObject({ parent: { code: 'DR001' } });

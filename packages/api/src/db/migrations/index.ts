@@ -8,6 +8,7 @@ import { paidTimeOff } from './2026-12-01-007-paid-time-off.ts';
 import { paydays } from './2026-12-01-006-paydays.ts';
 import { payFacts } from './2026-12-01-009-pay-facts.ts';
 import { checkedFigures } from './2026-12-01-010-checked-figures.ts';
+import { lockedRecords } from './2026-12-01-011-locked-records.ts';
 import { pay } from './2026-12-01-003-pay.ts';
 
 /** In the order in which they are run. */
@@ -22,4 +23,5 @@ export const migrations: Migration[] = [
   commissionWhenPaid,
   payFacts,
   checkedFigures,
+  lockedRecords,
 ];
