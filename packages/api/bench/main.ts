@@ -1,5 +1,7 @@
 import { benchBoard } from './board.bench.ts';
 import { benchDrag } from './drag.bench.ts';
+import { benchHistory } from './history.bench.ts';
+import type { Ratio } from './measure.ts';
 import { benchPay } from './pay.bench.ts';
 import { openStage } from './stage.ts';
 
@@ -7,13 +9,15 @@ import { openStage } from './stage.ts';
 async function main(): Promise<void> {
   const stage = await openStage();
   try {
-    for (const bench of [() => benchBoard(stage), () => benchDrag(stage), benchPay]) {
-      const { what, ratio, goal, note } = await bench();
-      process.stdout.write(`${ratio.toFixed(2)} (goal ${goal} or less)  ${what}: ${note}\n`);
-    }
+    for (const bench of [() => benchBoard(stage), () => benchDrag(stage), benchPay]) print(await bench());
   } finally {
     await stage.close();
   }
+  for (const ratio of await benchHistory()) print(ratio);
+}
+
+function print({ what, ratio, goal, note }: Ratio): void {
+  process.stdout.write(`${ratio.toFixed(2)} (goal ${goal} or less)  ${what}: ${note}\n`);
 }
 
 main().then(

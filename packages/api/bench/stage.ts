@@ -36,8 +36,14 @@ export interface BenchStage {
 const NOW = '2026-05-14T15:00:00.000Z';
 const SECRET = 'only for benches';
 
-/** The product on a demo day, and beside it the bare ways of doing the same. */
-export async function openStage(): Promise<BenchStage> {
+export interface OpenApp {
+  url: string;
+  appUrl: string;
+  close: () => Promise<void>;
+}
+
+/** The product on a fresh database that `fill` has put something into. */
+export async function openApp(fill: (now: Date) => Promise<unknown>): Promise<OpenApp> {
   const postgres = testPostgresFromEnvironment();
   await ensureMigratedTemplate(postgres.port);
   const { appUrl, ownerUrl } = await cloneDatabase(postgres);
@@ -45,7 +51,7 @@ export async function openStage(): Promise<BenchStage> {
   const config = { ...readConfig({ DATABASE_URL: appUrl, DATABASE_MIGRATION_URL: ownerUrl }), isTest: true };
   connect(appUrl);
   const now = () => new Date(NOW);
-  await seedDemo({ now: now() });
+  await fill(now());
   await analyze(ownerUrl);
 
   const mail = localMail(config.mailFrom, now);
@@ -58,15 +64,30 @@ export async function openStage(): Promise<BenchStage> {
     localMail: mail.taken,
   });
   const url = await listen(app.server);
-  const signIn = await fetch(`${url}/api/session`, {
+  const close = async () => {
+    await app.close();
+    await disconnect();
+  };
+  return { url, appUrl, close };
+}
+
+/** @returns the cookie of the session */
+export async function signIn(url: string, login: string): Promise<string> {
+  const answer = await fetch(`${url}/api/session`, {
     method: 'POST',
-    body: JSON.stringify({ email: 'dispatch@ternandtide.example', password: 'driprail-demo' }),
+    body: JSON.stringify({ email: `${login}@ternandtide.example`, password: 'driprail-demo' }),
     headers: { 'content-type': 'application/json' },
   });
-  const cookie = signIn.headers
+  return answer.headers
     .getSetCookie()
     .map((value) => value.split(';')[0])
     .join('; ');
+}
+
+/** The product on a demo day, and beside it the bare ways of doing the same. */
+export async function openStage(): Promise<BenchStage> {
+  const { url, appUrl, close } = await openApp((now) => seedDemo({ now }));
+  const cookie = await signIn(url, 'dispatch');
 
   const pool = new pg.Pool({ connectionString: appUrl, max: 4, options: '-c jit=off' });
   const bareApp = express();
@@ -94,9 +115,8 @@ export async function openStage(): Promise<BenchStage> {
       bareSocket.disconnect();
       await bareServer.close();
       sessions.close();
-      await app.close();
       await pool.end();
-      await disconnect();
+      await close();
     },
   };
 }

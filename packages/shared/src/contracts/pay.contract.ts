@@ -250,7 +250,7 @@ export const payWeekDto = z.object({
   correctedLines,
   customers,
   yearsToDate,
-  /** Balances of paid time off by person; of a locked week as they were when it was locked. */
+  /** Balances of paid time off by person: of a locked week as they were when it was locked, of an open one when asked for. */
   timeOff: z.record(z.string(), z.array(statementTimeOff)),
   /** When the clock entries and jobs that warnings name took place, by their ids. */
   warningTimes: z.record(z.string(), instant),
@@ -263,6 +263,8 @@ export const getPayWeek = endpoint({
   roles: owner,
   summary: 'The pay week that holds a day: per person hours, lines and warnings, each line with its working.',
   params: weekParam,
+  /** Of an open week, everybody's balances of paid time off too. */
+  query: z.object({ timeOff: z.literal('all').optional() }),
   response: payWeekDto,
 });
 export const setPayWeekState = endpoint({

@@ -3,6 +3,7 @@ import { endpoint } from './endpoint.ts';
 import { day, decimal, id, instant, shortText } from './fields.ts';
 import { payWeekDto } from './pay.contract.ts';
 import { everyone } from '../authz/actor.ts';
+import { statementTimeOff } from '../domain/pay/time-off/statement-time-off.ts';
 import { showUpRule } from '../domain/pay/time-off/show-up-rule.ts';
 import { timeOffKinds, timeOffRule } from '../domain/pay/time-off/time-off-rule.ts';
 
@@ -169,4 +170,13 @@ export const takeTimeOff = endpoint({
       .default([]),
   }),
   response: payWeekDto,
+});
+
+export const getWeekTimeOff = endpoint({
+  method: 'get',
+  path: '/api/pay/weeks/:startsOn/time-off/:personId',
+  roles: owner,
+  summary: 'One person’s balances as the statement of a week shows them.',
+  params: z.object({ startsOn: day, personId: id }),
+  response: z.object({ timeOff: z.array(statementTimeOff) }),
 });

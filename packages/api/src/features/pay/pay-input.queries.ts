@@ -16,7 +16,13 @@ import type { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
 import { carriedInto } from './carried.queries.ts';
 import { settledCommissionsIn } from './deferred/settled.queries.ts';
-import { daysAwayJson, noShowTripsJson, noShowTripSql, showUpRulesJson, timeOffTakenJson } from './time-off/pay-input.sql.ts';
+import {
+  daysAwayJson,
+  noShowTripsJson,
+  noShowTripSql,
+  showUpRulesJson,
+  timeOffTakenJson,
+} from './time-off/pay-input.sql.ts';
 import { rulesOn } from './weeks.service.ts';
 
 interface GatheredLine extends Omit<DoneLine, 'commissionableCents' | 'crew'> {
@@ -34,7 +40,16 @@ interface GatheredPlace extends Omit<PersonPlace, 'ruleSet'> {
 
 type Gathered = Pick<
   PayWeekInput,
-  'people' | 'entries' | 'rates' | 'tips' | 'adjustments' | 'plans' | 'ratesInEffect' | 'showUpRules' | 'noShowTrips' | 'daysAway'
+  | 'people'
+  | 'entries'
+  | 'rates'
+  | 'tips'
+  | 'adjustments'
+  | 'plans'
+  | 'ratesInEffect'
+  | 'showUpRules'
+  | 'noShowTrips'
+  | 'daysAway'
 > & {
   lines: GatheredLine[];
   places: GatheredPlace[];
@@ -47,7 +62,8 @@ const crewJson = `json_build_object('personId', vc.person_id, 'position', vc.pos
 /** Everything that a week is paid from, in one statement; shares rest on who worked the visit. */
 const gatherSql = `
 WITH entry AS (
-  SELECT e.* FROM clock_entries e WHERE e.started_at < :endsAt AND coalesce(e.ended_at, :asOf::timestamptz) > :startsAt
+  SELECT e.* FROM clock_entries e WHERE tstzrange(e.started_at, e.ended_at) && tstzrange(:startsAt, :endsAt)
+     AND (e.ended_at IS NOT NULL OR :asOf::timestamptz > :startsAt)
 ), line AS (
   SELECT l.* FROM job_lines l WHERE l.finished_at >= :startsAt AND l.finished_at < :endsAt
 ), tip AS (

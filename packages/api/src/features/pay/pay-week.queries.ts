@@ -13,8 +13,16 @@ import { salesOf } from './week-figures.queries.ts';
 import { yearsToDate } from './year-to-date.queries.ts';
 import { headOf } from './weeks.service.ts';
 
-/** A week as the owner sees it: computed while open, as it was frozen once locked. */
-export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): Promise<PayWeekDto> {
+/**
+ * A week as the owner sees it: computed while open, as it was frozen once locked.
+ * @param withTimeOff of an open week, everybody's balances too; they look back over all weeks
+ */
+export async function readPayWeek(
+  week: PayWeek,
+  now: Date,
+  tx?: Transaction,
+  { withTimeOff = false } = {},
+): Promise<PayWeekDto> {
   const input = await payInputOf(week, now, tx);
   const computed = computePayWeek(input);
   const frozen = week.state === 'locked' ? await readFrozen(week.id, null, tx) : null;
@@ -30,7 +38,7 @@ export async function readPayWeek(week: PayWeek, now: Date, tx?: Transaction): P
     correctedLines: await correctedLinesOf(people, tx),
     customers: await customersOf(people, tx),
     yearsToDate: await yearsToDate(week, people, tx),
-    timeOff: frozen?.timeOff ?? (await statementTimeOffOf(week, people, tx)),
+    timeOff: frozen?.timeOff ?? (withTimeOff ? await statementTimeOffOf(week, people, tx) : {}),
     warningTimes: warningTimes(people, input),
   };
 }

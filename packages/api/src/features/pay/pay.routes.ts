@@ -36,7 +36,8 @@ export interface PayOptions {
 }
 
 export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
-  const read = (day: string, now: Date) => inTransaction(async (tx) => readPayWeek(await weekAt(day, tx), now, tx));
+  const read = (day: string, now: Date, parts: { withTimeOff?: boolean } = {}) =>
+    inTransaction(async (tx) => readPayWeek(await weekAt(day, tx), now, tx, parts));
 
   route(table, api.listRates, async () => ({ rates: await listRates() }));
   route(table, api.addRate, async ({ body }, ctx) => ({ rate: await addRate(ctx, body) }));
@@ -71,7 +72,9 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
   route(table, api.listPayWeeks, async (_input, { now }) => {
     return { weeks: await listWeeks(await todayOf(now())) };
   });
-  route(table, api.getPayWeek, ({ params }, { now }) => read(params.startsOn, now()));
+  route(table, api.getPayWeek, ({ params, query }, { now }) =>
+    read(params.startsOn, now(), { withTimeOff: query.timeOff === 'all' }),
+  );
   route(table, getPayDifference, ({ params, query }, { now }) => readDifference(params.startsOn, query.against, now()));
   route(table, api.setPayWeekState, ({ params, body }, ctx, { req }) =>
     setWeekState(ctx, params.startsOn, body.to, body.version, baseUrlOf(req)),

@@ -10,6 +10,7 @@ import { customersOf } from './customers.queries.ts';
 import { correctedLinesOf } from './corrections.queries.ts';
 import { readFrozen } from './frozen.queries.ts';
 import { readPayWeek } from './pay-week.queries.ts';
+import { statementTimeOffOf } from './time-off/statement-time-off.queries.ts';
 import { yearsToDate } from './year-to-date.queries.ts';
 import { headOf, weekAt } from './weeks.service.ts';
 
@@ -48,7 +49,7 @@ export function readStatement({ ability, now }: Ctx, day: string, personId: stri
       week: await headOf(week, tx),
       person,
       yearToDate,
-      timeOff: timeOff[personId] ?? [],
+      timeOff: timeOff[personId] ?? (await statementTimeOffOf(week, [person], tx))[personId] ?? [],
       companyName: (await companyOf(tx)).name,
       correctedLines: await correctedLinesOf([person], tx),
       customers: await customersOf([person], tx),

@@ -127,9 +127,11 @@ describe('hours off', () => {
       ...{ kind: 'paid_time_off', hours: '8', workedOn: '2026-05-12', inRegularRate: false },
       rule: '29 CFR 778.218, 778.219',
     });
-    expect(dto.timeOff[sefa]).toEqual([
-      { kind: 'sick', earned: '0', taken: '8', adjusted: '0', lost: '0', balance: '-1/6' },
-    ]);
+    const balances = [{ kind: 'sick', earned: '0', taken: '8', adjusted: '0', lost: '0', balance: '-1/6' }];
+    const { body } = await owner.get(`/api/pay/weeks/2026-05-11/time-off/${sefa}`).expect(200);
+    expect(body).toEqual({ timeOff: balances });
+    const whole = await owner.get('/api/pay/weeks/2026-05-11?timeOff=all').expect(200);
+    expect((whole.body as PayWeekDto).timeOff[sefa]).toEqual(balances);
     const [trail] = await select<{ details: object }>(
       `SELECT details FROM audit_entries WHERE action = 'hours off taken'`,
     );

@@ -25,6 +25,12 @@ export const weekQuery = (startsOn: string) =>
     queryFn: ({ signal }) => call(getPayWeek, { params: { startsOn } }, signal),
     enabled: startsOn !== '',
   });
+/** With everybody's balances, for all statements of a week at once. */
+export const wholeWeekQuery = (startsOn: string) =>
+  queryOptions({
+    queryKey: ['pay', 'week', startsOn, 'with time off'],
+    queryFn: ({ signal }) => call(getPayWeek, { params: { startsOn }, query: { timeOff: 'all' } }, signal),
+  });
 export const differenceQuery = (startsOn: string, against: 'week_before' | 'last_checked') =>
   queryOptions({
     queryKey: ['pay', 'difference', startsOn, against],

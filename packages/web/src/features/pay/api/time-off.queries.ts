@@ -5,6 +5,7 @@ import {
   addTimeOffRule,
   adjustTimeOff,
   getTimeOffBalances,
+  getWeekTimeOff,
   listTimeOffRules,
   quoteTimeOff,
   takeTimeOff,
@@ -21,6 +22,12 @@ export const balancesQuery = (personId: string) =>
     queryKey: ['pay', 'time-off', 'balances', personId],
     queryFn: ({ signal }) => call(getTimeOffBalances, { params: { personId } }, signal),
     enabled: personId !== '',
+  });
+
+export const weekTimeOffQuery = (startsOn: string, personId: string) =>
+  queryOptions({
+    queryKey: ['pay', 'time-off', 'week', startsOn, personId],
+    queryFn: ({ signal }) => call(getWeekTimeOff, { params: { startsOn, personId } }, signal),
   });
 
 type Taking = NonNullable<RequestOf<typeof quoteTimeOff>['query']>;

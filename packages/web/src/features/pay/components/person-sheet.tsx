@@ -1,4 +1,5 @@
 import { useEffect, useRef } from 'react';
+import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { exact } from '@driprail/shared/domain/money/exact';
@@ -9,6 +10,7 @@ import { Button } from '../../../components/button.tsx';
 import { Icon, Mark } from '../../../components/icon.tsx';
 import { money } from '../../../lib/format.ts';
 import { useRemoveAdjustment } from '../api/pay.queries.ts';
+import { weekTimeOffQuery } from '../api/time-off.queries.ts';
 import { ledgerGroups } from './ledger.ts';
 import { StatementBalances } from './time-off/statement-balances.tsx';
 import { PayRecord } from './paydays/pay-record.tsx';
@@ -53,7 +55,7 @@ export function PersonSheet({ dto, person, next, plan, minimumWage, isPicked, on
         Gross <span className="t-level">{money(person.totals.gross)}</span>
       </p>
       <Checks person={person} minimumWage={minimumWage} />
-      <StatementBalances rows={dto.timeOff[person.personId] ?? []} isExpected={week.state !== 'locked'} />
+      <Balances dto={dto} personId={person.personId} />
       <div className="foot no-print">
         <Link className="btn" to={paths.statement(week.startsOn, person.personId)}>
           <Icon name="print" /> Print statement
@@ -70,6 +72,13 @@ export function PersonSheet({ dto, person, next, plan, minimumWage, isPicked, on
       </div>
     </aside>
   );
+}
+
+/** Balances are kept with a locked week; of an open one they are worked out for the person on the sheet. */
+function Balances({ dto: { week, timeOff }, personId }: { dto: PayWeekDto; personId: string }) {
+  const isOpen = week.state !== 'locked';
+  const open = useQuery({ ...weekTimeOffQuery(week.startsOn, personId), enabled: isOpen });
+  return <StatementBalances rows={(isOpen ? open.data?.timeOff : timeOff[personId]) ?? []} isExpected={isOpen} />;
 }
 
 function SheetLine({ dto, line }: { dto: PayWeekDto; line: PayLine }) {

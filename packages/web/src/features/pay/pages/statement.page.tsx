@@ -10,7 +10,7 @@ import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Empty } from '../../../components/states.tsx';
 import { hoursMinutes, money } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
-import { statementQuery, weekQuery } from '../api/pay.queries.ts';
+import { statementQuery, wholeWeekQuery } from '../api/pay.queries.ts';
 import { LoadedPage } from '../components/loaded-page.tsx';
 import { StatementPaper } from '../components/statement-paper.tsx';
 import { hoursSum, weekSpan, weekSums } from '../components/week-model.ts';
@@ -44,7 +44,7 @@ function statementsOf(dto: PayWeekDto, companyName: string): StatementDto[] {
 
 function EveryStatement({ day }: { day: string }) {
   const { company } = useSession();
-  const week = useQuery(weekQuery(day));
+  const week = useQuery(wholeWeekQuery(day));
   return (
     <LoadedPage title="Statement" query={week} what="the pay week">
       {(dto) => <Papers week={dto.week} statements={statementsOf(dto, company.name)} />}
