@@ -128,8 +128,8 @@ describe('hours off', () => {
       rule: '29 CFR 778.218, 778.219',
     });
     const balances = [{ kind: 'sick', earned: '0', taken: '8', adjusted: '0', lost: '0', balance: '-1/6' }];
-    const { body } = await owner.get(`/api/pay/weeks/2026-05-11/time-off/${sefa}`).expect(200);
-    expect(body).toEqual({ timeOff: balances });
+    const one = await owner.get(`/api/pay/weeks/2026-05-11/time-off/${sefa}`).expect(200);
+    expect(one.body).toEqual({ timeOff: balances });
     const whole = await owner.get('/api/pay/weeks/2026-05-11?timeOff=all').expect(200);
     expect((whole.body as PayWeekDto).timeOff[sefa]).toEqual(balances);
     const [trail] = await select<{ details: object }>(
