@@ -1,4 +1,4 @@
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 import { instant } from './calendar.ts';
 import type { DrivenDay } from './drive-day.ts';
 import type { Book } from './job-rows.ts';

@@ -2,18 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
 import { day, id, instant, shortText } from './fields.ts';
 import { desk, everyone } from '../authz/actor.ts';
-
-export const clockKinds = ['job', 'travel', 'waiting', 'shop', 'training', 'rest_break', 'meal_break'] as const;
-export type ClockKindName = (typeof clockKinds)[number];
-export const clockKindNames: Record<ClockKindName, string> = {
-  job: 'Work',
-  travel: 'Travel',
-  waiting: 'Waiting',
-  shop: 'Shop',
-  training: 'Training',
-  rest_break: 'Rest break',
-  meal_break: 'Meal break',
-};
+import { clockKinds } from '../domain/time/clock-kinds.ts';
 
 export const clockEntryDto = z.object({
   id,

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { clockKinds } from './clock.contract.ts';
+import { clockKinds } from '../domain/time/clock-kinds.ts';
 import { endpoint } from './endpoint.ts';
 import { day, done, id, instant, shortText } from './fields.ts';
 import { desk, everyone } from '../authz/actor.ts';

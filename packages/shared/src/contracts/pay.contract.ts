@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
-import { clockKinds } from './clock.contract.ts';
+import { clockKinds } from '../domain/time/clock-kinds.ts';
 import { cents, clockTime, day, decimal, done, id, instant, shortText } from './fields.ts';
 import { tipsGoTo } from './jobs.contract.ts';
 import { everyone } from '../authz/actor.ts';

@@ -6,29 +6,7 @@ import { tipsGoTo } from './jobs.contract.ts';
 import { visitDto } from './visit.dto.ts';
 import { everyone } from '../authz/actor.ts';
 import { progressActions } from '../domain/board/progress.ts';
-
-export const troubleKinds = [
-  'nobody_home',
-  'no_access',
-  'no_water',
-  'weather',
-  'damage',
-  'unsafe',
-  'van_trouble',
-  'running_late',
-  'other',
-] as const;
-export const troubleNames: Record<(typeof troubleKinds)[number], string> = {
-  nobody_home: 'Nobody home',
-  no_access: 'No access',
-  no_water: 'No water',
-  weather: 'Weather',
-  damage: 'Damage found',
-  unsafe: 'Unsafe',
-  van_trouble: 'Van trouble',
-  running_late: 'Running late',
-  other: 'Other',
-};
+import { troubleKinds } from '../domain/board/trouble.ts';
 
 /** A visit as its crew sees it. Phone and access notes are null outside their hours. */
 export const runVisitDto = visitDto.omit({ accepted: true, phone: true }).extend({

@@ -1,6 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 
 export class ClockEntry extends Model<InferAttributes<ClockEntry>, InferCreationAttributes<ClockEntry>> {
   declare id: string;

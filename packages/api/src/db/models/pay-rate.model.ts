@@ -1,6 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 import type { RateKind } from '@driprail/shared/domain/pay/pay-week.types';
 
 export class PayRate extends Model<InferAttributes<PayRate>, InferCreationAttributes<PayRate>> {

@@ -1,7 +1,8 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import { tag } from '@driprail/shared/authz/ability';
-import type { ClockEntryDto, ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockEntryDto, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import type { EntrySpan } from '@driprail/shared/contracts/hours.contract';
 import { stamp } from '@driprail/shared/domain/time/device';
 import { isBefore } from '@driprail/shared/domain/time/zone';

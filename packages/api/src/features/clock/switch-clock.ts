@@ -1,6 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 import type { Progress } from '@driprail/shared/domain/board/progress';
 import { ClockEntry } from '../../db/models/index.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';

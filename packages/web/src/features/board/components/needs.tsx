@@ -2,7 +2,7 @@ import { useState } from 'react';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { settleTrouble } from '@driprail/shared/contracts/board.contract';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
-import { troubleNames } from '@driprail/shared/contracts/run-sheet.contract';
+import { troubleNames } from '@driprail/shared/domain/board/trouble';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';

@@ -1,4 +1,4 @@
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
 import { planClockKinds } from '@driprail/shared/domain/pay/plans/pay-plan';
 import { SelectField, TextField } from '../../../components/field.tsx';
 import { DraftRows } from './draft-rows.tsx';

@@ -1,4 +1,4 @@
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
 import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
 import type { PayPlanDto } from '@driprail/shared/contracts/pay-plans.contract';
 import { exact } from '@driprail/shared/domain/money/exact';

@@ -1,6 +1,6 @@
 import { useState } from 'react';
-import { clockKindNames, clockKinds } from '@driprail/shared/contracts/clock.contract';
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames, clockKinds } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 import type { RateDto } from '@driprail/shared/contracts/pay.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';

@@ -1,7 +1,8 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
-import { clockKindNames, clockKinds } from '@driprail/shared/contracts/clock.contract';
-import type { ClockEntryDto, ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames, clockKinds } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockEntryDto } from '@driprail/shared/contracts/clock.contract';
 import { addDays, clockOf, dayOf, instantOf } from '@driprail/shared/domain/time/zone';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextField } from '../../../components/field.tsx';

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { useMutation, useQuery, useQueryClient } from '@tanstack/react-query';
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
 import { decideClockChange, listClockRequests } from '@driprail/shared/contracts/hours.contract';
 import type { ClockRequestDto, EntrySpan } from '@driprail/shared/contracts/hours.contract';
 import { formatDay } from '@driprail/shared/domain/time/format';

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { useSearchParams } from 'react-router';
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
 import type { ClockEntryDto } from '@driprail/shared/contracts/clock.contract';
 import { formatDay, formatMinutes } from '@driprail/shared/domain/time/format';
 import { addDays, dayOf, minutesBetween } from '@driprail/shared/domain/time/zone';

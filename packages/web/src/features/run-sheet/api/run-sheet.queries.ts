@@ -1,7 +1,8 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { v4 as uuid } from 'uuid';
 import { getClock } from '@driprail/shared/contracts/clock.contract';
-import type { ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
 import { getRunSheet } from '@driprail/shared/contracts/run-sheet.contract';

@@ -1,4 +1,5 @@
-import type { ClockEntryDto, ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockEntryDto, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { isAccessOpen } from '@driprail/shared/domain/board/access-notes';
 import type { Progress, ProgressAction } from '@driprail/shared/domain/board/progress';

@@ -1,6 +1,7 @@
 import { useState } from 'react';
-import { clockKindNames, clockKinds } from '@driprail/shared/contracts/clock.contract';
-import type { ClockEntryDto, ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames, clockKinds } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockEntryDto } from '@driprail/shared/contracts/clock.contract';
 import { addDays, clockOf, dayOf, instantOf } from '@driprail/shared/domain/time/zone';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';

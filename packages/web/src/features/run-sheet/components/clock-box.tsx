@@ -1,5 +1,5 @@
 import { Link } from 'react-router';
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
 import type { ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
 import { paths } from '../../../app/paths.ts';

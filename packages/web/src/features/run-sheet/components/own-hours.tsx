@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
 import type { ClockRequestDto, EntrySpan } from '@driprail/shared/contracts/hours.contract';
 import { formatDay } from '@driprail/shared/domain/time/format';
 import { addDays, dayOf } from '@driprail/shared/domain/time/zone';

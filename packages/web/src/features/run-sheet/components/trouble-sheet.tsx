@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { troubleKinds, troubleNames } from '@driprail/shared/contracts/run-sheet.contract';
+import { troubleKinds, troubleNames } from '@driprail/shared/domain/board/trouble';
 import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { nextActions } from '@driprail/shared/domain/board/progress';
 import { Button } from '../../../components/button.tsx';

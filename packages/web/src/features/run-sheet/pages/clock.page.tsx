@@ -1,8 +1,9 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
-import { clockKindNames } from '@driprail/shared/contracts/clock.contract';
-import type { ClockEntryDto, ClockKindName, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
+import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
+import type { ClockEntryDto, ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import { formatDay, formatMinutes } from '@driprail/shared/domain/time/format';
 import { dayOf, minutesBetween } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';

@@ -1,7 +1,7 @@
 import type TestAgent from 'supertest/lib/agent.js';
 import { parse } from 'csv-parse/sync';
 import { v7 as uuid } from 'uuid';
-import type { ClockKindName } from '@driprail/shared/contracts/clock.contract';
+import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 import { ClockEntry } from '../../../../db/models/index.ts';
 
 /** A clock entry on a day of New York’s summer time, from "07:00" to "12:30". */
