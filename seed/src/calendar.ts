@@ -1,4 +1,5 @@
-import { addDays, dayOf, instantOf, weekStartOf, weekdayOf } from '@driprail/shared/domain/time/zone';
+import { addDays, dayOf, weekStartOf, weekdayOf } from '@driprail/shared/domain/time/zone';
+import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 
 export const ZONE = 'America/New_York';
 export const PAST_WEEKS = 12;

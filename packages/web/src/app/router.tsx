@@ -3,7 +3,6 @@ import { Home } from './home.tsx';
 import { NotFound, PageFault } from './not-found.tsx';
 import { paths } from './paths.ts';
 import { Gate } from './shell/gate.tsx';
-import { Shell } from './shell/shell.tsx';
 
 /** Pages load when they are opened, so that a phone never fetches the board. */
 export function createRouter() {
@@ -51,7 +50,7 @@ export function createRouter() {
               lazy: async () => ({ Component: (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage }),
             },
             {
-              element: <Shell />,
+              lazy: async () => ({ Component: (await import('./shell/shell.tsx')).Shell }),
               children: [
                 { index: true, element: <Home /> },
                 {

@@ -1,5 +1,5 @@
-import { errorBody } from '@driprail/shared/contracts/error.contract';
-import type { ErrorHint } from '@driprail/shared/contracts/error.contract';
+import type { Address } from '@driprail/shared/contracts/address';
+import type { ErrorBody, ErrorHint } from '@driprail/shared/contracts/error.contract';
 import type { Endpoint, OutputOf, RequestOf } from '@driprail/shared/contracts/endpoint';
 import { noteServerTime } from './device-clock.ts';
 
@@ -25,24 +25,40 @@ export class ApiError extends Error {
   }
 }
 
-/** Asks an endpoint. @throws ApiError */
+/**
+ * Asks an endpoint, by its whole description or by its address alone. With the description the answer is checked here
+ * too; the server has checked it either way.
+ * @throws ApiError
+ */
 export async function call<E extends Endpoint>(
-  endpoint: E,
+  endpoint: E | Address<E>,
   request: RequestOf<E> = {},
   signal?: AbortSignal,
 ): Promise<OutputOf<E>> {
   const response = await send(endpoint, request, signal);
   noteServerTime(response.headers.get('x-now'));
   const json: unknown = await response.json().catch(() => null);
-  if (response.ok) return endpoint.response.parse(json) as OutputOf<E>;
-  const refusal = errorBody.safeParse(json);
-  if (!refusal.success)
+  if (response.ok) return ('response' in endpoint ? endpoint.response.parse(json) : json) as OutputOf<E>;
+  if (!isRefusal(json))
     throw new ApiError(response.status, 'unknown', 'The server answered with something unreadable. Try again.');
-  const { code, message, fields, hint } = refusal.data.error;
+  const { code, message, fields, hint } = json.error;
   throw new ApiError(response.status, code, message, fields, hint);
 }
 
-async function send(endpoint: Endpoint, request: RequestOf<Endpoint>, signal?: AbortSignal): Promise<Response> {
+function isRefusal(json: unknown): json is ErrorBody {
+  if (typeof json !== 'object' || json === null || !('error' in json)) return false;
+  const { error } = json;
+  return (
+    typeof error === 'object' &&
+    error !== null &&
+    'code' in error &&
+    'message' in error &&
+    typeof error.code === 'string' &&
+    typeof error.message === 'string'
+  );
+}
+
+async function send(endpoint: Address, request: RequestOf<Endpoint>, signal?: AbortSignal): Promise<Response> {
   const params = (request.params ?? {}) as Record<string, string>;
   const path = endpoint.path.replace(/:(\w+)/g, (_all, name: string) => encodeURIComponent(params[name] ?? ''));
   const query = new URLSearchParams(request.query as Record<string, string> | undefined).toString();

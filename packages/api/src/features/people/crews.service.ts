@@ -1,6 +1,7 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
-import { dayBounds, isBefore } from '@driprail/shared/domain/time/zone';
+import { isBefore } from '@driprail/shared/domain/time/zone';
+import { dayBounds } from '@driprail/shared/domain/time/zone-instants';
 import { audit } from '../../db/audit.ts';
 import { companyOf } from '../../db/company.ts';
 import { rangeOf } from '../../db/models/columns.ts';

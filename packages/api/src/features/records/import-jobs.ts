@@ -2,7 +2,7 @@ import type { Transaction } from 'sequelize';
 import type { SizeClass } from '@driprail/shared/contracts/fields';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { toCents } from '@driprail/shared/domain/money/rounding';
-import { instantOf } from '@driprail/shared/domain/time/zone';
+import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 import { companyOf } from '../../db/company.ts';
 import { Address, Customer, Service, Vehicle } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';

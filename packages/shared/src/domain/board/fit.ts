@@ -1,5 +1,6 @@
 import { formatClock, formatDay, formatSpan } from '../time/format.ts';
-import { addMinutes, dayOf, instantOf, isBefore, minutesBetween, overlaps } from '../time/zone.ts';
+import { addMinutes, dayOf, isBefore, minutesBetween, overlaps } from '../time/zone.ts';
+import { instantOf } from '../time/zone-instants.ts';
 import type { BoardFacts, Move, PlannedVan, PlannedVisit, RidingPerson } from './plan.ts';
 import type { Finding, Findings, RefusalCode, WarningCode } from './findings.ts';
 import { isEnded, isMovable, progressNames } from './progress.ts';

@@ -1,6 +1,7 @@
 import { exact, type Exact } from '../money/exact.ts';
 import { roundHalfUp } from '../money/rounding.ts';
-import { dayBounds, dayOf } from '../time/zone.ts';
+import { dayOf } from '../time/zone.ts';
+import { dayBounds } from '../time/zone-instants.ts';
 import type { PayEntry } from './pay-week.types.ts';
 import { secondsOf } from './work-spans.ts';
 

@@ -1,4 +1,5 @@
-import { addDays, clockOf, dayBounds, dayOf, instantOf } from '../time/zone.ts';
+import { addDays, clockOf, dayOf } from '../time/zone.ts';
+import { dayBounds, instantOf } from '../time/zone-instants.ts';
 import { isForgotten } from '../time/forgotten.ts';
 import type { ClockKind, PayEntry, PayWeekInput } from './pay-week.types.ts';
 

@@ -1,11 +1,13 @@
-import { DateTime } from 'luxon';
+import { partsIn } from './zone-parts.ts';
 
 export type ClockStyle = '12' | '24';
 
 /** "10:42 am" or "10:42". */
 export function formatClock(instant: string, zone: string, style: ClockStyle): string {
-  const time = DateTime.fromISO(instant, { zone, locale: 'en-US' });
-  return style === '24' ? time.toFormat('HH:mm') : time.toFormat('h:mm a').toLowerCase();
+  const clock = partsIn(instant, zone)?.clock ?? '';
+  if (style === '24' || clock === '') return clock;
+  const hour = Number(clock.slice(0, 2));
+  return `${hour % 12 || 12}${clock.slice(2)} ${hour < 12 ? 'am' : 'pm'}`;
 }
 
 /** "10:00 to 11:30 am", the shared half of the day said once. */
@@ -22,14 +24,19 @@ export function formatBareSpan(from: string, to: string, zone: string, style: Cl
   return `${bare(from)}–${bare(to)}`;
 }
 
+const MONTHS = ['Jan', 'Feb', 'Mar', 'Apr', 'May', 'Jun', 'Jul', 'Aug', 'Sep', 'Oct', 'Nov', 'Dec'];
+const WEEKDAYS = ['Sun', 'Mon', 'Tue', 'Wed', 'Thu', 'Fri', 'Sat'];
+
 /** "Thu 14 May" is the look's word order; a US company reads "Thu May 14". */
 export function formatDay(day: string): string {
-  return DateTime.fromISO(day, { zone: 'utc', locale: 'en-US' }).toFormat('ccc LLL d');
+  const date = new Date(`${day}T00:00:00Z`);
+  return `${WEEKDAYS[date.getUTCDay()]} ${MONTHS[date.getUTCMonth()]} ${date.getUTCDate()}`;
 }
 
 /** "May 14, 2026". */
 export function formatDate(day: string): string {
-  return DateTime.fromISO(day, { zone: 'utc', locale: 'en-US' }).toFormat('LLL d, yyyy');
+  const date = new Date(`${day}T00:00:00Z`);
+  return `${MONTHS[date.getUTCMonth()]} ${date.getUTCDate()}, ${date.getUTCFullYear()}`;
 }
 
 /** "2 h 15", "45 min". */

@@ -2,7 +2,8 @@ import { describe, expect, test } from 'vitest';
 import { stamp } from './device.ts';
 import { formatClock, formatMinutes, formatSpan } from './format.ts';
 import { workweekAt, workweekOf } from './workweek.ts';
-import { clockOf, dayBounds, dayOf, instantOf, minutesBetween, weekStartOf } from './zone.ts';
+import { clockOf, dayOf, minutesBetween, weekStartOf } from './zone.ts';
+import { dayBounds, instantOf } from './zone-instants.ts';
 
 const NY = 'America/New_York';
 

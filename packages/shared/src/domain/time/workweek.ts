@@ -1,4 +1,5 @@
-import { addDays, dayBounds, dayOf, instantOf, isBefore, weekStartOf } from './zone.ts';
+import { addDays, dayOf, isBefore, weekStartOf } from './zone.ts';
+import { dayBounds, instantOf } from './zone-instants.ts';
 
 export interface WorkweekRule {
   /** ISO weekday, 1 Monday to 7 Sunday. */

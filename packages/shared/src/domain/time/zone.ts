@@ -1,45 +1,31 @@
-import { DateTime } from 'luxon';
-
-/** The one place where instants become days and clock times of the company's zone, and back. */
-
-/** Instant (ISO, any offset) to the zone's date, "YYYY-MM-DD". */
-export function dayOf(instant: string, zone: string): string {
-  return inZone(instant, zone).toISODate() ?? '';
-}
-
-/** Instant to the zone's clock time, "HH:mm", 24 h. */
-export function clockOf(instant: string, zone: string): string {
-  return inZone(instant, zone).toFormat('HH:mm');
-}
-
-/** Instant to the zone's date and clock time with its offset from UTC: "2026-05-14T07:30:00-04:00". */
-export function withOffset(instant: string, zone: string): string {
-  return inZone(instant, zone).toISO({ suppressMilliseconds: true }) ?? '';
-}
+import { partsIn } from './zone-parts.ts';
 
 /**
- * The instant of a clock time on a day. A time that a spring change skips moves on by the gap;
- * one that an autumn change repeats is the first of the two.
+ * The one place where instants become days and clock times of the company's zone. It is the platform's own work, so
+ * that a phone's first screen needs no library; the way back is in zone-instants.ts.
  */
-export function instantOf(day: string, clock: string, zone: string): string {
-  const [first, second] = DateTime.fromISO(`${day}T${clock}`, { zone }).getPossibleOffsets();
-  if (!first) throw new RangeError(`${day} ${clock} is no time`);
-  return utc(second && second < first ? second : first);
+
+const DAY_MS = 86_400_000;
+
+/** Instant (ISO, any offset) to the zone's date, "YYYY-MM-DD"; nothing for what is no instant. */
+export function dayOf(instant: string, zone: string): string {
+  return partsIn(instant, zone)?.day ?? '';
 }
 
-/** First instant of the day and first instant of the next: 23, 24 or 25 hours apart. */
-export function dayBounds(day: string, zone: string): { startsAt: string; endsAt: string } {
-  const start = DateTime.fromISO(day, { zone }).startOf('day');
-  return { startsAt: utc(start), endsAt: utc(start.plus({ days: 1 }).startOf('day')) };
+/** Instant to the zone's clock time, "HH:mm", 24 h; nothing for what is no instant. */
+export function clockOf(instant: string, zone: string): string {
+  return partsIn(instant, zone)?.clock ?? '';
 }
 
+/** A date so many days later; nothing for what is no date. */
 export function addDays(day: string, count: number): string {
-  return DateTime.fromISO(day, { zone: 'utc' }).plus({ days: count }).toISODate() ?? '';
+  const time = Date.parse(`${day}T00:00:00Z`);
+  return Number.isNaN(time) ? '' : new Date(time + count * DAY_MS).toISOString().slice(0, 10);
 }
 
 /** ISO weekday, 1 Monday to 7 Sunday. */
 export function weekdayOf(day: string): number {
-  return DateTime.fromISO(day, { zone: 'utc' }).weekday;
+  return new Date(`${day}T00:00:00Z`).getUTCDay() || 7;
 }
 
 /** The first day of the week that holds `day`, for weeks that start on the ISO weekday `startsOn`. */
@@ -47,8 +33,11 @@ export function weekStartOf(day: string, startsOn: number): string {
   return addDays(day, -((weekdayOf(day) - startsOn + 7) % 7));
 }
 
+/** ISO 8601 week number: the week of a year's first Thursday is its first. */
 export function weekNumberOf(day: string): number {
-  return DateTime.fromISO(day, { zone: 'utc' }).weekNumber;
+  const thursday = addDays(day, 4 - weekdayOf(day));
+  const firstOfYear = `${thursday.slice(0, 4)}-01-01`;
+  return Math.floor((Date.parse(thursday) - Date.parse(firstOfYear)) / (7 * DAY_MS)) + 1;
 }
 
 /** Whole minutes from one instant to another, rounded down. */
@@ -73,12 +62,4 @@ export function isBefore(a: string, b: string): boolean {
 /** Half-open spans: those that only touch do not overlap. */
 export function overlaps(a: { from: string; to: string }, b: { from: string; to: string }): boolean {
   return isBefore(a.from, b.to) && isBefore(b.from, a.to);
-}
-
-function inZone(instant: string, zone: string): DateTime {
-  return DateTime.fromISO(instant, { zone });
-}
-
-function utc(time: DateTime): string {
-  return time.toUTC().toISO() ?? '';
 }

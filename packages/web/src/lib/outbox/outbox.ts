@@ -1,9 +1,10 @@
 import { useEffect, useSyncExternalStore } from 'react';
 import type { QueryClient } from '@tanstack/react-query';
-import { postClockAction } from '@driprail/shared/contracts/clock.contract';
+import type { postClockAction } from '@driprail/shared/contracts/clock.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
-import { recordTip } from '@driprail/shared/contracts/jobs.contract';
-import { postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
+import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
+import { postClockActionAt, postVisitActionAt, recordTipAt } from '@driprail/shared/contracts/phone-addresses';
+import type { postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
 import { ApiError, call } from '../call.ts';
 import type { KeptPress } from './store.ts';
 import { dropPress, keepPress, keptPresses } from './store.ts';
@@ -79,10 +80,13 @@ async function sendOne(kept: KeptPress): Promise<boolean> {
 
 function send({ path, targetId, body }: KeptPress): Promise<unknown> {
   if (path === 'visit') {
-    return call(postVisitAction, { params: { id: targetId }, body: body as RequestOf<typeof postVisitAction>['body'] });
+    return call(postVisitActionAt, {
+      params: { id: targetId },
+      body: body as RequestOf<typeof postVisitAction>['body'],
+    });
   }
-  if (path === 'clock') return call(postClockAction, { body: body as RequestOf<typeof postClockAction>['body'] });
-  return call(recordTip, { params: { id: targetId }, body: body as RequestOf<typeof recordTip>['body'] });
+  if (path === 'clock') return call(postClockActionAt, { body: body as RequestOf<typeof postClockAction>['body'] });
+  return call(recordTipAt, { params: { id: targetId }, body: body as RequestOf<typeof recordTip>['body'] });
 }
 
 /** The person has seen a refused press and settles it another way. */

@@ -1,5 +1,6 @@
 import { formatDate } from '@driprail/shared/domain/time/format';
-import { dayOf, instantOf } from '@driprail/shared/domain/time/zone';
+import { dayOf } from '@driprail/shared/domain/time/zone';
+import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 import type { Transaction } from 'sequelize';
 import { audit } from '../../../db/audit.ts';
 import { companyOf, todayOf } from '../../../db/company.ts';

@@ -1,6 +1,6 @@
 import { fractionText } from '@driprail/shared/domain/money/exact';
 import { workedEntries } from '@driprail/shared/domain/pay/handover/worked-entries';
-import { withOffset } from '@driprail/shared/domain/time/zone';
+import { withOffset } from '@driprail/shared/domain/time/zone-instants';
 import { EXPORT_SCHEMA_VERSION, hourColumns, namesOf } from './columns.ts';
 import { csvText, fourPlaces, harmless } from './csv.ts';
 import type { LockedWeek } from './locked-weeks.queries.ts';

@@ -1,5 +1,5 @@
 import { tag } from '@driprail/shared/authz/ability';
-import { withOffset } from '@driprail/shared/domain/time/zone';
+import { withOffset } from '@driprail/shared/domain/time/zone-instants';
 import { authorize } from '../../../authz/authorize.ts';
 import { companyOf } from '../../../db/company.ts';
 import { Person } from '../../../db/models/index.ts';

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { exact, sum, ZERO, type Exact } from '../../money/exact.ts';
-import { instantOf, addDays } from '../../time/zone.ts';
+import { addDays } from '../../time/zone.ts';
+import { instantOf } from '../../time/zone-instants.ts';
 import { isOffDuty } from '../breaks.ts';
 import { roundToStep } from '../punch-rounding.ts';
 import { hoursOver } from '../regular-rate.ts';

@@ -1,7 +1,7 @@
 import { dollars, exact, fractionText, hoursOf } from '../../money/exact.ts';
 import { centsText, shortText, toCents } from '../../money/rounding.ts';
 import { formatClock } from '../../time/format.ts';
-import { instantOf } from '../../time/zone.ts';
+import { instantOf } from '../../time/zone-instants.ts';
 import { aLine, totalCents } from '../pay-line.ts';
 import type { PayLine } from '../pay-week.types.ts';
 import { hoursAndMinutes, rateText } from '../working-words.ts';

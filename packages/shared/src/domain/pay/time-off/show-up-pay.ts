@@ -1,7 +1,8 @@
 import { exact, fractionText, greatest, hoursOf, type Exact } from '../../money/exact.ts';
 import { centsText, decimalText, shortText, toCents } from '../../money/rounding.ts';
 import { formatDate, formatDay } from '../../time/format.ts';
-import { dayBounds, dayOf } from '../../time/zone.ts';
+import { dayOf } from '../../time/zone.ts';
+import { dayBounds } from '../../time/zone-instants.ts';
 import { aLine } from '../pay-line.ts';
 import type { PayEntry, PayLine, PayPerson } from '../pay-week.types.ts';
 import { hoursAndMinutes, rateText } from '../working-words.ts';

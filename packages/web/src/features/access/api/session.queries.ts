@@ -1,5 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
-import { createSession, endSession, getSession } from '@driprail/shared/contracts/session.contract';
+import { createSessionAt, endSessionAt, getSessionAt } from '@driprail/shared/contracts/phone-addresses';
 import type { SessionDto } from '@driprail/shared/contracts/session.contract';
 import { call } from '../../../lib/call.ts';
 import { orKept } from '../../../lib/outbox/or-kept.ts';
@@ -12,7 +12,7 @@ export const sessionQuery = queryOptions({
   queryKey: sessionKey,
   networkMode: 'always',
   // In a dead zone the phone still knows who is signed in; the server judges again when it answers.
-  queryFn: ({ signal }): Promise<SessionDto | null> => orKept('session', () => call(getSession, {}, signal)),
+  queryFn: ({ signal }): Promise<SessionDto | null> => orKept('session', () => call(getSessionAt, {}, signal)),
   staleTime: 5 * 60_000,
   retry: false,
 });
@@ -20,7 +20,7 @@ export const sessionQuery = queryOptions({
 export function useSignIn() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: (body: { email: string; password: string }) => call(createSession, { body }),
+    mutationFn: (body: { email: string; password: string }) => call(createSessionAt, { body }),
     onSuccess: (session) => {
       client.clear();
       client.setQueryData(sessionKey, session);
@@ -31,7 +31,7 @@ export function useSignIn() {
 export function useSignOut() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: () => call(endSession),
+    mutationFn: () => call(endSessionAt),
     onSettled: () => {
       client.clear();
       client.setQueryData(sessionKey, null);

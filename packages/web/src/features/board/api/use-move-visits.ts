@@ -5,7 +5,7 @@ import { moveVisits } from '@driprail/shared/contracts/board.contract';
 import type { BoardDto, acceptBody } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import type { Move } from '@driprail/shared/domain/board/plan';
-import { dayBounds } from '@driprail/shared/domain/time/zone';
+import { dayBounds } from '@driprail/shared/domain/time/zone-instants';
 import { call } from '../../../lib/call.ts';
 import { boardQuery } from './board.queries.ts';
 

@@ -1,7 +1,8 @@
 import type { EventInput } from '@fullcalendar/core';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import { isMovable } from '@driprail/shared/domain/board/progress';
-import { addMinutes, instantOf, isBefore, minutesBetween, overlaps } from '@driprail/shared/domain/time/zone';
+import { addMinutes, isBefore, minutesBetween, overlaps } from '@driprail/shared/domain/time/zone';
+import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 import type { Move } from '@driprail/shared/domain/board/plan';
 import type { PlacedVisit } from './board-model.ts';
 import { gapsOf, isPlacedVisit, lateOf, matchesFilter } from './board-model.ts';

@@ -3,7 +3,8 @@ import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import { factsOf, plannedOf } from '@driprail/shared/domain/board/facts';
 import { judgeMoves } from '@driprail/shared/domain/board/fit';
 import type { Move } from '@driprail/shared/domain/board/plan';
-import { addMinutes, dayOf, instantOf, isBefore } from '@driprail/shared/domain/time/zone';
+import { addMinutes, dayOf, isBefore } from '@driprail/shared/domain/time/zone';
+import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 
 const STEP_MINUTES = 15;
 

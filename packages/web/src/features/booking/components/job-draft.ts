@@ -2,7 +2,8 @@ import type { CustomerDto } from '@driprail/shared/contracts/customers.contract'
 import type { SizeClass } from '@driprail/shared/contracts/fields';
 import type { JobBody, JobDto } from '@driprail/shared/contracts/jobs.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
-import { clockOf, dayOf, instantOf } from '@driprail/shared/domain/time/zone';
+import { clockOf, dayOf } from '@driprail/shared/domain/time/zone';
+import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 import { parseMoney } from '../../../lib/format.ts';
 
 export interface LineDraft {

@@ -1,11 +1,10 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
 import { v4 as uuid } from 'uuid';
-import { getClock } from '@driprail/shared/contracts/clock.contract';
+import { getClockAt, getRunSheetAt } from '@driprail/shared/contracts/phone-addresses';
 import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
 import type { ClockStateDto } from '@driprail/shared/contracts/clock.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
-import { getRunSheet } from '@driprail/shared/contracts/run-sheet.contract';
 import type { RunSheetDto, RunVisitDto, postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
 import { actionNames } from '@driprail/shared/domain/board/progress';
 import { call } from '../../../lib/call.ts';
@@ -20,7 +19,7 @@ export const runSheetQuery = (userId: string, day: string) =>
     networkMode: 'always',
     retry: 0,
     queryFn: ({ signal }): Promise<RunSheetDto> =>
-      orKept(`${userId}:run-sheet:${day}`, () => call(getRunSheet, { params: { day } }, signal)),
+      orKept(`${userId}:run-sheet:${day}`, () => call(getRunSheetAt, { params: { day } }, signal)),
     refetchInterval: 60_000,
   });
 
@@ -30,7 +29,7 @@ export const clockQuery = (userId: string) =>
     networkMode: 'always',
     retry: 0,
     queryFn: ({ signal }): Promise<{ clock: ClockStateDto | null }> =>
-      orKept(`${userId}:clock`, () => call(getClock, {}, signal)),
+      orKept(`${userId}:clock`, () => call(getClockAt, {}, signal)),
   });
 
 type VisitActionBody = NonNullable<RequestOf<typeof postVisitAction>['body']>;

@@ -1,0 +1,24 @@
+import { addressOf } from './address.ts';
+import type * as clock from './clock.contract.ts';
+import type * as hours from './hours.contract.ts';
+import type * as jobs from './jobs.contract.ts';
+import type * as runSheet from './run-sheet.contract.ts';
+import type * as session from './session.contract.ts';
+
+/** What the phone asks for on its first screens; a test holds each to its contract. */
+export const getSessionAt = addressOf<typeof session.getSession>('get', '/api/session');
+export const createSessionAt = addressOf<typeof session.createSession>('post', '/api/session');
+export const endSessionAt = addressOf<typeof session.endSession>('delete', '/api/session');
+export const getRunSheetAt = addressOf<typeof runSheet.getRunSheet>('get', '/api/run-sheet/:day');
+export const postVisitActionAt = addressOf<typeof runSheet.postVisitAction>('post', '/api/visits/:id/actions');
+export const getClockAt = addressOf<typeof clock.getClock>('get', '/api/clock');
+export const postClockActionAt = addressOf<typeof clock.postClockAction>('post', '/api/clock/actions');
+export const recordTipAt = addressOf<typeof jobs.recordTip>('post', '/api/jobs/:id/tips');
+export const listClockRequestsAt = addressOf<typeof hours.listClockRequests>('get', '/api/clock/requests');
+export const listHoursWordsAt = addressOf<typeof hours.listHoursWords>('get', '/api/clock/weeks/:startsOn');
+export const askClockChangeAt = addressOf<typeof hours.askClockChange>('post', '/api/clock/requests');
+export const decideClockChangeAt = addressOf<typeof hours.decideClockChange>(
+  'post',
+  '/api/clock/requests/:id/decision',
+);
+export const sayHoursAt = addressOf<typeof hours.sayHours>('post', '/api/clock/weeks/:startsOn');
