@@ -1,4 +1,4 @@
-import { Link, useRouteError } from 'react-router';
+import { Link } from 'react-router';
 import { PageHead, RailPage } from '../components/page-head.tsx';
 import { Fault } from '../components/states.tsx';
 
@@ -16,8 +16,7 @@ export function NotFound() {
 }
 
 /** A page that broke or could not be fetched; what was entered elsewhere is safe. */
-export function PageFault() {
-  const error = useRouteError();
+export function PageFault({ error }: { error: unknown }) {
   return (
     <>
       <PageHead title="Something broke" />

@@ -1,177 +1,105 @@
-import { Navigate, createBrowserRouter } from 'react-router';
+import { Suspense } from 'react';
+import { BrowserRouter, Navigate, Outlet, Route, Routes } from 'react-router';
 import { Home } from './home.tsx';
-import { NotFound, PageFault } from './not-found.tsx';
+import { lazyPage } from './lazy-page.ts';
+import { NotFound } from './not-found.tsx';
+import { PageBoundary } from './page-boundary.tsx';
 import { paths } from './paths.ts';
 import { Gate } from './shell/gate.tsx';
 
-/** Pages load when they are opened, so that a phone never fetches the board. */
-export function createRouter() {
-  return createBrowserRouter([
-    {
-      errorElement: <PageFault />,
-      // Pages show their own loading; before the first one there is only the ground.
-      HydrateFallback: () => null,
-      children: [
-        {
-          path: paths.signIn,
-          lazy: async () => ({ Component: (await import('../features/access/pages/sign-in.page.tsx')).SignInPage }),
-        },
-        {
-          path: paths.forgotten,
-          lazy: async () => ({
-            Component: (await import('../features/access/pages/forgotten.page.tsx')).ForgottenPage,
-          }),
-        },
-        {
-          path: paths.link,
-          lazy: async () => ({ Component: (await import('../features/access/pages/link.page.tsx')).LinkPage }),
-        },
-        {
-          path: paths.setUp,
-          lazy: async () => ({ Component: (await import('../features/settings/pages/set-up.page.tsx')).SetUpPage }),
-        },
-        {
-          element: <Gate />,
-          children: [
-            {
-              path: paths.runSheet,
-              lazy: async () => ({
-                Component: (await import('../features/run-sheet/pages/run-sheet.page.tsx')).RunSheetPage,
-              }),
-            },
-            {
-              path: `${paths.runSheet}/:day`,
-              lazy: async () => ({
-                Component: (await import('../features/run-sheet/pages/run-sheet.page.tsx')).RunSheetPage,
-              }),
-            },
-            {
-              path: paths.clock,
-              lazy: async () => ({ Component: (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage }),
-            },
-            {
-              lazy: async () => ({ Component: (await import('./shell/shell.tsx')).Shell }),
-              children: [
-                { index: true, element: <Home /> },
-                {
-                  path: paths.board,
-                  lazy: async () => ({ Component: (await import('../features/board/pages/board.page.tsx')).BoardPage }),
-                },
-                {
-                  path: `${paths.board}/:day`,
-                  lazy: async () => ({ Component: (await import('../features/board/pages/board.page.tsx')).BoardPage }),
-                },
-                {
-                  path: paths.customers,
-                  lazy: async () => ({
-                    Component: (await import('../features/customers/pages/customers.page.tsx')).CustomersPage,
-                  }),
-                },
-                {
-                  path: `${paths.customers}/:id`,
-                  lazy: async () => ({
-                    Component: (await import('../features/customers/pages/customers.page.tsx')).CustomersPage,
-                  }),
-                },
-                {
-                  path: paths.services,
-                  lazy: async () => ({
-                    Component: (await import('../features/service-menu/pages/service-menu.page.tsx')).ServiceMenuPage,
-                  }),
-                },
-                {
-                  path: paths.vans,
-                  lazy: async () => ({ Component: (await import('../features/people/pages/vans.page.tsx')).VansPage }),
-                },
-                {
-                  path: paths.people,
-                  lazy: async () => ({
-                    Component: (await import('../features/people/pages/people.page.tsx')).PeoplePage,
-                  }),
-                },
-                {
-                  path: paths.hours,
-                  lazy: async () => ({
-                    Component: (await import('../features/people/pages/hours.page.tsx')).HoursPage,
-                  }),
-                },
-                {
-                  path: paths.payWeeks,
-                  lazy: async () => ({
-                    Component: (await import('../features/pay/pages/pay-week.page.tsx')).PayWeekPage,
-                  }),
-                },
-                {
-                  path: paths.paydays,
-                  lazy: async () => ({
-                    Component: (await import('../features/pay/pages/paydays.page.tsx')).PaydaysPage,
-                  }),
-                },
-                {
-                  path: `${paths.payWeeks}/:day`,
-                  lazy: async () => ({
-                    Component: (await import('../features/pay/pages/pay-week.page.tsx')).PayWeekPage,
-                  }),
-                },
-                {
-                  path: `${paths.payWeeks}/:day/:personId`,
-                  lazy: async () => ({
-                    Component: (await import('../features/pay/pages/pay-working.page.tsx')).PayWorkingPage,
-                  }),
-                },
-                {
-                  path: paths.rates,
-                  lazy: async () => ({ Component: (await import('../features/pay/pages/rates.page.tsx')).RatesPage }),
-                },
-                {
-                  path: paths.statements,
-                  lazy: async () => ({
-                    Component: (await import('../features/pay/pages/statements.page.tsx')).StatementsPage,
-                  }),
-                },
-                {
-                  path: '/statements/:day/:personId',
-                  lazy: async () => ({
-                    Component: (await import('../features/pay/pages/statement.page.tsx')).StatementPage,
-                  }),
-                },
-                {
-                  path: paths.settings,
-                  lazy: async () => ({
-                    Component: (await import('../features/settings/pages/settings.page.tsx')).SettingsPage,
-                  }),
-                },
-                {
-                  path: paths.logins,
-                  lazy: async () => ({
-                    Component: (await import('../features/access/pages/logins.page.tsx')).LoginsPage,
-                  }),
-                },
-                {
-                  path: paths.account,
-                  lazy: async () => ({
-                    Component: (await import('../features/access/pages/account.page.tsx')).AccountPage,
-                  }),
-                },
-                {
-                  path: paths.records,
-                  lazy: async () => ({
-                    Component: (await import('../features/records/pages/records.page.tsx')).RecordsPage,
-                  }),
-                },
-                {
-                  path: paths.localMail,
-                  lazy: async () => ({
-                    Component: (await import('../features/access/pages/local-mail.page.tsx')).LocalMailPage,
-                  }),
-                },
-                { path: '/index.html', element: <Navigate to="/" replace /> },
-                { path: '*', element: <NotFound /> },
-              ],
-            },
-          ],
-        },
-      ],
-    },
-  ]);
+const SignInPage = lazyPage(async () => (await import('../features/access/pages/sign-in.page.tsx')).SignInPage);
+const ForgottenPage = lazyPage(async () => (await import('../features/access/pages/forgotten.page.tsx')).ForgottenPage);
+const LinkPage = lazyPage(async () => (await import('../features/access/pages/link.page.tsx')).LinkPage);
+const SetUpPage = lazyPage(async () => (await import('../features/settings/pages/set-up.page.tsx')).SetUpPage);
+const RunSheetPage = lazyPage(
+  async () => (await import('../features/run-sheet/pages/run-sheet.page.tsx')).RunSheetPage,
+);
+const ClockPage = lazyPage(async () => (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage);
+const Shell = lazyPage(async () => (await import('./shell/shell.tsx')).Shell);
+const BoardPage = lazyPage(async () => (await import('../features/board/pages/board.page.tsx')).BoardPage);
+const CustomersPage = lazyPage(
+  async () => (await import('../features/customers/pages/customers.page.tsx')).CustomersPage,
+);
+const ServiceMenuPage = lazyPage(
+  async () => (await import('../features/service-menu/pages/service-menu.page.tsx')).ServiceMenuPage,
+);
+const VansPage = lazyPage(async () => (await import('../features/people/pages/vans.page.tsx')).VansPage);
+const PeoplePage = lazyPage(async () => (await import('../features/people/pages/people.page.tsx')).PeoplePage);
+const HoursPage = lazyPage(async () => (await import('../features/people/pages/hours.page.tsx')).HoursPage);
+const PayWeekPage = lazyPage(async () => (await import('../features/pay/pages/pay-week.page.tsx')).PayWeekPage);
+const PaydaysPage = lazyPage(async () => (await import('../features/pay/pages/paydays.page.tsx')).PaydaysPage);
+const PayWorkingPage = lazyPage(
+  async () => (await import('../features/pay/pages/pay-working.page.tsx')).PayWorkingPage,
+);
+const RatesPage = lazyPage(async () => (await import('../features/pay/pages/rates.page.tsx')).RatesPage);
+const StatementsPage = lazyPage(async () => (await import('../features/pay/pages/statements.page.tsx')).StatementsPage);
+const StatementPage = lazyPage(async () => (await import('../features/pay/pages/statement.page.tsx')).StatementPage);
+const SettingsPage = lazyPage(async () => (await import('../features/settings/pages/settings.page.tsx')).SettingsPage);
+const LoginsPage = lazyPage(async () => (await import('../features/access/pages/logins.page.tsx')).LoginsPage);
+const AccountPage = lazyPage(async () => (await import('../features/access/pages/account.page.tsx')).AccountPage);
+const RecordsPage = lazyPage(async () => (await import('../features/records/pages/records.page.tsx')).RecordsPage);
+const LocalMailPage = lazyPage(
+  async () => (await import('../features/access/pages/local-mail.page.tsx')).LocalMailPage,
+);
+
+/**
+ * Pages load when they are opened, so that a phone never fetches the board. The plain router is enough, and half the
+ * weight of the one with data loading: pages fetch through their queries.
+ */
+export function Router() {
+  return (
+    <BrowserRouter>
+      <PageBoundary>
+        <Suspense>
+          <Routes>
+            <Route path={paths.signIn} element={<SignInPage />} />
+            <Route path={paths.forgotten} element={<ForgottenPage />} />
+            <Route path={paths.link} element={<LinkPage />} />
+            <Route path={paths.setUp} element={<SetUpPage />} />
+            <Route element={<Gate />}>
+              <Route path={paths.runSheet} element={<RunSheetPage />} />
+              <Route path={`${paths.runSheet}/:day`} element={<RunSheetPage />} />
+              <Route path={paths.clock} element={<ClockPage />} />
+              <Route element={<Shelled />}>
+                <Route index element={<Home />} />
+                <Route path={paths.board} element={<BoardPage />} />
+                <Route path={`${paths.board}/:day`} element={<BoardPage />} />
+                <Route path={paths.customers} element={<CustomersPage />} />
+                <Route path={`${paths.customers}/:id`} element={<CustomersPage />} />
+                <Route path={paths.services} element={<ServiceMenuPage />} />
+                <Route path={paths.vans} element={<VansPage />} />
+                <Route path={paths.people} element={<PeoplePage />} />
+                <Route path={paths.hours} element={<HoursPage />} />
+                <Route path={paths.payWeeks} element={<PayWeekPage />} />
+                <Route path={paths.paydays} element={<PaydaysPage />} />
+                <Route path={`${paths.payWeeks}/:day`} element={<PayWeekPage />} />
+                <Route path={`${paths.payWeeks}/:day/:personId`} element={<PayWorkingPage />} />
+                <Route path={paths.rates} element={<RatesPage />} />
+                <Route path={paths.statements} element={<StatementsPage />} />
+                <Route path={`${paths.statements}/:day/:personId`} element={<StatementPage />} />
+                <Route path={paths.settings} element={<SettingsPage />} />
+                <Route path={paths.logins} element={<LoginsPage />} />
+                <Route path={paths.account} element={<AccountPage />} />
+                <Route path={paths.records} element={<RecordsPage />} />
+                <Route path={paths.localMail} element={<LocalMailPage />} />
+                <Route path="/index.html" element={<Navigate to="/" replace />} />
+                <Route path="*" element={<NotFound />} />
+              </Route>
+            </Route>
+          </Routes>
+        </Suspense>
+      </PageBoundary>
+    </BrowserRouter>
+  );
+}
+
+/** The desk's bar stays while the page below it loads. */
+function Shelled() {
+  return (
+    <Shell>
+      <Suspense>
+        <Outlet />
+      </Suspense>
+    </Shell>
+  );
 }

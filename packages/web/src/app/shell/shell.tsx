@@ -1,8 +1,9 @@
-import { Outlet } from 'react-router';
+import type { ReactNode } from 'react';
 import { useSession } from '../../lib/session.tsx';
 import { Bar } from './bar.tsx';
 
-export function Shell() {
+/** The desk's frame: the bar above, the page below. */
+export function Shell({ children }: { children: ReactNode }) {
   const { user } = useSession();
   return (
     <>
@@ -10,7 +11,7 @@ export function Shell() {
         Skip to the page
       </a>
       <Bar role={user.role} />
-      <Outlet />
+      {children}
     </>
   );
 }
