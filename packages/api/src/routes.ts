@@ -7,6 +7,7 @@ import { boardRoutes } from './features/board/index.ts';
 import { jobsRoutes } from './features/booking/index.ts';
 import { clockRoutes } from './features/clock/index.ts';
 import { customersRoutes } from './features/customers/index.ts';
+import { jobWorkRoutes } from './features/job-work/index.ts';
 import { payRoutes } from './features/pay/index.ts';
 import { peopleRoutes } from './features/people/index.ts';
 import { recordsRoutes } from './features/records/index.ts';
@@ -49,6 +50,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
     jobsRoutes,
     boardRoutes,
     runSheetRoutes,
+    jobWorkRoutes,
     clockRoutes,
     recordsRoutes,
   ]) {

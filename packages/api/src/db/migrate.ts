@@ -70,6 +70,7 @@ async function grantRows(sequelize: Sequelize, appRole: string): Promise<void> {
      REVOKE UPDATE, DELETE ON audit_entries, clock_corrections, pay_rates, pay_rules FROM ${role};
      REVOKE UPDATE, DELETE ON pay_plans, pay_places, pay_place_wages, person_places FROM ${role};
      REVOKE UPDATE, DELETE ON time_off_rules, time_off_adjustments, show_up_rules FROM ${role};
+     REVOKE UPDATE, DELETE ON service_checklists, work_events FROM ${role};
      REVOKE ALL ON schema_migrations FROM ${role};`,
   );
 }

@@ -15,6 +15,13 @@ export const addressDto = z.object({
   accessNotes: z.string(),
   hasWater: z.boolean(),
   hasPower: z.boolean(),
+  hasDog: z.boolean(),
+  shutsGate: z.boolean(),
+  drainsToCreek: z.boolean(),
+  takesKey: z.boolean(),
+  /** Where the key goes back; for the crew in its hours. */
+  keyGoesBack: z.string(),
+  mustKnow: z.string(),
 });
 export const vehicleDto = z.object({
   id,
@@ -23,6 +30,8 @@ export const vehicleDto = z.object({
   plate: z.string(),
   sizeClass,
   notes: z.string(),
+  isCoated: z.boolean(),
+  mustKnow: z.string(),
 });
 export const customerDto = z.object({
   id,
@@ -31,6 +40,10 @@ export const customerDto = z.object({
   phone: z.string(),
   email: z.string(),
   notes: z.string(),
+  isScentFree: z.boolean(),
+  ringsFirst: z.boolean(),
+  /** What every crew has to confirm before it starts. */
+  mustKnow: z.string(),
   addresses: z.array(addressDto),
   vehicles: z.array(vehicleDto),
   version: z.int(),
@@ -51,6 +64,12 @@ const addressBody = z.strictObject({
   accessNotes: shortText,
   hasWater: z.boolean(),
   hasPower: z.boolean(),
+  hasDog: z.boolean().optional(),
+  shutsGate: z.boolean().optional(),
+  drainsToCreek: z.boolean().optional(),
+  takesKey: z.boolean().optional(),
+  keyGoesBack: shortText.optional(),
+  mustKnow: shortText.optional(),
 });
 const vehicleBody = z.strictObject({
   id: id.optional(),
@@ -59,6 +78,8 @@ const vehicleBody = z.strictObject({
   plate: z.string().trim().max(16),
   sizeClass,
   notes: shortText,
+  isCoated: z.boolean().optional(),
+  mustKnow: shortText.optional(),
 });
 export const customerBody = z.strictObject({
   name,
@@ -66,6 +87,9 @@ export const customerBody = z.strictObject({
   phone,
   email: email.or(z.literal('')),
   notes: longText,
+  isScentFree: z.boolean().optional(),
+  ringsFirst: z.boolean().optional(),
+  mustKnow: shortText.optional(),
   addresses: z.array(addressBody).min(1, 'Give at least one address.').max(50),
   vehicles: z.array(vehicleBody).max(200),
 });

@@ -6,13 +6,14 @@ import type { Hint, HintEntity } from '@driprail/shared/realtime/hints';
 
 /** Which cached queries a changed thing touches, by the first part of their key. */
 const touched: Record<HintEntity, string[]> = {
-  visit: ['board', 'run-sheet', 'jobs'],
-  job: ['board', 'run-sheet', 'jobs', 'customers'],
+  visit: ['board', 'run-sheet', 'jobs', 'work'],
+  work: ['work'],
+  job: ['board', 'run-sheet', 'jobs', 'customers', 'work'],
   crew: ['board', 'run-sheet'],
-  customer: ['customers', 'board', 'run-sheet'],
+  customer: ['customers', 'board', 'run-sheet', 'work'],
   person: ['people', 'board'],
   van: ['vans', 'board'],
-  service: ['services'],
+  service: ['services', 'work'],
   clock: ['clock', 'run-sheet', 'board', 'pay'],
   settings: ['settings', 'session', 'board'],
   pay: ['pay'],

@@ -14,6 +14,12 @@ export class Address extends Model<InferAttributes<Address>, InferCreationAttrib
   declare accessNotes: CreationOptional<string>;
   declare hasWater: CreationOptional<boolean>;
   declare hasPower: CreationOptional<boolean>;
+  declare hasDog: CreationOptional<boolean>;
+  declare shutsGate: CreationOptional<boolean>;
+  declare drainsToCreek: CreationOptional<boolean>;
+  declare takesKey: CreationOptional<boolean>;
+  declare keyGoesBack: CreationOptional<string>;
+  declare mustKnow: CreationOptional<string>;
   declare position: CreationOptional<number>;
   declare isActive: CreationOptional<boolean>;
 }
@@ -33,6 +39,12 @@ export function initAddress(sequelize: Sequelize): void {
       accessNotes: { type: DataTypes.TEXT },
       hasWater: { type: DataTypes.BOOLEAN },
       hasPower: { type: DataTypes.BOOLEAN },
+      hasDog: { type: DataTypes.BOOLEAN },
+      shutsGate: { type: DataTypes.BOOLEAN },
+      drainsToCreek: { type: DataTypes.BOOLEAN },
+      takesKey: { type: DataTypes.BOOLEAN },
+      keyGoesBack: { type: DataTypes.TEXT },
+      mustKnow: { type: DataTypes.TEXT },
       position: { type: DataTypes.INTEGER },
       isActive: { type: DataTypes.BOOLEAN },
     },

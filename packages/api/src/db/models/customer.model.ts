@@ -8,6 +8,9 @@ export class Customer extends Model<InferAttributes<Customer>, InferCreationAttr
   declare phone: CreationOptional<string>;
   declare email: CreationOptional<string>;
   declare notes: CreationOptional<string>;
+  declare isScentFree: CreationOptional<boolean>;
+  declare ringsFirst: CreationOptional<boolean>;
+  declare mustKnow: CreationOptional<string>;
   declare version: CreationOptional<number>;
 }
 
@@ -20,6 +23,9 @@ export function initCustomer(sequelize: Sequelize): void {
       phone: { type: DataTypes.TEXT },
       email: { type: DataTypes.TEXT },
       notes: { type: DataTypes.TEXT },
+      isScentFree: { type: DataTypes.BOOLEAN },
+      ringsFirst: { type: DataTypes.BOOLEAN },
+      mustKnow: { type: DataTypes.TEXT },
       version: { type: DataTypes.INTEGER },
     },
     { sequelize, modelName: 'Customer', tableName: 'customers', underscored: true, timestamps: false },

@@ -44,6 +44,9 @@ import { initPaydayWeek } from './payday-week.model.ts';
 import { initAuditEntry } from './audit-entry.model.ts';
 import { initClockRequest } from './clock-request.model.ts';
 import { initHoursWord } from './hours-word.model.ts';
+import { initServiceChecklist } from './service-checklist.model.ts';
+import { initWorkEventRow } from './work-event.model.ts';
+import { initJobChange } from './job-change.model.ts';
 import { initOutboxMail } from './outbox-mail.model.ts';
 
 /** Gives every model its connection. Reads across tables are SQL, so no associations are declared. */
@@ -93,6 +96,9 @@ export function initModels(sequelize: Sequelize): void {
   initAuditEntry(sequelize);
   initClockRequest(sequelize);
   initHoursWord(sequelize);
+  initServiceChecklist(sequelize);
+  initWorkEventRow(sequelize);
+  initJobChange(sequelize);
   initOutboxMail(sequelize);
 }
 
@@ -141,4 +147,7 @@ export { PaydayWeek } from './payday-week.model.ts';
 export { AuditEntry } from './audit-entry.model.ts';
 export { ClockRequest } from './clock-request.model.ts';
 export { HoursWord } from './hours-word.model.ts';
+export { ServiceChecklist } from './service-checklist.model.ts';
+export { WorkEventRow } from './work-event.model.ts';
+export { JobChange } from './job-change.model.ts';
 export { OutboxMail } from './outbox-mail.model.ts';

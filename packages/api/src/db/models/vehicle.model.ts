@@ -10,6 +10,8 @@ export class Vehicle extends Model<InferAttributes<Vehicle>, InferCreationAttrib
   declare plate: CreationOptional<string>;
   declare sizeClass: SizeClass;
   declare notes: CreationOptional<string>;
+  declare isCoated: CreationOptional<boolean>;
+  declare mustKnow: CreationOptional<string>;
   declare position: CreationOptional<number>;
   declare isActive: CreationOptional<boolean>;
 }
@@ -24,6 +26,8 @@ export function initVehicle(sequelize: Sequelize): void {
       plate: { type: DataTypes.TEXT },
       sizeClass: { type: DataTypes.TEXT, allowNull: false },
       notes: { type: DataTypes.TEXT },
+      isCoated: { type: DataTypes.BOOLEAN },
+      mustKnow: { type: DataTypes.TEXT },
       position: { type: DataTypes.INTEGER },
       isActive: { type: DataTypes.BOOLEAN },
     },

@@ -1,6 +1,9 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
+import { addMinutes, isBefore } from '@driprail/shared/domain/time/zone';
+import { rangeOf, spanOf } from '../../db/models/columns.ts';
 import { Stop, Visit, VisitLine } from '../../db/models/index.ts';
+import { select } from '../../db/sequelize.ts';
 
 export interface NewVisit {
   jobId: string;
@@ -31,6 +34,29 @@ export async function setVisitLines(tx: Transaction, visitId: string, lineIds: s
     lineIds.map((jobLineId) => ({ visitId, jobLineId })),
     { transaction: tx },
   );
+}
+
+/**
+ * Makes a visit that is under way longer or shorter on the board, as far as its van's next stop leaves room: what really
+ * happens is recorded all the same.
+ */
+export async function stretchVisit(tx: Transaction, visit: Visit, byMinutes: number): Promise<void> {
+  const minutes = Math.max(5, visit.minutes + byMinutes);
+  const changed = { minutes, planVersion: visit.planVersion + 1, version: visit.version + 1 };
+  if (!visit.planned) {
+    await visit.update(changed, { transaction: tx });
+    return;
+  }
+  const { from, to } = spanOf(visit.planned);
+  const [next] = await select<{ from: string }>(
+    `SELECT to_json(min(lower(planned))) #>> '{}' AS "from" FROM visits
+      WHERE van_id = :vanId AND stop_id <> :stopId AND progress <> 'called_off' AND lower(planned) >= :to`,
+    { vanId: visit.vanId, stopId: visit.stopId, to },
+    tx,
+  );
+  const wanted = addMinutes(from, minutes);
+  const end = next?.from && isBefore(next.from, wanted) ? next.from : wanted;
+  await visit.update({ ...changed, planned: rangeOf(from, end) }, { transaction: tx });
 }
 
 /** Takes a visit away again: only one that was never placed. */

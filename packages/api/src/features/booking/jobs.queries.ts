@@ -9,6 +9,21 @@ type JobRow = Omit<JobDto, 'visits' | 'history'> & {
   history: { at: string; by: string; kind: string; reason: string; isUndone: boolean }[];
 };
 
+const dollars = (lines: string) =>
+  `(SELECT to_char(coalesce(sum((x ->> 'priceCents')::numeric), 0) / 100, 'FM999,999,990.00') FROM jsonb_array_elements(${lines}) x)`;
+
+/** Changes at the car with the price before and after, and how the board answered. */
+const changeHistory = `
+  SELECT h.occurred_at, coalesce(p.name, u.name), 'plan',
+         concat_ws(', ', h.words, 'visit ' || ${dollars('h.before')} || ' to ' || ${dollars('h.after')}, h.reason,
+           CASE WHEN h.state = 'done' THEN NULL WHEN h.state = 'quote' THEN 'kept as a quote'
+                WHEN h.is_board_not_asked THEN 'board not asked' ELSE 'asked of the board' END), false
+    FROM job_changes h JOIN users u ON u.id = h.user_id LEFT JOIN people p ON p.id = h.person_id WHERE h.job_id = j.id
+  UNION ALL
+  SELECT h.answered_at, u.name, 'plan',
+         concat_ws(', ', h.words, CASE h.state WHEN 'accepted' THEN 'accepted' ELSE 'declined, kept as a quote' END, nullif(h.answer, '')), false
+    FROM job_changes h JOIN users u ON u.id = h.answered_by WHERE h.job_id = j.id`;
+
 /** One job with its visits and what happened so far, newest first. */
 export async function readJob(id: string, tx?: Transaction): Promise<JobDto | null> {
   const [row] = await select<JobRow>(
@@ -27,7 +42,8 @@ export async function readJob(id: string, tx?: Transaction): Promise<JobDto | nu
                UNION ALL
                SELECT e.occurred_at, coalesce(p.name, u.name, ''), CASE WHEN e.kind = 'trouble' THEN 'trouble' ELSE e.kind END, e.reason, e.is_undone
                  FROM visit_events e JOIN visits v ON v.id = e.visit_id LEFT JOIN people p ON p.id = e.person_id LEFT JOIN users u ON u.id = e.user_id
-                WHERE v.job_id = j.id) h) AS history
+                WHERE v.job_id = j.id
+               UNION ALL ${changeHistory}) h) AS history
        FROM jobs j JOIN customers c ON c.id = j.customer_id WHERE j.id = :id`,
     { id },
     tx,

@@ -3,11 +3,14 @@ import type { CustomerDto } from '@driprail/shared/contracts/customers.contract'
 import { select } from '../../db/sequelize.ts';
 
 const columns = `c.id, c.name, c.is_company AS "isCompany", c.phone, c.email, c.notes, c.version,
+  c.is_scent_free AS "isScentFree", c.rings_first AS "ringsFirst", c.must_know AS "mustKnow",
   coalesce((SELECT json_agg(json_build_object('id', a.id, 'line', a.line, 'city', a.city, 'postcode', a.postcode, 'area', a.area,
-      'lat', a.lat, 'lng', a.lng, 'gateCode', a.gate_code, 'accessNotes', a.access_notes, 'hasWater', a.has_water, 'hasPower', a.has_power)
+      'lat', a.lat, 'lng', a.lng, 'gateCode', a.gate_code, 'accessNotes', a.access_notes, 'hasWater', a.has_water, 'hasPower', a.has_power,
+      'hasDog', a.has_dog, 'shutsGate', a.shuts_gate, 'drainsToCreek', a.drains_to_creek, 'takesKey', a.takes_key,
+      'keyGoesBack', a.key_goes_back, 'mustKnow', a.must_know)
       ORDER BY a.position, a.id) FROM addresses a WHERE a.customer_id = c.id AND a.is_active), '[]') AS addresses,
   coalesce((SELECT json_agg(json_build_object('id', v.id, 'label', v.label, 'color', v.color, 'plate', v.plate,
-      'sizeClass', v.size_class, 'notes', v.notes) ORDER BY v.position, v.id)
+      'sizeClass', v.size_class, 'notes', v.notes, 'isCoated', v.is_coated, 'mustKnow', v.must_know) ORDER BY v.position, v.id)
       FROM vehicles v WHERE v.customer_id = c.id AND v.is_active), '[]') AS vehicles`;
 
 /** Any part of name, phone, plate or address, case and spaces aside. */

@@ -10,7 +10,7 @@ import { conflict, notFound } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { findCustomer } from './customers.queries.ts';
 
-export type CustomerFields = z.infer<typeof customerBody>;
+export type CustomerFields = z.input<typeof customerBody>;
 
 export function createCustomer(ctx: Ctx, fields: CustomerFields, id = uuid()): Promise<CustomerDto> {
   return inTransaction((tx) => addCustomer(tx, ctx, fields, id));

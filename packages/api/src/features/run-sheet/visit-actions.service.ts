@@ -19,6 +19,7 @@ import { takeOnce } from '../../http/once.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { lockVisit } from '../board/index.ts';
 import { followProgress } from '../clock/index.ts';
+import { fixChecklists, refuseUnconfirmed, refuseUnfinished } from '../job-work/index.ts';
 import { readRunRows, toRunVisit } from './run-visits.queries.ts';
 import type { RunRow } from './run-visits.queries.ts';
 import { undoLast } from './undo.ts';
@@ -116,14 +117,22 @@ async function takeEffect(
   visit: Visit,
   kind: ProgressAction,
   action: VisitAction,
-  { occurredAt }: StampedTimes,
+  times: StampedTimes,
 ): Promise<void> {
+  const { occurredAt } = times;
   if (kind === 'arrive') {
     await clearCrew(tx, visit);
     await recordCrew(tx, visit, occurredAt);
     await recordPresser(tx, visit, ctx.actor.personId);
   }
-  if (kind === 'finish') await finishLines(tx, visit.id, await openLineIds(tx, visit.id), occurredAt);
+  if (kind === 'start_work') {
+    await refuseUnconfirmed(tx, ctx, visit.id, times);
+    await fixChecklists(tx, visit.id);
+  }
+  if (kind === 'finish') {
+    await refuseUnfinished(tx, ctx, visit.id, times);
+    await finishLines(tx, visit.id, await openLineIds(tx, visit.id), occurredAt);
+  }
   if (kind === 'part_done') {
     const open = await openLineIds(tx, visit.id);
     const finished = open.filter((id) => action.finishedLineIds?.includes(id));

@@ -1,7 +1,10 @@
+import * as checklists from '@driprail/shared/contracts/checklist.contract';
 import * as api from '@driprail/shared/contracts/services.contract';
 import { todayOf } from '../../db/company.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { route } from '../../http/route.ts';
+import { readChecklist } from './checklists.queries.ts';
+import { saveChecklist } from './checklists.service.ts';
 import { listServices } from './services.queries.ts';
 import { createService, setServicePrices, updateService } from './services.service.ts';
 
@@ -15,5 +18,9 @@ export function servicesRoutes(table: RouteTable): void {
   }));
   route(table, api.setServicePrices, async ({ params, body }, ctx) => ({
     service: await setServicePrices(ctx, params.id, body.startsOn, body.prices),
+  }));
+  route(table, checklists.getChecklist, async ({ params }) => ({ checklist: await readChecklist(params.id) }));
+  route(table, checklists.putChecklist, async ({ params, body }, ctx) => ({
+    checklist: await saveChecklist(ctx, params.id, body),
   }));
 }
