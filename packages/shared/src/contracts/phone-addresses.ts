@@ -1,6 +1,7 @@
 import { addressOf } from './address.ts';
 import type * as clock from './clock.contract.ts';
 import type * as hours from './hours.contract.ts';
+import type * as jobWork from './job-work.contract.ts';
 import type * as jobs from './jobs.contract.ts';
 import type * as runSheet from './run-sheet.contract.ts';
 import type * as session from './session.contract.ts';
@@ -11,6 +12,9 @@ export const createSessionAt = addressOf<typeof session.createSession>('post', '
 export const endSessionAt = addressOf<typeof session.endSession>('delete', '/api/session');
 export const getRunSheetAt = addressOf<typeof runSheet.getRunSheet>('get', '/api/run-sheet/:day');
 export const postVisitActionAt = addressOf<typeof runSheet.postVisitAction>('post', '/api/visits/:id/actions');
+export const getDayWorkAt = addressOf<typeof jobWork.getDayWork>('get', '/api/run-sheet/:day/work');
+export const postWorkActionAt = addressOf<typeof jobWork.postWorkAction>('post', '/api/visits/:id/work');
+export const postJobChangeAt = addressOf<typeof jobWork.postJobChange>('post', '/api/visits/:id/changes');
 export const getClockAt = addressOf<typeof clock.getClock>('get', '/api/clock');
 export const postClockActionAt = addressOf<typeof clock.postClockAction>('post', '/api/clock/actions');
 export const recordTipAt = addressOf<typeof jobs.recordTip>('post', '/api/jobs/:id/tips');

@@ -3,7 +3,14 @@ import type { QueryClient } from '@tanstack/react-query';
 import type { postClockAction } from '@driprail/shared/contracts/clock.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
-import { postClockActionAt, postVisitActionAt, recordTipAt } from '@driprail/shared/contracts/phone-addresses';
+import type { postJobChange, postWorkAction } from '@driprail/shared/contracts/job-work.contract';
+import {
+  postClockActionAt,
+  postJobChangeAt,
+  postVisitActionAt,
+  postWorkActionAt,
+  recordTipAt,
+} from '@driprail/shared/contracts/phone-addresses';
 import type { postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
 import { ApiError, call } from '../call.ts';
 import type { KeptPress } from './store.ts';
@@ -20,7 +27,14 @@ let state: OutboxState = { waiting: [], refused: [], isSending: false };
 let user: string | null = null;
 let running: Promise<void> | null = null;
 const watchers = new Set<() => void>();
-const touched = ['run-sheet', 'clock'];
+/** What a sent press changes on this phone, by the first part of the query's key. */
+const touched: Record<KeptPress['path'], string[]> = {
+  visit: ['run-sheet', 'clock', 'work'],
+  clock: ['run-sheet', 'clock'],
+  tip: ['run-sheet'],
+  work: ['work'],
+  change: ['work', 'run-sheet'],
+};
 
 function show(next: Partial<OutboxState>): void {
   state = { ...state, ...next };
@@ -55,7 +69,7 @@ async function sendAll(client: QueryClient): Promise<void> {
     for (let next = state.waiting[0]; next; next = state.waiting[0]) {
       if (!(await sendOne(next))) break;
       // The newer state first: what waited is still shown as done while it comes.
-      await Promise.all(touched.map((key) => client.invalidateQueries({ queryKey: [key] })));
+      await Promise.all(touched[next.path].map((key) => client.invalidateQueries({ queryKey: [key] })));
       await reload();
     }
   } finally {
@@ -84,6 +98,15 @@ function send({ path, targetId, body }: KeptPress): Promise<unknown> {
       params: { id: targetId },
       body: body as RequestOf<typeof postVisitAction>['body'],
     });
+  }
+  if (path === 'work') {
+    return call(postWorkActionAt, {
+      params: { id: targetId },
+      body: body as RequestOf<typeof postWorkAction>['body'],
+    });
+  }
+  if (path === 'change') {
+    return call(postJobChangeAt, { params: { id: targetId }, body: body as RequestOf<typeof postJobChange>['body'] });
   }
   if (path === 'clock') return call(postClockActionAt, { body: body as RequestOf<typeof postClockAction>['body'] });
   return call(recordTipAt, { params: { id: targetId }, body: body as RequestOf<typeof recordTip>['body'] });

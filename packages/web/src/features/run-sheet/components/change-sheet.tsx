@@ -11,7 +11,7 @@ import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { useFormats } from '../../../lib/format.ts';
 import { useAskChange } from '../api/own-hours.queries.ts';
-import { Picks } from './picks.tsx';
+import { Picks } from '../../../components/picks.tsx';
 
 const reasons = ['Forgot to clock out', 'Forgot to press', 'Wrong kind', 'Break was shorter', 'Phone was off'];
 

@@ -3,7 +3,7 @@ import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract'
 import { Button } from '../../../components/button.tsx';
 import { CheckField, TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
-import { Picks } from './picks.tsx';
+import { Picks } from '../../../components/picks.tsx';
 
 const reasons = ['Weather', 'Out of time', 'Cure time', 'No water', 'Customer asked'];
 const spans = [30, 60, 90, 120, 180, 240];

@@ -5,7 +5,7 @@ import { CheckField, SelectField, TextField } from '../../../components/field.ts
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { parseMoney } from '../../../lib/format.ts';
 import { useRecordTip } from '../api/run-sheet.queries.ts';
-import { Picks } from './picks.tsx';
+import { Picks } from '../../../components/picks.tsx';
 
 const amounts = ['5', '10', '15', '20', '30', '40'];
 const methods = [

@@ -1,0 +1,2 @@
+export { OutboxLine } from './components/outbox-line.tsx';
+export { useOnline } from './components/phone-head.tsx';
