@@ -13,6 +13,7 @@ import { isOwnOrigin } from './http/origin.ts';
 import type { RouteTable } from './http/route.ts';
 import { registerUsers, sessionChain } from './http/session.ts';
 import { serveWeb } from './http/web.ts';
+import { storeFor } from './integrations/storage/index.ts';
 import type { Logger } from './log.ts';
 import type { TakenMail } from './mail/transport.ts';
 import { hub } from './realtime/hub.ts';
@@ -68,6 +69,7 @@ export function createApp({ config, now, log, secret, setUpCode, localMail }: Ap
     hasLocalMail: config.hasLocalMail,
     setUpCode,
     localMail,
+    store: storeFor(config),
     baseUrlOf: (req) => config.publicUrl ?? `${req.protocol}://${req.get('host') ?? ''}`,
   });
   app.use(table.router);

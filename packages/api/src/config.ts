@@ -19,6 +19,12 @@ const environment = z.object({
   MAIL_FROM: z.string().default('Driprail <no-reply@driprail.example>'),
   PUBLIC_URL: z.url().optional(),
   TRUST_PROXY: flag,
+  /** Photos go to this bucket; without it, to the data folder. */
+  S3_BUCKET: z.string().optional(),
+  S3_REGION: z.string().default('us-east-1'),
+  S3_ENDPOINT: z.url().optional(),
+  S3_ACCESS_KEY_ID: z.string().optional(),
+  S3_SECRET_ACCESS_KEY: z.string().optional(),
 });
 
 export type Config = ReturnType<typeof readConfig>;
@@ -46,6 +52,17 @@ export function readConfig(env: NodeJS.ProcessEnv) {
     smtpUrl: e.SMTP_URL ?? null,
     mailFrom: e.MAIL_FROM,
     publicUrl: e.PUBLIC_URL ?? null,
+    s3: e.S3_BUCKET
+      ? {
+          bucket: e.S3_BUCKET,
+          region: e.S3_REGION,
+          endpoint: e.S3_ENDPOINT ?? null,
+          credentials:
+            e.S3_ACCESS_KEY_ID && e.S3_SECRET_ACCESS_KEY
+              ? { accessKeyId: e.S3_ACCESS_KEY_ID, secretAccessKey: e.S3_SECRET_ACCESS_KEY }
+              : null,
+        }
+      : null,
     trustsProxy: e.TRUST_PROXY === '1',
     /** The page of the local mail fake exists only with the fake, on loopback. */
     hasLocalMail: !e.SMTP_URL && isLoopback,

@@ -15,16 +15,19 @@ import { runSheetRoutes } from './features/run-sheet/index.ts';
 import { servicesRoutes } from './features/service-menu/index.ts';
 import type { SetUpCode } from './features/settings/index.ts';
 import { settingsRoutes } from './features/settings/index.ts';
+import { walkRoundRoutes } from './features/walk-round/index.ts';
 import { notFound } from './http/errors.ts';
 import { openApiOf } from './http/openapi.ts';
 import type { RouteTable } from './http/route.ts';
 import { publicRoute, route } from './http/route.ts';
+import type { FileStore } from './integrations/storage/index.ts';
 import type { TakenMail } from './mail/transport.ts';
 
 export interface RouteParts {
   hasLocalMail: boolean;
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
+  store: FileStore;
   baseUrlOf: (req: Request) => string;
 }
 
@@ -42,6 +45,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   accessRoutes(table, parts);
   loginsRoutes(table, parts);
   payRoutes(table, parts);
+  walkRoundRoutes(table, parts.store);
   settingsRoutes(table, { code: parts.setUpCode, hasLocalMail: parts.hasLocalMail });
   for (const mount of [
     peopleRoutes,

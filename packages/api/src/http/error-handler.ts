@@ -36,6 +36,8 @@ function asAppError(error: unknown): AppError | null {
     return unprocessable('locked_week', 'This pay week is locked and never changes. Add a correction to an open week.');
   if (codeOf(error) === 'DR003')
     return conflict('handed_over', 'This payday is handed over and never changes. Look at it again.');
+  if (codeOf(error) === 'DR004')
+    return conflict('work_began', 'Work has begun, so the walk-round stays as it is. Add what you see now instead.');
   const status = (error as { status?: unknown }).status;
   if (status === 413) return new AppError(413, 'too_large', 'That is too large to send.');
   if (status === 415) return new AppError(415, 'unsupported', 'Send JSON.');

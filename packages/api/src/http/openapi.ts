@@ -17,9 +17,13 @@ export function openApiOf(endpoints: Endpoint[]): Record<string, unknown> {
 }
 
 function operation(endpoint: Endpoint): Record<string, unknown> {
-  const type = { json: 'application/json', csv: 'text/csv', pdf: 'application/pdf', zip: 'application/zip' }[
-    endpoint.format
-  ];
+  const type = {
+    json: 'application/json',
+    csv: 'text/csv',
+    pdf: 'application/pdf',
+    zip: 'application/zip',
+    jpeg: 'image/jpeg',
+  }[endpoint.format];
   const body = schemaOf(endpoint.body, 'input');
   return {
     summary: endpoint.summary,

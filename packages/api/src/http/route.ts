@@ -63,6 +63,7 @@ function mount<E extends Endpoint>(
     if (endpoint.format === 'csv') res.type('text/csv').send(output);
     else if (endpoint.format === 'pdf') res.type('application/pdf').send(output);
     else if (endpoint.format === 'zip') res.type('application/zip').send(output);
+    else if (endpoint.format === 'jpeg') res.type('image/jpeg').send(output);
     else res.json(output);
   });
 }

@@ -1,3 +1,6 @@
+import { mkdtempSync, rmSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
 import { afterAll, beforeAll } from 'vitest';
 import supertest from 'supertest';
 import type TestAgent from 'supertest/lib/agent.js';
@@ -21,6 +24,8 @@ export interface TestApp {
   send: ReturnType<typeof localMail>['send'];
   /** The app's clock; set it to move time. */
   time: { now: string };
+  /** Files that the app keeps; gone at the end. */
+  dataDir: string;
   anonymous: () => TestAgent;
 }
 
@@ -29,7 +34,8 @@ export function useApp(): TestApp {
   const test = { time: { now: NOON } } as TestApp;
   beforeAll(() => {
     useCheapHashes();
-    const config = { ...readConfig(process.env), isTest: true };
+    test.dataDir = mkdtempSync(join(tmpdir(), 'driprail-api-'));
+    const config = { ...readConfig(process.env), isTest: true, dataDir: test.dataDir };
     connect(config.databaseUrl, 8);
     const now = () => new Date(test.time.now);
     const code = new SetUpCode();
@@ -50,6 +56,7 @@ export function useApp(): TestApp {
   afterAll(async () => {
     await test.app.close();
     await disconnect();
+    rmSync(test.dataDir, { recursive: true, force: true });
   });
   return test;
 }

@@ -47,6 +47,8 @@ export async function aCompany(test: TestApp) {
     description: '',
     skills: [],
     equipment: [],
+    // Most tests are about something else than the walk-round.
+    photoSet: 'none',
     isActive: true,
     position: 0,
     startsOn: '2026-01-01',

@@ -15,8 +15,8 @@ export interface Endpoint<P extends Part = Part, Q extends Part = Part, B extend
   query: Q;
   body: B;
   response: R;
-  /** `csv` answers text, `pdf` and `zip` bytes; the response schema then describes those. */
-  format: 'json' | 'csv' | 'pdf' | 'zip';
+  /** `csv` answers text, `pdf`, `zip` and `jpeg` bytes; the response schema then describes those. */
+  format: 'json' | 'csv' | 'pdf' | 'zip' | 'jpeg';
 }
 
 export type InputOf<E extends Endpoint> = {

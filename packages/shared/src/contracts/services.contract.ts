@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
 import { day, equipment, id, longText, minutes, name, planVersion, positiveCents, sizeClass, skill } from './fields.ts';
 import { desk } from '../authz/actor.ts';
+import { photoSets } from '../domain/walk-round/views.ts';
 
 const priceBody = z.strictObject({ sizeClass, priceCents: positiveCents, minutes });
 export const serviceKinds = ['package', 'single', 'add_on'] as const;
@@ -12,6 +13,8 @@ export const serviceDto = z.object({
   description: z.string(),
   skills: z.array(skill),
   equipment: z.array(equipment),
+  /** What is photographed before work. */
+  photoSet: z.enum(photoSets),
   isActive: z.boolean(),
   position: z.int(),
   /** The prices in force on the day asked for, one per size class that is sold. */
@@ -26,6 +29,8 @@ export const serviceBody = z.strictObject({
   description: longText,
   skills: z.array(skill),
   equipment: z.array(equipment),
+  /** Left out: quick, for add-ons none. */
+  photoSet: z.enum(photoSets, 'Choose what is photographed.').optional(),
   isActive: z.boolean(),
   position: z.int().min(0).max(999),
 });

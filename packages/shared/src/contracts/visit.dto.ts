@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { id, instant, planVersion, sizeClass } from './fields.ts';
 import { progressStates } from '../domain/board/progress.ts';
+import { photoSets } from '../domain/walk-round/views.ts';
 
 export const visitLineDto = z.object({
   id,
@@ -16,6 +17,20 @@ export const visitLineDto = z.object({
 export type VisitLineDto = z.infer<typeof visitLineDto>;
 
 export const visitCrewDto = z.object({ personId: id, name: z.string() });
+
+/** What a visit's cars ask of the walk-round, and how far it is. */
+export const visitWalkDto = z.object({
+  /** The largest set that a line asks for. */
+  photoSet: z.enum(photoSets),
+  /** Cars that need one, and those that have it. */
+  cars: z.int(),
+  made: z.int(),
+  /** A car was too dirty to see, and nobody has looked again. */
+  isSecondLookDue: z.boolean(),
+  /** Why work began without it. */
+  startReason: z.string(),
+});
+export type VisitWalkDto = z.infer<typeof visitWalkDto>;
 
 /** A visit as the board shows it. */
 export const visitDto = z.object({
@@ -54,6 +69,7 @@ export const visitDto = z.object({
   skills: z.array(z.string()),
   equipment: z.array(z.string()),
   crew: z.array(visitCrewDto),
+  walkRound: visitWalkDto,
   /** Reasons given for warnings, by the key of the facts. */
   accepted: z.array(z.object({ key: z.string(), code: z.string(), reason: z.string(), by: z.string(), at: instant })),
 });

@@ -9,6 +9,7 @@ import { paydays } from './2026-12-01-006-paydays.ts';
 import { payFacts } from './2026-12-01-009-pay-facts.ts';
 import { checkedFigures } from './2026-12-01-010-checked-figures.ts';
 import { lockedRecords } from './2026-12-01-011-locked-records.ts';
+import { walkRounds } from './2026-12-01-012-walk-rounds.ts';
 import { jobWork } from './2026-12-01-013-job-work.ts';
 import { payIndexes } from './2026-12-01-014-pay-indexes.ts';
 import { pay } from './2026-12-01-003-pay.ts';
@@ -26,6 +27,7 @@ export const migrations: Migration[] = [
   payFacts,
   checkedFigures,
   lockedRecords,
+  walkRounds,
   jobWork,
   payIndexes,
 ];

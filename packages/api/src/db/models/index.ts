@@ -48,6 +48,10 @@ import { initServiceChecklist } from './service-checklist.model.ts';
 import { initWorkEventRow } from './work-event.model.ts';
 import { initJobChange } from './job-change.model.ts';
 import { initOutboxMail } from './outbox-mail.model.ts';
+import { initWalkRound } from './walk-round.model.ts';
+import { initWalkMark } from './walk-mark.model.ts';
+import { initWalkLook } from './walk-look.model.ts';
+import { initPhoto } from './photo.model.ts';
 
 /** Gives every model its connection. Reads across tables are SQL, so no associations are declared. */
 export function initModels(sequelize: Sequelize): void {
@@ -100,6 +104,10 @@ export function initModels(sequelize: Sequelize): void {
   initWorkEventRow(sequelize);
   initJobChange(sequelize);
   initOutboxMail(sequelize);
+  initWalkRound(sequelize);
+  initWalkMark(sequelize);
+  initWalkLook(sequelize);
+  initPhoto(sequelize);
 }
 
 export { CompanySettings } from './company-settings.model.ts';
@@ -151,3 +159,7 @@ export { ServiceChecklist } from './service-checklist.model.ts';
 export { WorkEventRow } from './work-event.model.ts';
 export { JobChange } from './job-change.model.ts';
 export { OutboxMail } from './outbox-mail.model.ts';
+export { WalkRound } from './walk-round.model.ts';
+export { WalkMark } from './walk-mark.model.ts';
+export { WalkLook } from './walk-look.model.ts';
+export { Photo } from './photo.model.ts';

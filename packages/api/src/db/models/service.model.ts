@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { PhotoSet } from '@driprail/shared/domain/walk-round/views';
 
 export class Service extends Model<InferAttributes<Service>, InferCreationAttributes<Service>> {
   declare id: string;
@@ -8,6 +9,7 @@ export class Service extends Model<InferAttributes<Service>, InferCreationAttrib
   declare description: CreationOptional<string>;
   declare skills: CreationOptional<string[]>;
   declare equipment: CreationOptional<string[]>;
+  declare photoSet: CreationOptional<PhotoSet>;
   declare isActive: CreationOptional<boolean>;
   declare position: CreationOptional<number>;
   declare version: CreationOptional<number>;
@@ -22,6 +24,7 @@ export function initService(sequelize: Sequelize): void {
       description: { type: DataTypes.TEXT },
       skills: { type: DataTypes.ARRAY(DataTypes.TEXT) },
       equipment: { type: DataTypes.ARRAY(DataTypes.TEXT) },
+      photoSet: { type: DataTypes.TEXT },
       isActive: { type: DataTypes.BOOLEAN },
       position: { type: DataTypes.INTEGER },
       version: { type: DataTypes.INTEGER },

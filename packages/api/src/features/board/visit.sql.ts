@@ -12,7 +12,9 @@ export const visitJson = `json_build_object(
   'hasGateCode', a.gate_code <> '', 'hasWater', a.has_water, 'hasPower', a.has_power,
   'windowFrom', ${iso('j.window_from')}, 'windowTo', ${iso('j.window_to')}, 'notes', j.notes,
   'lines', lines.list, 'skills', needs.skills, 'equipment', needs.equipment,
-  'crew', coalesce(worked.list, riding.list, '[]'::json), 'accepted', v.accepted
+  'crew', coalesce(worked.list, riding.list, '[]'::json), 'accepted', v.accepted,
+  'walkRound', json_build_object('photoSet', (ARRAY['none', 'quick', 'full'])[walk.rank], 'cars', walk.cars, 'made', walk.made,
+    'isSecondLookDue', walk.is_second_look_due, 'startReason', walk.start_reason)
 )`;
 
 export const visitFrom = `visits v
@@ -35,4 +37,15 @@ export const visitFrom = `visits v
       FROM visit_crew vc JOIN people p ON p.id = vc.person_id WHERE vc.visit_id = v.id) worked ON true
   LEFT JOIN LATERAL (
     SELECT json_agg(json_build_object('personId', p.id, 'name', p.name) ORDER BY r.position) AS list
-      FROM van_crew r JOIN people p ON p.id = r.person_id WHERE r.van_id = v.van_id AND r.span && v.planned) riding ON true`;
+      FROM van_crew r JOIN people p ON p.id = r.person_id WHERE r.van_id = v.van_id AND r.span && v.planned) riding ON true
+  CROSS JOIN LATERAL (
+    SELECT coalesce(max(car.rank), 1) AS rank, count(*) FILTER (WHERE car.rank > 1) AS cars,
+           count(w.id) FILTER (WHERE car.rank > 1) AS made,
+           coalesce(bool_or(w.is_too_dirty AND NOT EXISTS (SELECT 1 FROM walk_looks k
+             WHERE k.visit_id = v.id AND k.vehicle_id IS NOT DISTINCT FROM w.vehicle_id)), false) AS is_second_look_due,
+           coalesce((SELECT e.reason FROM visit_events e WHERE e.visit_id = v.id AND e.kind = 'start_work' AND NOT e.is_undone
+             ORDER BY e.received_at DESC LIMIT 1), '') AS start_reason
+      FROM (SELECT l.vehicle_id, max(array_position(ARRAY['none', 'quick', 'full'], s.photo_set)) AS rank
+              FROM visit_lines vl JOIN job_lines l ON l.id = vl.job_line_id JOIN services s ON s.id = l.service_id
+             WHERE vl.visit_id = v.id GROUP BY l.vehicle_id) car
+      LEFT JOIN walk_rounds w ON w.visit_id = v.id AND w.vehicle_id IS NOT DISTINCT FROM car.vehicle_id) walk`;

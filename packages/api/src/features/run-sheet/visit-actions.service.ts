@@ -1,14 +1,11 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { z } from 'zod';
-import { tag } from '@driprail/shared/authz/ability';
 import type { RunVisitDto, visitActionBody } from '@driprail/shared/contracts/run-sheet.contract';
 import type { Progress, ProgressAction } from '@driprail/shared/domain/board/progress';
 import { takeStep } from '@driprail/shared/domain/board/progress';
 import { stamp } from '@driprail/shared/domain/time/device';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
-import { dayOf } from '@driprail/shared/domain/time/zone';
-import { authorize } from '../../authz/authorize.ts';
 import { companyOf } from '../../db/company.ts';
 import type { CompanySettings, Visit } from '../../db/models/index.ts';
 import { VisitEvent } from '../../db/models/index.ts';
@@ -17,7 +14,7 @@ import { AppError, notFound, unprocessable } from '../../http/errors.ts';
 import type { Outcome } from '../../http/once.ts';
 import { takeOnce } from '../../http/once.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
-import { lockVisit } from '../board/index.ts';
+import { authorizeVisit, lockVisit } from '../board/index.ts';
 import { followProgress } from '../clock/index.ts';
 import { fixChecklists, refuseUnconfirmed, refuseUnfinished } from '../job-work/index.ts';
 import { readRunRows, toRunVisit } from './run-visits.queries.ts';
@@ -46,7 +43,7 @@ export async function actOnVisit(
       const visit = await lockVisit(tx, visitId);
       const row = (await readRunRows({ visitId }, tx))[0];
       if (!visit || !row) throw notFound('That visit');
-      authorizeMark(ctx, row, company.zone);
+      authorizeVisit(ctx, 'mark', row.visit, company.zone);
       return perform(tx, ctx, company, visit, row, action);
     },
   );
@@ -63,15 +60,11 @@ function refuseUnreasoned(action: VisitAction): void {
     throw unprocessable('trouble_needed', 'Say what is wrong.', { fields: { trouble: 'Say what is wrong.' } });
 }
 
-/** A visit of another crew is not there for a technician, rather than forbidden. */
-function authorizeMark({ ability, actor, now }: Ctx, { visit }: RunRow, zone: string): void {
-  const day = visit.from ? dayOf(visit.from, zone) : null;
-  const daysFromToday = day
-    ? Math.round((Date.parse(day) - Date.parse(dayOf(now().toISOString(), zone))) / 86_400_000)
-    : 0;
-  const subject = tag('Visit', { id: visit.id, crewPersonIds: visit.crew.map((p) => p.personId), day, daysFromToday });
-  if (actor.role === 'technician' && ability.cannot('read', subject)) throw notFound('That visit');
-  authorize(ability, 'mark', subject);
+/** Nobody touches a car whose marks were not put down, unless it is said why. */
+function refuseUnseen({ visit }: RunRow, { reason }: VisitAction): void {
+  if (visit.walkRound.made >= visit.walkRound.cars || reason !== '') return;
+  const message = 'Make the walk-round first, or say why work starts without it.';
+  throw unprocessable('walk_round_needed', message, { fields: { reason: message } });
 }
 
 async function perform(
@@ -99,6 +92,7 @@ async function perform(
   } else {
     const step = takeStep(visit.progress, action.kind);
     if (!step.ok) return clash(step.message);
+    if (action.kind === 'start_work') refuseUnseen(row, action);
     await takeEffect(tx, ctx, visit, action.kind, action, times);
     await record(tx, ctx, visit, action, times, step.to);
     await setProgress(tx, visit, step.to, times.occurredAt, action.reason);

@@ -2,6 +2,8 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { SizeClass } from '@driprail/shared/contracts/fields';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import type { PhotoSet } from '@driprail/shared/domain/walk-round/views';
+import { usualPhotoSet } from '@driprail/shared/domain/walk-round/views';
 import { audit } from '../../db/audit.ts';
 import { todayOf } from '../../db/company.ts';
 import { Service, ServicePrice } from '../../db/models/index.ts';
@@ -14,7 +16,7 @@ import { listServices } from './services.queries.ts';
 export type ServiceFields = Pick<
   ServiceDto,
   'name' | 'kind' | 'description' | 'skills' | 'equipment' | 'isActive' | 'position'
->;
+> & { /** Left out: the usual one of its kind. */ photoSet?: PhotoSet | undefined };
 export interface PriceFields {
   sizeClass: SizeClass;
   priceCents: number;
@@ -27,7 +29,8 @@ export function createService(
   id = uuid(),
 ): Promise<ServiceDto> {
   return inTransaction(async (tx) => {
-    await Service.create({ id, ...fields }, { transaction: tx });
+    const photoSet = fields.photoSet ?? usualPhotoSet(fields.kind);
+    await Service.create({ id, ...fields, photoSet }, { transaction: tx });
     await putPrices(tx, id, startsOn, prices);
     return saved(tx, ctx, id, 'added');
   });
@@ -36,14 +39,14 @@ export function createService(
 export function updateService(
   ctx: Ctx,
   id: string,
-  { version, ...fields }: ServiceFields & { version: number },
+  { version, photoSet, ...fields }: ServiceFields & { version: number },
 ): Promise<ServiceDto> {
   return inTransaction(async (tx) => {
     const service = await Service.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
     if (!service) throw notFound('That service');
     if (service.version !== version)
       throw conflict('stale', `Somebody changed ${service.name} meanwhile. Reload and try again.`);
-    await service.update({ ...fields, version: version + 1 }, { transaction: tx });
+    await service.update({ ...fields, ...(photoSet && { photoSet }), version: version + 1 }, { transaction: tx });
     return saved(tx, ctx, id, 'changed');
   });
 }

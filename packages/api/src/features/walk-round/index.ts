@@ -1,0 +1,1 @@
+export { walkRoundRoutes } from './walk-round.routes.ts';
