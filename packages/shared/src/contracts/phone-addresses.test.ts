@@ -6,9 +6,22 @@ import * as jobs from './jobs.contract.ts';
 import * as addresses from './phone-addresses.ts';
 import * as runSheet from './run-sheet.contract.ts';
 import * as session from './session.contract.ts';
+import * as walkAddresses from './walk-round-addresses.ts';
+import * as walkRound from './walk-round.contract.ts';
 
-const contracts: Record<string, unknown> = { ...clock, ...hours, ...jobs, ...jobWork, ...runSheet, ...session };
+const contracts: Record<string, unknown> = {
+  ...clock,
+  ...hours,
+  ...jobs,
+  ...jobWork,
+  ...runSheet,
+  ...session,
+  ...walkRound,
+};
 
-test.each(Object.entries(addresses))('%s is where its contract says', (name, { method, path }) => {
-  expect(contracts[name.replace(/At$/, '')]).toMatchObject({ method, path });
-});
+test.each(Object.entries({ ...addresses, ...walkAddresses }))(
+  '%s is where its contract says',
+  (name, { method, path }) => {
+    expect(contracts[name.replace(/At$/, '')]).toMatchObject({ method, path });
+  },
+);

@@ -8,11 +8,6 @@ import { conditions, lookOutcomes } from '../domain/walk-round/condition.ts';
 import { markAnswers, markKinds, markSizes } from '../domain/walk-round/marks.ts';
 import { photoMoments, photoSets, photoViews } from '../domain/walk-round/views.ts';
 
-/** A photo as it leaves a phone is scaled to about 1,600 px: under 1 MB. More is no photo of ours. */
-export const PHOTO_MAX_BYTES = 8 * 1024 * 1024;
-/** One piece of a photo: small enough to get through between two dead spots. */
-export const PIECE_BYTES = 128 * 1024;
-
 const thousandths = z.int().min(0).max(1000);
 const markBody = z.strictObject({
   id,

@@ -58,6 +58,13 @@ function isRefusal(json: unknown): json is ErrorBody {
   );
 }
 
+/** Bytes go as they are, all else as JSON. */
+function bodyOf(body: unknown): RequestInit {
+  if (body === undefined) return {};
+  if (body instanceof Blob) return { body, headers: { 'content-type': 'application/octet-stream' } };
+  return { body: JSON.stringify(body), headers: { 'content-type': 'application/json' } };
+}
+
 async function send(endpoint: Address, request: RequestOf<Endpoint>, signal?: AbortSignal): Promise<Response> {
   const params = (request.params ?? {}) as Record<string, string>;
   const path = endpoint.path.replace(/:(\w+)/g, (_all, name: string) => encodeURIComponent(params[name] ?? ''));
@@ -65,10 +72,7 @@ async function send(endpoint: Address, request: RequestOf<Endpoint>, signal?: Ab
   try {
     return await fetch(query ? `${path}?${query}` : path, {
       method: endpoint.method.toUpperCase(),
-      ...(request.body !== undefined && {
-        body: JSON.stringify(request.body),
-        headers: { 'content-type': 'application/json' },
-      }),
+      ...bodyOf(request.body),
       ...(signal && { signal }),
     });
   } catch (error) {

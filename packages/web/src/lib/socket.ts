@@ -6,7 +6,7 @@ import type { Hint, HintEntity } from '@driprail/shared/realtime/hints';
 
 /** Which cached queries a changed thing touches, by the first part of their key. */
 const touched: Record<HintEntity, string[]> = {
-  visit: ['board', 'run-sheet', 'jobs', 'work'],
+  visit: ['board', 'run-sheet', 'jobs', 'work', 'walk-round'],
   work: ['work'],
   job: ['board', 'run-sheet', 'jobs', 'customers', 'work'],
   crew: ['board', 'run-sheet'],

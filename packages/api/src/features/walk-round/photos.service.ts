@@ -1,11 +1,12 @@
 import { createHash } from 'node:crypto';
 import type { Transaction } from 'sequelize';
 import type { PhotoBody, WalkPhotoDto } from '@driprail/shared/contracts/walk-round.contract';
-import { PHOTO_MAX_BYTES, walkPhotoDto } from '@driprail/shared/contracts/walk-round.contract';
+import { walkPhotoDto } from '@driprail/shared/contracts/walk-round.contract';
 import { stamp } from '@driprail/shared/domain/time/device';
 import { isBefore } from '@driprail/shared/domain/time/zone';
 import type { FileKind } from '@driprail/shared/domain/walk-round/jpeg';
 import { kindOfFile, readJpeg } from '@driprail/shared/domain/walk-round/jpeg';
+import { PHOTO_MAX_BYTES } from '@driprail/shared/domain/walk-round/photo-limits';
 import { Photo } from '../../db/models/index.ts';
 import { inTransaction, run, select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';

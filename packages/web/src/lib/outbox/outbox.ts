@@ -34,6 +34,9 @@ const touched: Record<KeptPress['path'], string[]> = {
   tip: ['run-sheet'],
   work: ['work'],
   change: ['work', 'run-sheet'],
+  walk: ['walk-round', 'run-sheet'],
+  walk_addition: ['walk-round', 'run-sheet'],
+  photo: ['walk-round'],
 };
 
 function show(next: Partial<OutboxState>): void {
@@ -47,14 +50,18 @@ async function reload(): Promise<void> {
 }
 
 /** Keeps a press on the phone first, then sends what waits, in order. It is never lost: the phone forgets it when the server has it. */
-export async function press(client: QueryClient, made: Omit<KeptPress, 'userId' | 'at' | 'refused'>): Promise<void> {
+export async function press(
+  client: QueryClient,
+  made: Omit<KeptPress, 'userId' | 'at' | 'refused'>,
+  file?: Blob,
+): Promise<void> {
   if (user === null) throw new Error('sign in first');
-  await keepPress({ ...made, userId: user, at: Date.now(), refused: null });
+  await keepPress({ ...made, userId: user, at: Date.now(), refused: null }, file);
   await reload();
   void flush(client);
 }
 
-/** Sends what waits, one after another; stops at the first that does not arrive. */
+/** Sends what waits, one after another, marks before photos; stops at the first that does not arrive. */
 export function flush(client: QueryClient): Promise<void> {
   running ??= sendAll(client).finally(() => {
     running = null;
@@ -66,8 +73,10 @@ async function sendAll(client: QueryClient): Promise<void> {
   await reload();
   show({ isSending: true });
   try {
-    for (let next = state.waiting[0]; next; next = state.waiting[0]) {
-      if (!(await sendOne(next))) break;
+    for (let next = nextToSend(); next; next = nextToSend()) {
+      const outcome = await sendOne(next);
+      if (outcome === 'waits') break;
+      if (outcome === 'more') continue;
       // The newer state first: what waited is still shown as done while it comes.
       await Promise.all(touched[next.path].map((key) => client.invalidateQueries({ queryKey: [key] })));
       await reload();
@@ -77,45 +86,67 @@ async function sendAll(client: QueryClient): Promise<void> {
   }
 }
 
-/** @returns whether the server has answered, be it with a refusal */
-async function sendOne(kept: KeptPress): Promise<boolean> {
+/** In order, but a photo never holds up a mark: it carries the time it was taken, and goes on piece by piece between them. */
+function nextToSend(): KeptPress | undefined {
+  return state.waiting.find(({ path }) => path !== 'photo') ?? state.waiting[0];
+}
+
+/** Whether the server has it, be it with a refusal; has a piece of it; or was not reached. */
+type Sent = 'done' | 'more' | 'waits';
+
+async function sendOne(kept: KeptPress): Promise<Sent> {
   try {
-    await send(kept);
+    if (await send(kept)) {
+      await reload();
+      return 'more';
+    }
     await dropPress(kept.key);
-    return true;
+    return 'done';
   } catch (error) {
     if (!(error instanceof ApiError)) throw error;
     // No signal, a server that restarts, or a session that ended: it waits.
-    if (error.status === 0 || error.status >= 500 || error.status === 401 || error.status === 429) return false;
+    if (error.status === 0 || error.status >= 500 || error.status === 401 || error.status === 429) return 'waits';
     await keepPress({ ...kept, refused: error.message });
-    return true;
+    return 'done';
   }
 }
 
-function send({ path, targetId, body }: KeptPress): Promise<unknown> {
-  if (path === 'visit') {
-    return call(postVisitActionAt, {
-      params: { id: targetId },
-      body: body as RequestOf<typeof postVisitAction>['body'],
-    });
+/** @returns whether there is more of it to send */
+async function send(kept: KeptPress): Promise<boolean> {
+  const { path, targetId, body } = kept;
+  const params = { id: targetId };
+  switch (path) {
+    case 'visit':
+      await call(postVisitActionAt, { params, body: body as RequestOf<typeof postVisitAction>['body'] });
+      return false;
+    case 'work':
+      await call(postWorkActionAt, { params, body: body as RequestOf<typeof postWorkAction>['body'] });
+      return false;
+    case 'change':
+      await call(postJobChangeAt, { params, body: body as RequestOf<typeof postJobChange>['body'] });
+      return false;
+    case 'clock':
+      await call(postClockActionAt, { body: body as RequestOf<typeof postClockAction>['body'] });
+      return false;
+    case 'tip':
+      await call(recordTipAt, { params, body: body as RequestOf<typeof recordTip>['body'] });
+      return false;
+    case 'walk':
+    case 'walk_addition':
+    case 'photo':
+      return (await import('./send-walk.ts')).sendWalk(kept);
   }
-  if (path === 'work') {
-    return call(postWorkActionAt, {
-      params: { id: targetId },
-      body: body as RequestOf<typeof postWorkAction>['body'],
-    });
-  }
-  if (path === 'change') {
-    return call(postJobChangeAt, { params: { id: targetId }, body: body as RequestOf<typeof postJobChange>['body'] });
-  }
-  if (path === 'clock') return call(postClockActionAt, { body: body as RequestOf<typeof postClockAction>['body'] });
-  return call(recordTipAt, { params: { id: targetId }, body: body as RequestOf<typeof recordTip>['body'] });
 }
 
 /** The person has seen a refused press and settles it another way. */
 export async function dismiss(key: string): Promise<void> {
   await dropPress(key);
   await reload();
+}
+
+/** What waits now, for a question that is asked outside of a screen. */
+export function waitingPresses(): KeptPress[] {
+  return state.waiting;
 }
 
 export function useOutbox(): OutboxState {

@@ -8,7 +8,7 @@ export interface KeptPress {
   userId: string;
   /** Order of pressing on this phone. */
   at: number;
-  path: 'visit' | 'clock' | 'tip' | 'work' | 'change';
+  path: 'visit' | 'clock' | 'tip' | 'work' | 'change' | 'walk' | 'walk_addition' | 'photo';
   /** The visit or job it belongs to. */
   targetId: string;
   body: Record<string, unknown>;
@@ -27,22 +27,46 @@ interface PhoneSchema extends DBSchema {
   presses: { key: string; value: KeptPress; indexes: { byUser: string } };
   /** Copies for a dead zone, named by user and what they are. */
   copies: { key: string; value: Kept<unknown> };
+  /** Photos that wait, by their press's key. */
+  files: { key: string; value: Blob };
+  /** What is begun and not pressed yet, named by user and what it is. */
+  drafts: { key: string; value: Kept<unknown> };
 }
 
 let opened: Promise<IDBPDatabase<PhoneSchema>> | null = null;
 
 function phone(): Promise<IDBPDatabase<PhoneSchema>> {
-  opened ??= openDB<PhoneSchema>('driprail-phone', 1, {
-    upgrade(db) {
-      db.createObjectStore('presses', { keyPath: 'key' }).createIndex('byUser', 'userId');
-      db.createObjectStore('copies');
+  opened ??= openDB<PhoneSchema>('driprail-phone', 2, {
+    upgrade(db, from) {
+      if (from < 1) {
+        db.createObjectStore('presses', { keyPath: 'key' }).createIndex('byUser', 'userId');
+        db.createObjectStore('copies');
+      }
+      db.createObjectStore('files');
+      db.createObjectStore('drafts');
+    },
+    // Another tab brings a newer shape: it must not wait for this one.
+    blocking: (_from, _to, event) => {
+      (event.target as IDBDatabase).close();
+      opened = null;
     },
   });
   return opened;
 }
 
-export async function keepPress(press: KeptPress): Promise<void> {
-  await (await phone()).put('presses', press);
+/** Keeps a press, and its file if it has one: both or neither. @throws QuotaExceededError when the phone is full */
+export async function keepPress(press: KeptPress, file?: Blob): Promise<void> {
+  const db = await phone();
+  const tx = db.transaction(['presses', 'files'], 'readwrite');
+  const writes: Promise<unknown>[] = [tx.objectStore('presses').put(press)];
+  if (file) writes.push(tx.objectStore('files').put(file, press.key));
+  // All are watched: an unwatched one would be reported as unhandled when the phone is full.
+  await Promise.all([...writes, tx.done]);
+}
+
+/** The photo of a press that waits. */
+export async function fileOf(key: string): Promise<Blob | undefined> {
+  return (await phone()).get('files', key);
 }
 
 /** One user's presses in the order in which they were made; another's on the same phone are never touched. */
@@ -52,7 +76,22 @@ export async function keptPresses(userId: string): Promise<KeptPress[]> {
 }
 
 export async function dropPress(key: string): Promise<void> {
-  await (await phone()).delete('presses', key);
+  const tx = (await phone()).transaction(['presses', 'files'], 'readwrite');
+  await Promise.all([tx.objectStore('presses').delete(key), tx.objectStore('files').delete(key), tx.done]);
+}
+
+/** Keeps what is begun, also when the app is closed; it leaves by being pressed. */
+export async function keepDraft(name: string, value: unknown): Promise<void> {
+  await (await phone()).put('drafts', { value, keptAt: new Date().toISOString() }, name);
+}
+
+export async function readDraft<T>(name: string): Promise<T | null> {
+  const kept = (await (await phone()).get('drafts', name)) as Kept<T> | undefined;
+  return kept?.value ?? null;
+}
+
+export async function dropDraft(name: string): Promise<void> {
+  await (await phone()).delete('drafts', name);
 }
 
 /** A local copy is good for a day and a half; then it is gone, as on a lost phone. */
