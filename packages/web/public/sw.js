@@ -4,6 +4,7 @@ const NEEDED = [
   'index.html',
   'src/features/run-sheet/pages/run-sheet.page.tsx',
   'src/features/run-sheet/pages/clock.page.tsx',
+  'src/features/first-aid/pages/first-aid.page.tsx',
 ];
 
 self.addEventListener('install', (event) => {

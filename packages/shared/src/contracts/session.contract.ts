@@ -10,6 +10,7 @@ export const companyFacts = z.object({
   clock: z.enum(['12', '24']),
   units: z.enum(['us', 'metric']),
   undoSeconds: z.int(),
+  emergencyNumber: z.string(),
 });
 export type CompanyFacts = z.infer<typeof companyFacts>;
 

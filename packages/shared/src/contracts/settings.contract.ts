@@ -19,6 +19,8 @@ export const settingsDto = z.object({
   reasonKinds: z.array(z.enum(warningCodes)),
   /** Whether the mail at the lock names gross and hours beside the link; off to begin with, mail is not private. */
   statementMailShowsFigures: z.boolean(),
+  /** What a crew calls in an emergency. */
+  emergencyNumber: phone.min(2, 'Give the emergency number of the place, like 911.').default('911'),
   version: z.int(),
 });
 export type SettingsDto = z.infer<typeof settingsDto>;

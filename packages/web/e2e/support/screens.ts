@@ -103,6 +103,7 @@ const own: Screen[] = (['dispatcher', 'technician'] as const).flatMap((role) => 
 ]);
 
 const phone: Screen[] = [
+  { name: 'first-help', role: 'nobody', path: '/first-aid', hasGrounds: true },
   { name: 'run-sheet', role: 'technician', path: '/run-sheet', isPhoneOnly: true, hasGrounds: true },
   { name: 'run-sheet-tomorrow', role: 'technician', path: '/run-sheet/2026-05-15', isPhoneOnly: true },
   { name: 'trouble', role: 'technician', path: '/run-sheet', open: press('Trouble'), isPhoneOnly: true },

@@ -4,6 +4,7 @@ export const paths = {
   forgotten: '/forgotten',
   link: '/link/:token',
   setUp: '/set-up',
+  firstAid: '/first-aid',
   board: '/board',
   boardDay: (day: string) => `/board/${day}`,
   runSheet: '/run-sheet',

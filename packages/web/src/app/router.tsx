@@ -7,6 +7,9 @@ import { PageBoundary } from './page-boundary.tsx';
 import { paths } from './paths.ts';
 import { Gate } from './shell/gate.tsx';
 
+const FirstAidPage = lazyPage(
+  async () => (await import('../features/first-aid/pages/first-aid.page.tsx')).FirstAidPage,
+);
 const SignInPage = lazyPage(async () => (await import('../features/access/pages/sign-in.page.tsx')).SignInPage);
 const ForgottenPage = lazyPage(async () => (await import('../features/access/pages/forgotten.page.tsx')).ForgottenPage);
 const LinkPage = lazyPage(async () => (await import('../features/access/pages/link.page.tsx')).LinkPage);
@@ -52,6 +55,7 @@ export function Router() {
       <PageBoundary>
         <Suspense>
           <Routes>
+            <Route path={paths.firstAid} element={<FirstAidPage />} />
             <Route path={paths.signIn} element={<SignInPage />} />
             <Route path={paths.forgotten} element={<ForgottenPage />} />
             <Route path={paths.link} element={<LinkPage />} />

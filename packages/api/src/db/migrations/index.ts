@@ -12,6 +12,7 @@ import { lockedRecords } from './2026-12-01-011-locked-records.ts';
 import { walkRounds } from './2026-12-01-012-walk-rounds.ts';
 import { jobWork } from './2026-12-01-013-job-work.ts';
 import { payIndexes } from './2026-12-01-014-pay-indexes.ts';
+import { phone } from './2026-12-01-015-phone.ts';
 import { pay } from './2026-12-01-003-pay.ts';
 
 /** In the order in which they are run. */
@@ -30,4 +31,5 @@ export const migrations: Migration[] = [
   walkRounds,
   jobWork,
   payIndexes,
+  phone,
 ];

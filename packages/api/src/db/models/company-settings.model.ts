@@ -14,6 +14,7 @@ export class CompanySettings extends Model<InferAttributes<CompanySettings>, Inf
   declare undoSeconds: CreationOptional<number>;
   declare reasonKinds: CreationOptional<string[]>;
   declare statementMailShowsFigures: CreationOptional<boolean>;
+  declare emergencyNumber: CreationOptional<string>;
   declare version: CreationOptional<number>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -33,6 +34,7 @@ export function initCompanySettings(sequelize: Sequelize): void {
       undoSeconds: { type: DataTypes.INTEGER },
       reasonKinds: { type: DataTypes.ARRAY(DataTypes.TEXT) },
       statementMailShowsFigures: { type: DataTypes.BOOLEAN },
+      emergencyNumber: { type: DataTypes.TEXT },
       version: { type: DataTypes.INTEGER },
       updatedAt: { type: DataTypes.DATE },
     },

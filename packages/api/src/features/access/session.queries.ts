@@ -25,6 +25,7 @@ export async function sessionOf(user: SignedIn, now: Date, hasLocalMail: boolean
       clock: company.clock,
       units: company.units,
       undoSeconds: company.undoSeconds,
+      emergencyNumber: company.emergencyNumber,
     },
     rules: rulesFor({ userId: id, personId, role }) as unknown as SessionDto['rules'],
     hasLocalMail: hasLocalMail && role === 'owner',

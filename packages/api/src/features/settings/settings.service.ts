@@ -38,6 +38,7 @@ export function toSettingsDto(s: CompanySettings): SettingsDto {
     undoSeconds: s.undoSeconds,
     reasonKinds: s.reasonKinds as SettingsDto['reasonKinds'],
     statementMailShowsFigures: s.statementMailShowsFigures,
+    emergencyNumber: s.emergencyNumber,
     version: s.version,
   };
 }

@@ -30,6 +30,7 @@ export function menuItems(ability: AppAbility, hasLocalMail: boolean, personId: 
     ability.can('read', 'Login') && { to: paths.logins, label: 'Logins' },
     ability.can('read', 'AuditEntry') && { to: paths.records, label: 'Records' },
     hasLocalMail && { to: paths.localMail, label: 'Local mail' },
+    { to: paths.firstAid, label: 'First help' },
     { to: paths.account, label: 'Account and sessions' },
   ];
   return items.filter((item): item is NavItem => item !== false);

@@ -16,12 +16,14 @@ interface ActionBarProps {
   visit: RunVisitDto;
   now: string;
   isBusy: boolean;
+  /** On the way only the main action and its taking back are there. */
+  isQuiet: boolean;
   onPress: (kind: ProgressAction | 'undo') => void;
   onPartDone: () => void;
 }
 
 /** The thumb's place: the four steps, one main action, and the last one taken back while it is fresh. */
-export function ActionBar({ visit, now, isBusy, onPress, onPartDone }: ActionBarProps) {
+export function ActionBar({ visit, now, isBusy, isQuiet, onPress, onPartDone }: ActionBarProps) {
   const format = useFormats();
   const [asksFor, setAsksFor] = useState<string | null>(null);
   const main = nextActions(visit.progress)[0];
@@ -37,24 +39,26 @@ export function ActionBar({ visit, now, isBusy, onPress, onPartDone }: ActionBar
   const canUndo = visit.undoable !== null && Date.parse(visit.undoable.until) > Date.parse(now);
   return (
     <>
-      <ol className="steps" aria-label="Steps">
-        <i className="rail-h" aria-hidden />
-        {steps.map((step) => {
-          const at = visit.times[step.time];
-          const isHere = main === step.action;
-          return (
-            <li
-              key={step.action}
-              className={isHere ? 'is-here' : at ? 'is-past' : ''}
-              aria-current={isHere ? 'step' : undefined}
-            >
-              {isHere ? <i className="bead" aria-hidden /> : null}
-              {step.label}
-              <small>{at ? format.clock(at) : isHere ? 'next' : ' '}</small>
-            </li>
-          );
-        })}
-      </ol>
+      {isQuiet ? null : (
+        <ol className="steps" aria-label="Steps">
+          <i className="rail-h" aria-hidden />
+          {steps.map((step) => {
+            const at = visit.times[step.time];
+            const isHere = main === step.action;
+            return (
+              <li
+                key={step.action}
+                className={isHere ? 'is-here' : at ? 'is-past' : ''}
+                aria-current={isHere ? 'step' : undefined}
+              >
+                {isHere ? <i className="bead" aria-hidden /> : null}
+                {step.label}
+                <small>{at ? format.clock(at) : isHere ? 'next' : ' '}</small>
+              </li>
+            );
+          })}
+        </ol>
+      )}
       {isAsking ? (
         <div className="ask">
           <p>

@@ -1,7 +1,9 @@
 import type { ReactNode } from 'react';
 import { useSyncExternalStore } from 'react';
 import { useAbility } from '@casl/react';
+import { Link } from 'react-router';
 import type { AppAbility } from '@driprail/shared/authz/ability';
+import { paths } from '../../../app/paths.ts';
 import { OutboxLine } from './outbox-line.tsx';
 import { useSession } from '../../../lib/session.tsx';
 import { useIsLive } from '../../../lib/socket.ts';
@@ -28,7 +30,12 @@ export function PhoneHead({
         <p className="t-2">
           {above}, {user.name}
         </p>
-        {menu(ability)}
+        <span className="flex items-start gap-1">
+          <Link className="help" to={paths.firstAid}>
+            First help
+          </Link>
+          {menu(ability)}
+        </span>
       </div>
       <div className="flex justify-between items-end gap-3">
         <h1 className="t-hang">{title}</h1>

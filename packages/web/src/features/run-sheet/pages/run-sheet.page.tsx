@@ -19,7 +19,9 @@ import { dismiss, useOutbox } from '../../../lib/outbox/outbox.ts';
 import { runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
 import { applyWaiting } from '../components/apply-waiting.ts';
 import { ActionBar } from '../components/action-bar.tsx';
+import { ChangesTape } from '../components/changes-tape.tsx';
 import { ClockBox } from '../components/clock-box.tsx';
+import { Driving } from '../components/driving.tsx';
 import { NextCard } from '../components/next-card.tsx';
 import { PartDoneSheet } from '../components/part-done-sheet.tsx';
 import { PhoneHead, useOnline } from '../components/phone-head.tsx';
@@ -52,11 +54,13 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
   const outbox = useOutbox();
   const sheet = applyWaiting(kept, outbox.waiting, now);
   const [panel, setPanel] = useState<Panel | null>(null);
+  const [isPassenger, setPassenger] = useState(false);
   const press = usePressVisit();
   const isToday = sheet.day === dayOf(now, sheet.zone);
   const at =
     sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ??
     sheet.visits.find((visit) => visit.progress === 'placed');
+  const isDriving = isToday && at?.progress === 'on_the_way' && !isPassenger;
   const last = [...sheet.visits].reverse().find((visit) => isEnded(visit.progress) && visit.undoable);
   const shown = sheet.visits.find((visit) => visit.id === panel?.visitId);
   // A press that has not left the phone is taken back on the phone.
@@ -74,40 +78,52 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
       >
         {sheet.clock ? <ClockBox clock={sheet.clock} /> : null}
       </PhoneHead>
-      <p className="crew-line t-2">
-        <DayLinks sheet={sheet} today={dayOf(now, sheet.zone)} />
-      </p>
-      {sheet.clock?.forgotten.length ? (
-        <p className="tape mb-3">
-          <b>No clock-out.</b> The clock still runs from another day. <Link to={paths.clock}>Say when you stopped</Link>
-        </p>
-      ) : null}
-      <div className="leg">
-        <div className="rail" />
-        {sheet.visits.length === 0 ? (
-          <p className="empty">Nothing hangs here {isToday ? 'today' : 'that day'}. New work shows up by itself.</p>
-        ) : null}
-        <ol>
-          {sheet.visits.map((visit, index) => (
-            <li key={visit.id} className={visit.id === at?.id ? 'is-at' : isEnded(visit.progress) ? 'is-over' : ''}>
-              <Drive from={sheet.visits[index - 1]} to={visit} />
-              {visit.id === at?.id ? (
-                <>
-                  <i className="bead" aria-hidden />
-                  <NextCard
-                    visit={visit}
-                    now={now}
-                    onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })}
-                    onTip={() => setPanel({ kind: 'tip', visitId: visit.id })}
-                  />
-                </>
-              ) : (
-                <VisitRow visit={visit} onOpen={() => setPanel({ kind: 'look', visitId: visit.id })} />
-              )}
-            </li>
-          ))}
-        </ol>
-      </div>
+      {isDriving && at ? (
+        <Driving
+          visit={at}
+          from={sheet.visits.slice(0, sheet.visits.indexOf(at)).findLast((visit) => visit.times.arrivedAt)}
+          onOpenSheet={() => setPassenger(true)}
+        />
+      ) : (
+        <>
+          <p className="crew-line t-2">
+            <DayLinks sheet={sheet} today={dayOf(now, sheet.zone)} />
+          </p>
+          {sheet.clock?.forgotten.length ? (
+            <p className="tape mb-3">
+              <b>No clock-out.</b> The clock still runs from another day.{' '}
+              <Link to={paths.clock}>Say when you stopped</Link>
+            </p>
+          ) : null}
+          <ChangesTape sheet={sheet} />
+          <div className="leg">
+            <div className="rail" />
+            {sheet.visits.length === 0 ? (
+              <p className="empty">Nothing hangs here {isToday ? 'today' : 'that day'}. New work shows up by itself.</p>
+            ) : null}
+            <ol>
+              {sheet.visits.map((visit, index) => (
+                <li key={visit.id} className={visit.id === at?.id ? 'is-at' : isEnded(visit.progress) ? 'is-over' : ''}>
+                  <Drive from={sheet.visits[index - 1]} to={visit} />
+                  {visit.id === at?.id ? (
+                    <>
+                      <i className="bead" aria-hidden />
+                      <NextCard
+                        visit={visit}
+                        now={now}
+                        onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })}
+                        onTip={() => setPanel({ kind: 'tip', visitId: visit.id })}
+                      />
+                    </>
+                  ) : (
+                    <VisitRow visit={visit} onOpen={() => setPanel({ kind: 'look', visitId: visit.id })} />
+                  )}
+                </li>
+              ))}
+            </ol>
+          </div>
+        </>
+      )}
       <footer className="ph-act">
         {press.error && panel === null ? (
           <p className="tape mb-2" role="alert">
@@ -124,6 +140,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
             visit={at.progress === 'placed' && last ? { ...at, undoable: last.undoable } : at}
             now={now}
             isBusy={press.isPending}
+            isQuiet={isDriving}
             onPress={(kind) =>
               press.mutate({ visit: kind === 'undo' && at.progress === 'placed' && last ? last : at, kind })
             }

@@ -39,7 +39,7 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
     },
   });
   const fields = fieldsOf(save.error);
-  const text = (name: 'name' | 'phone' | 'email' | 'dayStartsAt' | 'dayEndsAt') => ({
+  const text = (name: 'name' | 'phone' | 'email' | 'emergencyNumber' | 'dayStartsAt' | 'dayEndsAt') => ({
     value: value[name],
     error: fields[name],
     onChange: (event: React.ChangeEvent<HTMLInputElement>) => setValue({ ...value, [name]: event.target.value }),
@@ -58,6 +58,12 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
         <TextField label="Name" {...text('name')} />
         <TextField label="Phone, as customers see it" type="tel" {...text('phone')} />
         <TextField label="E-mail, as customers see it" type="email" {...text('email')} />
+        <TextField
+          label="Emergency number"
+          type="tel"
+          hint="The first thing on the phones’ page of first help."
+          {...text('emergencyNumber')}
+        />
         <SelectField
           label="Time zone"
           value={value.zone}
