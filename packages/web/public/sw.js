@@ -5,6 +5,8 @@ const NEEDED = [
   'src/features/run-sheet/pages/run-sheet.page.tsx',
   'src/features/run-sheet/pages/clock.page.tsx',
   'src/features/first-aid/pages/first-aid.page.tsx',
+  'src/features/job-work/index.ts',
+  'src/features/job-work/pages/work.page.tsx',
 ];
 
 self.addEventListener('install', (event) => {

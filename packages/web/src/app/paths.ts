@@ -9,6 +9,7 @@ export const paths = {
   boardDay: (day: string) => `/board/${day}`,
   runSheet: '/run-sheet',
   runSheetDay: (day: string) => `/run-sheet/${day}`,
+  work: (day: string, visitId: string, part = 'steps') => `/run-sheet/${day}/work/${visitId}/${part}`,
   clock: '/clock',
   customers: '/customers',
   customer: (id: string) => `/customers/${id}`,

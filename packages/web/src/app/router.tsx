@@ -17,6 +17,7 @@ const SetUpPage = lazyPage(async () => (await import('../features/settings/pages
 const RunSheetPage = lazyPage(
   async () => (await import('../features/run-sheet/pages/run-sheet.page.tsx')).RunSheetPage,
 );
+const WorkPage = lazyPage(async () => (await import('../features/job-work/pages/work.page.tsx')).WorkPage);
 const ClockPage = lazyPage(async () => (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage);
 const Shell = lazyPage(async () => (await import('./shell/shell.tsx')).Shell);
 const BoardPage = lazyPage(async () => (await import('../features/board/pages/board.page.tsx')).BoardPage);
@@ -63,6 +64,7 @@ export function Router() {
             <Route element={<Gate />}>
               <Route path={paths.runSheet} element={<RunSheetPage />} />
               <Route path={`${paths.runSheet}/:day`} element={<RunSheetPage />} />
+              <Route path={`${paths.runSheet}/:day/work/:visitId/:part`} element={<WorkPage />} />
               <Route path={paths.clock} element={<ClockPage />} />
               <Route element={<Shelled />}>
                 <Route index element={<Home />} />

@@ -1,2 +1,1 @@
 export { OutboxLine } from './components/outbox-line.tsx';
-export { useOnline } from './components/phone-head.tsx';

@@ -11,12 +11,14 @@ import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { call } from '../../../lib/call.ts';
 import { isPlacedVisit, lateOf, standingWarnings } from './board-model.ts';
 
-interface Need {
+export interface Need {
   key: string;
   visitId: string;
   who: string;
   words: string;
   troubleId?: string;
+  /** Of another day's board. */
+  day?: string | null;
 }
 const SHOWN = 3;
 
@@ -51,10 +53,18 @@ export function needsOf(board: BoardDto, now: string): Need[] {
   return [...troubles, ...late, ...warnings];
 }
 
-export function Needs({ board, now, onOpen }: { board: BoardDto; now: string; onOpen: (visitId: string) => void }) {
+interface NeedsProps {
+  board: BoardDto;
+  now: string;
+  /** From the crews; somebody waits at the car. */
+  first: Need[];
+  onOpen: (need: Need) => void;
+}
+
+export function Needs({ board, now, first, onOpen }: NeedsProps) {
   const [isAll, setAll] = useState(false);
   const [settling, setSettling] = useState<Need | null>(null);
-  const needs = needsOf(board, now);
+  const needs = [...first, ...needsOf(board, now)];
   if (needs.length === 0) return <section className="need" aria-label="What needs you" />;
   const shown = isAll ? needs : needs.slice(0, SHOWN);
   return (
@@ -66,7 +76,7 @@ export function Needs({ board, now, onOpen }: { board: BoardDto; now: string; on
         {shown.map((need) => (
           <p key={need.key}>
             <Mark name={need.troubleId ? 'm-off' : 'm-late'} />
-            <button type="button" className="link" onClick={() => onOpen(need.visitId)}>
+            <button type="button" className="link" onClick={() => onOpen(need)}>
               {need.who}
             </button>
             <span>

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { getJob } from '@driprail/shared/contracts/jobs.contract';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
@@ -20,6 +21,8 @@ interface VisitSheetProps {
   board: BoardDto;
   visit: VisitDto;
   isBusy: boolean;
+  /** What happens at the car. */
+  work: ReactNode;
   onMove: (move: Move, words: string) => void;
   onClose: () => void;
   onStep: (by: 1 | -1) => void;
@@ -34,6 +37,7 @@ export function VisitSheet({
   board,
   visit,
   isBusy,
+  work,
   onMove,
   onClose,
   onStep,
@@ -169,6 +173,7 @@ export function VisitSheet({
               })}
             </section>
           ) : null}
+          {work}
           <section>
             <h3 className="sec">Crew</h3>
             <p>{visit.crew.length > 0 ? visit.crew.map((p) => p.name).join(', ') : 'Nobody yet'}</p>

@@ -13,6 +13,7 @@ import { useSession } from '../../../lib/session.tsx';
 import { useMedia } from '../../../lib/use-media.ts';
 import { AddVisitSheet, CallOffSheet, JobSheet } from '../../booking/index.ts';
 import { CustomerForm } from '../../customers/index.ts';
+import { VisitWork, useWorkNeeds } from '../../job-work/index.ts';
 import { boardQuery } from '../api/board.queries.ts';
 import { BoardCalendar } from '../components/board-calendar.tsx';
 import { BoardHead } from '../components/board-head.tsx';
@@ -20,6 +21,7 @@ import { isPlacedVisit, preview } from '../components/board-model.ts';
 import { CrewSheet } from '../components/crew-sheet.tsx';
 import { LaneList } from '../components/lane-list.tsx';
 import { Needs } from '../components/needs.tsx';
+import type { Need } from '../components/needs.tsx';
 import { ReasonSheet } from '../components/reason-sheet.tsx';
 import { Roof } from '../components/roof.tsx';
 import { Sill } from '../components/sill.tsx';
@@ -60,6 +62,11 @@ function Board({ board }: { board: BoardDto }) {
     (visitId: string | null) => setSearch(visitId ? { visit: visitId } : {}, { replace: true }),
     [setSearch],
   );
+  const workNeeds = useWorkNeeds(board.day);
+  const openNeed = ({ visitId, day }: Need) => {
+    if (day && day !== board.day) void navigate(`${paths.boardDay(day)}?visit=${visitId}`);
+    else setOpen(visitId);
+  };
   const held = useHeld({ board, now, moves, onOpen: setOpen });
 
   const goTo = useCallback((next: string) => void navigate(paths.boardDay(next)), [navigate]);
@@ -99,7 +106,7 @@ function Board({ board }: { board: BoardDto }) {
           onNew={() => setTask({ kind: 'new' })}
         />
         <Roof board={board} filter={filter} heldId={held.held?.visitId ?? null} isDraggable={isWide} onOpen={setOpen} />
-        <Needs board={board} now={now} onOpen={setOpen} />
+        <Needs board={board} now={now} first={workNeeds} onOpen={openNeed} />
       </div>
       <div className="board">
         <div className="rail" />
@@ -125,6 +132,7 @@ function Board({ board }: { board: BoardDto }) {
             board={board}
             visit={open}
             isBusy={false}
+            work={<VisitWork visitId={open.id} />}
             onMove={(next, words) => {
               void moves.save([next], words).then((isSaved) => {
                 if (isSaved && next.from && dayOf(next.from, board.zone) !== board.day)

@@ -1,3 +1,4 @@
+import { Link } from 'react-router';
 import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { progressNames } from '@driprail/shared/domain/board/progress';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
@@ -11,11 +12,14 @@ import { mapLink } from '../../../lib/map-link.ts';
 export function NextCard({
   visit,
   now,
+  workPath,
   onTrouble,
   onTip,
 }: {
   visit: RunVisitDto;
   now: string;
+  /** The job's own page: must-knows, steps, a change. */
+  workPath: string;
   onTrouble: () => void;
   onTip: () => void;
 }) {
@@ -84,6 +88,9 @@ export function NextCard({
       </ul>
       {visit.notes ? <p className="notes">{visit.notes}</p> : null}
       <div className="card-acts">
+        <Link className="btn" to={workPath}>
+          <Icon name="check" /> Job
+        </Link>
         <a className="btn" href={mapLink(visit)} target="_blank" rel="noreferrer">
           <Icon name="route" /> Map
         </a>

@@ -1,5 +1,4 @@
 import type { ReactNode } from 'react';
-import { useSyncExternalStore } from 'react';
 import { useAbility } from '@casl/react';
 import { Link } from 'react-router';
 import type { AppAbility } from '@driprail/shared/authz/ability';
@@ -7,6 +6,7 @@ import { paths } from '../../../app/paths.ts';
 import { OutboxLine } from './outbox-line.tsx';
 import { useSession } from '../../../lib/session.tsx';
 import { useIsLive } from '../../../lib/socket.ts';
+import { useOnline } from '../../../lib/use-online.ts';
 
 /** The head of a phone page: a line, a hanging name, and whether there is signal. */
 export function PhoneHead({
@@ -43,19 +43,5 @@ export function PhoneHead({
       </div>
       <OutboxLine isOnline={isOnline} isLive={isLive} />
     </header>
-  );
-}
-
-export function useOnline(): boolean {
-  return useSyncExternalStore(
-    (watch) => {
-      window.addEventListener('online', watch);
-      window.addEventListener('offline', watch);
-      return () => {
-        window.removeEventListener('online', watch);
-        window.removeEventListener('offline', watch);
-      };
-    },
-    () => navigator.onLine,
   );
 }

@@ -1,8 +1,9 @@
-import { useState } from 'react';
-import { useQuery } from '@tanstack/react-query';
-import { Link, useParams } from 'react-router';
+import { useEffect, useState } from 'react';
+import { useQuery, useQueryClient } from '@tanstack/react-query';
+import { Link, useNavigate, useParams } from 'react-router';
 import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { isEnded } from '@driprail/shared/domain/board/progress';
+import type { ProgressAction } from '@driprail/shared/domain/board/progress';
 import { estimateTravel } from '@driprail/shared/domain/board/travel';
 import { formatDay } from '@driprail/shared/domain/time/format';
 import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
@@ -16,6 +17,7 @@ import { serverNow } from '../../../lib/device-clock.ts';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { dismiss, useOutbox } from '../../../lib/outbox/outbox.ts';
+import { useOnline } from '../../../lib/use-online.ts';
 import { runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
 import { applyWaiting } from '../components/apply-waiting.ts';
 import { ActionBar } from '../components/action-bar.tsx';
@@ -24,7 +26,7 @@ import { ClockBox } from '../components/clock-box.tsx';
 import { Driving } from '../components/driving.tsx';
 import { NextCard } from '../components/next-card.tsx';
 import { PartDoneSheet } from '../components/part-done-sheet.tsx';
-import { PhoneHead, useOnline } from '../components/phone-head.tsx';
+import { PhoneHead } from '../components/phone-head.tsx';
 import { TipSheet } from '../components/tip-sheet.tsx';
 import { TroubleSheet } from '../components/trouble-sheet.tsx';
 import { VisitRow } from '../components/visit-row.tsx';
@@ -56,6 +58,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
   const [panel, setPanel] = useState<Panel | null>(null);
   const [isPassenger, setPassenger] = useState(false);
   const press = usePressVisit();
+  const markVisit = useMark(sheet.day, press.mutate);
   const isToday = sheet.day === dayOf(now, sheet.zone);
   const at =
     sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ??
@@ -111,6 +114,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
                       <NextCard
                         visit={visit}
                         now={now}
+                        workPath={paths.work(sheet.day, visit.id)}
                         onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })}
                         onTip={() => setPanel({ kind: 'tip', visitId: visit.id })}
                       />
@@ -141,9 +145,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
             now={now}
             isBusy={press.isPending}
             isQuiet={isDriving}
-            onPress={(kind) =>
-              press.mutate({ visit: kind === 'undo' && at.progress === 'placed' && last ? last : at, kind })
-            }
+            onPress={(kind) => void markVisit(kind === 'undo' && at.progress === 'placed' && last ? last : at, kind)}
             onPartDone={() => setPanel({ kind: 'part_done', visitId: at.id })}
           />
         ) : last && isToday ? (
@@ -194,6 +196,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
             <NextCard
               visit={shown}
               now={now}
+              workPath={paths.work(sheet.day, shown.id)}
               onTrouble={() => setPanel({ kind: 'trouble', visitId: shown.id })}
               onTip={() => setPanel({ kind: 'tip', visitId: shown.id })}
             />
@@ -202,6 +205,36 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
       ) : null}
     </>
   );
+}
+
+type Marked = ProgressAction | 'undo';
+
+/** Marks a visit; must-knows that nobody has confirmed, or what Done still needs, come first, on the job's page. */
+function useMark(day: string, mark: (press: { visit: RunVisitDto; kind: Marked }) => void) {
+  const client = useQueryClient();
+  const navigate = useNavigate();
+  const { user } = useSession();
+  const today = useToday();
+  // Fetched after the first screen has painted, so that a dead zone finds them on the phone.
+  useEffect(() => {
+    void jobWork().then((work) => work?.keepWork(client, user.id, [today, addDays(today, 1)]));
+  }, [client, user.id, today]);
+  return async (visit: RunVisitDto, kind: Marked) => {
+    const work = kind === 'start_work' || kind === 'finish' ? await jobWork() : null;
+    const part = await work?.partBefore(client, { userId: user.id, day, visitId: visit.id, kind });
+    if (part) void navigate(paths.work(day, visit.id, part));
+    else mark({ visit, kind });
+  };
+}
+
+/** Null when it can't be fetched: then the server judges alone. */
+function jobWork() {
+  return import('../../job-work/index.ts').catch(() => null);
+}
+
+function useToday(): string {
+  const { zone } = useSession().company;
+  return dayOf(useNow(), zone);
 }
 
 function DayLinks({ sheet, today }: { sheet: RunSheetDto; today: string }) {
