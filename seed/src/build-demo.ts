@@ -15,6 +15,7 @@ import { idsFrom, noRows } from './rows.ts';
 import { writeTimeOffPay } from './time-off-rows.ts';
 import { writeToday } from './today.ts';
 import { writeVans } from './vans.ts';
+import { writeWork } from './work-rows.ts';
 
 export interface Demo {
   calendar: Calendar;
@@ -51,6 +52,7 @@ export function buildDemo(now: Date): Demo {
   writePay(book, people);
   writePlans(book, people);
   writeTimeOffPay(book, people);
+  writeWork(book, people);
   rows.jobs.sort((a, b) => a.createdAt.getTime() - b.createdAt.getTime());
   return { calendar, rows, ownerUserId: people.ownerUserId };
 }

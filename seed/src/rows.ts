@@ -44,6 +44,9 @@ export interface DemoRows {
   refundReasons: Row<models.RefundReason>[];
   timeOffRules: Row<models.TimeOffRuleRow>[];
   timeOffAdjustments: Row<models.TimeOffAdjustment>[];
+  serviceChecklists: Row<models.ServiceChecklist>[];
+  workEvents: Row<models.WorkEventRow>[];
+  jobChanges: Row<models.JobChange>[];
 }
 
 export function noRows(): DemoRows {
@@ -78,6 +81,9 @@ export function noRows(): DemoRows {
     refundReasons: [],
     timeOffRules: [],
     timeOffAdjustments: [],
+    serviceChecklists: [],
+    workEvents: [],
+    jobChanges: [],
   };
 }
 

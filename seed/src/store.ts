@@ -41,5 +41,8 @@ export function storeRows(rows: DemoRows, passwordHash: string): Promise<void> {
     await models.RefundReason.bulkCreate(rows.refundReasons, options);
     await models.TimeOffRuleRow.bulkCreate(rows.timeOffRules, options);
     await models.TimeOffAdjustment.bulkCreate(rows.timeOffAdjustments, options);
+    await models.ServiceChecklist.bulkCreate(rows.serviceChecklists, options);
+    await models.WorkEventRow.bulkCreate(rows.workEvents, options);
+    await models.JobChange.bulkCreate(rows.jobChanges, options);
   });
 }
