@@ -62,6 +62,7 @@ export async function openApp(fill: (now: Date) => Promise<unknown>): Promise<Op
     secret: SECRET,
     setUpCode: new SetUpCode(),
     localMail: mail.taken,
+    pushKeys: null,
   });
   const url = await listen(app.server);
   const close = async () => {

@@ -5,7 +5,7 @@ import helmet from 'helmet';
 import pg from 'pg';
 import type { Clock } from './clock.ts';
 import type { Config } from './config.ts';
-import { registerLocalStrategy } from './features/access/index.ts';
+import { registerLocalStrategy, wakePhones } from './features/access/index.ts';
 import type { SetUpCode } from './features/settings/index.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { forbidden, notFound } from './http/errors.ts';
@@ -13,10 +13,12 @@ import { isOwnOrigin } from './http/origin.ts';
 import type { RouteTable } from './http/route.ts';
 import { registerUsers, sessionChain } from './http/session.ts';
 import { serveWeb } from './http/web.ts';
+import type { PushKeys } from './integrations/push/index.ts';
 import { storeFor } from './integrations/storage/index.ts';
 import type { Logger } from './log.ts';
 import type { TakenMail } from './mail/transport.ts';
 import { hub } from './realtime/hub.ts';
+import { wakeWith } from './realtime/wake.ts';
 import { mountRoutes } from './routes.ts';
 
 export interface AppParts {
@@ -26,6 +28,8 @@ export interface AppParts {
   secret: string;
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
+  /** Null: phones are not woken. */
+  pushKeys: PushKeys | null;
 }
 
 export interface App {
@@ -35,7 +39,7 @@ export interface App {
 }
 
 /** Puts the service together without listening. The database must be connected and migrated. */
-export function createApp({ config, now, log, secret, setUpCode, localMail }: AppParts): App {
+export function createApp({ config, now, log, secret, setUpCode, localMail, pushKeys }: AppParts): App {
   const app = express();
   const server = createServer(app);
   const pool = new pg.Pool({ connectionString: config.databaseUrl, max: 4 });
@@ -64,12 +68,16 @@ export function createApp({ config, now, log, secret, setUpCode, localMail }: Ap
     next();
   });
 
+  const push = pushKeys && { keys: pushKeys, mayBeLocal: config.isTest };
+  wakeWith(push && ((personIds, times) => wakePhones(personIds, times, push, now())));
+
   const table: RouteTable = { router: express.Router(), endpoints: [], now };
   mountRoutes(table, {
     hasLocalMail: config.hasLocalMail,
     setUpCode,
     localMail,
     store: storeFor(config),
+    push,
     baseUrlOf: (req) => config.publicUrl ?? `${req.protocol}://${req.get('host') ?? ''}`,
   });
   app.use(table.router);
@@ -82,6 +90,7 @@ export function createApp({ config, now, log, secret, setUpCode, localMail }: Ap
     server,
     table,
     async close() {
+      wakeWith(null);
       await hub.close();
       await new Promise<void>((resolve) => {
         server.close(() => resolve());

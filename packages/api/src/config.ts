@@ -19,6 +19,9 @@ const environment = z.object({
   MAIL_FROM: z.string().default('Driprail <no-reply@driprail.example>'),
   PUBLIC_URL: z.url().optional(),
   TRUST_PROXY: flag,
+  /** The key pair of web push; without it, made once in the data folder. */
+  VAPID_PUBLIC_KEY: z.string().optional(),
+  VAPID_PRIVATE_KEY: z.string().optional(),
   /** Photos go to this bucket; without it, to the data folder. */
   S3_BUCKET: z.string().optional(),
   S3_REGION: z.string().default('us-east-1'),
@@ -63,6 +66,10 @@ export function readConfig(env: NodeJS.ProcessEnv) {
               : null,
         }
       : null,
+    push:
+      e.VAPID_PUBLIC_KEY && e.VAPID_PRIVATE_KEY
+        ? { publicKey: e.VAPID_PUBLIC_KEY, privateKey: e.VAPID_PRIVATE_KEY }
+        : null,
     trustsProxy: e.TRUST_PROXY === '1',
     /** The page of the local mail fake exists only with the fake, on loopback. */
     hasLocalMail: !e.SMTP_URL && isLoopback,

@@ -6,6 +6,7 @@ import { analyze, migrate } from './db/migrate.ts';
 import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
+import { pushKeys } from './integrations/push/index.ts';
 import { every } from './jobs/every.ts';
 import { createLogger } from './log.ts';
 import { localMail, smtpMail } from './mail/transport.ts';
@@ -41,6 +42,7 @@ async function main(): Promise<void> {
     secret,
     setUpCode,
     localMail: config.hasLocalMail && mail ? mail.taken : null,
+    pushKeys: await pushKeys(config.push, config.dataDir, config.publicUrl ?? 'mailto:no-reply@driprail.example'),
   });
   const outbox = every(
     5,

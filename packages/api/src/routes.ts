@@ -2,7 +2,8 @@ import type { Request } from 'express';
 import { getHealth, getOpenApi } from '@driprail/shared/contracts/health.contract';
 import { listLocalMail } from '@driprail/shared/contracts/mail.contract';
 import { select } from './db/sequelize.ts';
-import { accessRoutes, loginsRoutes } from './features/access/index.ts';
+import { accessRoutes, loginsRoutes, pushRoutes } from './features/access/index.ts';
+import type { PushRules } from './features/access/index.ts';
 import { boardRoutes } from './features/board/index.ts';
 import { jobsRoutes } from './features/booking/index.ts';
 import { clockRoutes } from './features/clock/index.ts';
@@ -28,6 +29,7 @@ export interface RouteParts {
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
   store: FileStore;
+  push: PushRules | null;
   baseUrlOf: (req: Request) => string;
 }
 
@@ -44,6 +46,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   });
   accessRoutes(table, parts);
   loginsRoutes(table, parts);
+  pushRoutes(table, parts.push);
   payRoutes(table, parts);
   walkRoundRoutes(table, parts.store);
   settingsRoutes(table, { code: parts.setUpCode, hasLocalMail: parts.hasLocalMail });

@@ -39,6 +39,11 @@ export class Hub {
     if (rooms.length > 0) this.io?.to(rooms).emit(hintEvent, { entity, id, version } satisfies Hint);
   }
 
+  /** Whether a person has the app open somewhere. */
+  isOpen(personId: string): boolean {
+    return (this.io?.sockets.adapter.rooms.get(`person:${personId}`)?.size ?? 0) > 0;
+  }
+
   /** Ends the screens of a session or of all of a user's sessions. */
   signOut(room: `session:${string}` | `user:${string}`): void {
     this.io?.to(room).emit(signedOutEvent);

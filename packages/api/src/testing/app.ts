@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import { afterAll, beforeAll } from 'vitest';
 import supertest from 'supertest';
 import type TestAgent from 'supertest/lib/agent.js';
+import webPush from 'web-push';
 import { createApp } from '../app.ts';
 import type { App } from '../app.ts';
 import { readConfig } from '../config.ts';
@@ -47,6 +48,7 @@ export function useApp(): TestApp {
       secret: 'only for tests',
       setUpCode: code,
       localMail: mail.taken,
+      pushKeys: { ...webPush.generateVAPIDKeys(), contact: 'mailto:no-reply@driprail.example' },
     });
     test.setUpCode = code.make();
     test.taken = mail.taken;

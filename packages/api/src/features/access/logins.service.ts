@@ -8,6 +8,7 @@ import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { sendLink } from './links.service.ts';
+import { forgetSubscriptions } from './push.service.ts';
 import { endSessionsOf } from './sessions.service.ts';
 
 export interface Invitation {
@@ -97,6 +98,7 @@ export function sendResetTo({ actor, now }: Ctx, id: string, baseUrl: string): P
 export function endLoginSessions({ actor, now }: Ctx, id: string): Promise<void> {
   return inTransaction(async (tx) => {
     await endSessionsOf(tx, id);
+    await forgetSubscriptions(tx, id);
     await audit(tx, { userId: actor.userId, at: now() }, 'login', id, 'sessions ended');
   });
 }

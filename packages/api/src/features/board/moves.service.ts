@@ -16,6 +16,7 @@ import { authorize } from '../../authz/authorize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { wakeAfterCommit } from '../../realtime/wake.ts';
 import { readBoard, readVisits } from './board.queries.ts';
 import { wordsOfPlan } from './plan-words.ts';
 import { ownStop } from './visits.service.ts';
@@ -193,6 +194,7 @@ async function tell(tx: Transaction, ids: string[], before: Map<string, VisitDto
   for (const visit of after) {
     const personIds = [...(before.get(visit.id)?.crew ?? []), ...visit.crew].map((p) => p.personId);
     hintAfterCommit(tx, ['desk', { personIds: [...new Set(personIds)] }], 'visit', visit.id, visit.version);
+    wakeAfterCommit(tx, personIds, [visit.from, before.get(visit.id)?.from ?? null]);
   }
   return after;
 }

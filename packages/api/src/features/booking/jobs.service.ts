@@ -10,6 +10,7 @@ import { inTransaction } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { wakeAfterCommit } from '../../realtime/wake.ts';
 import { createVisit, lockVisit, setVisitLines } from '../board/index.ts';
 import type { LineFields, PricedLine } from './job-lines.ts';
 import { keepLines, priceLines } from './job-lines.ts';
@@ -219,6 +220,11 @@ async function saved(
   if (!job) throw notFound('That job');
   const personIds = [...new Set(job.visits.flatMap((visit) => visit.crew.map((p) => p.personId)))];
   hintAfterCommit(tx, ['desk', { personIds }], 'job', id, job.version);
+  wakeAfterCommit(
+    tx,
+    personIds,
+    job.visits.map((visit) => visit.from),
+  );
   return job;
 }
 

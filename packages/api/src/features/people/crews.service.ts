@@ -10,6 +10,7 @@ import { inTransaction, run, select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { wakeAfterCommit } from '../../realtime/wake.ts';
 
 export interface CrewMember {
   id: string;
@@ -57,6 +58,7 @@ export function setVanCrew(
     });
     const personIds = [...new Set([...before, ...after].map((m) => m.personId))];
     hintAfterCommit(tx, ['desk', { personIds }], 'crew', vanId);
+    wakeAfterCommit(tx, personIds, [startsAt]);
     return after;
   });
 }
