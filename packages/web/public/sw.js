@@ -77,3 +77,27 @@ async function keepShell() {
   await cache.addAll([...files]);
   await cache.put('/', await fetch('/', { cache: 'no-cache' }));
 }
+
+/* The run sheet changed while the app was closed. A locked screen shows it to anybody, so it says no more than that. */
+self.addEventListener('push', (event) => {
+  const shown = self.registration.showNotification('Your run sheet changed', {
+    body: 'Open it to see what is new.',
+    icon: '/mark.svg',
+    tag: 'run-sheet',
+    renotify: true,
+  });
+  event.waitUntil(shown);
+});
+
+self.addEventListener('notificationclick', (event) => {
+  event.notification.close();
+  event.waitUntil(openRunSheet());
+});
+
+async function openRunSheet() {
+  const open = await self.clients.matchAll({ type: 'window', includeUncontrolled: true });
+  const own = open.find((client) => new URL(client.url).pathname.startsWith('/run-sheet')) ?? open[0];
+  if (!own) return self.clients.openWindow('/run-sheet');
+  await own.focus();
+  return new URL(own.url).pathname.startsWith('/run-sheet') ? own : own.navigate('/run-sheet');
+}

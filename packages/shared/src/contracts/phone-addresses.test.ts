@@ -4,19 +4,15 @@ import * as hours from './hours.contract.ts';
 import * as jobWork from './job-work.contract.ts';
 import * as jobs from './jobs.contract.ts';
 import * as addresses from './phone-addresses.ts';
+import * as push from './push.contract.ts';
 import * as runSheet from './run-sheet.contract.ts';
 import * as session from './session.contract.ts';
 import * as walkAddresses from './walk-round-addresses.ts';
 import * as walkRound from './walk-round.contract.ts';
 
 const contracts: Record<string, unknown> = {
-  ...clock,
-  ...hours,
-  ...jobs,
-  ...jobWork,
-  ...runSheet,
-  ...session,
-  ...walkRound,
+  ...{ ...clock, ...hours, ...jobs, ...jobWork, ...push },
+  ...{ ...runSheet, ...session, ...walkRound },
 };
 
 test.each(Object.entries({ ...addresses, ...walkAddresses }))(

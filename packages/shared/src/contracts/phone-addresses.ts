@@ -3,6 +3,7 @@ import type * as clock from './clock.contract.ts';
 import type * as hours from './hours.contract.ts';
 import type * as jobWork from './job-work.contract.ts';
 import type * as jobs from './jobs.contract.ts';
+import type * as push from './push.contract.ts';
 import type * as runSheet from './run-sheet.contract.ts';
 import type * as session from './session.contract.ts';
 
@@ -26,3 +27,9 @@ export const decideClockChangeAt = addressOf<typeof hours.decideClockChange>(
   '/api/clock/requests/:id/decision',
 );
 export const sayHoursAt = addressOf<typeof hours.sayHours>('post', '/api/clock/weeks/:startsOn');
+export const getPushKeyAt = addressOf<typeof push.getPushKey>('get', '/api/push/key');
+export const addPushSubscriptionAt = addressOf<typeof push.addPushSubscription>('post', '/api/push/subscriptions');
+export const removePushSubscriptionAt = addressOf<typeof push.removePushSubscription>(
+  'delete',
+  '/api/push/subscriptions',
+);

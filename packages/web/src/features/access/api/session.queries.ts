@@ -3,6 +3,7 @@ import { createSessionAt, endSessionAt, getSessionAt } from '@driprail/shared/co
 import type { SessionDto } from '@driprail/shared/contracts/session.contract';
 import { call } from '../../../lib/call.ts';
 import { orKept } from '../../../lib/outbox/or-kept.ts';
+import { stopWaking } from '../../../lib/waking.ts';
 import { wipeCopies } from '../../../lib/outbox/store.ts';
 
 export const sessionKey = ['session'] as const;
@@ -31,7 +32,11 @@ export function useSignIn() {
 export function useSignOut() {
   const client = useQueryClient();
   return useMutation({
-    mutationFn: () => call(endSessionAt),
+    mutationFn: async () => {
+      // Another person on this phone must not be told of this one's day.
+      await stopWaking().catch(() => undefined);
+      return call(endSessionAt);
+    },
     onSettled: () => {
       client.clear();
       client.setQueryData(sessionKey, null);

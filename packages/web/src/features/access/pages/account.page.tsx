@@ -10,6 +10,7 @@ import { Loaded } from '../../../components/states.tsx';
 import { call } from '../../../lib/call.ts';
 import { useFormats } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
+import { WakingSwitch } from '../components/waking-switch.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { FormFault } from '../../../components/form-fault.tsx';
 
@@ -21,7 +22,10 @@ export function AccountPage() {
       <RailPage>
         <div className="hung grid grid-cols-2 gap-10 p-5 max-w-[980px] max-[900px]:grid-cols-1">
           <PasswordForm />
-          <Sessions />
+          <div className="grid gap-6 content-start">
+            {user.ridesToday || user.role === 'technician' ? <WakingSwitch /> : null}
+            <Sessions />
+          </div>
         </div>
       </RailPage>
     </>
