@@ -32,19 +32,22 @@ function writeChecklists({ rows, ids, calendar }: Book): void {
 
 /** The notes of the demo say it in words; the crew gets it as something to confirm. */
 function writeMustKnows({ rows }: Book): void {
+  const ringing = new Set<string>();
   for (const address of rows.addresses) {
     const notes = address.accessNotes ?? '';
-    if (notes.startsWith('Dog')) Object.assign(address, { hasDog: true, shutsGate: true });
-    if (notes.startsWith('Storm drain')) address.drainsToCreek = true;
-    if (notes.startsWith('Key in'))
-      Object.assign(address, { takesKey: true, keyGoesBack: 'Lock box by the side door' });
-    const customer = rows.customers.find((one) => one.id === address.customerId);
-    if (customer && notes.startsWith('Ring')) customer.ringsFirst = true;
-    if (customer?.notes?.startsWith('No scent')) customer.isScentFree = true;
+    const hasDog = notes.startsWith('Dog');
+    const takesKey = notes.startsWith('Key in');
+    if (notes.startsWith('Ring')) ringing.add(address.customerId);
+    Object.assign(address, { hasDog, shutsGate: hasDog, drainsToCreek: notes.startsWith('Storm drain'), takesKey });
+    address.keyGoesBack = takesKey ? 'Lock box by the side door' : '';
+  }
+  for (const customer of rows.customers) {
+    customer.isScentFree = customer.notes?.startsWith('No scent') ?? false;
+    customer.ringsFirst = ringing.has(customer.id);
   }
   for (const vehicle of rows.vehicles) {
-    if (vehicle.notes?.startsWith('Coated')) vehicle.isCoated = true;
-    if (vehicle.notes?.startsWith('Child seat')) vehicle.mustKnow = vehicle.notes;
+    vehicle.isCoated = vehicle.notes?.startsWith('Coated') ?? false;
+    vehicle.mustKnow = vehicle.notes?.startsWith('Child seat') ? vehicle.notes : '';
   }
 }
 
