@@ -9,6 +9,7 @@ import { Icon } from '../../../components/icon.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
 import { showRefusal } from '../../../lib/fields.ts';
 import { useSaveCustomer } from '../api/customers.queries.ts';
+import { AddressMustKnows, CustomerMustKnows, VehicleMustKnows } from './must-know-fields.tsx';
 
 interface CustomerFormProps {
   customer: CustomerDto | null;
@@ -28,8 +29,24 @@ const address = {
   accessNotes: '',
   hasWater: false,
   hasPower: false,
+  hasDog: false,
+  shutsGate: false,
+  drainsToCreek: false,
+  takesKey: false,
+  keyGoesBack: '',
+  mustKnow: '',
 };
-const vehicle = { label: '', color: '', plate: '', sizeClass: 'sedan' as const, notes: '' };
+const vehicle = {
+  label: '',
+  color: '',
+  plate: '',
+  sizeClass: 'sedan' as const,
+  notes: '',
+  isCoated: false,
+  mustKnow: '',
+};
+
+const noMustKnows = { isScentFree: false, ringsFirst: false, mustKnow: '' };
 
 /** A customer with addresses and vehicles. Gate codes reach a crew only on the day. */
 export function CustomerForm({ customer, name = '', onSaved, onCancel }: CustomerFormProps) {
@@ -38,7 +55,16 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
     resolver: zodResolver(customerBody),
     defaultValues: customer
       ? bodyOf(customer)
-      : { name, isCompany: false, phone: '', email: '', notes: '', addresses: [address], vehicles: [vehicle] },
+      : {
+          name,
+          isCompany: false,
+          phone: '',
+          email: '',
+          notes: '',
+          ...noMustKnows,
+          addresses: [address],
+          vehicles: [vehicle],
+        },
   });
   const { register, control, handleSubmit, setError, formState } = form;
   const { errors } = formState;
@@ -93,6 +119,7 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
             />
             <CheckField label="Spigot" {...register(`${at}.hasWater`)} />
             <CheckField label="Outlet" {...register(`${at}.hasPower`)} />
+            <AddressMustKnows at={at} register={register} errors={wrong} />
             {addresses.fields.length > 1 ? (
               <Button look="bare" onClick={() => addresses.remove(index)}>
                 Take this address off
@@ -129,6 +156,7 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
               ))}
             </SelectField>
             <TextField label="Notes" {...register(`${at}.notes`)} error={wrong?.notes?.message} />
+            <VehicleMustKnows at={at} register={register} errors={wrong} />
             <Button look="bare" aria-label="Take this vehicle off" onClick={() => vehicles.remove(index)}>
               <Icon name="x" />
             </Button>
@@ -138,6 +166,7 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
       <Button className="mt-2" onClick={() => vehicles.append(vehicle)}>
         <Icon name="plus" /> Add a vehicle
       </Button>
+      <CustomerMustKnows register={register} errors={errors} />
       <TextArea className="mt-4" label="Notes" {...register('notes')} error={errors.notes?.message} />
       {errors.root?.message ? (
         <p className="tape mt-3" role="alert">

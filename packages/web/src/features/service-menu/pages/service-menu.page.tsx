@@ -16,6 +16,7 @@ import { serverNow } from '../../../lib/device-clock.ts';
 import { money } from '../../../lib/format.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { servicesQuery } from '../api/services.queries.ts';
+import { ChecklistSheet } from '../components/checklist-sheet.tsx';
 import { ServiceForm, kindNames } from '../components/service-form.tsx';
 
 /** What is sold: price and minutes by size class. */
@@ -24,6 +25,7 @@ export function ServiceMenuPage() {
   const ability = useAbility<AppAbility>();
   const canEdit = ability.can('update', 'Service');
   const [editing, setEditing] = useState<ServiceDto | 'new' | null>(null);
+  const [listOf, setListOf] = useState<ServiceDto | null>(null);
   const menu = useQuery(servicesQuery);
   const close = () => setEditing(null);
   return (
@@ -58,7 +60,7 @@ export function ServiceMenuPage() {
                           </th>
                         ))}
                         <th className="!pl-6">Needs</th>
-                        {canEdit ? <th className="r">Change</th> : null}
+                        <th className="r">{canEdit ? 'Change' : 'Steps'}</th>
                       </tr>
                     </thead>
                     {serviceKinds.map((kind) => (
@@ -96,13 +98,20 @@ export function ServiceMenuPage() {
                                   ...service.equipment.map((e) => equipmentNames[e]),
                                 ].join(', ') || '–'}
                               </td>
-                              {canEdit ? (
-                                <td className="r">
+                              <td className="r whitespace-nowrap">
+                                <Button
+                                  look="bare"
+                                  aria-label={`Steps of ${service.name}`}
+                                  onClick={() => setListOf(service)}
+                                >
+                                  <Icon name="check" /> Steps
+                                </Button>
+                                {canEdit ? (
                                   <Button look="bare" onClick={() => setEditing(service)}>
                                     <Icon name="pen" /> Edit
                                   </Button>
-                                </td>
-                              ) : null}
+                                ) : null}
+                              </td>
                             </tr>
                           ))}
                       </tbody>
@@ -114,6 +123,7 @@ export function ServiceMenuPage() {
           </div>
         </div>
       </RailPage>
+      {listOf ? <ChecklistSheet service={listOf} canEdit={canEdit} onClose={() => setListOf(null)} /> : null}
       {editing ? (
         <Sheet title={editing === 'new' ? 'New service' : editing.name} onClose={close} width={680}>
           <ServiceForm
