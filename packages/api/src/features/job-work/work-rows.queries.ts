@@ -64,7 +64,7 @@ const workJson = `json_build_object(
   'events', coalesce((SELECT json_agg(json_build_object('id', e.id, 'kind', e.kind, 'at', ${iso('e.occurred_at')}, 'by', coalesce(p.name, u.name),
        'steps', e.steps, 'lineId', e.line_id, 'keys', to_json(e.keys), 'words', e.words) ORDER BY e.occurred_at, e.received_at, e.id)
      FROM work_events e JOIN users u ON u.id = e.user_id LEFT JOIN people p ON p.id = e.person_id WHERE e.visit_id = v.id), '[]'::json),
-  'changes', coalesce((SELECT json_agg(${changeJson} ORDER BY h.occurred_at DESC, h.id)
+  'changes', coalesce((SELECT json_agg(${changeJson} ORDER BY h.occurred_at DESC, h.id DESC)
      FROM job_changes h JOIN users u ON u.id = h.user_id LEFT JOIN people p ON p.id = h.person_id LEFT JOIN users w ON w.id = h.answered_by
     WHERE h.visit_id = v.id), '[]'::json),
   'crew', ${crew}, 'arrivedAt', ${at('arrive')}, 'startedAt', ${at('start_work')}, 'next', ${next})`;

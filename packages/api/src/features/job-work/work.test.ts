@@ -47,8 +47,8 @@ const start = async () => {
 
 describe('a service’s steps', () => {
   test('are kept in order of work, with the ratio read', async () => {
-    const { body } = await owner.get(`/api/services/${company.wash.id}/checklist`).expect(200);
-    expect(body).toMatchObject({
+    const read = await owner.get(`/api/services/${company.wash.id}/checklist`).expect(200);
+    expect(read.body).toMatchObject({
       checklist: { version: 1, steps: [{ id: wheels.id }, { id: wash.id, ratio: '10:1' }, { id: measure.id }] },
     });
   });
@@ -75,8 +75,8 @@ describe('a service’s steps', () => {
 
   test('stay with a visit as they were when its work started', async () => {
     await start();
-    const { body } = await owner.get(`/api/services/${company.wash.id}/checklist`);
-    const { checklist } = body as { checklist: { version: number; steps: object[] } };
+    const read = await owner.get(`/api/services/${company.wash.id}/checklist`);
+    const { checklist } = read.body as { checklist: { version: number; steps: object[] } };
     const next = [...checklist.steps, aStep({ stage: 'protect', words: 'Wax' })];
     const save = (version: number) =>
       owner.put(`/api/services/${company.wash.id}/checklist`).send({ version, asksNote: false, steps: next });
@@ -173,8 +173,8 @@ describe('Done', () => {
 describe('must-knows', () => {
   const flags = async (more: object) => {
     const { id } = company.customer;
-    const { body } = await dispatcher.get(`/api/customers/${id}`);
-    const { id: _id, version, ...fields } = (body as { customer: typeof company.customer }).customer;
+    const read = await dispatcher.get(`/api/customers/${id}`);
+    const { id: _id, version, ...fields } = (read.body as { customer: typeof company.customer }).customer;
     const addresses = fields.addresses.map((address) => ({ ...address, ...more }));
     await dispatcher
       .put(`/api/customers/${id}`)

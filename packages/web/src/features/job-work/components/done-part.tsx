@@ -80,7 +80,7 @@ export function DonePart({ view, at, day }: { view: WorkView; at: AtVisit; day: 
       <footer className="ph-act">
         {isEnded(progress) ? (
           <button type="button" className="ph-main" onClick={() => void navigate(paths.runSheetDay(day))}>
-            Back to the run sheet
+            To the run sheet
           </button>
         ) : progress !== 'working' ? (
           <p className="t-2 py-2">{progressNames[progress]}. Done comes after Start work.</p>

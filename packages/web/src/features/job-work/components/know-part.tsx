@@ -71,7 +71,7 @@ export function KnowPart({ view, at, day }: { view: WorkView; at: AtVisit; day: 
           </button>
         ) : (
           <button type="button" className="ph-main" onClick={() => void navigate(paths.runSheetDay(day))}>
-            Back to the run sheet
+            To the run sheet
           </button>
         )}
       </footer>

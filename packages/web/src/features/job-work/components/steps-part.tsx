@@ -173,7 +173,7 @@ function MainAction({ next, view, day, visitId, isBusy, onTick }: MainActionProp
   if (view.progress !== 'working')
     return (
       <Link className="ph-main" to={view.open.length > 0 ? paths.work(day, visitId, 'know') : paths.runSheetDay(day)}>
-        {view.open.length > 0 ? 'Must-knows first' : 'Back to the run sheet'}
+        {view.open.length > 0 ? 'Must-knows first' : 'To the run sheet'}
       </Link>
     );
   if (!next)

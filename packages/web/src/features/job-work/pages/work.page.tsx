@@ -80,7 +80,7 @@ function Work({ data, work, part }: { data: DayWorkDto; work: VisitWorkDto; part
         <div>
           <h1 className="t-hang">{work.customerName}</h1>
           <p>
-            {[...new Set(work.lines.map((line) => line.vehicle).filter(Boolean))].join(', ')} Job {work.jobNumber}
+            {[...new Set(work.lines.map((line) => line.vehicle).filter(Boolean)), `job ${work.jobNumber}`].join(', ')}
           </p>
         </div>
         {minutes === null ? null : (
