@@ -6,18 +6,32 @@ export const troubleKinds = [
   'weather',
   'damage',
   'unsafe',
+  'hurt',
+  'crash',
+  'unwell',
+  'bottle',
   'van_trouble',
   'running_late',
   'other',
 ] as const;
-export const troubleNames: Record<(typeof troubleKinds)[number], string> = {
+export type TroubleKind = (typeof troubleKinds)[number];
+export const troubleNames: Record<TroubleKind, string> = {
   nobody_home: 'Nobody home',
   no_access: 'No access',
   no_water: 'No water',
   weather: 'Weather',
   damage: 'Damage found',
   unsafe: 'Unsafe',
-  van_trouble: 'Van trouble',
+  hurt: 'Somebody is hurt',
+  crash: 'Crash',
+  unwell: 'I am unwell',
+  bottle: 'Bottle wrong or leaking',
+  van_trouble: 'Van broke down',
   running_late: 'Running late',
   other: 'Other',
 };
+
+/** People come before the board: with these the emergency number is shown first. */
+export function comesAfterHelp(kind: TroubleKind): boolean {
+  return kind === 'hurt' || kind === 'crash' || kind === 'unwell';
+}

@@ -1,42 +1,64 @@
 import { useState } from 'react';
-import { troubleKinds, troubleNames } from '@driprail/shared/domain/board/trouble';
+import { Link } from 'react-router';
+import { comesAfterHelp, troubleKinds, troubleNames } from '@driprail/shared/domain/board/trouble';
+import type { TroubleKind } from '@driprail/shared/domain/board/trouble';
 import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { nextActions } from '@driprail/shared/domain/board/progress';
+import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
+import { useSession } from '../../../lib/session.tsx';
+import { troublePicks } from './trouble-picks.ts';
 
-type Trouble = (typeof troubleKinds)[number];
-
-/** Tells the board what is wrong. In an injury first aid and the emergency number come first. */
-export function TroubleSheet({
-  visit,
-  isBusy,
-  error,
-  onSend,
-  onCallOff,
-  onClose,
-}: {
+interface TroubleSheetProps {
   visit: RunVisitDto;
   isBusy: boolean;
   error: string | undefined;
-  onSend: (trouble: { trouble: Trouble; reason: string }) => void;
-  onCallOff: (trouble: { trouble: Trouble; reason: string }) => void;
+  onSend: (trouble: { trouble: TroubleKind; reason: string }) => void;
+  onCallOff: (trouble: { trouble: TroubleKind; reason: string }) => void;
   onClose: () => void;
-}) {
-  const [trouble, setTrouble] = useState<Trouble | null>(null);
+}
+
+/** Tells the board what is wrong. When a person is in trouble, the call for help comes before anything else. */
+export function TroubleSheet({ visit, isBusy, error, onSend, onCallOff, onClose }: TroubleSheetProps) {
+  const { company } = useSession();
+  const [trouble, setTrouble] = useState<TroubleKind | null>(null);
+  const [picked, setPicked] = useState<string[]>([]);
   const [note, setNote] = useState('');
+  const isHelpFirst = trouble !== null && comesAfterHelp(trouble);
+  const words = [...picked, note.trim()].filter(Boolean).join(', ');
+  const pick = (kind: TroubleKind) => {
+    setTrouble(kind);
+    setPicked([]);
+  };
+  const toggle = (word: string) =>
+    setPicked(picked.includes(word) ? picked.filter((one) => one !== word) : [...picked, word]);
   return (
     <Sheet title="Trouble" onClose={onClose} width={460}>
       <div className="ph-sheet">
-        <p className="caution">
-          <b>Somebody hurt?</b> Help first: call <a href="tel:911">911</a>, give the address below, follow the data
-          sheet’s first aid. The board comes after.
-        </p>
-        <p className="mb-3">
-          {visit.address}
-          {visit.area ? `, ${visit.area}` : ''}
-        </p>
+        <div className={isHelpFirst ? 'caution help-first' : 'caution'} role={isHelpFirst ? 'alert' : undefined}>
+          <p>
+            <b>{isHelpFirst ? 'First call for help.' : 'Somebody hurt?'}</b>{' '}
+            {isHelpFirst ? 'The board comes after.' : 'Help first; the board comes after.'}
+          </p>
+          {isHelpFirst ? (
+            <a className="ph-main" href={`tel:${company.emergencyNumber}`}>
+              Call {company.emergencyNumber}
+            </a>
+          ) : (
+            <p>
+              Call <a href={`tel:${company.emergencyNumber}`}>{company.emergencyNumber}</a> and give this address:
+            </p>
+          )}
+          <p>
+            {visit.address}
+            {visit.area ? `, ${visit.area}` : ''}
+          </p>
+          <Link className="btn" to={paths.firstAid}>
+            First help, step by step
+          </Link>
+        </div>
         <div className="grid grid-cols-2 gap-2 mb-3" role="radiogroup" aria-label="What is wrong">
           {troubleKinds.map((kind) => (
             <button
@@ -45,12 +67,27 @@ export function TroubleSheet({
               role="radio"
               aria-checked={trouble === kind}
               className={trouble === kind ? 'btn is-picked' : 'btn'}
-              onClick={() => setTrouble(kind)}
+              onClick={() => pick(kind)}
             >
               {troubleNames[kind]}
             </button>
           ))}
         </div>
+        {trouble ? (
+          <div className="grid grid-cols-2 gap-2 mb-3" role="group" aria-label={`${troubleNames[trouble]}: more`}>
+            {troublePicks[trouble].map((word) => (
+              <button
+                key={word}
+                type="button"
+                aria-pressed={picked.includes(word)}
+                className={picked.includes(word) ? 'btn is-picked' : 'btn'}
+                onClick={() => toggle(word)}
+              >
+                {word}
+              </button>
+            ))}
+          </div>
+        ) : null}
         <TextField
           label="More, if it helps"
           value={note}
@@ -64,17 +101,17 @@ export function TroubleSheet({
             isBusy={isBusy}
             disabled={trouble === null}
             onClick={() =>
-              trouble && onCallOff({ trouble, reason: [troubleNames[trouble], note.trim()].filter(Boolean).join(': ') })
+              trouble && onCallOff({ trouble, reason: [troubleNames[trouble], words].filter(Boolean).join(': ') })
             }
           >
             Call the visit off
           </Button>
         ) : null}
         <Button
-          look="main"
+          look={isHelpFirst ? 'plain' : 'main'}
           isBusy={isBusy}
           disabled={trouble === null}
-          onClick={() => trouble && onSend({ trouble, reason: note })}
+          onClick={() => trouble && onSend({ trouble, reason: words })}
         >
           Tell the board
         </Button>
