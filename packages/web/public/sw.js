@@ -7,6 +7,9 @@ const NEEDED = [
   'src/features/first-aid/pages/first-aid.page.tsx',
   'src/features/job-work/index.ts',
   'src/features/job-work/pages/work.page.tsx',
+  'src/features/walk-round/index.ts',
+  'src/features/walk-round/pages/walk-round.page.tsx',
+  'src/lib/outbox/send-walk.ts',
 ];
 
 self.addEventListener('install', (event) => {

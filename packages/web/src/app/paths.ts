@@ -10,6 +10,9 @@ export const paths = {
   runSheet: '/run-sheet',
   runSheetDay: (day: string) => `/run-sheet/${day}`,
   work: (day: string, visitId: string, part = 'steps') => `/run-sheet/${day}/work/${visitId}/${part}`,
+  walkRound: (visitId: string) => `/walk-round/${visitId}`,
+  /** The same at the desk, to read. */
+  walkRecord: (visitId: string) => `/visits/${visitId}/walk-round`,
   clock: '/clock',
   customers: '/customers',
   customer: (id: string) => `/customers/${id}`,

@@ -18,6 +18,12 @@ const RunSheetPage = lazyPage(
   async () => (await import('../features/run-sheet/pages/run-sheet.page.tsx')).RunSheetPage,
 );
 const WorkPage = lazyPage(async () => (await import('../features/job-work/pages/work.page.tsx')).WorkPage);
+const WalkRoundPage = lazyPage(
+  async () => (await import('../features/walk-round/pages/walk-round.page.tsx')).WalkRoundPage,
+);
+const WalkRecordPage = lazyPage(
+  async () => (await import('../features/walk-round/pages/walk-record.page.tsx')).WalkRecordPage,
+);
 const ClockPage = lazyPage(async () => (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage);
 const Shell = lazyPage(async () => (await import('./shell/shell.tsx')).Shell);
 const BoardPage = lazyPage(async () => (await import('../features/board/pages/board.page.tsx')).BoardPage);
@@ -65,10 +71,12 @@ export function Router() {
               <Route path={paths.runSheet} element={<RunSheetPage />} />
               <Route path={`${paths.runSheet}/:day`} element={<RunSheetPage />} />
               <Route path={`${paths.runSheet}/:day/work/:visitId/:part`} element={<WorkPage />} />
+              <Route path={paths.walkRound(':visitId')} element={<WalkRoundPage />} />
               <Route path={paths.clock} element={<ClockPage />} />
               <Route element={<Shelled />}>
                 <Route index element={<Home />} />
                 <Route path={paths.board} element={<BoardPage />} />
+                <Route path={paths.walkRecord(':visitId')} element={<WalkRecordPage />} />
                 <Route path={`${paths.board}/:day`} element={<BoardPage />} />
                 <Route path={paths.customers} element={<CustomersPage />} />
                 <Route path={`${paths.customers}/:id`} element={<CustomersPage />} />

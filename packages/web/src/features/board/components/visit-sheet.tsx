@@ -16,6 +16,7 @@ import { mapLink } from '../../../lib/map-link.ts';
 import { preview, vehiclesOf } from './board-model.ts';
 import { MoveForm } from './move-form.tsx';
 import { ProgressButtons } from './progress-buttons.tsx';
+import { WalkSection } from './walk-section.tsx';
 
 interface VisitSheetProps {
   board: BoardDto;
@@ -174,6 +175,7 @@ export function VisitSheet({
             </section>
           ) : null}
           {work}
+          <WalkSection visit={visit} />
           <section>
             <h3 className="sec">Crew</h3>
             <p>{visit.crew.length > 0 ? visit.crew.map((p) => p.name).join(', ') : 'Nobody yet'}</p>

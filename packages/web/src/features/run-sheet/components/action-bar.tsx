@@ -1,9 +1,13 @@
 import { useEffect, useState } from 'react';
+import { Link } from 'react-router';
 import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import type { ProgressAction } from '@driprail/shared/domain/board/progress';
 import { actionNames, nextActions } from '@driprail/shared/domain/board/progress';
+import { paths } from '../../../app/paths.ts';
+import { Icon } from '../../../components/icon.tsx';
 import { serverNow } from '../../../lib/device-clock.ts';
 import { useFormats } from '../../../lib/format.ts';
+import { isWalkDue } from './walk-line.tsx';
 
 const steps = [
   { action: 'set_off', label: 'On my way', time: 'setOffAt' },
@@ -73,6 +77,10 @@ export function ActionBar({ visit, now, isBusy, isQuiet, onPress, onPartDone }: 
             </button>
           </div>
         </div>
+      ) : main === 'start_work' && isWalkDue(visit) ? (
+        <Link className="ph-main" to={paths.walkRound(visit.id)}>
+          <Icon name="camera" /> Walk-round
+        </Link>
       ) : main && main !== 'call_off' ? (
         <button
           type="button"
@@ -84,6 +92,11 @@ export function ActionBar({ visit, now, isBusy, isQuiet, onPress, onPartDone }: 
         </button>
       ) : null}
       <div className="below">
+        {main === 'start_work' && isWalkDue(visit) ? (
+          <button type="button" className="btn" disabled={isBusy} onClick={() => press(main)}>
+            {actionNames[main]}
+          </button>
+        ) : null}
         {visit.progress === 'working' && !isAsking ? (
           <button type="button" className="btn" onClick={onPartDone}>
             Part done

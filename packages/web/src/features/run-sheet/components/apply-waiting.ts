@@ -32,13 +32,28 @@ function before(visit: RunVisitDto, action: ProgressAction): Progress {
 export function applyWaiting(sheet: RunSheetDto, waiting: KeptPress[], now: string): RunSheetDto {
   const visits = sheet.visits.map((visit) =>
     hideClosedNotes(
-      waiting.filter((press) => press.path === 'visit' && press.targetId === visit.id).reduce(applyToVisit, visit),
+      waiting
+        .filter((press) => press.targetId === visit.id)
+        .reduce(
+          (shown, press) => (press.path === 'visit' ? applyToVisit(shown, press) : applyToWalk(shown, press)),
+          visit,
+        ),
       now,
       sheet.zone,
     ),
   );
   const clock = sheet.clock && applyToClocks(sheet.clock, waiting);
   return { ...sheet, visits, clock };
+}
+
+/** A walk-round that waits counts as made; the server judges it again. */
+function applyToWalk(visit: RunVisitDto, { path, body }: KeptPress): RunVisitDto {
+  const { walkRound } = visit;
+  if (path === 'walk')
+    return { ...visit, walkRound: { ...walkRound, made: Math.min(walkRound.cars, walkRound.made + 1) } };
+  if (path === 'walk_addition' && body['kind'] === 'second_look')
+    return { ...visit, walkRound: { ...walkRound, isSecondLookDue: false } };
+  return visit;
 }
 
 function applyToVisit(visit: RunVisitDto, { body }: KeptPress): RunVisitDto {

@@ -7,6 +7,7 @@ import { Icon } from '../../../components/icon.tsx';
 import { StatusMark } from '../../../components/status-mark.tsx';
 import { useFormats } from '../../../lib/format.ts';
 import { mapLink } from '../../../lib/map-link.ts';
+import { WalkLine } from './walk-line.tsx';
 
 /** The visit at hand, large: where, what, how to get in, whom to call. */
 export function NextCard({
@@ -87,6 +88,7 @@ export function NextCard({
         ) : null}
       </ul>
       {visit.notes ? <p className="notes">{visit.notes}</p> : null}
+      <WalkLine visit={visit} />
       <div className="card-acts">
         <Link className="btn" to={workPath}>
           <Icon name="check" /> Job

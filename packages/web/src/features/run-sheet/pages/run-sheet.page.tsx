@@ -1,4 +1,4 @@
-import { useEffect, useState } from 'react';
+import { Suspense, lazy, useEffect, useState } from 'react';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { Link, useNavigate, useParams } from 'react-router';
 import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
@@ -30,6 +30,7 @@ import { PhoneHead } from '../components/phone-head.tsx';
 import { TipSheet } from '../components/tip-sheet.tsx';
 import { TroubleSheet } from '../components/trouble-sheet.tsx';
 import { VisitRow } from '../components/visit-row.tsx';
+import { isWalkDue } from '../components/walk-line.tsx';
 import './run-sheet.css';
 
 /** One crew's day, in order, on a phone in a driveway. */
@@ -49,7 +50,7 @@ export function RunSheetPage() {
   );
 }
 
-type Panel = { kind: 'trouble' | 'part_done' | 'tip' | 'look'; visitId: string };
+type Panel = { kind: 'trouble' | 'part_done' | 'tip' | 'look' | 'start'; visitId: string };
 
 function RunSheet({ kept }: { kept: RunSheetDto }) {
   const now = useNow();
@@ -58,7 +59,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
   const [panel, setPanel] = useState<Panel | null>(null);
   const [isPassenger, setPassenger] = useState(false);
   const press = usePressVisit();
-  const markVisit = useMark(sheet.day, press.mutate);
+  const markVisit = useMark(sheet, press.mutate, (visit) => setPanel({ kind: 'start', visitId: visit.id }));
   const isToday = sheet.day === dayOf(now, sheet.zone);
   const at =
     sheet.visits.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress)) ??
@@ -189,6 +190,16 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
           onSend={(part) => press.mutate({ visit: shown, kind: 'part_done', ...part }, { onSuccess: close })}
         />
       ) : null}
+      {shown && panel?.kind === 'start' ? (
+        <Suspense>
+          <StartSheet
+            visitId={shown.id}
+            customerName={shown.customerName}
+            onClose={close}
+            onStart={(reason) => press.mutate({ visit: shown, kind: 'start_work', reason }, { onSuccess: close })}
+          />
+        </Suspense>
+      ) : null}
       {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} tipsGoTo={sheet.tipsGoTo} onClose={close} /> : null}
       {shown && panel?.kind === 'look' ? (
         <Sheet title={shown.customerName} onClose={close} width={480}>
@@ -210,7 +221,11 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
 type Marked = ProgressAction | 'undo';
 
 /** Marks a visit; must-knows that nobody has confirmed, or what Done still needs, come first, on the job's page. */
-function useMark(day: string, mark: (press: { visit: RunVisitDto; kind: Marked }) => void) {
+function useMark(
+  { day, visits }: RunSheetDto,
+  mark: (press: { visit: RunVisitDto; kind: Marked }) => void,
+  askWalk: (visit: RunVisitDto) => void,
+) {
   const client = useQueryClient();
   const navigate = useNavigate();
   const { user } = useSession();
@@ -219,10 +234,15 @@ function useMark(day: string, mark: (press: { visit: RunVisitDto; kind: Marked }
   useEffect(() => {
     void jobWork().then((work) => work?.keepWork(client, user.id, [today, addDays(today, 1)]));
   }, [client, user.id, today]);
+  const visitIds = visits.map((visit) => visit.id).join(' ');
+  useEffect(() => {
+    void walkRound().then((walk) => walk?.keepWalkSheets(client, user.id, visitIds.split(' ').filter(Boolean)));
+  }, [client, user.id, visitIds]);
   return async (visit: RunVisitDto, kind: Marked) => {
     const work = kind === 'start_work' || kind === 'finish' ? await jobWork() : null;
     const part = await work?.partBefore(client, { userId: user.id, day, visitId: visit.id, kind });
     if (part) void navigate(paths.work(day, visit.id, part));
+    else if (kind === 'start_work' && isWalkDue(visit)) askWalk(visit);
     else mark({ visit, kind });
   };
 }
@@ -231,6 +251,12 @@ function useMark(day: string, mark: (press: { visit: RunVisitDto; kind: Marked }
 function jobWork() {
   return import('../../job-work/index.ts').catch(() => null);
 }
+
+function walkRound() {
+  return import('../../walk-round/index.ts').catch(() => null);
+}
+
+const StartSheet = lazy(async () => ({ default: (await import('../../walk-round/index.ts')).StartSheet }));
 
 function useToday(): string {
   const { zone } = useSession().company;

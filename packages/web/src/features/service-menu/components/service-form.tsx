@@ -10,6 +10,7 @@ import {
 import type { Equipment, SizeClass, Skill } from '@driprail/shared/contracts/fields';
 import { serviceKinds } from '@driprail/shared/contracts/services.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import { photoSetNames, photoSets, usualPhotoSet } from '@driprail/shared/domain/walk-round/views';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
@@ -37,6 +38,7 @@ export function ServiceForm({
     description: service?.description ?? '',
     skills: service?.skills ?? [],
     equipment: service?.equipment ?? [],
+    photoSet: service?.photoSet ?? usualPhotoSet('package'),
     isActive: service?.isActive ?? true,
     position: service?.position ?? 0,
   });
@@ -79,7 +81,12 @@ export function ServiceForm({
         <SelectField
           label="Kind"
           value={value.kind}
-          onChange={(event) => setValue({ ...value, kind: event.target.value as ServiceDto['kind'] })}
+          onChange={(event) => {
+            const kind = event.target.value as ServiceDto['kind'];
+            // A new service follows its kind until somebody chooses.
+            const isUsual = value.photoSet === usualPhotoSet(value.kind);
+            setValue({ ...value, kind, photoSet: isUsual ? usualPhotoSet(kind) : value.photoSet });
+          }}
         >
           {serviceKinds.map((kind) => (
             <option key={kind} value={kind}>
@@ -127,6 +134,22 @@ export function ServiceForm({
           ))}
         </fieldset>
       </div>
+      <SelectField
+        className="mt-3"
+        label="Walk-round before work"
+        hint="A visit asks for the largest of its lines."
+        value={value.photoSet}
+        error={fields['photoSet']}
+        onChange={(event) =>
+          setValue({ ...value, photoSet: photoSets.find((set) => set === event.target.value) ?? value.photoSet })
+        }
+      >
+        {photoSets.map((set) => (
+          <option key={set} value={set}>
+            {photoSetNames[set]}
+          </option>
+        ))}
+      </SelectField>
       <h3 className="sec mt-4">Price and minutes by size class</h3>
       <div className="grid gap-2 mt-2">
         {sizeClasses.map((size) => (

@@ -1,0 +1,2 @@
+export { keepWalkSheets } from './api/walk-round.queries.ts';
+export { StartSheet } from './components/start-sheet.tsx';
