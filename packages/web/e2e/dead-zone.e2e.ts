@@ -3,7 +3,7 @@ import { beforeAll, expect, test } from 'vitest';
 
 import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { TODAY } from './support/moment.ts';
-import { openPage, useStage } from './support/stage.ts';
+import { openPage, untilKept, useStage } from './support/stage.ts';
 
 const stage = useStage();
 let phone: BrowserContext;
@@ -13,7 +13,7 @@ beforeAll(async () => {
   phone = await stage.enter('tech3', { size: 'phone', serviceWorkers: 'allow' });
   page = await openPage(phone, '/run-sheet');
   await page.getByRole('article').waitFor();
-  await page.waitForFunction(async () => (await (await caches.open('driprail-shell-1')).keys()).length > 10);
+  await untilKept(page);
 });
 
 const sheetAt = async () => (await (await phone.request.get(`/api/run-sheet/${TODAY}`)).json()) as RunSheetDto;

@@ -3,7 +3,7 @@ import { addMinutes } from '@driprail/shared/domain/time/zone';
 import { expect, test } from 'vitest';
 
 import { TODAY } from './support/moment.ts';
-import { openPage, useStage } from './support/stage.ts';
+import { openPage, untilKept, useStage } from './support/stage.ts';
 
 const stage = useStage();
 
@@ -38,7 +38,7 @@ test('first help needs neither sign-in nor signal, and knows the address while s
   const phone = await stage.enter('tech1', { size: 'phone', serviceWorkers: 'allow' });
   const page = await openPage(phone, '/run-sheet');
   await page.getByRole('article').waitFor();
-  await page.waitForFunction(async () => (await (await caches.open('driprail-shell-1')).keys()).length > 10);
+  await untilKept(page);
   await page.getByRole('link', { name: 'First help' }).click();
   await page.getByText(/Ternmouth/).waitFor();
 

@@ -1,5 +1,5 @@
 import type { BrowserContext, Page } from 'playwright-core';
-import { beforeAll, expect, test } from 'vitest';
+import { beforeAll, expect, test, vi } from 'vitest';
 
 import { openPage, useStage } from './support/stage.ts';
 
@@ -34,15 +34,13 @@ async function deliver(message: object): Promise<void> {
 
 test('a push shows that the run sheet changed, and nothing of whom, where or when', async () => {
   await deliver({ kind: 'run_sheet' });
-  const shown = await page.waitForFunction(async () => {
-    const worker = await navigator.serviceWorker.ready;
-    const [first] = await worker.getNotifications();
-    return first ? { title: first.title, body: first.body } : null;
-  });
-  expect(await shown.jsonValue()).toEqual({
-    title: 'Your run sheet changed',
-    body: 'Open it to see what is new.',
-  });
+  const shown = () =>
+    page.evaluate(async () => {
+      const worker = await navigator.serviceWorker.ready;
+      return (await worker.getNotifications()).map(({ title, body }) => ({ title, body }));
+    });
+  await vi.waitFor(async () => expect(await shown()).toHaveLength(1));
+  expect(await shown()).toEqual([{ title: 'Your run sheet changed', body: 'Open it to see what is new.' }]);
 });
 
 test('the switch says what to do where the browser will not', async () => {

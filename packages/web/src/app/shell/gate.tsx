@@ -1,7 +1,7 @@
 import { useCallback } from 'react';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { Navigate, Outlet, useLocation } from 'react-router';
-import { sessionKey, sessionQuery } from '../../features/access/index.ts';
+import { changeSession, sessionQuery } from '../../features/access/index.ts';
 import { Fault, Fetching } from '../../components/states.tsx';
 import { ApiError } from '../../lib/call.ts';
 import { SessionProvider } from '../../lib/session.tsx';
@@ -16,8 +16,7 @@ export function Gate() {
   const location = useLocation();
   const session = useQuery(sessionQuery);
   const onSignedOut = useCallback(() => {
-    client.clear();
-    client.setQueryData(sessionKey, null);
+    changeSession(client, null);
     // A session that was ended elsewhere takes its copies along; what waits to be sent stays for its person.
     void wipeCopies();
   }, [client]);

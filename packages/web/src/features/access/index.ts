@@ -1,1 +1,1 @@
-export { sessionKey, sessionQuery, useSignOut } from './api/session.queries.ts';
+export { changeSession, sessionKey, sessionQuery, useSignOut } from './api/session.queries.ts';

@@ -1,4 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import type { QueryClient } from '@tanstack/react-query';
 import { createSessionAt, endSessionAt, getSessionAt } from '@driprail/shared/contracts/phone-addresses';
 import type { SessionDto } from '@driprail/shared/contracts/session.contract';
 import { call } from '../../../lib/call.ts';
@@ -18,13 +19,18 @@ export const sessionQuery = queryOptions({
   retry: false,
 });
 
+/** Somebody else, or nobody: everything that was fetched goes; the session's own query stays, so that its screens hear of it. */
+export function changeSession(client: QueryClient, session: SessionDto | null): void {
+  client.setQueryData(sessionKey, session);
+  client.removeQueries({ predicate: ({ queryKey }) => queryKey[0] !== sessionKey[0] });
+}
+
 export function useSignIn() {
   const client = useQueryClient();
   return useMutation({
     mutationFn: (body: { email: string; password: string }) => call(createSessionAt, { body }),
     onSuccess: (session) => {
-      client.clear();
-      client.setQueryData(sessionKey, session);
+      changeSession(client, session);
     },
   });
 }
@@ -38,8 +44,7 @@ export function useSignOut() {
       return call(endSessionAt);
     },
     onSettled: () => {
-      client.clear();
-      client.setQueryData(sessionKey, null);
+      changeSession(client, null);
       return wipeCopies();
     },
   });

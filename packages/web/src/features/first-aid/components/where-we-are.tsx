@@ -2,6 +2,7 @@ import { useEffect, useState } from 'react';
 import type { RunSheetDto } from '@driprail/shared/contracts/run-sheet.contract';
 import type { SessionDto } from '@driprail/shared/contracts/session.contract';
 import { dayOf } from '@driprail/shared/domain/time/zone';
+import { serverNow } from '../../../lib/device-clock.ts';
 import { readCopy } from '../../../lib/outbox/store.ts';
 
 interface Kept {
@@ -23,7 +24,7 @@ export function useKeptFacts(): Kept {
 async function readKept(): Promise<Kept> {
   const session = (await readCopy<SessionDto>('session'))?.value;
   if (!session) return { address: null, company: null };
-  const day = dayOf(new Date().toISOString(), session.company.zone);
+  const day = dayOf(serverNow().toISOString(), session.company.zone);
   const sheet = (await readCopy<RunSheetDto>(`${session.user.id}:run-sheet:${day}`))?.value;
   const visits = sheet?.visits ?? [];
   const at = under.map((progress) => visits.find((visit) => visit.progress === progress)).find(Boolean);

@@ -6,8 +6,8 @@ import { useSession } from '../../../lib/session.tsx';
 import { changesSince, seenOf } from './changes.ts';
 import type { SeenVisit } from './changes.ts';
 
-/** What the board changed since this person last looked at the day; gone once it was seen. */
-export function ChangesTape({ sheet }: { sheet: RunSheetDto }) {
+/** What the board changed since this person last looked at the day; gone once it was seen, held back on the way. */
+export function ChangesTape({ sheet, isQuiet }: { sheet: RunSheetDto; isQuiet: boolean }) {
   const { user } = useSession();
   const client = useQueryClient();
   const format = useFormats();
@@ -21,7 +21,7 @@ export function ChangesTape({ sheet }: { sheet: RunSheetDto }) {
     queryFn: async () => (await readCopy<SeenVisit[]>(name))?.value ?? (await look(name, sheet)),
   });
   const changes = seen.data ? changesSince(seen.data, sheet.visits, format.clock) : [];
-  if (changes.length === 0) return null;
+  if (isQuiet || changes.length === 0) return null;
   return (
     <div className="tape changes" role="status">
       <p>

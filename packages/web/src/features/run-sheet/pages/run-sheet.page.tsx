@@ -82,6 +82,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
       >
         {sheet.clock ? <ClockBox clock={sheet.clock} /> : null}
       </PhoneHead>
+      <ChangesTape sheet={sheet} isQuiet={isDriving} />
       {isDriving && at ? (
         <Driving
           visit={at}
@@ -99,7 +100,6 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
               <Link to={paths.clock}>Say when you stopped</Link>
             </p>
           ) : null}
-          <ChangesTape sheet={sheet} />
           <div className="leg">
             <div className="rail" />
             {sheet.visits.length === 0 ? (

@@ -8,6 +8,7 @@ import { SelectField, TextField } from '../../../components/field.tsx';
 import { Logo } from '../../../components/logo.tsx';
 import { call } from '../../../lib/call.ts';
 import { useDraft } from '../../../lib/use-draft.ts';
+import { changeSession } from '../../access/index.ts';
 import { zoneNames } from '../zones.ts';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { FormFault } from '../../../components/form-fault.tsx';
@@ -30,8 +31,7 @@ export function SetUpPage() {
     mutationFn: () => call(completeSetUp, { body: { ...value, password } }),
     onSuccess: (session) => {
       draft.drop();
-      client.clear();
-      client.setQueryData(['session'], session);
+      changeSession(client, session);
       void navigate(paths.vans, { replace: true });
     },
   });
