@@ -4,6 +4,7 @@ import { beforeAll, expect, test } from 'vitest';
 import type { RunSheetDto, RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract';
 import { TODAY } from './support/moment.ts';
 import { openPage, untilKept, useStage } from './support/stage.ts';
+import { startWithoutWalk } from './support/walk-round.ts';
 
 const stage = useStage();
 let phone: BrowserContext;
@@ -28,7 +29,7 @@ test('a day in a dead zone: nothing is lost, also when the app is closed and ope
   await phone.setOffline(true);
   await page.reload();
   await page.getByText('No signal. Every press is kept.').waitFor();
-  await page.getByRole('button', { name: 'Start work' }).click();
+  await startWithoutWalk(page);
   await page.getByText('1 change kept here').waitFor();
   await page.close();
 

@@ -56,8 +56,35 @@ async function openVisitPath(context: BrowserContext): Promise<string> {
   return `/board?visit=${board.visits.find((visit) => visit.customerName === 'Odette Yarrow')?.id ?? ''}`;
 }
 
+/** The visit of the technician who is at the car, or about to be. */
+async function ownVisit(context: BrowserContext): Promise<{ id: string }> {
+  const { visits } = await read<{ visits: { id: string; progress: string }[] }>(context, `/api/run-sheet/${TODAY}`);
+  const open = visits.find(({ progress }) => ['on_site', 'on_the_way', 'placed'].includes(progress));
+  return open ?? visits[0] ?? { id: '' };
+}
+
+const walkPath = async (context: BrowserContext) => `/walk-round/${(await ownVisit(context)).id}`;
+
+async function begunWalkPath(context: BrowserContext): Promise<string> {
+  const { visits } = await read<{ visits: { id: string; progress: string }[] }>(context, `/api/run-sheet/${TODAY}`);
+  return `/walk-round/${visits.find(({ progress }) => progress === 'working' || progress === 'done')?.id ?? ''}`;
+}
+
+async function walkRecordPath(context: BrowserContext): Promise<string> {
+  return `${(await openVisitPath(context)).replace('/board?visit=', '/visits/')}/walk-round`;
+}
+
 const openFiles = (page: Page) => page.locator('.files-menu summary').click();
-const press = (name: string) => (page: Page) => page.getByRole('button', { name, exact: true }).first().click();
+const press = (name: string | RegExp) => (page: Page) =>
+  page
+    .getByRole('button', { name, exact: typeof name === 'string' })
+    .first()
+    .click();
+
+async function openMark(page: Page): Promise<void> {
+  await press(/^Marks/)(page);
+  await press('Add a mark from a list of places')(page);
+}
 
 const door: Screen[] = [
   { name: 'sign-in', role: 'nobody', path: '/sign-in' },
@@ -68,6 +95,7 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
   { name: 'board', role, path: '/board', hasGrounds: role === 'dispatcher' },
   { name: 'board-open', role, path: openVisitPath },
   { name: 'job-new', role, path: '/board', open: press('New job') },
+  { name: 'walk-record', role, path: walkRecordPath },
   { name: 'customers', role, path: '/customers' },
   { name: 'customer', role, path: customerPath },
   { name: 'service-menu', role, path: '/service-menu' },
@@ -108,6 +136,19 @@ const phone: Screen[] = [
   { name: 'run-sheet-tomorrow', role: 'technician', path: '/run-sheet/2026-05-15', isPhoneOnly: true },
   { name: 'trouble', role: 'technician', path: '/run-sheet', open: press('Trouble'), isPhoneOnly: true },
   { name: 'clock', role: 'technician', path: '/clock', isPhoneOnly: true },
+  { name: 'walk-round', role: 'technician', path: walkPath, isPhoneOnly: true, hasGrounds: true },
+  {
+    name: 'walk-round-marks',
+    role: 'technician',
+    path: walkPath,
+    open: press(/^Marks/),
+    isPhoneOnly: true,
+    hasGrounds: true,
+  },
+  { name: 'walk-round-mark', role: 'technician', path: walkPath, open: openMark, isPhoneOnly: true },
+  { name: 'walk-round-condition', role: 'technician', path: walkPath, open: press(/^Condition/), isPhoneOnly: true },
+  { name: 'walk-round-customer', role: 'technician', path: walkPath, open: press(/^Customer/), isPhoneOnly: true },
+  { name: 'walk-round-after', role: 'technician', path: begunWalkPath, isPhoneOnly: true },
   { name: 'account', role: 'technician', path: '/account' },
 ];
 

@@ -26,7 +26,9 @@ export function WalkRoundPage() {
   const sheet = useQuery(walkSheetQuery(user.id, visitId));
   const isOnline = useOnline();
   const isLive = useIsLive();
-  useEffect(() => window.scrollTo(0, 0), []);
+  useEffect(() => {
+    window.scrollTo(0, 0);
+  }, []);
   return (
     <main className={isOnline ? 'ph wr' : 'ph wr is-adrift'} id="main">
       <header className="wr-top">
