@@ -17,6 +17,7 @@ import { hintAfterCommit } from '../../realtime/hints.ts';
 import { authorizeVisit, lockVisit } from '../board/index.ts';
 import { followProgress } from '../clock/index.ts';
 import { fixChecklists, refuseUnconfirmed, refuseUnfinished } from '../job-work/index.ts';
+import { isNews, movedAway, movedSince, tellDesk } from './clash.ts';
 import { readRunRows, toRunVisit } from './run-visits.queries.ts';
 import type { RunRow } from './run-visits.queries.ts';
 import { undoLast } from './undo.ts';
@@ -43,6 +44,12 @@ export async function actOnVisit(
       const visit = await lockVisit(tx, visitId);
       const row = (await readRunRows({ visitId }, tx))[0];
       if (!visit || !row) throw notFound('That visit');
+      const times = stamp(action.deviceAt, action.offsetMs, ctx.now());
+      const isOwn = row.visit.crew.some((member) => member.personId === ctx.actor.personId);
+      if (ctx.actor.role === 'technician' && !isOwn && (await movedSince(tx, visitId, times))) {
+        await tellDesk(tx, ctx, visit, action, times, company);
+        return { refused: movedAway() };
+      }
       authorizeVisit(ctx, 'mark', row.visit, company.zone);
       return perform(tx, ctx, company, visit, row, action);
     },
@@ -80,9 +87,10 @@ async function perform(
     const after = (await readRunRows({ visitId: visit.id }, tx))[0] ?? row;
     return { visit: toRunVisit(after, { now: ctx.now(), zone: company.zone, undoSeconds: company.undoSeconds }) };
   };
-  const clash = async (message: string) => ({
-    refused: new AppError(409, 'clash', message, { hint: { current: (await shown()).visit } }),
-  });
+  const clash = async (message: string) => {
+    if (await isNews(tx, visit, action, times)) await tellDesk(tx, ctx, visit, action, times, company);
+    return { refused: new AppError(409, 'clash', message, { hint: { current: (await shown()).visit } }) };
+  };
 
   if (action.kind === 'undo') {
     const refusal = await undoLast(tx, ctx, visit, times, company.undoSeconds);

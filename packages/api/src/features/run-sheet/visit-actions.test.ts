@@ -152,3 +152,45 @@ test('a tip is recorded once, by the crew’s own hands', async () => {
   // A tip is pay: the desk does not see it.
   expect(await tipsFor(dispatcher)).toEqual([]);
 });
+
+describe('a phone that did not know what the board had changed', () => {
+  const troubles = async () => {
+    const board = (await dispatcher.get('/api/board/2026-05-14')).body as BoardDto;
+    return board.troubles.filter((trouble) => trouble.visitId === visit.id);
+  };
+
+  test('a press on a visit called off meanwhile is refused to the phone and told to the desk, once', async () => {
+    const { job } = (await dispatcher.get(`/api/jobs/${visit.jobId}`).expect(200)).body as { job: { version: number } };
+    await dispatcher
+      .post(`/api/jobs/${visit.jobId}/call-off`)
+      .send({ version: job.version, reason: 'Rain' })
+      .expect(200);
+    const body = { key: uuid(), kind: 'set_off', deviceAt: app.time.now };
+    await sefa.post(`/api/visits/${visit.id}/actions`).send(body).expect(409);
+    await sefa.post(`/api/visits/${visit.id}/actions`).send(body).expect(409);
+    expect((await troubles()).map(({ kind, note }) => [kind, note])).toEqual([
+      ['clash', 'Sefa Lund marked “On my way” at 11:00 am.'],
+    ]);
+  });
+
+  test('so is one on a visit that went to another van after it was made; before, it is not there', async () => {
+    const made = app.time.now;
+    await press(sefa, 'set_off').expect(200);
+    await press(sefa, 'undo').expect(200);
+    app.time.now = '2026-05-14T15:20:00Z';
+    const board = (await dispatcher.get('/api/board/2026-05-14')).body as BoardDto;
+    const now = board.visits.find((one) => one.id === visit.id);
+    const move = { visitId: visit.id, planVersion: now?.planVersion, vanId: company.vans.plover.id };
+    await dispatcher
+      .post('/api/board/moves')
+      .send({ moves: [{ ...move, from: now?.from, to: now?.to }], accept: [] })
+      .expect(200);
+    const late = { key: uuid(), kind: 'set_off', deviceAt: made };
+    const refused = await sefa.post(`/api/visits/${visit.id}/actions`).send(late).expect(409);
+    expect(refused.body).toMatchObject({ error: { message: expect.stringContaining('Dispatch is told') as string } });
+    expect((await troubles()).map(({ note }) => note)).toEqual(['Sefa Lund marked “On my way” at 11:00 am.']);
+    app.time.now = '2026-05-14T15:25:00Z';
+    const fresh = { key: uuid(), kind: 'set_off', deviceAt: app.time.now };
+    await sefa.post(`/api/visits/${visit.id}/actions`).send(fresh).expect(404);
+  });
+});

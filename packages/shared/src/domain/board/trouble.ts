@@ -35,3 +35,7 @@ export const troubleNames: Record<TroubleKind, string> = {
 export function comesAfterHelp(kind: TroubleKind): boolean {
   return kind === 'hurt' || kind === 'crash' || kind === 'unwell';
 }
+
+/** What the server reports by itself: a press on a phone that did not know what the board had changed. */
+export const CLASH = 'clash';
+export const clashName = 'Phone and board differ';

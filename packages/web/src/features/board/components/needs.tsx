@@ -2,7 +2,7 @@ import { useState } from 'react';
 import { useMutation, useQueryClient } from '@tanstack/react-query';
 import { settleTrouble } from '@driprail/shared/contracts/board.contract';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
-import { troubleNames } from '@driprail/shared/domain/board/trouble';
+import { CLASH, clashName, troubleNames } from '@driprail/shared/domain/board/trouble';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
 import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
@@ -31,7 +31,7 @@ export function needsOf(board: BoardDto, now: string): Need[] {
     visitId: t.visitId,
     troubleId: t.id,
     who: name(t.visitId),
-    words: [troubleNames[t.kind as keyof typeof troubleNames] ?? t.kind, t.note].filter(Boolean).join(': '),
+    words: [troubleName(t.kind), t.note].filter(Boolean).join(': '),
   }));
   const late = board.visits
     .filter(isPlacedVisit)
@@ -100,6 +100,10 @@ export function Needs({ board, now, first, onOpen }: NeedsProps) {
       ) : null}
     </section>
   );
+}
+
+function troubleName(kind: string): string {
+  return kind === CLASH ? clashName : (troubleNames[kind as keyof typeof troubleNames] ?? kind);
 }
 
 const picks = ['Customer called', 'Moved to another day', 'Crew carries on', 'Called off'];
