@@ -72,6 +72,11 @@ describe('the day', () => {
     await technician.getByText('Is everything at Sten Verrall done?').waitFor();
     expect(await ticket(dispatcher, 'Sten Verrall').innerText()).toContain('Working');
     await press('Yes, done');
+    // A step of the polish has to be ticked by itself: it was not, so the phone asks why.
+    await technician.getByText('Measure the paint on every panel').waitFor();
+    await press('Tool is broken');
+    await press('Done');
+    await press('Yes, done');
     for (const board of [dispatcher, owner])
       await ticket(board, 'Sten Verrall')
         .getByText(/^Done 11:\d\d am$/)

@@ -156,10 +156,10 @@ export function CustomerForm({ customer, name = '', onSaved, onCancel }: Custome
               ))}
             </SelectField>
             <TextField label="Notes" {...register(`${at}.notes`)} error={wrong?.notes?.message} />
-            <VehicleMustKnows at={at} register={register} errors={wrong} />
             <Button look="bare" aria-label="Take this vehicle off" onClick={() => vehicles.remove(index)}>
               <Icon name="x" />
             </Button>
+            <VehicleMustKnows at={at} register={register} errors={wrong} />
           </div>
         );
       })}

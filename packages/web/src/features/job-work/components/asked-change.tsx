@@ -33,7 +33,7 @@ export function AskedChange({ change }: { change: JobChangeDto }) {
         onChange={(event) => setNote(event.target.value)}
         error={answer.error?.message}
       />
-      <div className="flex gap-2 mt-2">
+      <div className="flex flex-wrap gap-2 mt-2">
         <Button look="main" isBusy={answer.isPending} onClick={() => send(true)}>
           Accept the change
         </Button>

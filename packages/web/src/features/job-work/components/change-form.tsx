@@ -73,9 +73,11 @@ export function ChangeForm({ facts, at, now, onDone }: ChangeFormProps) {
           pickedId={change && 'serviceId' in change ? change.serviceId : null}
           onPick={(serviceId) =>
             setChange(
-              kind === 'add'
-                ? { kind, serviceId, vehicleId: line.vehicleId, sizeClass: line.sizeClass }
-                : { kind, lineId: line.id, serviceId },
+              serviceId === null
+                ? null
+                : kind === 'add'
+                  ? { kind, serviceId, vehicleId: line.vehicleId, sizeClass: line.sizeClass }
+                  : { kind, lineId: line.id, serviceId },
             )
           }
         />

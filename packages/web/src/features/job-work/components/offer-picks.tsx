@@ -9,7 +9,8 @@ interface OfferPicksProps {
   offers: Offer[];
   sizeClass: SizeClass;
   pickedId: string | null;
-  onPick: (serviceId: string) => void;
+  /** Null opens the list again. */
+  onPick: (serviceId: string | null) => void;
 }
 
 /** What can be sold for this size class, add-ons first, with price and minutes of one person. */
@@ -22,21 +23,23 @@ export function OfferPicks({ offers, sizeClass, pickedId, onPick }: OfferPicksPr
     .sort((a, b) => order.indexOf(a.offer.kind) - order.indexOf(b.offer.kind));
   return (
     <>
-      <h2 className="sec">From the menu</h2>
+      <h2 className="sec">From the menu {pickedId ? <span>press it again for another</span> : null}</h2>
       <div className="wk-offers" role="group" aria-label="From the menu">
-        {sold.map(({ offer, price }) => (
-          <button
-            key={offer.serviceId}
-            type="button"
-            className={offer.serviceId === pickedId ? 'btn is-picked' : 'btn'}
-            aria-pressed={offer.serviceId === pickedId}
-            onClick={() => onPick(offer.serviceId)}
-          >
-            <span>{offer.name}</span>
-            <span className="t-fig">{money(price.priceCents)}</span>
-            <small>{formatMinutes(price.minutes)}</small>
-          </button>
-        ))}
+        {sold
+          .filter(({ offer }) => pickedId === null || offer.serviceId === pickedId)
+          .map(({ offer, price }) => (
+            <button
+              key={offer.serviceId}
+              type="button"
+              className={offer.serviceId === pickedId ? 'btn is-picked' : 'btn'}
+              aria-pressed={offer.serviceId === pickedId}
+              onClick={() => onPick(offer.serviceId === pickedId ? null : offer.serviceId)}
+            >
+              <span>{offer.name}</span>
+              <span className="t-fig">{money(price.priceCents)}</span>
+              <small>{formatMinutes(price.minutes)}</small>
+            </button>
+          ))}
       </div>
     </>
   );

@@ -43,11 +43,10 @@ export function StepRow({ planned: { step, mark }, isDisabled, onPress }: StepRo
   );
 }
 
-function needsOf({ product, ratio, pour, dose, kitCase, towel }: CheckStep): string[] {
+/** The ratio stands at the right, where a glance finds it. */
+function needsOf({ product, pour, dose, kitCase, towel }: CheckStep): string[] {
   const from = pour === 'dose' ? `dose ${dose}`.trim() : pour === 'bottle' ? 'bottle' : '';
-  const bottle = [[product, ratio].filter(Boolean).join(' '), from, kitCase ? stepCaseNames[kitCase].toLowerCase() : '']
-    .filter(Boolean)
-    .join(', ');
+  const bottle = [product, from, kitCase ? stepCaseNames[kitCase].toLowerCase() : ''].filter(Boolean).join(', ');
   return [bottle, towel ? `${towelUseNames[towel.use]}, ${towel.color}` : ''].filter(Boolean);
 }
 

@@ -28,7 +28,7 @@ export function TroubleSheet({ visit, isBusy, error, onSend, onCallOff, onClose 
   const [note, setNote] = useState('');
   const isHelpFirst = trouble !== null && comesAfterHelp(trouble);
   const words = [...picked, note.trim()].filter(Boolean).join(', ');
-  const pick = (kind: TroubleKind) => {
+  const pick = (kind: TroubleKind | null) => {
     setTrouble(kind);
     setPicked([]);
   };
@@ -60,18 +60,25 @@ export function TroubleSheet({ visit, isBusy, error, onSend, onCallOff, onClose 
           </Link>
         </div>
         <div className="grid grid-cols-2 gap-2 mb-3" role="radiogroup" aria-label="What is wrong">
-          {troubleKinds.map((kind) => (
-            <button
-              key={kind}
-              type="button"
-              role="radio"
-              aria-checked={trouble === kind}
-              className={trouble === kind ? 'btn is-picked' : 'btn'}
-              onClick={() => pick(kind)}
-            >
-              {troubleNames[kind]}
+          {troubleKinds
+            .filter((kind) => trouble === null || kind === trouble)
+            .map((kind) => (
+              <button
+                key={kind}
+                type="button"
+                role="radio"
+                aria-checked={trouble === kind}
+                className={trouble === kind ? 'btn is-picked' : 'btn'}
+                onClick={() => pick(kind === trouble ? null : kind)}
+              >
+                {troubleNames[kind]}
+              </button>
+            ))}
+          {trouble ? (
+            <button type="button" className="btn bare" onClick={() => pick(null)}>
+              Something else
             </button>
-          ))}
+          ) : null}
         </div>
         {trouble ? (
           <div className="grid grid-cols-2 gap-2 mb-3" role="group" aria-label={`${troubleNames[trouble]}: more`}>

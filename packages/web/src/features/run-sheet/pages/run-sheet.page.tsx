@@ -231,9 +231,10 @@ function useMark(
   const { user } = useSession();
   const today = useToday();
   // Fetched after the first screen has painted, so that a dead zone finds them on the phone.
+  const plans = visits.map((visit) => `${visit.id}:${visit.planVersion}`).join(' ');
   useEffect(() => {
     void jobWork().then((work) => work?.keepWork(client, user.id, [today, addDays(today, 1)]));
-  }, [client, user.id, today]);
+  }, [client, user.id, today, plans]);
   const visitIds = visits.map((visit) => visit.id).join(' ');
   useEffect(() => {
     void walkRound().then((walk) => walk?.keepWalkSheets(client, user.id, visitIds.split(' ').filter(Boolean)));
