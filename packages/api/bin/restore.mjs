@@ -5,6 +5,7 @@ import { resolve } from 'node:path';
 import { openDatabase } from './lib/database.mjs';
 import { dumpProgram, hiddenPassword } from './lib/dump-programs.mjs';
 import { dataFolder } from './lib/paths.mjs';
+import { copyPhotos, photosBeside, photosFolder } from './lib/photos.mjs';
 import { run, runProgram, stopOnSignals } from './lib/run.mjs';
 import { PlainError, command, say } from './lib/words.mjs';
 
@@ -31,6 +32,8 @@ await command(async () => {
     if (code !== 0) {
       throw new PlainError('The backup was not brought in; the database is as it was before.');
     }
+    const photos = photosFolder();
+    if (photos) copyPhotos(photosBeside(source), photos);
     if ((await runProgram('packages/api/src/commands/check-data.ts', [], env)) !== 0) return 1;
     say('The backup is in. Start Driprail with npm start.');
     return 0;

@@ -41,6 +41,20 @@ const checks: { what: string; sql: string }[] = [
     what: 'a discount is not more than its job',
     sql: `SELECT count(*) AS count FROM jobs j WHERE j.discount_cents > coalesce((SELECT sum(price_cents) FROM job_lines l WHERE l.job_id = j.id), 0)`,
   },
+  {
+    what: 'a stored photo has arrived whole, and no piece of it is left',
+    sql: `SELECT count(*) AS count FROM photos p WHERE p.stored_at IS NOT NULL
+      AND (p.received_bytes <> p.bytes OR EXISTS (SELECT 1 FROM photo_pieces x WHERE x.photo_id = p.id))`,
+  },
+  {
+    what: 'pieces of a photo add up to what has arrived of it',
+    sql: `SELECT count(*) AS count FROM photos p WHERE p.stored_at IS NULL AND p.refused IS NULL
+      AND p.received_bytes <> coalesce((SELECT sum(octet_length(x.content)) FROM photo_pieces x WHERE x.photo_id = p.id), 0)`,
+  },
+  {
+    what: 'a mark of last time answers one of the same car',
+    sql: `SELECT count(*) AS count FROM walk_marks m JOIN walk_marks o ON o.id = m.carried_from WHERE o.vehicle_id IS DISTINCT FROM m.vehicle_id`,
+  },
 ];
 
 export interface DataFinding {

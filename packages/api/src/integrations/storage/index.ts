@@ -17,6 +17,7 @@ function lazyS3(place: S3Place): FileStore {
   return {
     put: async (key, content) => (await store()).put(key, content),
     get: async (key) => (await store()).get(key),
+    has: async (key) => (await store()).has(key),
     remove: async (key) => (await store()).remove(key),
   };
 }

@@ -1,4 +1,4 @@
-import { mkdir, open, readFile, rename, rm } from 'node:fs/promises';
+import { access, mkdir, open, readFile, rename, rm } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { v7 as uuid } from 'uuid';
 import type { FileStore } from './storage.ts';
@@ -35,6 +35,11 @@ export function localStore(folder: string): FileStore {
         throw error;
       }
     },
+    has: (key) =>
+      access(pathOf(key)).then(
+        () => true,
+        () => false,
+      ),
     remove: (key) => rm(pathOf(key), { force: true }),
   };
 }

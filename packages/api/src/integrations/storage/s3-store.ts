@@ -1,4 +1,12 @@
-import { DeleteObjectCommand, GetObjectCommand, NoSuchKey, PutObjectCommand, S3Client } from '@aws-sdk/client-s3';
+import {
+  DeleteObjectCommand,
+  GetObjectCommand,
+  HeadObjectCommand,
+  NoSuchKey,
+  NotFound,
+  PutObjectCommand,
+  S3Client,
+} from '@aws-sdk/client-s3';
 import type { FileStore } from './storage.ts';
 import { checkedKey } from './storage.ts';
 
@@ -31,6 +39,15 @@ export function s3Store({ bucket, region, endpoint, credentials }: S3Place): Fil
         return Body ? await Body.transformToByteArray() : null;
       } catch (error) {
         if (error instanceof NoSuchKey) return null;
+        throw error;
+      }
+    },
+    async has(key) {
+      try {
+        await client.send(new HeadObjectCommand(place(key)));
+        return true;
+      } catch (error) {
+        if (error instanceof NotFound) return false;
         throw error;
       }
     },

@@ -4,6 +4,7 @@ export interface FileStore {
   put(key: string, content: Uint8Array): Promise<void>;
   /** @returns null when there is no such file */
   get(key: string): Promise<Uint8Array | null>;
+  has(key: string): Promise<boolean>;
   remove(key: string): Promise<void>;
 }
 
