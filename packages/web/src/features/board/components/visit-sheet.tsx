@@ -15,6 +15,7 @@ import { money, useFormats } from '../../../lib/format.ts';
 import { mapLink } from '../../../lib/map-link.ts';
 import { preview, vehiclesOf } from './board-model.ts';
 import { MoveForm } from './move-form.tsx';
+import { CrewCall } from './crew-call.tsx';
 import { ProgressButtons } from './progress-buttons.tsx';
 import { WalkSection } from './walk-section.tsx';
 
@@ -176,10 +177,7 @@ export function VisitSheet({
           ) : null}
           {work}
           <WalkSection visit={visit} />
-          <section>
-            <h3 className="sec">Crew</h3>
-            <p>{visit.crew.length > 0 ? visit.crew.map((p) => p.name).join(', ') : 'Nobody yet'}</p>
-          </section>
+          <CrewCall visit={visit} />
           {isEnded(visit.progress) || nextActions(visit.progress).length === 0 || !visit.vanId ? null : (
             <ProgressButtons visit={visit} />
           )}

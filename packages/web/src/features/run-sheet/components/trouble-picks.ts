@@ -16,3 +16,12 @@ export const troublePicks: Record<TroubleKind, readonly string[]> = {
   running_late: ['15 min', '30 min', '45 min', '1 h'],
   other: ['Call me'],
 };
+
+/** "30 min" and "1 h" as minutes, the most that was picked; null for none. */
+export function lateMinutes(picked: readonly string[]): number | null {
+  const minutes = picked.flatMap((word) => {
+    const [, count, unit] = /^(\d+) (min|h)$/.exec(word) ?? [];
+    return count ? [Number(count) * (unit === 'h' ? 60 : 1)] : [];
+  });
+  return minutes.length === 0 ? null : Math.max(...minutes);
+}

@@ -9,10 +9,13 @@ import { Button } from '../../../components/button.tsx';
 import { TextField } from '../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../components/sheet.tsx';
 import { useSession } from '../../../lib/session.tsx';
+import { LatePart } from './late-part.tsx';
 import { troublePicks } from './trouble-picks.ts';
 
 interface TroubleSheetProps {
   visit: RunVisitDto;
+  /** The visit after it, whose promise a delay may touch. */
+  next: RunVisitDto | undefined;
   isBusy: boolean;
   error: string | undefined;
   onSend: (trouble: { trouble: TroubleKind; reason: string }) => void;
@@ -21,7 +24,7 @@ interface TroubleSheetProps {
 }
 
 /** Tells the board what is wrong. When a person is in trouble, the call for help comes before anything else. */
-export function TroubleSheet({ visit, isBusy, error, onSend, onCallOff, onClose }: TroubleSheetProps) {
+export function TroubleSheet({ visit, next, isBusy, error, onSend, onCallOff, onClose }: TroubleSheetProps) {
   const { company } = useSession();
   const [trouble, setTrouble] = useState<TroubleKind | null>(null);
   const [picked, setPicked] = useState<string[]>([]);
@@ -95,6 +98,7 @@ export function TroubleSheet({ visit, isBusy, error, onSend, onCallOff, onClose 
             ))}
           </div>
         ) : null}
+        {trouble === 'running_late' ? <LatePart visit={visit} next={next} picked={picked} /> : null}
         <TextField
           label="More, if it helps"
           value={note}

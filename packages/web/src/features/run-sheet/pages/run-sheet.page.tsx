@@ -27,9 +27,11 @@ import { Driving } from '../components/driving.tsx';
 import { NextCard } from '../components/next-card.tsx';
 import { PartDoneSheet } from '../components/part-done-sheet.tsx';
 import { PhoneHead } from '../components/phone-head.tsx';
+import { StillOnClock } from '../components/still-on-clock.tsx';
 import { TipSheet } from '../components/tip-sheet.tsx';
 import { TroubleSheet } from '../components/trouble-sheet.tsx';
 import { VisitRow } from '../components/visit-row.tsx';
+import { WipeLock } from '../components/wipe-lock.tsx';
 import { isWalkDue } from '../components/walk-line.tsx';
 import './run-sheet.css';
 
@@ -83,6 +85,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
         {sheet.clock ? <ClockBox clock={sheet.clock} /> : null}
       </PhoneHead>
       <ChangesTape sheet={sheet} isQuiet={isDriving} />
+      {isToday ? <StillOnClock sheet={sheet} /> : null}
       {isDriving && at ? (
         <Driving
           visit={at}
@@ -93,6 +96,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
         <>
           <p className="crew-line t-2">
             <DayLinks sheet={sheet} today={dayOf(now, sheet.zone)} />
+            <WipeLock />
           </p>
           {sheet.clock?.forgotten.length ? (
             <p className="tape mb-3">
@@ -174,6 +178,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
       {shown && panel?.kind === 'trouble' ? (
         <TroubleSheet
           visit={shown}
+          next={sheet.visits.slice(sheet.visits.indexOf(shown) + 1).find((visit) => !isEnded(visit.progress))}
           isBusy={press.isPending}
           error={press.error?.message}
           onClose={close}
