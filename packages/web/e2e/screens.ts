@@ -44,7 +44,7 @@ async function takeDemo(): Promise<void> {
   const server = await startServer(postgres, { demo: true, now: NOON });
   try {
     for (const size of ['desk', 'phone'] as const) {
-      for (const role of ['nobody', 'owner', 'dispatcher', 'technician'] as const) {
+      for (const role of ['nobody', 'owner', 'dispatcher', 'technician', 'crew'] as const) {
         const own = wanted.filter((screen) => screen.role === role && !(screen.isPhoneOnly && size === 'desk'));
         if (own.length === 0) continue;
         const context = await enter(browser, server.url, role, size);

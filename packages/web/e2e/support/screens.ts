@@ -7,7 +7,7 @@ import { TODAY } from './moment.ts';
 export interface Screen {
   /** For file names, together with the role. */
   name: string;
-  role: 'owner' | 'dispatcher' | 'technician' | 'nobody';
+  role: 'owner' | 'dispatcher' | 'technician' | 'crew' | 'nobody';
   /** Where it is; some lie behind an id that only the server knows. */
   path: string | ((context: BrowserContext) => Promise<string>);
   /** What has to be pressed for it to open. */
@@ -28,6 +28,8 @@ export const logins = {
   owner: 'owner',
   dispatcher: 'dispatch',
   technician: 'tech1',
+  /** A technician whose crew is at work at this hour. */
+  crew: 'tech5',
 } as const satisfies Record<string, DemoLogin>;
 
 async function read<T>(context: BrowserContext, path: string): Promise<T> {
@@ -74,6 +76,25 @@ async function walkRecordPath(context: BrowserContext): Promise<string> {
   return `${(await openVisitPath(context)).replace('/board?visit=', '/visits/')}/walk-round`;
 }
 
+/** The job's page of a technician's visit: one that is worked on, or one with something to know first. */
+const jobPath = (part: string, isIt: (work: { progress: string; mustKnows: object[] }) => boolean) =>
+  async function path(context: BrowserContext): Promise<string> {
+    type Work = { visitId: string; progress: string; mustKnows: object[] };
+    const { works } = await read<{ works: Work[] }>(context, `/api/run-sheet/${TODAY}/work`);
+    return `/run-sheet/${TODAY}/work/${works.find(isIt)?.visitId ?? ''}/${part}`;
+  };
+const isWorking = (work: { progress: string }) => work.progress === 'working';
+
+async function openChange(page: Page): Promise<void> {
+  for (const name of ['Change the job', 'Add a service', /minivan$/, /^Odor treatment/])
+    await page.getByRole('button', { name }).first().click();
+}
+
+async function openSteps(page: Page): Promise<void> {
+  await page.getByRole('button', { name: 'Steps of Two-step polish' }).click();
+  await page.getByRole('button', { name: 'Change', exact: true }).first().click();
+}
+
 const openFiles = (page: Page) => page.locator('.files-menu summary').click();
 const press = (name: string | RegExp) => (page: Page) =>
   page
@@ -98,6 +119,7 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
   { name: 'walk-record', role, path: walkRecordPath },
   { name: 'customers', role, path: '/customers' },
   { name: 'customer', role, path: customerPath },
+  { name: 'customer-edit', role, path: customerPath, open: press('Edit') },
   { name: 'service-menu', role, path: '/service-menu' },
   { name: 'vans', role, path: '/vans' },
   { name: 'people', role, path: '/people' },
@@ -109,6 +131,7 @@ const office: Screen[] = [
   { name: 'van', role: 'owner', path: '/vans', open: press('Edit Plover') },
   { name: 'person', role: 'owner', path: '/people', open: press('Edit') },
   { name: 'service', role: 'owner', path: '/service-menu', open: press('Edit') },
+  { name: 'service-steps', role: 'owner', path: '/service-menu', open: openSteps },
   { name: 'pay-week', role: 'owner', path: `/pay/${LAST_WEEK}` },
   { name: 'pay-week-locked', role: 'owner', path: `/pay/${LOCKED_WEEK}` },
   { name: 'pay-week-files', role: 'owner', path: `/pay/${LOCKED_WEEK}`, open: openFiles },
@@ -135,6 +158,13 @@ const phone: Screen[] = [
   { name: 'run-sheet', role: 'technician', path: '/run-sheet', isPhoneOnly: true, hasGrounds: true },
   { name: 'run-sheet-tomorrow', role: 'technician', path: '/run-sheet/2026-05-15', isPhoneOnly: true },
   { name: 'trouble', role: 'technician', path: '/run-sheet', open: press('Trouble'), isPhoneOnly: true },
+  {
+    ...{ name: 'job-know', role: 'technician', isPhoneOnly: true, hasGrounds: true },
+    path: jobPath('know', ({ progress, mustKnows }) => progress === 'placed' && mustKnows.length > 0),
+  },
+  { name: 'job-steps', role: 'crew', path: jobPath('steps', isWorking), isPhoneOnly: true, hasGrounds: true },
+  { name: 'job-change', role: 'crew', path: jobPath('change', isWorking), open: openChange, isPhoneOnly: true },
+  { name: 'job-done', role: 'crew', path: jobPath('done', isWorking), isPhoneOnly: true },
   { name: 'clock', role: 'technician', path: '/clock', isPhoneOnly: true },
   { name: 'walk-round', role: 'technician', path: walkPath, isPhoneOnly: true, hasGrounds: true },
   {
