@@ -3,6 +3,7 @@ import * as clock from './clock.contract.ts';
 import * as hours from './hours.contract.ts';
 import * as jobWork from './job-work.contract.ts';
 import * as jobs from './jobs.contract.ts';
+import * as openWork from './open-work-addresses.ts';
 import * as addresses from './phone-addresses.ts';
 import * as push from './push.contract.ts';
 import * as runSheet from './run-sheet.contract.ts';

@@ -1,24 +1,20 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
 import { v4 as uuid } from 'uuid';
-import {
-  answerJobChange,
-  getOpenWork,
-  getVisitWork,
-  postWorkAction,
-} from '@driprail/shared/contracts/job-work.contract';
+import { answerJobChangeAt, getOpenWorkAt, getVisitWorkAt } from '@driprail/shared/contracts/open-work-addresses';
+import { postWorkActionAt } from '@driprail/shared/contracts/phone-addresses';
 import { call } from '../../../lib/call.ts';
 import { deviceOffsetMs } from '../../../lib/device-clock.ts';
 
 /** What waits for the desk: keys that are out, changes that crews ask for. */
 export const openWorkQuery = queryOptions({
   queryKey: ['work', 'open'],
-  queryFn: ({ signal }) => call(getOpenWork, {}, signal),
+  queryFn: ({ signal }) => call(getOpenWorkAt, {}, signal),
 });
 
 export const visitWorkQuery = (visitId: string) =>
   queryOptions({
     queryKey: ['work', 'visit', visitId],
-    queryFn: ({ signal }) => call(getVisitWork, { params: { id: visitId } }, signal),
+    queryFn: ({ signal }) => call(getVisitWorkAt, { params: { id: visitId } }, signal),
   });
 
 const touched = ['work', 'board', 'jobs'];
@@ -26,7 +22,7 @@ const touched = ['work', 'board', 'jobs'];
 export function useAnswerChange() {
   return useMutation({
     mutationFn: ({ id, isAccepted, note }: { id: string; isAccepted: boolean; note: string }) =>
-      call(answerJobChange, { params: { id }, body: { isAccepted, note } }),
+      call(answerJobChangeAt, { params: { id }, body: { isAccepted, note } }),
     onSettled: (_d, _e, _v, _s, { client }) =>
       Promise.all(touched.map((key) => client.invalidateQueries({ queryKey: [key] }))),
   });
@@ -37,7 +33,7 @@ export function useKeyBack() {
   return useMutation({
     mutationFn: (visitId: string) => {
       const body = { key: uuid(), kind: 'key_back' as const, deviceAt: new Date().toISOString() };
-      return call(postWorkAction, { params: { id: visitId }, body: { ...body, offsetMs: deviceOffsetMs() } });
+      return call(postWorkActionAt, { params: { id: visitId }, body: { ...body, offsetMs: deviceOffsetMs() } });
     },
     onSettled: (_d, _e, _v, _s, { client }) => client.invalidateQueries({ queryKey: ['work'] }),
   });
