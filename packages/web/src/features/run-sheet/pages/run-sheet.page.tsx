@@ -7,6 +7,7 @@ import type { ProgressAction } from '@driprail/shared/domain/board/progress';
 import { estimateTravel } from '@driprail/shared/domain/board/travel';
 import { formatDay } from '@driprail/shared/domain/time/format';
 import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
+import { lazyPage } from '../../../app/lazy-page.ts';
 import { paths } from '../../../app/paths.ts';
 import { PhoneMenu } from '../../../app/shell/phone-menu.tsx';
 import { Icon } from '../../../components/icon.tsx';
@@ -25,15 +26,17 @@ import { ChangesTape } from '../components/changes-tape.tsx';
 import { ClockBox } from '../components/clock-box.tsx';
 import { Driving } from '../components/driving.tsx';
 import { NextCard } from '../components/next-card.tsx';
-import { PartDoneSheet } from '../components/part-done-sheet.tsx';
 import { PhoneHead } from '../components/phone-head.tsx';
 import { StillOnClock } from '../components/still-on-clock.tsx';
-import { TipSheet } from '../components/tip-sheet.tsx';
-import { TroubleSheet } from '../components/trouble-sheet.tsx';
 import { VisitRow } from '../components/visit-row.tsx';
 import { WipeLock } from '../components/wipe-lock.tsx';
 import { isWalkDue } from '../components/walk-line.tsx';
 import './run-sheet.css';
+
+// Sheets come after the first screen has painted; the worker keeps them for a dead zone.
+const TroubleSheet = lazyPage(async () => (await import('../components/trouble-sheet.tsx')).TroubleSheet);
+const PartDoneSheet = lazyPage(async () => (await import('../components/part-done-sheet.tsx')).PartDoneSheet);
+const TipSheet = lazyPage(async () => (await import('../components/tip-sheet.tsx')).TipSheet);
 
 /** One crew's day, in order, on a phone in a driveway. */
 export function RunSheetPage() {
@@ -176,24 +179,28 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
         )}
       </footer>
       {shown && panel?.kind === 'trouble' ? (
-        <TroubleSheet
-          visit={shown}
-          next={sheet.visits.slice(sheet.visits.indexOf(shown) + 1).find((visit) => !isEnded(visit.progress))}
-          isBusy={press.isPending}
-          error={press.error?.message}
-          onClose={close}
-          onSend={(trouble) => press.mutate({ visit: shown, kind: 'trouble', ...trouble }, { onSuccess: close })}
-          onCallOff={(trouble) => press.mutate({ visit: shown, kind: 'call_off', ...trouble }, { onSuccess: close })}
-        />
+        <Suspense>
+          <TroubleSheet
+            visit={shown}
+            next={sheet.visits.slice(sheet.visits.indexOf(shown) + 1).find((visit) => !isEnded(visit.progress))}
+            isBusy={press.isPending}
+            error={press.error?.message}
+            onClose={close}
+            onSend={(trouble) => press.mutate({ visit: shown, kind: 'trouble', ...trouble }, { onSuccess: close })}
+            onCallOff={(trouble) => press.mutate({ visit: shown, kind: 'call_off', ...trouble }, { onSuccess: close })}
+          />
+        </Suspense>
       ) : null}
       {shown && panel?.kind === 'part_done' ? (
-        <PartDoneSheet
-          visit={shown}
-          isBusy={press.isPending}
-          error={press.error?.message}
-          onClose={close}
-          onSend={(part) => press.mutate({ visit: shown, kind: 'part_done', ...part }, { onSuccess: close })}
-        />
+        <Suspense>
+          <PartDoneSheet
+            visit={shown}
+            isBusy={press.isPending}
+            error={press.error?.message}
+            onClose={close}
+            onSend={(part) => press.mutate({ visit: shown, kind: 'part_done', ...part }, { onSuccess: close })}
+          />
+        </Suspense>
       ) : null}
       {shown && panel?.kind === 'start' ? (
         <Suspense>
@@ -205,7 +212,11 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
           />
         </Suspense>
       ) : null}
-      {shown && panel?.kind === 'tip' ? <TipSheet visit={shown} tipsGoTo={sheet.tipsGoTo} onClose={close} /> : null}
+      {shown && panel?.kind === 'tip' ? (
+        <Suspense>
+          <TipSheet visit={shown} tipsGoTo={sheet.tipsGoTo} onClose={close} />
+        </Suspense>
+      ) : null}
       {shown && panel?.kind === 'look' ? (
         <Sheet title={shown.customerName} onClose={close} width={480}>
           <div className="ph-sheet pb-4">
