@@ -26,6 +26,10 @@ export interface RunningServer {
   /** What it has printed so far, for codes and links that are told in the terminal. */
   output: () => string;
   stop: () => Promise<void>;
+  /** Ends it at once, without a chance to finish anything. */
+  kill: () => Promise<void>;
+  /** Starts it again after `kill`, at the same address, with the same database and folder, its clock gone on. */
+  again: () => Promise<void>;
 }
 
 export interface ServerOptions {
@@ -59,28 +63,38 @@ async function templateFor(postgres: TestPostgres, demo: boolean, now?: string):
 async function launch(database: TestDatabase, { demo, now }: ServerOptions): Promise<RunningServer> {
   const port = await freePort();
   const data = await mkdtemp(join(tmpdir(), 'driprail-e2e-'));
-  const child = spawn(process.execPath, programArguments(), {
-    cwd: root,
-    stdio: ['ignore', 'pipe', 'pipe', 'ipc'],
-    env: {
-      ...process.env,
-      DATABASE_URL: database.appUrl,
-      DATABASE_MIGRATION_URL: database.ownerUrl,
-      PORT: String(port),
-      HOST: '127.0.0.1',
-      DRIPRAIL_DATA: data,
-      DRIPRAIL_DEMO: demo ? '1' : '0',
-      DRIPRAIL_WEB_DIST: webDist,
-      DRIPRAIL_TEST: '1',
-      ...(now && { DRIPRAIL_NOW: now }),
-    },
-  });
+  const began = Date.now();
   let printed = '';
-  for (const stream of [child.stdout, child.stderr]) {
-    stream?.setEncoding('utf8').on('data', (text: string) => (printed += text));
-  }
-  child.on('message', (message) => (printed += JSON.stringify(message)));
-  const exited = new Promise<void>((resolve) => child.once('close', () => resolve()));
+  let child: ChildProcess;
+  let exited: Promise<void>;
+
+  const start = async () => {
+    const at = now && new Date(Date.parse(now) + Date.now() - began).toISOString();
+    child = spawn(process.execPath, programArguments(), {
+      cwd: root,
+      stdio: ['ignore', 'pipe', 'pipe', 'ipc'],
+      env: {
+        ...process.env,
+        DATABASE_URL: database.appUrl,
+        DATABASE_MIGRATION_URL: database.ownerUrl,
+        PORT: String(port),
+        HOST: '127.0.0.1',
+        DRIPRAIL_DATA: data,
+        DRIPRAIL_DEMO: demo ? '1' : '0',
+        DRIPRAIL_WEB_DIST: webDist,
+        DRIPRAIL_TEST: '1',
+        ...(at && { DRIPRAIL_NOW: at }),
+      },
+    });
+    const before = printed.length;
+    for (const stream of [child.stdout, child.stderr]) {
+      stream?.setEncoding('utf8').on('data', (text: string) => (printed += text));
+    }
+    child.on('message', (message) => (printed += JSON.stringify(message)));
+    const running = child;
+    exited = new Promise<void>((resolve) => running.once('close', () => resolve()));
+    await untilReady(child, () => printed.slice(before));
+  };
   const stop = async () => {
     child.kill('SIGTERM');
     const insist = setTimeout(() => child.kill('SIGKILL'), 15_000);
@@ -88,13 +102,17 @@ async function launch(database: TestDatabase, { demo, now }: ServerOptions): Pro
     clearTimeout(insist);
     await rm(data, { recursive: true, force: true });
   };
+  const kill = async () => {
+    child.kill('SIGKILL');
+    await exited;
+  };
   try {
-    await untilReady(child, () => printed);
+    await start();
   } catch (error) {
     await stop();
     throw error;
   }
-  return { url: `http://127.0.0.1:${port}`, database, output: () => printed, stop };
+  return { url: `http://127.0.0.1:${port}`, database, output: () => printed, stop, kill, again: start };
 }
 
 /** `npm test` names the bundle people run; otherwise the sources are run as they are. */

@@ -1,4 +1,5 @@
 import { queryOptions, useMutation, useQueryClient } from '@tanstack/react-query';
+import type { QueryClient } from '@tanstack/react-query';
 import { v4 as uuid } from 'uuid';
 import { getClockAt, getRunSheetAt } from '@driprail/shared/contracts/phone-addresses';
 import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
@@ -31,6 +32,11 @@ export const clockQuery = (userId: string) =>
     queryFn: ({ signal }): Promise<{ clock: ClockStateDto | null }> =>
       orKept(`${userId}:clock`, () => call(getClockAt, {}, signal)),
   });
+
+/** Puts what a dead zone will ask for on the phone: the clock and tomorrow's run sheet. */
+export async function keepDays(client: QueryClient, userId: string, tomorrow: string): Promise<void> {
+  await Promise.all([client.prefetchQuery(clockQuery(userId)), client.prefetchQuery(runSheetQuery(userId, tomorrow))]);
+}
 
 type VisitActionBody = NonNullable<RequestOf<typeof postVisitAction>['body']>;
 /** What was pressed; the key and the time are made with it, so that sending it twice marks once. */

@@ -19,7 +19,7 @@ import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { dismiss, useOutbox } from '../../../lib/outbox/outbox.ts';
 import { useOnline } from '../../../lib/use-online.ts';
-import { runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
+import { keepDays, runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
 import { applyWaiting } from '../components/apply-waiting.ts';
 import { ActionBar } from '../components/action-bar.tsx';
 import { ChangesTape } from '../components/changes-tape.tsx';
@@ -249,6 +249,7 @@ function useMark(
   // Fetched after the first screen has painted, so that a dead zone finds them on the phone.
   const plans = visits.map((visit) => `${visit.id}:${visit.planVersion}`).join(' ');
   useEffect(() => {
+    void keepDays(client, user.id, addDays(today, 1));
     void jobWork().then((work) => work?.keepWork(client, user.id, [today, addDays(today, 1)]));
   }, [client, user.id, today, plans]);
   const visitIds = visits.map((visit) => visit.id).join(' ');
