@@ -14,7 +14,7 @@ import {
 import { PIECE_BYTES } from '@driprail/shared/domain/walk-round/photo-limits';
 import { ApiError, call } from '../call.ts';
 import type { KeptPress } from './store.ts';
-import { fileOf } from './store.ts';
+import { fileOf } from './drafts.ts';
 
 /** From which byte a photo goes on; asked of the server when this run of the app does not know. */
 const offsets = new Map<string, number>();

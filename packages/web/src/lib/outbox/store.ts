@@ -35,7 +35,8 @@ interface PhoneSchema extends DBSchema {
 
 let opened: Promise<IDBPDatabase<PhoneSchema>> | null = null;
 
-function phone(): Promise<IDBPDatabase<PhoneSchema>> {
+/** The phone's own store. */
+export function phone(): Promise<IDBPDatabase<PhoneSchema>> {
   opened ??= openDB<PhoneSchema>('driprail-phone', 2, {
     upgrade(db, from) {
       if (from < 1) {
@@ -64,11 +65,6 @@ export async function keepPress(press: KeptPress, file?: Blob): Promise<void> {
   await Promise.all([...writes, tx.done]);
 }
 
-/** The photo of a press that waits. */
-export async function fileOf(key: string): Promise<Blob | undefined> {
-  return (await phone()).get('files', key);
-}
-
 /** One user's presses in the order in which they were made; another's on the same phone are never touched. */
 export async function keptPresses(userId: string): Promise<KeptPress[]> {
   const own = await (await phone()).getAllFromIndex('presses', 'byUser', userId);
@@ -78,20 +74,6 @@ export async function keptPresses(userId: string): Promise<KeptPress[]> {
 export async function dropPress(key: string): Promise<void> {
   const tx = (await phone()).transaction(['presses', 'files'], 'readwrite');
   await Promise.all([tx.objectStore('presses').delete(key), tx.objectStore('files').delete(key), tx.done]);
-}
-
-/** Keeps what is begun, also when the app is closed; it leaves by being pressed. */
-export async function keepDraft(name: string, value: unknown): Promise<void> {
-  await (await phone()).put('drafts', { value, keptAt: new Date().toISOString() }, name);
-}
-
-export async function readDraft<T>(name: string): Promise<T | null> {
-  const kept = (await (await phone()).get('drafts', name)) as Kept<T> | undefined;
-  return kept?.value ?? null;
-}
-
-export async function dropDraft(name: string): Promise<void> {
-  await (await phone()).delete('drafts', name);
 }
 
 /** A local copy is good for a day and a half; then it is gone, as on a lost phone. */

@@ -1,5 +1,5 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
-import { dropDraft, keepDraft, readDraft } from '../../../lib/outbox/store.ts';
+import { dropDraft, keepDraft, readDraft } from '../../../lib/outbox/drafts.ts';
 
 /**
  * What is begun and not finished, kept on the phone at every change, also when the app is closed.

@@ -41,7 +41,7 @@ export function SecondLook({
         disabled={outcome === null}
         onClick={() => outcome && onAnswer(outcome)}
       >
-        Second look done
+        <span>Second look done</span>
       </button>
     </section>
   );

@@ -8,6 +8,8 @@ import type {
   WalkRoundDto,
   WalkSheetDto,
 } from '@driprail/shared/contracts/walk-round.contract';
+import type { Progress } from '@driprail/shared/domain/board/progress';
+import { progressActions, takeStep } from '@driprail/shared/domain/board/progress';
 import type { KeptPress } from '../../../lib/outbox/store.ts';
 
 /** A photo as a screen shows it. */
@@ -44,12 +46,19 @@ export function withWaiting(sheet: WalkSheetDto, waiting: KeptPress[], by: strin
   };
 }
 
+/** Where a mark goes back to when it is taken back, as far as it matters here. */
+const back: Partial<Record<Progress, Progress>> = { working: 'on_site', part_done: 'working', done: 'working' };
+
 function hasBegun({ progress }: WalkSheetDto, own: KeptPress[]): boolean {
-  const last = own
-    .filter(({ path, body }) => path === 'visit' && ['start_work', 'undo'].includes(String(body['kind'])))
-    .at(-1);
-  if (last) return last.body['kind'] === 'start_work';
-  return progress === 'working' || progress === 'part_done' || progress === 'done';
+  const after = own
+    .filter(({ path }) => path === 'visit')
+    .reduce((from, { body }) => {
+      if (body['kind'] === 'undo') return back[from] ?? from;
+      const action = progressActions.find((known) => known === body['kind']);
+      const step = action && takeStep(from, action);
+      return step?.ok ? step.to : from;
+    }, progress);
+  return after === 'working' || after === 'part_done' || after === 'done';
 }
 
 function withPresses(car: WalkCarDto, presses: KeptPress[], by: string): ShownCar {

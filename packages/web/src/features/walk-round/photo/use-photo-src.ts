@@ -1,5 +1,5 @@
 import { useEffect, useState } from 'react';
-import { fileOf } from '../../../lib/outbox/store.ts';
+import { fileOf } from '../../../lib/outbox/drafts.ts';
 import type { ShownPhoto } from '../components/shown-walk.ts';
 
 /** Where the picture of a photo is: on the server, or still on this phone. Null while it is on another phone. */
