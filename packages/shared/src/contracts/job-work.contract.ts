@@ -80,6 +80,8 @@ export const visitWorkDto = z.object({
   startedAt: instant.nullable(),
   mustKnows: z.array(z.object({ code: z.enum(mustKnowCodes), key: z.string(), words: z.string() })),
   takesKey: z.boolean(),
+  /** Empty where the crew asks, or may not know yet. */
+  keyGoesBack: z.string(),
   lines: z.array(workLineDto),
   events: z.array(workEventDto),
   changes: z.array(jobChangeDto),

@@ -49,3 +49,9 @@ export const visitFrom = `visits v
               FROM visit_lines vl JOIN job_lines l ON l.id = vl.job_line_id JOIN services s ON s.id = l.service_id
              WHERE vl.visit_id = v.id GROUP BY l.vehicle_id) car
       LEFT JOIN walk_rounds w ON w.visit_id = v.id AND w.vehicle_id IS NOT DISTINCT FROM car.vehicle_id) walk`;
+
+/** One's own crew's visits of a day, `:personId` and `:day`, in the zone of `company_settings s`. */
+export const ownDay = `v.planned && tstzrange(:day::timestamp AT TIME ZONE s.zone, (:day::date + 1)::timestamp AT TIME ZONE s.zone)
+  AND (EXISTS (SELECT 1 FROM visit_crew vc WHERE vc.visit_id = v.id AND vc.person_id = :personId)
+    OR (NOT EXISTS (SELECT 1 FROM visit_crew vc WHERE vc.visit_id = v.id)
+      AND EXISTS (SELECT 1 FROM van_crew r WHERE r.van_id = v.van_id AND r.person_id = :personId AND r.span && v.planned)))`;

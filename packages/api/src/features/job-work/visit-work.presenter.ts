@@ -15,7 +15,8 @@ interface Seen {
 
 export function toVisitWork({ visit, extras }: WorkRow, seen: Seen): VisitWorkDto {
   const { mustKnow, crew, next } = extras;
-  const mustKnows = mustKnowsOf({ ...mustKnow, keyGoesBack: isKeyShown(visit, seen) ? mustKnow.keyGoesBack : null });
+  const keyGoesBack = isKeyShown(visit, seen) ? mustKnow.keyGoesBack : null;
+  const mustKnows = mustKnowsOf({ ...mustKnow, keyGoesBack });
   return {
     visitId: visit.id,
     jobNumber: visit.jobNumber,
@@ -27,6 +28,7 @@ export function toVisitWork({ visit, extras }: WorkRow, seen: Seen): VisitWorkDt
     startedAt: extras.startedAt,
     mustKnows,
     takesKey: mustKnow.takesKey,
+    keyGoesBack: keyGoesBack ?? '',
     lines: visit.lines.map((line) => {
       const list = extras.checklists.find((one) => one.lineId === line.id);
       return { ...line, steps: list?.steps ?? [], asksNote: list?.asksNote ?? false };

@@ -7,7 +7,7 @@ import type { WorkEvent } from '@driprail/shared/domain/job-work/fold-work';
 import type { MustKnowFacts } from '@driprail/shared/domain/job-work/must-knows';
 import type { CheckStep } from '@driprail/shared/domain/job-work/step';
 import { select } from '../../db/sequelize.ts';
-import { visitFrom, visitJson } from '../board/index.ts';
+import { ownDay, visitFrom, visitJson } from '../board/index.ts';
 import { changeJson } from './change.sql.ts';
 
 export interface WorkExtras {
@@ -74,13 +74,7 @@ export async function readWorkRows(
   where: { visitId: string } | { personId: string; day: string },
   tx?: Transaction,
 ): Promise<WorkRow[]> {
-  const condition =
-    'visitId' in where
-      ? 'v.id = :visitId'
-      : `v.planned && tstzrange(:day::timestamp AT TIME ZONE s.zone, (:day::date + 1)::timestamp AT TIME ZONE s.zone)
-         AND (EXISTS (SELECT 1 FROM visit_crew vc WHERE vc.visit_id = v.id AND vc.person_id = :personId)
-           OR (NOT EXISTS (SELECT 1 FROM visit_crew vc WHERE vc.visit_id = v.id)
-             AND EXISTS (SELECT 1 FROM van_crew r WHERE r.van_id = v.van_id AND r.person_id = :personId AND r.span && v.planned)))`;
+  const condition = 'visitId' in where ? 'v.id = :visitId' : ownDay;
   const rows = await select<{ visit: z.input<typeof visitDto>; extras: WorkExtras }>(
     `SELECT ${visitJson} AS visit, ${workJson} AS extras FROM ${visitFrom} CROSS JOIN company_settings s
       WHERE ${condition} ORDER BY lower(v.planned), v.id`,

@@ -7,7 +7,7 @@ import { isAccessOpen } from '@driprail/shared/domain/board/access-notes';
 import type { ProgressAction } from '@driprail/shared/domain/board/progress';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { select } from '../../db/sequelize.ts';
-import { visitFrom, visitJson } from '../board/index.ts';
+import { ownDay, visitFrom, visitJson } from '../board/index.ts';
 
 interface Extras {
   gateCode: string;
@@ -27,13 +27,7 @@ export async function readRunRows(
   where: { personId: string; day: string } | { visitId: string },
   tx?: Transaction,
 ): Promise<RunRow[]> {
-  const condition =
-    'visitId' in where
-      ? 'v.id = :visitId'
-      : `v.planned && tstzrange(:day::timestamp AT TIME ZONE s.zone, (:day::date + 1)::timestamp AT TIME ZONE s.zone)
-         AND (EXISTS (SELECT 1 FROM visit_crew vc WHERE vc.visit_id = v.id AND vc.person_id = :personId)
-           OR (NOT EXISTS (SELECT 1 FROM visit_crew vc WHERE vc.visit_id = v.id)
-             AND EXISTS (SELECT 1 FROM van_crew r WHERE r.van_id = v.van_id AND r.person_id = :personId AND r.span && v.planned)))`;
+  const condition = 'visitId' in where ? 'v.id = :visitId' : ownDay;
   const at = (kind: string) =>
     `(SELECT to_json(max(e.occurred_at)) #>> '{}' FROM visit_events e WHERE e.visit_id = v.id AND NOT e.is_undone AND e.kind IN (${kind}))`;
   const rows = await select<{ visit: z.input<typeof visitDto>; extras: Extras }>(

@@ -7,7 +7,7 @@ import { usePressWork } from '../api/work.queries.ts';
 import { PressFault } from './press-fault.tsx';
 import type { WorkView } from './work-view.ts';
 
-const places = ['To the customer', 'Lockbox', 'Front desk', 'Where it lay'] as const;
+const places = ['To the customer', 'Lockbox', 'Front desk', 'Where it lay'];
 
 /** The customer's key: taken, with where it goes back, and handed back. Until then the desk has it on its list. */
 export function KeyRow({ view, at }: { view: WorkView; at: AtVisit }) {
@@ -15,6 +15,7 @@ export function KeyRow({ view, at }: { view: WorkView; at: AtVisit }) {
   const press = usePressWork(at);
   const [isTaking, setTaking] = useState(false);
   const { keyOut } = view.state;
+  const known = view.work.keyGoesBack;
   if (keyOut)
     return (
       <div className="wk-key is-out">
@@ -41,7 +42,7 @@ export function KeyRow({ view, at }: { view: WorkView; at: AtVisit }) {
             <b>Where does the key go back?</b>
           </p>
           <Picks
-            options={places}
+            options={known ? [known, ...places] : places}
             value={null}
             className="grid grid-cols-2 gap-2"
             onPick={(place) => {
