@@ -34,7 +34,7 @@ export function PartNav({
             {of === part ? <i className="bead" aria-hidden /> : null}
             <button type="button" aria-current={of === part ? 'step' : undefined} onClick={() => onGo(of)}>
               {names[of]}
-              <small>{left(of) === 0 ? 'done' : `${left(of)} left`}</small>
+              <small>{left(of) === 0 ? 'done' : of === 'marks' ? 'to answer' : `${left(of)} left`}</small>
             </button>
           </li>
         ))}
