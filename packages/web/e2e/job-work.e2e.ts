@@ -51,7 +51,6 @@ describe('a change at the car', () => {
     await phone.getByRole('link', { name: 'Change' }).click();
     await phone.getByRole('button', { name: 'Change the job' }).click();
     await phone.getByRole('button', { name: 'Add a service' }).click();
-    await phone.getByRole('button', { name: /^navy 2020 minivan/ }).click();
     await phone.getByRole('button', { name: /^Odor treatment/ }).click();
     await phone.getByText('In the way.').first().waitFor();
     await phone.getByRole('button', { name: 'Customer asked' }).click();

@@ -86,7 +86,7 @@ const jobPath = (part: string, isIt: (work: { progress: string; mustKnows: objec
 const isWorking = (work: { progress: string }) => work.progress === 'working';
 
 async function openChange(page: Page): Promise<void> {
-  for (const name of ['Change the job', 'Add a service', /minivan$/, /^Odor treatment/])
+  for (const name of ['Change the job', 'Add a service', /^Odor treatment/])
     await page.getByRole('button', { name }).first().click();
 }
 

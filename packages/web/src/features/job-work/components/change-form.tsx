@@ -30,7 +30,8 @@ export function ChangeForm({ facts, at, now, onDone }: ChangeFormProps) {
   const [lineId, setLineId] = useState<string | null>(null);
   const [change, setChange] = useState<Change | null>(null);
   const open = facts.lines.filter((line) => !line.isFinished);
-  const line = open.find((one) => one.id === (lineId ?? (open.length === 1 ? open[0]?.id : null)));
+  const choices = kind === 'add' ? firstOfEachCar(open) : open.map((one) => one.id);
+  const line = open.find((one) => one.id === (choices.length === 1 ? choices[0] : lineId));
   const pickKind = (next: Kind) => {
     setKind(next);
     setChange(next === 'drop' && line ? { kind: 'drop', lineId: line.id } : null);
@@ -54,11 +55,11 @@ export function ChangeForm({ facts, at, now, onDone }: ChangeFormProps) {
         nameOf={(one) => kindNames[one]}
         className="grid grid-cols-2 gap-2 my-2"
       />
-      {kind && open.length > 1 ? (
+      {kind && choices.length > 1 ? (
         <>
           <h2 className="sec">{kind === 'add' ? 'On which car' : 'Which service'}</h2>
           <Picks
-            options={kind === 'add' ? firstOfEachCar(open) : open.map((one) => one.id)}
+            options={choices}
             value={line?.id ?? null}
             onPick={pickLine}
             nameOf={(id) => (kind === 'add' ? carOf(open, id) : (names.get(id) ?? ''))}
