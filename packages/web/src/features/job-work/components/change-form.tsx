@@ -33,8 +33,10 @@ export function ChangeForm({ facts, at, now, onDone }: ChangeFormProps) {
   const choices = kind === 'add' ? firstOfEachCar(open) : open.map((one) => one.id);
   const line = open.find((one) => one.id === (choices.length === 1 ? choices[0] : lineId));
   const pickKind = (next: Kind) => {
+    const only = open.length === 1 ? open[0] : undefined;
     setKind(next);
-    setChange(next === 'drop' && line ? { kind: 'drop', lineId: line.id } : null);
+    setLineId(null);
+    setChange(next === 'drop' && only ? { kind: 'drop', lineId: only.id } : null);
   };
   const pickLine = (id: string) => {
     setLineId(id);
