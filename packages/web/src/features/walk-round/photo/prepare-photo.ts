@@ -65,6 +65,8 @@ async function drawn(picture: ImageBitmap): Promise<Blob> {
 }
 
 async function hashOf(blob: Blob): Promise<string> {
+  // Browsers leave it out of pages that came without https.
+  if (!window.isSecureContext) throw new PhotoFault('Photos need an https address. Ask the owner for it.');
   const hash = await crypto.subtle.digest('SHA-256', await blob.arrayBuffer());
   return [...new Uint8Array(hash)].map((byte) => byte.toString(16).padStart(2, '0')).join('');
 }

@@ -38,8 +38,8 @@ export function useTaking(pressing: ReturnType<typeof useWalkPress>, vehicleId: 
       const facts = { vehicleId, view, moment, bytes: blob.size, sha256 };
       await keep(view, pressing.photo(facts, blob, `Photo, ${photoViewNames[view].toLowerCase()}`));
     } catch (error) {
-      if (!(error instanceof PhotoFault)) throw error;
-      setFaults((all) => [...all, { view, message: error.message, retry: null }]);
+      const message = error instanceof PhotoFault ? error.message : 'That photo can’t be read. Take it again.';
+      setFaults((all) => [...all, { view, message, retry: null }]);
     } finally {
       setBusy(false);
     }
