@@ -3,7 +3,7 @@ import * as clock from './clock.contract.ts';
 import * as hours from './hours.contract.ts';
 import * as jobWork from './job-work.contract.ts';
 import * as jobs from './jobs.contract.ts';
-import * as openWork from './open-work-addresses.ts';
+import * as openWorkAddresses from './open-work-addresses.ts';
 import * as addresses from './phone-addresses.ts';
 import * as push from './push.contract.ts';
 import * as runSheet from './run-sheet.contract.ts';
@@ -16,7 +16,7 @@ const contracts: Record<string, unknown> = {
   ...{ ...runSheet, ...session, ...walkRound },
 };
 
-test.each(Object.entries({ ...addresses, ...walkAddresses }))(
+test.each(Object.entries({ ...addresses, ...openWorkAddresses, ...walkAddresses }))(
   '%s is where its contract says',
   (name, { method, path }) => {
     expect(contracts[name.replace(/At$/, '')]).toMatchObject({ method, path });
