@@ -21,6 +21,14 @@ export const clockEntryDto = z.object({
 });
 export type ClockEntryDto = z.infer<typeof clockEntryDto>;
 
+/** Somebody who rides along now, and whether that clock runs. */
+export const crewClockDto = z.object({
+  personId: id,
+  name: z.string(),
+  kind: z.enum(clockKinds).nullable(),
+  since: instant.nullable(),
+});
+
 export const clockStateDto = z.object({
   personId: id,
   open: clockEntryDto.nullable(),
@@ -29,6 +37,8 @@ export const clockStateDto = z.object({
   todayMinutes: z.int(),
   weekMinutes: z.int(),
   forgotten: z.array(clockEntryDto),
+  /** Who rides in the same van now. */
+  crew: z.array(crewClockDto).default([]),
 });
 export type ClockStateDto = z.infer<typeof clockStateDto>;
 
@@ -48,6 +58,8 @@ export const postClockAction = endpoint({
     key: z.uuid(),
     action: z.enum(['start', 'stop']),
     kind: z.enum(clockKinds).optional(),
+    /** Somebody who rides along; left out: oneself. It is marked as pressed by another. */
+    forPersonId: id.optional(),
     deviceAt: instant,
     offsetMs: z.int().default(0),
   }),

@@ -61,7 +61,20 @@ export async function clockOfPerson(personId: string, now: Date, tx?: Transactio
     todayMinutes: workedMinutes(today, now),
     weekMinutes: workedMinutes(week, now),
     forgotten: open?.isForgotten ? [open] : [],
+    crew: await crewOf(personId, now, tx),
   };
+}
+
+/** Who rides in the same van as a person now, with what their clocks show. */
+export function crewOf(personId: string, now: Date, tx?: Transaction): Promise<ClockStateDto['crew']> {
+  return select(
+    `SELECT p.id AS "personId", p.name, e.kind, to_json(e.started_at) #>> '{}' AS since
+       FROM van_crew own JOIN van_crew o ON o.van_id = own.van_id AND o.person_id <> own.person_id AND o.span @> :now::timestamptz
+       JOIN people p ON p.id = o.person_id LEFT JOIN clock_entries e ON e.person_id = p.id AND e.ended_at IS NULL
+      WHERE own.person_id = :personId AND own.span @> :now::timestamptz ORDER BY o.position`,
+    { personId, now: now.toISOString() },
+    tx,
+  );
 }
 
 async function openEntry(personId: string, now: Date, tx?: Transaction): Promise<ClockEntryDto | null> {

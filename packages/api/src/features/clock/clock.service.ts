@@ -14,38 +14,60 @@ import type { Ctx } from '../../http/context.ts';
 import { AppError, conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { takeOnce } from '../../http/once.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
-import { clockOfPerson, findEntry } from './clock.queries.ts';
+import { clockOfPerson, crewOf, findEntry } from './clock.queries.ts';
 import { switchClock } from './switch-clock.ts';
 
 export interface ClockPress {
   key: string;
   action: 'start' | 'stop';
   kind?: ClockKindName | undefined;
+  forPersonId?: string | undefined;
   deviceAt: string;
   offsetMs: number;
 }
 
-/** One press on one's own clock, taken once. @throws 422 without a person behind the login */
+/**
+ * One press on one's own clock, or on that of somebody who rides along, taken once; the latter is marked and audited.
+ * @throws 422 without a person behind the login, or for somebody who does not ride along
+ */
 export async function pressClock(ctx: Ctx, press: ClockPress): Promise<{ clock: ClockStateDto; isRepeat: boolean }> {
-  const personId = ctx.actor.personId;
-  if (!personId) throw unprocessable('no_person', 'This login belongs to nobody on the crew, so it has no clock.');
-  authorize(ctx.ability, 'create', tag('ClockEntry', { id: '', personId }));
+  const ownId = ctx.actor.personId;
+  if (!ownId) throw unprocessable('no_person', 'This login belongs to nobody on the crew, so it has no clock.');
+  authorize(ctx.ability, 'create', tag('ClockEntry', { id: '', personId: ownId }));
   const times = stamp(press.deviceAt, press.offsetMs, ctx.now());
+  const personId = press.forPersonId ?? ownId;
+  const isOther = personId !== ownId;
   const { answer, isRepeat } = await takeOnce<ClockStateDto>(ctx, press.key, press, async (tx) => {
+    if (isOther) await refuseStranger(tx, ownId, personId, new Date(times.occurredAt));
     const running = await ClockEntry.findOne({ where: { personId, endedAt: null }, transaction: tx });
     if (press.action === 'stop' && !running) {
+      const message = isOther ? 'That person is not on the clock.' : 'You are not on the clock.';
       return {
-        refused: new AppError(409, 'clash', 'You are not on the clock.', {
-          hint: { current: await clockOfPerson(personId, ctx.now(), tx) },
-        }),
+        refused: new AppError(409, 'clash', message, { hint: { current: await clockOfPerson(ownId, ctx.now(), tx) } }),
       };
     }
     const kind = press.action === 'stop' ? null : (press.kind ?? 'shop');
     const visitId = kind === 'job' || kind === 'travel' ? (running?.visitId ?? null) : null;
-    await switchClock(tx, personId, { kind, visitId, at: new Date(times.occurredAt), isCorrected: times.isCorrected });
-    return { answer: await clockOfPerson(personId, ctx.now(), tx) };
+    await switchClock(tx, personId, {
+      ...{ kind, visitId, at: new Date(times.occurredAt), isCorrected: times.isCorrected },
+      ...(isOther && { note: `Pressed by ${ctx.name}` }),
+    });
+    if (isOther) {
+      await audit(tx, { userId: ctx.actor.userId, at: ctx.now() }, 'clock_entry', personId, 'pressed for another', {
+        kind: kind ?? 'clock out',
+        at: times.occurredAt,
+      });
+      hintAfterCommit(tx, [{ personIds: [ownId] }], 'clock', ownId);
+    }
+    return { answer: await clockOfPerson(ownId, ctx.now(), tx) };
   });
   return { clock: answer, isRepeat };
+}
+
+async function refuseStranger(tx: Transaction, ownId: string, personId: string, at: Date): Promise<void> {
+  const crew = await crewOf(ownId, at, tx);
+  if (crew.some((member) => member.personId === personId)) return;
+  throw unprocessable('not_riding', 'Only somebody who rides with you now. The shop can set other clocks.');
 }
 
 export type Span = EntrySpan;

@@ -110,3 +110,32 @@ describe('a correction', () => {
       .expect(403);
   });
 });
+
+describe('a crew mate’s clock', () => {
+  test('is pressed by somebody who rides along, marked as such, and by nobody else', async () => {
+    const { idris, sefa: own } = company.people;
+    const at = '2026-05-14T16:00:00Z';
+    app.time.now = at;
+    const body = { action: 'start', kind: 'shop', deviceAt: at, forPersonId: idris.id };
+    const stranger = await sefa
+      .post('/api/clock/actions')
+      .send({ key: uuid(), ...body })
+      .expect(422);
+    expect(stranger.body).toMatchObject({ error: { code: 'not_riding' } });
+
+    const shift = { from: '2026-05-14T15:30:00Z', to: '2026-05-14T22:00:00Z' };
+    const crew = [own.id, idris.id].map((personId) => ({ personId, ...shift }));
+    await dispatcher.put(`/api/vans/${company.vans.plover.id}/crew/2026-05-14`).send({ members: [] }).expect(200);
+    await dispatcher.put(`/api/vans/${company.vans.gannet.id}/crew/2026-05-14`).send({ members: crew }).expect(200);
+    const pressed = await sefa
+      .post('/api/clock/actions')
+      .send({ key: uuid(), ...body })
+      .expect(200);
+    expect(state(pressed.body).crew).toEqual([
+      { personId: idris.id, name: 'Idris Vale', kind: 'shop', since: '2026-05-14T16:00:00.000Z' },
+    ]);
+    const mate = await company.idris();
+    const seen = state((await mate.get('/api/clock').expect(200)).body);
+    expect(seen.open).toMatchObject({ kind: 'shop', note: 'Pressed by Sefa Lund' });
+  });
+});

@@ -11,24 +11,30 @@ export interface ClockSwitch {
   visitId: string | null;
   at: Date;
   isCorrected?: boolean;
+  /** Who pressed, when it was not the person: stays with the entry. */
+  note?: string;
 }
 
 /** Ends what runs on a person's clock and starts the next kind of time, to the second. */
 export async function switchClock(
   tx: Transaction,
   personId: string,
-  { kind, visitId, at, isCorrected = false }: ClockSwitch,
+  { kind, visitId, at, isCorrected = false, note }: ClockSwitch,
 ): Promise<void> {
   const open = await ClockEntry.findOne({ where: { personId, endedAt: null }, transaction: tx, lock: tx.LOCK.UPDATE });
   if (open && open.kind === kind && open.visitId === visitId) return;
   if (open) {
     // A press that arrives late may lie before the entry it ends: then that entry lasted no time.
     const endedAt = at < open.startedAt ? open.startedAt : at;
-    await open.update({ endedAt, version: open.version + 1 }, { transaction: tx });
+    const ending = note !== undefined && kind === null ? { note } : {};
+    await open.update({ endedAt, version: open.version + 1, ...ending }, { transaction: tx });
   }
   if (kind) {
     const startedAt = open && at < open.startedAt ? open.startedAt : at;
-    await ClockEntry.create({ id: uuid(), personId, kind, visitId, startedAt, isCorrected }, { transaction: tx });
+    await ClockEntry.create(
+      { id: uuid(), personId, kind, visitId, startedAt, isCorrected, note: note ?? '' },
+      { transaction: tx },
+    );
   }
   hintAfterCommit(tx, ['desk', { personIds: [personId] }], 'clock', personId);
 }

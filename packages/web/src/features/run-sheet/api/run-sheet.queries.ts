@@ -67,13 +67,22 @@ function wordsOf(kind: VisitActionBody['kind']): string {
   return kind === 'trouble' ? 'Trouble' : actionNames[kind];
 }
 
+interface ClockPress {
+  action: 'start' | 'stop';
+  kind?: ClockKindName;
+  /** Somebody who rides along; left out: oneself. */
+  mate?: { personId: string; name: string };
+}
+
+/** Presses one's own clock, or that of somebody who rides along. */
 export function usePressClock() {
   const client = useQueryClient();
   return useMutation({
     networkMode: 'always',
-    mutationFn: (action: { action: 'start' | 'stop'; kind?: ClockKindName }) => {
-      const body = { ...stamped(), ...action };
-      const words = action.action === 'stop' ? 'Clock out' : `Clock: ${action.kind ?? 'in'}`;
+    mutationFn: ({ mate, ...action }: ClockPress) => {
+      const body = { ...stamped(), ...action, ...(mate && { forPersonId: mate.personId }) };
+      const done = action.action === 'stop' ? 'Clock out' : `Clock: ${action.kind ?? 'in'}`;
+      const words = mate ? `${done}, ${mate.name}` : done;
       return press(client, { key: body.key, path: 'clock', targetId: '', body, words });
     },
   });

@@ -66,6 +66,18 @@ describe('what waits on the phone', () => {
       shown(press('clock', { action: 'start', kind: 'travel' }), press('clock', { action: 'stop' })).clock,
     ).toMatchObject({ open: null, today: [{ endedAt: NOW }] });
   });
+  test('a crew mate’s press leaves one’s own clock alone', () => {
+    const mate = { personId: 'm', name: 'Juno', kind: null, since: null };
+    const clock = { personId: 'p', open: null, inSince: null, today: [], crew: [mate] };
+    const withMate = { ...sheet, clock } as unknown as RunSheetDto;
+    const start = press('clock', { action: 'start', forPersonId: 'm' });
+    expect(applyWaiting(withMate, [start], NOW).clock).toMatchObject({
+      open: null,
+      crew: [{ kind: 'shop', since: NOW }],
+    });
+    const stop = press('clock', { action: 'stop', forPersonId: 'm' });
+    expect(applyWaiting(withMate, [start, stop], NOW).clock).toMatchObject({ crew: [{ kind: null, since: null }] });
+  });
   test('a kept copy hides gate code and number after the day, as the server does', () => {
     expect(shown().visits[0]?.gateCode).toBe('4471');
     expect(applyWaiting(sheet, [], '2026-05-15T04:00:00.000Z').visits[0]).toMatchObject({

@@ -75,9 +75,24 @@ function applyToVisit(visit: RunVisitDto, { body }: KeptPress): RunVisitDto {
   };
 }
 
-/** The clock with what waits on this phone. */
+/** The clock, and those of who rides along, with what waits on this phone. */
 export function applyToClocks(clock: ClockStateDto, waiting: KeptPress[]): ClockStateDto {
-  return waiting.filter((press) => press.path === 'clock').reduce(applyToClock, clock);
+  return waiting
+    .filter((press) => press.path === 'clock')
+    .reduce((shown, press) => (press.body['forPersonId'] ? applyToMate : applyToClock)(shown, press), clock);
+}
+
+/** @param clock its `crew` may be missing where the phone kept it before there was such a list */
+function applyToMate({ crew = [], ...clock }: ClockStateDto, { body }: KeptPress): ClockStateDto {
+  const isIn = body['action'] === 'start';
+  const pressed = {
+    kind: isIn ? ((body['kind'] as ClockKindName | undefined) ?? 'shop') : null,
+    since: isIn ? (body['deviceAt'] as string) : null,
+  };
+  return {
+    ...clock,
+    crew: crew.map((mate) => (mate.personId === body['forPersonId'] ? { ...mate, ...pressed } : mate)),
+  };
 }
 
 function applyToClock(clock: ClockStateDto, { key, body }: KeptPress): ClockStateDto {

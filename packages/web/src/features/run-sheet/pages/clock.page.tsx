@@ -17,6 +17,7 @@ import { useNow } from '../../../lib/now.ts';
 import { clockQuery, usePressClock } from '../api/run-sheet.queries.ts';
 import { applyToClocks } from '../components/apply-waiting.ts';
 import { ChangeSheet } from '../components/change-sheet.tsx';
+import { CrewClocks } from '../components/crew-clocks.tsx';
 import { OwnHours } from '../components/own-hours.tsx';
 import { PhoneHead } from '../components/phone-head.tsx';
 import './run-sheet.css';
@@ -104,6 +105,7 @@ function Clock({ clock: kept, now }: { clock: ClockStateDto; now: string }) {
           </button>
         ))}
       </div>
+      <CrewClocks crew={clock.crew} />
       <OwnHours today={dayOf(now, format.zone)} personId={clock.personId} />
       <h2 className="sec">
         Today <span>press one that is not right</span>
