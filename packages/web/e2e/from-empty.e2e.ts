@@ -67,7 +67,7 @@ test('a van, two people and a service with prices are added', async () => {
   await fill(dialog('New service'), { Name: 'Hand wash' });
   await fill(dialog('New service').getByRole('group', { name: 'Sedan' }), { Price: '90.00', Minutes: '60' });
   await save(dialog('New service'), 'Add service');
-  await owner.getByRole('cell', { name: /Hand wash/ }).waitFor();
+  await owner.getByRole('button', { name: 'Steps of Hand wash' }).waitFor();
 });
 
 test('a customer comes in through the job form, and the job is booked', async () => {

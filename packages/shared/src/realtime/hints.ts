@@ -2,7 +2,18 @@
 export const hintEvent = 'hint';
 
 export type HintEntity =
-  'visit' | 'work' | 'job' | 'crew' | 'customer' | 'person' | 'van' | 'service' | 'clock' | 'settings' | 'pay' | 'login';
+  | 'visit'
+  | 'work'
+  | 'job'
+  | 'crew'
+  | 'customer'
+  | 'person'
+  | 'van'
+  | 'service'
+  | 'clock'
+  | 'settings'
+  | 'pay'
+  | 'login';
 
 export interface Hint {
   entity: HintEntity;
