@@ -15,6 +15,7 @@ import { idsFrom, noRows } from './rows.ts';
 import { writeTimeOffPay } from './time-off-rows.ts';
 import { writeToday } from './today.ts';
 import { writeVans } from './vans.ts';
+import { writeWalkRounds } from './walk-rows.ts';
 import { writeWork } from './work-rows.ts';
 
 export interface Demo {
@@ -34,6 +35,7 @@ export function buildDemo(now: Date): Demo {
   rows.settings.push({
     ...{ id: 1, name: 'Tern & Tide Mobile Detailing', phone: '555-0100', email: 'desk@ternandtide.example' },
     ...{ zone: ZONE, clock: '12', units: 'us', dayStartsAt: '07:30', dayEndsAt: '18:00' },
+    mealReminderMinutes: 300,
   });
   const people = writePeople(rows, ids, calendar.rulesFrom);
   writeTimeOff(rows, ids, calendar, people);
@@ -53,6 +55,7 @@ export function buildDemo(now: Date): Demo {
   writePlans(book, people);
   writeTimeOffPay(book, people);
   writeWork(book, people);
+  writeWalkRounds(book);
   rows.jobs.sort((a, b) => a.createdAt.getTime() - b.createdAt.getTime());
   return { calendar, rows, ownerUserId: people.ownerUserId };
 }

@@ -2,6 +2,8 @@ import { beforeAll, describe, expect, test } from 'vitest';
 import { validate, version } from 'uuid';
 import { addDays, dayOf, weekdayOf } from '@driprail/shared/domain/time/zone';
 import { estimateTravel } from '@driprail/shared/domain/board/travel';
+import { lackingIn } from '@driprail/shared/domain/walk-round/lacking';
+import { placeAt } from '@driprail/shared/domain/walk-round/places';
 import { buildDemo } from './build-demo.ts';
 import type { Demo } from './build-demo.ts';
 import { ZONE, nextWorkDays } from './calendar.ts';
@@ -177,6 +179,33 @@ describe.each([
     const pairs = groupBy(visits, (visit) => visit.stopId).filter((group) => group.length > 1);
     expect(pairs.map((group) => group.length)).toEqual([2]);
     expect(new Set(at(pairs, 0).map((visit) => `${visit.vanId} ${from(visit)}`)).size).toBe(1);
+  });
+
+  test('crews of the last week walked round the car before work, and each mark lies where its words say', () => {
+    const starts = rows.visitEvents.filter(({ kind }) => kind === 'start_work');
+    const week = starts.filter(
+      ({ occurredAt }) => occurredAt.getTime() > demo.calendar.asOf.getTime() - 7 * 86_400_000,
+    );
+    const walked = new Map(rows.walkRounds.map((round) => [round.visitId, round]));
+    expect(week.filter(({ visitId, reason }) => (reason === '') !== walked.has(visitId))).toEqual([]);
+    for (const round of rows.walkRounds) {
+      const start = starts.find(({ visitId }) => visitId === round.visitId);
+      expect(round.occurredAt.getTime()).toBeLessThan(start?.occurredAt.getTime() ?? 0);
+      const facts = { paint: null, interior: null, hasItems: null, mayMove: null, initials: null, ...round };
+      expect(lackingIn({ missingReason: '', absentReason: '', photoViews: [], ...facts }, 'quick')).toEqual({});
+    }
+    expect(rows.walkMarks.filter(({ x, y, place }) => placeAt(x, y) !== place)).toEqual([]);
+  });
+
+  test('a car that came again has the marks of last time answered', () => {
+    const marks = new Map(rows.walkMarks.map((mark) => [mark.id, mark]));
+    const carried = rows.walkMarks.filter((mark) => mark.carriedFrom);
+    expect(carried.length).toBeGreaterThan(0);
+    for (const mark of carried) {
+      const last = marks.get(mark.carriedFrom ?? '');
+      expect(last).toMatchObject({ vehicleId: mark.vehicleId, place: mark.place, kind: mark.kind });
+      expect(last?.occurredAt.getTime()).toBeLessThan(mark.occurredAt.getTime());
+    }
   });
 
   test('planned starts keep the promise', () => {

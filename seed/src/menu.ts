@@ -1,5 +1,6 @@
 import type { Equipment, SizeClass, Skill } from '@driprail/shared/contracts/fields';
 import { sizeClasses } from '@driprail/shared/contracts/fields';
+import { usualPhotoSet } from '@driprail/shared/domain/walk-round/views';
 import type { DemoRows } from './rows.ts';
 
 export interface MenuEntry {
@@ -140,7 +141,10 @@ export function writeMenu(rows: DemoRows, ids: () => string, startsOn: string): 
     const { skills = [], equipment = [] } = entry as Needs;
     const id = ids();
     const { name, kind, description } = entry;
-    rows.services.push({ id, name, kind, description, skills: [...skills], equipment: [...equipment], position });
+    rows.services.push({
+      ...{ id, name, kind, description, position, photoSet: usualPhotoSet(kind) },
+      ...{ skills: [...skills], equipment: [...equipment] },
+    });
     const prices: MenuEntry['prices'] = {};
     for (const [index, sizeClass] of sizeClasses.entries()) {
       const [dollars, minutes] = [entry.dollars[index], entry.minutes[index]];

@@ -47,6 +47,9 @@ export interface DemoRows {
   serviceChecklists: Row<models.ServiceChecklist>[];
   workEvents: Row<models.WorkEventRow>[];
   jobChanges: Row<models.JobChange>[];
+  walkRounds: Row<models.WalkRound>[];
+  walkMarks: Row<models.WalkMark>[];
+  walkLooks: Row<models.WalkLook>[];
 }
 
 export function noRows(): DemoRows {
@@ -84,6 +87,9 @@ export function noRows(): DemoRows {
     serviceChecklists: [],
     workEvents: [],
     jobChanges: [],
+    walkRounds: [],
+    walkMarks: [],
+    walkLooks: [],
   };
 }
 

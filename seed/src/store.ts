@@ -1,6 +1,7 @@
 import * as models from '@driprail/api/db/models/index';
 import { inTransaction } from '@driprail/api/db/sequelize';
 import type { DemoRows } from './rows.ts';
+import { storeVisits } from './store-visits.ts';
 
 /**
  * Writes all rows in one transaction, so that a seeding cut short leaves an empty database behind. The services, one
@@ -25,7 +26,7 @@ export function storeRows(rows: DemoRows, passwordHash: string): Promise<void> {
     await models.ServicePrice.bulkCreate(rows.servicePrices, options);
     await models.Job.bulkCreate(rows.jobs, options);
     await models.Stop.bulkCreate(rows.stops, options);
-    await models.Visit.bulkCreate(rows.visits, options);
+    await storeVisits(rows, transaction);
     await models.JobLine.bulkCreate(rows.jobLines, options);
     await models.VisitLine.bulkCreate(rows.visitLines, options);
     await models.VisitCrew.bulkCreate(rows.visitCrew, options);
