@@ -39,6 +39,10 @@ export const clockStateDto = z.object({
   forgotten: z.array(clockEntryDto),
   /** Who rides in the same van now. */
   crew: z.array(crewClockDto).default([]),
+  /** The house's rule for reminding of breaks. */
+  breaks: z
+    .object({ mealAfterMinutes: z.int().nullable(), restAfterMinutes: z.int().nullable() })
+    .default({ mealAfterMinutes: null, restAfterMinutes: null }),
 });
 export type ClockStateDto = z.infer<typeof clockStateDto>;
 

@@ -21,6 +21,9 @@ export const settingsDto = z.object({
   statementMailShowsFigures: z.boolean(),
   /** What a crew calls in an emergency. */
   emergencyNumber: phone.min(2, 'Give the emergency number of the place, like 911.').default('911'),
+  /** Minutes of work without a break after which the phone reminds; null: it does not. Places differ, the owner sets it. */
+  mealReminderMinutes: z.int().min(60).max(720).nullable().default(null),
+  restReminderMinutes: z.int().min(30).max(720).nullable().default(null),
   version: z.int(),
 });
 export type SettingsDto = z.infer<typeof settingsDto>;

@@ -1,11 +1,12 @@
 import type { Migration } from '../migration.ts';
 import { company } from './2026-12-01-001-company.ts';
 import { work } from './2026-12-01-002-work.ts';
+import { pay } from './2026-12-01-003-pay.ts';
 import { hours } from './2026-12-01-004-hours.ts';
 import { payPlans } from './2026-12-01-005-pay-plans.ts';
-import { commissionWhenPaid } from './2026-12-01-008-commission-when-paid.ts';
-import { paidTimeOff } from './2026-12-01-007-paid-time-off.ts';
 import { paydays } from './2026-12-01-006-paydays.ts';
+import { paidTimeOff } from './2026-12-01-007-paid-time-off.ts';
+import { commissionWhenPaid } from './2026-12-01-008-commission-when-paid.ts';
 import { payFacts } from './2026-12-01-009-pay-facts.ts';
 import { checkedFigures } from './2026-12-01-010-checked-figures.ts';
 import { lockedRecords } from './2026-12-01-011-locked-records.ts';
@@ -13,7 +14,7 @@ import { walkRounds } from './2026-12-01-012-walk-rounds.ts';
 import { jobWork } from './2026-12-01-013-job-work.ts';
 import { payIndexes } from './2026-12-01-014-pay-indexes.ts';
 import { phone } from './2026-12-01-015-phone.ts';
-import { pay } from './2026-12-01-003-pay.ts';
+import { breakReminders } from './2026-12-01-016-break-reminders.ts';
 
 /** In the order in which they are run. */
 export const migrations: Migration[] = [
@@ -32,4 +33,5 @@ export const migrations: Migration[] = [
   jobWork,
   payIndexes,
   phone,
+  breakReminders,
 ];

@@ -15,6 +15,8 @@ export class CompanySettings extends Model<InferAttributes<CompanySettings>, Inf
   declare reasonKinds: CreationOptional<string[]>;
   declare statementMailShowsFigures: CreationOptional<boolean>;
   declare emergencyNumber: CreationOptional<string>;
+  declare mealReminderMinutes: CreationOptional<number | null>;
+  declare restReminderMinutes: CreationOptional<number | null>;
   declare version: CreationOptional<number>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -35,6 +37,8 @@ export function initCompanySettings(sequelize: Sequelize): void {
       reasonKinds: { type: DataTypes.ARRAY(DataTypes.TEXT) },
       statementMailShowsFigures: { type: DataTypes.BOOLEAN },
       emergencyNumber: { type: DataTypes.TEXT },
+      mealReminderMinutes: { type: DataTypes.INTEGER },
+      restReminderMinutes: { type: DataTypes.INTEGER },
       version: { type: DataTypes.INTEGER },
       updatedAt: { type: DataTypes.DATE },
     },

@@ -40,8 +40,9 @@ export async function findEntry(id: string, now: Date, tx?: Transaction): Promis
 
 /** One person's clock now. Minutes leave meal breaks out; what the law makes of a short one is the pay week's to say. */
 export async function clockOfPerson(personId: string, now: Date, tx?: Transaction): Promise<ClockStateDto> {
-  const [frame] = await select<{ today: string; weekStart: string; zone: string }>(
-    `SELECT (:now::timestamptz AT TIME ZONE s.zone)::date::text AS today, s.zone,
+  const [frame] = await select<{ today: string; weekStart: string; breaks: ClockStateDto['breaks'] }>(
+    `SELECT (:now::timestamptz AT TIME ZONE s.zone)::date::text AS today,
+            json_build_object('mealAfterMinutes', s.meal_reminder_minutes, 'restAfterMinutes', s.rest_reminder_minutes) AS breaks,
             ((:now::timestamptz AT TIME ZONE s.zone)::date - ((extract(isodow FROM (:now::timestamptz AT TIME ZONE s.zone))::int
               - coalesce((SELECT workweek_starts_on FROM pay_rules WHERE starts_on <= (:now::timestamptz AT TIME ZONE s.zone)::date
                  ORDER BY starts_on DESC LIMIT 1), 1) + 7) % 7))::text AS "weekStart"
@@ -62,6 +63,7 @@ export async function clockOfPerson(personId: string, now: Date, tx?: Transactio
     weekMinutes: workedMinutes(week, now),
     forgotten: open?.isForgotten ? [open] : [],
     crew: await crewOf(personId, now, tx),
+    breaks: frame.breaks,
   };
 }
 

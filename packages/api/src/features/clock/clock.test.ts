@@ -139,3 +139,22 @@ describe('a crew mate’s clock', () => {
     expect(seen.open).toMatchObject({ kind: 'shop', note: 'Pressed by Sefa Lund' });
   });
 });
+
+test('the house’s rule on reminding of breaks goes along with the clock; only the owner sets it', async () => {
+  const owner = await company.owner();
+  const { settings } = (await owner.get('/api/settings').expect(200)).body as { settings: Record<string, unknown> };
+  await dispatcher
+    .put('/api/settings')
+    .send({ ...settings, mealReminderMinutes: 300 })
+    .expect(403);
+  await owner
+    .put('/api/settings')
+    .send({ ...settings, mealReminderMinutes: 5 })
+    .expect(400);
+  await owner
+    .put('/api/settings')
+    .send({ ...settings, mealReminderMinutes: 300 })
+    .expect(200);
+  const clock = state((await sefa.get('/api/clock').expect(200)).body);
+  expect(clock.breaks).toEqual({ mealAfterMinutes: 300, restAfterMinutes: null });
+});

@@ -39,6 +39,8 @@ export function toSettingsDto(s: CompanySettings): SettingsDto {
     reasonKinds: s.reasonKinds as SettingsDto['reasonKinds'],
     statementMailShowsFigures: s.statementMailShowsFigures,
     emergencyNumber: s.emergencyNumber,
+    mealReminderMinutes: s.mealReminderMinutes,
+    restReminderMinutes: s.restReminderMinutes,
     version: s.version,
   };
 }

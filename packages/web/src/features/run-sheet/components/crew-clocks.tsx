@@ -9,7 +9,7 @@ export function CrewClocks({ crew = [] }: Partial<Pick<ClockStateDto, 'crew'>>) 
   const press = usePressClock();
   if (crew.length === 0) return null;
   return (
-    <section aria-labelledby="crew-clocks">
+    <section aria-labelledby="crew-clocks" className="mb-3">
       <h2 className="sec" id="crew-clocks">
         With you <span>your name stays with what you press</span>
       </h2>

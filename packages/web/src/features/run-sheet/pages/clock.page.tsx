@@ -16,6 +16,7 @@ import { useSession } from '../../../lib/session.tsx';
 import { useNow } from '../../../lib/now.ts';
 import { clockQuery, usePressClock } from '../api/run-sheet.queries.ts';
 import { applyToClocks } from '../components/apply-waiting.ts';
+import { BreakTape } from '../components/break-tape.tsx';
 import { ChangeSheet } from '../components/change-sheet.tsx';
 import { CrewClocks } from '../components/crew-clocks.tsx';
 import { OwnHours } from '../components/own-hours.tsx';
@@ -90,6 +91,7 @@ function Clock({ clock: kept, now }: { clock: ClockStateDto; now: string }) {
           <b>{press.error.message}</b>
         </p>
       ) : null}
+      <BreakTape clock={clock} now={now} />
       <div className="toggles" role="group" aria-label="Kind of time">
         {toggles.map(({ kind, note }) => (
           <button

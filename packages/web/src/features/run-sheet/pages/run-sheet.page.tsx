@@ -22,6 +22,7 @@ import { useOnline } from '../../../lib/use-online.ts';
 import { keepDays, runSheetQuery, usePressVisit } from '../api/run-sheet.queries.ts';
 import { applyWaiting } from '../components/apply-waiting.ts';
 import { ActionBar } from '../components/action-bar.tsx';
+import { BreakTape } from '../components/break-tape.tsx';
 import { ChangesTape } from '../components/changes-tape.tsx';
 import { ClockBox } from '../components/clock-box.tsx';
 import { Driving } from '../components/driving.tsx';
@@ -89,6 +90,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
       </PhoneHead>
       <ChangesTape sheet={sheet} isQuiet={isDriving} />
       {isToday ? <StillOnClock sheet={sheet} /> : null}
+      {isToday && !isDriving && sheet.clock ? <BreakTape clock={sheet.clock} now={now} /> : null}
       {isDriving && at ? (
         <Driving
           visit={at}

@@ -10,6 +10,7 @@ import { CheckField, SelectField, TextField } from '../../../components/field.ts
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { call } from '../../../lib/call.ts';
+import { BreakFields } from '../components/break-fields.tsx';
 import { zoneNames } from '../zones.ts';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { FormFault } from '../../../components/form-fault.tsx';
@@ -131,6 +132,7 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
             />
           ))}
         </fieldset>
+        <BreakFields value={value} fields={fields} onChange={(breaks) => setValue({ ...value, ...breaks })} />
         <fieldset>
           <legend className="sec w-full">Mail when a pay week is locked</legend>
           <CheckField
