@@ -42,6 +42,7 @@ export async function call<E extends Endpoint>(
   if (!isRefusal(json))
     throw new ApiError(response.status, 'unknown', 'The server answered with something unreadable. Try again.');
   const { code, message, fields, hint } = json.error;
+  if (hint?.endedFor) await (await import('./outbox/forget-user.ts')).forgetUser(hint.endedFor).catch(() => undefined);
   throw new ApiError(response.status, code, message, fields, hint);
 }
 

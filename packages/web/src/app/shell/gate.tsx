@@ -1,9 +1,10 @@
 import { useCallback } from 'react';
 import { useQuery, useQueryClient } from '@tanstack/react-query';
 import { Navigate, Outlet, useLocation } from 'react-router';
+import { getSessionAt } from '@driprail/shared/contracts/phone-addresses';
 import { changeSession, sessionQuery } from '../../features/access/index.ts';
 import { Fault, Fetching } from '../../components/states.tsx';
-import { ApiError } from '../../lib/call.ts';
+import { ApiError, call } from '../../lib/call.ts';
 import { SessionProvider } from '../../lib/session.tsx';
 import { useOutboxOf } from '../../lib/outbox/outbox.ts';
 import { wipeCopies } from '../../lib/outbox/store.ts';
@@ -19,6 +20,8 @@ export function Gate() {
     changeSession(client, null);
     // A session that was ended elsewhere takes its copies along; what waits to be sent stays for its person.
     void wipeCopies();
+    // The answer says whether somebody ended it: then drafts and photos go too.
+    call(getSessionAt).catch(() => undefined);
   }, [client]);
   useLiveCache(client, session.data?.user.id, onSignedOut);
   useOutboxOf(client, session.data?.user.id);
