@@ -28,7 +28,13 @@ export class AppError extends Error {
 
 export const badRequest = (message: string, fields?: Record<string, string>) =>
   new AppError(400, 'bad_request', message, fields ? { fields } : {});
-export const unauthorized = () => new AppError(401, 'unauthorized', 'Sign in first.');
+/** @param endedFor whose session it was, when somebody ended it on purpose: the device forgets what it kept for that user */
+export const unauthorized = (endedFor?: string) =>
+  endedFor === undefined
+    ? new AppError(401, 'unauthorized', 'Sign in first.')
+    : new AppError(401, 'session_ended', 'This device was signed out from elsewhere. Sign in first.', {
+        hint: { endedFor },
+      });
 export const forbidden = (message = 'Your login may not do this.') => new AppError(403, 'forbidden', message);
 export const notFound = (what: string) => new AppError(404, 'not_found', `${what} is not here.`);
 export const conflict = (code: string, message: string, current?: unknown) =>

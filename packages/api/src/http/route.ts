@@ -70,7 +70,7 @@ function mount<E extends Endpoint>(
 
 function contextOf(req: Request, endpoint: Endpoint, now: Clock): Ctx {
   const user = req.user;
-  if (!user) throw unauthorized();
+  if (!user) throw unauthorized(req.session.endedFor);
   if (endpoint.roles !== 'public' && !endpoint.roles.includes(user.role)) throw forbidden();
   const actor = { userId: user.id, personId: user.personId, role: user.role };
   return { actor, name: user.name, ability: abilityFor(actor), now };

@@ -13,6 +13,8 @@ declare module 'express-session' {
     device: string;
     signedInAt: string;
     lastSeenAt: string;
+    /** The user whose session this was before somebody ended it. */
+    endedFor: string;
   }
 }
 

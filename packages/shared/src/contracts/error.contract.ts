@@ -22,6 +22,8 @@ export const errorBody = z.object({
         /** The newer state after a version mismatch. */
         current: z.unknown().optional(),
         requestId: z.string().optional(),
+        /** Whose session somebody ended: what this device kept for that user goes. */
+        endedFor: z.uuid().optional(),
       })
       .optional(),
   }),

@@ -70,7 +70,9 @@ test('changing the password ends the other sessions', async () => {
   await here.post('/api/password').send({ current: 'wrong one here', next: 'another long one' }).expect(422);
   await here.post('/api/password').send({ current: PASSWORD, next: 'another long one' }).expect(200);
   await here.get('/api/session').expect(200);
-  await there.get('/api/session').expect(401);
+  // The same person's other phone keeps what it has not sent.
+  const refused = await there.get('/api/session').expect(401);
+  expect(refused.body).toMatchObject({ error: { code: 'unauthorized' } });
   await here.post('/api/password').send({ current: 'another long one', next: PASSWORD }).expect(200);
 });
 
@@ -84,7 +86,8 @@ test('one ends one’s own sessions by reference, never another’s', async () =
   const sefa = await company.sefa();
   for (const ref of others) await sefa.delete(`/api/sessions/${ref}`).expect(404);
   for (const ref of others) await here.delete(`/api/sessions/${ref}`).expect(200);
-  await there.get('/api/session').expect(401);
+  const refused = await there.get('/api/session').expect(401);
+  expect(refused.body).toMatchObject({ error: { code: 'session_ended' } });
 });
 
 test('switching a login off ends it at once, open sockets included; the last owner stays', async () => {
@@ -112,7 +115,8 @@ test('switching a login off ends it at once, open sockets included; the last own
   const login = await User.findOne({ where: { email: 'dispatch@ternandtide.example' }, rejectOnEmpty: true });
   await owner.patch(`/api/logins/${login.id}`).send({ isActive: false }).expect(200);
   expect(await cut).toBe('io server disconnect');
-  await dispatcher.get('/api/session').expect(401);
+  const refused = await dispatcher.get('/api/session').expect(401);
+  expect(refused.body).toMatchObject({ error: { code: 'session_ended', hint: { endedFor: login.id } } });
   socket.disconnect();
   await owner.patch(`/api/logins/${login.id}`).send({ isActive: true }).expect(200);
 });

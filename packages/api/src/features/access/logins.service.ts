@@ -66,7 +66,8 @@ export function updateLogin({ actor, now }: Ctx, id: string, change: LoginChange
       });
     }
     await user.update(definedOf(change), { transaction: tx });
-    if (change.isActive === false || (change.role && change.role !== before.role)) await endSessionsOf(tx, id);
+    const isOff = change.isActive === false;
+    if (isOff || (change.role && change.role !== before.role)) await endSessionsOf(tx, id, { forgets: isOff });
     await audit(tx, { userId: actor.userId, at: now() }, 'login', id, 'changed', { before, after: change });
     hintAfterCommit(tx, ['owners'], 'login', id);
     return user;
@@ -97,7 +98,7 @@ export function sendResetTo({ actor, now }: Ctx, id: string, baseUrl: string): P
 
 export function endLoginSessions({ actor, now }: Ctx, id: string): Promise<void> {
   return inTransaction(async (tx) => {
-    await endSessionsOf(tx, id);
+    await endSessionsOf(tx, id, { forgets: true });
     await forgetSubscriptions(tx, id);
     await audit(tx, { userId: actor.userId, at: now() }, 'login', id, 'sessions ended');
   });

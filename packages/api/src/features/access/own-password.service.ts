@@ -22,7 +22,7 @@ export async function changeOwnPassword(
   const passwordHash = await hashPassword(next);
   await inTransaction(async (tx) => {
     await user.update({ passwordHash }, { transaction: tx });
-    await endSessionsOf(tx, user.id, sid);
+    await endSessionsOf(tx, user.id, { exceptSid: sid });
     await audit(tx, { userId: user.id, at: now() }, 'login', user.id, 'password changed');
   });
 }
