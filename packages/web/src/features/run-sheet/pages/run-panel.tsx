@@ -5,12 +5,12 @@ import { lazyPage } from '../../../app/lazy-page.ts';
 import { paths } from '../../../app/paths.ts';
 import { Sheet } from '../../../components/sheet.tsx';
 import type { usePressVisit } from '../api/run-sheet.queries.ts';
-import { NextCard } from './next-card.tsx';
+import { NextCard } from '../components/next-card.tsx';
 
 // Sheets come after the first screen has painted; the worker keeps them for a dead zone.
-const TroubleSheet = lazyPage(async () => (await import('./trouble-sheet.tsx')).TroubleSheet);
-const PartDoneSheet = lazyPage(async () => (await import('./part-done-sheet.tsx')).PartDoneSheet);
-const TipSheet = lazyPage(async () => (await import('./tip-sheet.tsx')).TipSheet);
+const TroubleSheet = lazyPage(async () => (await import('../components/trouble-sheet.tsx')).TroubleSheet);
+const PartDoneSheet = lazyPage(async () => (await import('../components/part-done-sheet.tsx')).PartDoneSheet);
+const TipSheet = lazyPage(async () => (await import('../components/tip-sheet.tsx')).TipSheet);
 
 const StartSheet = lazy(async () => ({ default: (await import('../../walk-round/index.ts')).StartSheet }));
 

@@ -8,7 +8,7 @@ import { paths } from '../../../app/paths.ts';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { keepDays } from '../api/run-sheet.queries.ts';
-import { isWalkDue } from './walk-line.tsx';
+import { isWalkDue } from '../components/walk-line.tsx';
 
 type Marked = ProgressAction | 'undo';
 
