@@ -25,6 +25,8 @@ export const visitWalkDto = z.object({
   /** Cars that need one, and those that have it. */
   cars: z.int(),
   made: z.int(),
+  /** The cars that still need one. */
+  due: z.array(id.nullable()),
   /** A car was too dirty to see, and nobody has looked again. */
   isSecondLookDue: z.boolean(),
   /** Why work began without it. */

@@ -13,7 +13,7 @@ export const visitJson = `json_build_object(
   'windowFrom', ${iso('j.window_from')}, 'windowTo', ${iso('j.window_to')}, 'notes', j.notes,
   'lines', lines.list, 'skills', needs.skills, 'equipment', needs.equipment,
   'crew', coalesce(worked.list, riding.list, '[]'::json), 'accepted', v.accepted,
-  'walkRound', json_build_object('photoSet', (ARRAY['none', 'quick', 'full'])[walk.rank], 'cars', walk.cars, 'made', walk.made,
+  'walkRound', json_build_object('photoSet', (ARRAY['none', 'quick', 'full'])[walk.rank], 'cars', walk.cars, 'made', walk.made, 'due', walk.due,
     'isSecondLookDue', walk.is_second_look_due, 'startReason', walk.start_reason)
 )`;
 
@@ -41,6 +41,7 @@ export const visitFrom = `visits v
   CROSS JOIN LATERAL (
     SELECT coalesce(max(car.rank), 1) AS rank, count(*) FILTER (WHERE car.rank > 1) AS cars,
            count(w.id) FILTER (WHERE car.rank > 1) AS made,
+           coalesce(json_agg(car.vehicle_id) FILTER (WHERE car.rank > 1 AND w.id IS NULL), '[]'::json) AS due,
            coalesce(bool_or(w.is_too_dirty AND NOT EXISTS (SELECT 1 FROM walk_looks k
              WHERE k.visit_id = v.id AND k.vehicle_id IS NOT DISTINCT FROM w.vehicle_id)), false) AS is_second_look_due,
            coalesce((SELECT e.reason FROM visit_events e WHERE e.visit_id = v.id AND e.kind = 'start_work' AND NOT e.is_undone

@@ -163,7 +163,7 @@ describe('work', () => {
     await press('start_work', { reason: 'Raining hard' }).expect(200);
     const board = (await dispatcher.get('/api/board/2026-05-14')).body as { visits: VisitDto[] };
     expect(board.visits.find(({ id }) => id === visit.id)?.walkRound).toEqual({
-      ...{ photoSet: 'quick', cars: 1, made: 0, isSecondLookDue: false, startReason: 'Raining hard' },
+      ...{ photoSet: 'quick', cars: 1, made: 0, due: [vehicleId], isSecondLookDue: false, startReason: 'Raining hard' },
     });
   });
 
@@ -214,7 +214,7 @@ describe('too dirty to see', () => {
     await press('arrive').expect(200);
     await finish(aRound({ isTooDirty: true })).expect(200);
     const shown = ((await press('start_work').expect(200)).body as { visit: VisitDto }).visit;
-    expect(shown.walkRound.isSecondLookDue).toBe(true);
+    expect(shown.walkRound).toMatchObject({ isSecondLookDue: true, made: 1, due: [] });
     await add({ ...look, key: uuid(), kind: 'mark', outcome: undefined, mark: aMark({ kind: 'swirl' }) }).expect(200);
     await add({ ...look, key: uuid() }).expect(200);
     expect(await carOf()).toMatchObject({

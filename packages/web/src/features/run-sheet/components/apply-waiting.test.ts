@@ -59,6 +59,26 @@ describe('what waits on the phone', () => {
   test('leaves a step that can’t follow for the server to judge', () => {
     expect(shown(press('visit', { kind: 'finish' })).visits[0]?.progress).toBe('placed');
   });
+  test('a walk-round counts for its own car, once, also when it is made anew', () => {
+    const walkRound = {
+      photoSet: 'quick',
+      cars: 3,
+      made: 1,
+      due: ['c2', 'c3'],
+      isSecondLookDue: false,
+      startReason: '',
+    };
+    const withCars = { ...sheet, visits: [{ ...visit, walkRound } as RunVisitDto] };
+    const made = (...cars: string[]) =>
+      applyWaiting(
+        withCars,
+        cars.map((vehicleId) => press('walk', { vehicleId })),
+        NOW,
+      ).visits[0]?.walkRound;
+    expect(made('c1')).toMatchObject({ made: 1, due: ['c2', 'c3'] });
+    expect(made('c2', 'c2')).toMatchObject({ made: 2, due: ['c3'] });
+    expect(made('c2', 'c1', 'c3')).toMatchObject({ made: 3, due: [] });
+  });
   test('runs and stops the clock', () => {
     const started = shown(press('clock', { action: 'start', kind: 'travel' })).clock;
     expect(started).toMatchObject({ inSince: NOW, open: { kind: 'travel' } });

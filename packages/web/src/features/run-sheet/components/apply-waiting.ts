@@ -46,11 +46,17 @@ export function applyWaiting(sheet: RunSheetDto, waiting: KeptPress[], now: stri
   return { ...sheet, visits, clock };
 }
 
-/** A walk-round that waits counts as made; the server judges it again. */
+/**
+ * A walk-round that waits counts as made for its car, be it made anew or not; the server judges it again.
+ * `due` may be missing where the phone kept the visit before there was such a list.
+ */
 function applyToWalk(visit: RunVisitDto, { path, body }: KeptPress): RunVisitDto {
   const { walkRound } = visit;
-  if (path === 'walk')
-    return { ...visit, walkRound: { ...walkRound, made: Math.min(walkRound.cars, walkRound.made + 1) } };
+  if (path === 'walk') {
+    const { due: stillDue = [] } = walkRound;
+    const due = stillDue.filter((vehicleId) => vehicleId !== body['vehicleId']);
+    return { ...visit, walkRound: { ...walkRound, due, made: walkRound.cars - due.length } };
+  }
   if (path === 'walk_addition' && body['kind'] === 'second_look')
     return { ...visit, walkRound: { ...walkRound, isSecondLookDue: false } };
   return visit;
