@@ -9,6 +9,8 @@ type Allow = AbilityBuilder<AppAbility>['can'];
 
 /** A technician sees visits from yesterday to two days ahead. */
 export const NEAR_DAYS = { back: 1, ahead: 2 } as const;
+/** A press made while its visit was near is still taken so many days later: a phone may lie dead for a while. */
+export const LATE_DAYS = 14;
 
 const planned: SubjectName[] = ['Visit', 'Job', 'Customer', 'Person', 'Van'];
 

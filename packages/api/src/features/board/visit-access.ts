@@ -1,17 +1,33 @@
-import { tag } from '@driprail/shared/authz/ability';
+import { LATE_DAYS, tag } from '@driprail/shared/authz/ability';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { authorize } from '../../authz/authorize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
 
-/** A visit of another crew, or of a day that is not near, is not there for a technician, rather than forbidden. */
-export function authorizeVisit({ ability, actor, now }: Ctx, action: 'read' | 'mark', visit: VisitDto, zone: string) {
+const DAY_MS = 86_400_000;
+
+/**
+ * A visit of another crew, or of a day that is not near, is not there for a technician, rather than forbidden.
+ * @param madeAt when a press was made, corrected; it is judged by that moment too when it arrives late
+ * @throws 404, 403
+ */
+export function authorizeVisit(
+  { ability, actor, now }: Ctx,
+  action: 'read' | 'mark',
+  visit: VisitDto,
+  zone: string,
+  madeAt?: string,
+): void {
+  const asOfNow = subjectOf(visit, zone, now().toISOString());
+  const isTaken = madeAt !== undefined && now().getTime() - Date.parse(madeAt) <= LATE_DAYS * DAY_MS;
+  if (isTaken && ability.can(action, subjectOf(visit, zone, madeAt))) return;
+  if (actor.role === 'technician' && ability.cannot('read', asOfNow)) throw notFound('That visit');
+  authorize(ability, action, asOfNow);
+}
+
+function subjectOf(visit: VisitDto, zone: string, asOf: string) {
   const day = visit.from ? dayOf(visit.from, zone) : null;
-  const daysFromToday = day
-    ? Math.round((Date.parse(day) - Date.parse(dayOf(now().toISOString(), zone))) / 86_400_000)
-    : 0;
-  const subject = tag('Visit', { id: visit.id, crewPersonIds: visit.crew.map((p) => p.personId), day, daysFromToday });
-  if (actor.role === 'technician' && ability.cannot('read', subject)) throw notFound('That visit');
-  authorize(ability, action, subject);
+  const daysFromToday = day ? Math.round((Date.parse(day) - Date.parse(dayOf(asOf, zone))) / DAY_MS) : 0;
+  return tag('Visit', { id: visit.id, crewPersonIds: visit.crew.map((p) => p.personId), day, daysFromToday });
 }

@@ -47,7 +47,13 @@ const kindByProgress: Partial<Record<Progress, ClockKindName>> = {
   part_done: 'waiting',
 };
 
-/** Time follows a visit's progress for those on the clock; a meal break is theirs to end. */
+/** What began longer after a press than this is another day's time (common practice, no source). */
+const OTHER_DAY_MS = 14 * 3_600_000;
+
+/**
+ * Time follows a visit's progress for those on the clock; a meal break is theirs to end. A press that comes days late
+ * changes nothing of what runs today.
+ */
 export async function followProgress(
   tx: Transaction,
   personIds: string[],
@@ -58,7 +64,8 @@ export async function followProgress(
   const kind = kindByProgress[progress];
   if (!kind) return;
   const open = await ClockEntry.findAll({ where: { personId: personIds, endedAt: null }, transaction: tx });
-  for (const entry of open.filter((e) => e.kind !== 'meal_break')) {
+  const ofThatDay = open.filter(({ startedAt }) => startedAt.getTime() - at.getTime() < OTHER_DAY_MS);
+  for (const entry of ofThatDay.filter((e) => e.kind !== 'meal_break')) {
     await switchClock(tx, entry.personId, { kind, visitId: kind === 'waiting' ? null : visitId, at });
   }
 }

@@ -43,7 +43,8 @@ export async function changeJob(
     const visit = await lockVisit(tx, visitId);
     const [row] = await readWorkRows({ visitId }, tx);
     if (!visit || !row) throw notFound('That visit');
-    authorizeVisit(ctx, 'mark', row.visit, zone);
+    const { occurredAt } = stamp(press.deviceAt, press.offsetMs, ctx.now());
+    authorizeVisit(ctx, 'mark', row.visit, zone, occurredAt);
     return perform(tx, ctx, visit, row, press);
   });
   return { work: await readVisitWork(ctx, visitId), changeId: taken.answer.changeId, isRepeat: taken.isRepeat };

@@ -45,7 +45,8 @@ export async function actAtWork(
     const visit = await lockVisit(tx, visitId);
     const [row] = await readWorkRows({ visitId }, tx);
     if (!visit || !row) throw notFound('That visit');
-    authorizeVisit(ctx, 'mark', row.visit, zone);
+    const { occurredAt } = stamp(action.deviceAt, action.offsetMs, ctx.now());
+    authorizeVisit(ctx, 'mark', row.visit, zone, occurredAt);
     return perform(tx, ctx, visit, row, action);
   });
   return { work: await readVisitWork(ctx, visitId), isRepeat };

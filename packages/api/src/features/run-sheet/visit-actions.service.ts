@@ -50,7 +50,7 @@ export async function actOnVisit(
         await tellDesk(tx, ctx, visit, action, times, company);
         return { refused: movedAway() };
       }
-      authorizeVisit(ctx, 'mark', row.visit, company.zone);
+      authorizeVisit(ctx, 'mark', row.visit, company.zone, times.occurredAt);
       return perform(tx, ctx, company, visit, row, action);
     },
   );

@@ -61,6 +61,23 @@ describe('progress', () => {
     await send({ kind: 'arrive' }).expect(422);
   });
 
+  test('made on the day is taken from a phone that was dead for days; what runs today goes on', async () => {
+    const made = { deviceAt: clock('15:20') };
+    app.time.now = '2026-05-17T15:00:00.000Z';
+    await sefa
+      .post('/api/clock/actions')
+      .send({ key: uuid(), action: 'start', kind: 'shop', deviceAt: app.time.now })
+      .expect(200);
+    await press(sefa, 'set_off').expect(404);
+    await press(idris, 'set_off', made).expect(404);
+    for (const kind of ['set_off', 'arrive', 'start_work', 'finish']) await press(sefa, kind, made).expect(200);
+    const { clock: running } = (await sefa.get('/api/run-sheet/2026-05-17').expect(200)).body as RunSheetDto;
+    expect(running?.open).toMatchObject({ kind: 'shop', startedAt: app.time.now });
+    await sefa.post('/api/clock/actions').send({ key: uuid(), action: 'stop', deviceAt: app.time.now }).expect(200);
+    app.time.now = '2026-05-29T15:00:00.000Z';
+    await press(sefa, 'undo', made).expect(404);
+  });
+
   test('is taken back for a short while, then no more', async () => {
     await press(sefa, 'set_off').expect(200);
     expect(shown((await press(sefa, 'undo').expect(200)).body).progress).toBe('placed');

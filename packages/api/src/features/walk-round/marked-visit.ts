@@ -2,6 +2,7 @@ import type { Transaction } from 'sequelize';
 import type { Progress } from '@driprail/shared/domain/board/progress';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import type { WalkCarDto, WalkSheetDto } from '@driprail/shared/contracts/walk-round.contract';
+import { stamp } from '@driprail/shared/domain/time/device';
 import { audit } from '../../db/audit.ts';
 import { companyOf } from '../../db/company.ts';
 import type { Ctx } from '../../http/context.ts';
@@ -28,13 +29,13 @@ export async function markedVisit(
   tx: Transaction,
   ctx: Ctx,
   visitId: string,
-  vehicleId: string | null,
+  { vehicleId, deviceAt, offsetMs }: { vehicleId: string | null; deviceAt: string; offsetMs: number },
 ): Promise<MarkedVisit> {
   const locked = await lockVisit(tx, visitId);
   const [visit] = await readVisits({ ids: [visitId] }, tx);
   const sheet = await readWalkSheet(visitId, tx);
   if (!locked || !visit || !sheet) throw notFound('That visit');
-  authorizeVisit(ctx, 'mark', visit, (await companyOf(tx)).zone);
+  authorizeVisit(ctx, 'mark', visit, (await companyOf(tx)).zone, stamp(deviceAt, offsetMs, ctx.now()).occurredAt);
   const car = sheet.cars.find((other) => other.vehicleId === vehicleId);
   if (!car) throw unprocessable('no_such_car', 'That car is not on this visit any more. Ask dispatch.');
   return { visit, sheet, car, hasBegun: hasBegun(visit.progress) };

@@ -33,7 +33,7 @@ export async function announcePhoto(
     if (!(await lockVisit(tx, visitId))) throw notFound('That visit');
     const known = await Photo.findByPk(body.key, { transaction: tx });
     if (known) return { photo: await announcedBefore(tx, ctx, known, visitId, body), isRepeat: true };
-    const { visit, sheet, hasBegun } = await markedVisit(tx, ctx, visitId, body.vehicleId);
+    const { visit, sheet, hasBegun } = await markedVisit(tx, ctx, visitId, body);
     const times = stamp(body.deviceAt, body.offsetMs, ctx.now());
     const isAfterStart = hasBegun && sheet.startedAt !== null && isBefore(sheet.startedAt, times.occurredAt);
     await Photo.create(

@@ -31,7 +31,7 @@ async function add(
   visitId: string,
   body: WalkAdditionBody,
 ): Promise<Outcome<{ sheet: WalkSheetDto }>> {
-  const marked = await markedVisit(tx, ctx, visitId, body.vehicleId);
+  const marked = await markedVisit(tx, ctx, visitId, body);
   const { sheet, car } = marked;
   const where = { visitId, vehicleId: body.vehicleId };
   const times = stamp(body.deviceAt, body.offsetMs, ctx.now());

@@ -36,7 +36,7 @@ async function finish(
   visitId: string,
   body: WalkRoundBody,
 ): Promise<Outcome<{ sheet: WalkSheetDto }>> {
-  const marked = await markedVisit(tx, ctx, visitId, body.vehicleId);
+  const marked = await markedVisit(tx, ctx, visitId, body);
   const { visit, sheet, car } = marked;
   const clash = (message: string) => ({ refused: new AppError(409, 'clash', message, { hint: { current: sheet } }) });
   if (visit.progress === 'unplaced' || visit.progress === 'called_off')

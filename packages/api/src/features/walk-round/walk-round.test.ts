@@ -144,6 +144,23 @@ describe('a walk-round', () => {
     await sefa.get(`/api/visits/${visit.id}/walk-round`).expect(404);
   });
 
+  test('and photo made on the day are taken from a phone that was dead for two weeks, not later, not another’s', async () => {
+    const [late, later] = [aRound(), aRound()];
+    const photo = announced(jpegFile());
+    app.time.now = '2026-05-28T14:00:00.000Z';
+    await sefa.get(`/api/visits/${visit.id}/walk-round`).expect(404);
+    await finish(aRound()).expect(404);
+    await idris
+      .post(`/api/visits/${visit.id}/walk-round`)
+      .send({ ...late, key: uuid() })
+      .expect(404);
+    await finish(late).expect(200);
+    await announce(photo).expect(200);
+    app.time.now = '2026-05-28T16:00:00.000Z';
+    await finish(later).expect(404);
+    await finish(late).expect(200);
+  });
+
   test('that arrives after work began is kept as late', async () => {
     await press('arrive').expect(200);
     await press('start_work', { reason: 'Phone does not work' }).expect(200);
