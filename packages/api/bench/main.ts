@@ -1,7 +1,7 @@
 import { benchBoard } from './board.bench.ts';
 import { benchDrag } from './drag.bench.ts';
 import { benchHistory } from './history.bench.ts';
-import type { Ratio } from './measure.ts';
+import { print, runBenches } from './measure.ts';
 import { benchPay } from './pay.bench.ts';
 import { openStage } from './stage.ts';
 
@@ -16,14 +16,4 @@ async function main(): Promise<void> {
   for (const ratio of await benchHistory()) print(ratio);
 }
 
-function print({ what, ratio, goal, note }: Ratio): void {
-  process.stdout.write(`${ratio.toFixed(2)} (goal ${goal} or less)  ${what}: ${note}\n`);
-}
-
-main().then(
-  () => process.exit(0),
-  (error: unknown) => {
-    process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
-    process.exit(1);
-  },
-);
+runBenches(main);

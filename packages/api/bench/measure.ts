@@ -40,3 +40,18 @@ export interface Ratio {
   goal: number;
   note: string;
 }
+
+export function print({ what, ratio, goal, note }: Ratio): void {
+  process.stdout.write(`${ratio.toFixed(2)} (goal ${goal} or less)  ${what}: ${note}\n`);
+}
+
+/** Runs a program of benches and ends the process, with 1 when one of them failed. */
+export function runBenches(main: () => Promise<void>): void {
+  main().then(
+    () => process.exit(0),
+    (error: unknown) => {
+      process.stderr.write(`${error instanceof Error ? error.message : String(error)}\n`);
+      process.exit(1);
+    },
+  );
+}

@@ -1,5 +1,5 @@
 import type { Browser, BrowserContext, Page } from 'playwright-core';
-import { afterAll, beforeAll, inject, vi } from 'vitest';
+import { afterAll, beforeAll, inject } from 'vitest';
 
 import type {} from '../../../api/src/testing/global-setup.ts';
 import { launchBrowser, openContext, signIn, type ContextOptions, type DemoLogin } from './browser.ts';
@@ -48,17 +48,4 @@ export async function openPage(context: BrowserContext, path: string): Promise<P
   return page;
 }
 
-/** Waits until the phone has everything for a dead zone: the worker in charge, the shell and its pages kept. */
-export async function untilKept(page: Page): Promise<void> {
-  await vi.waitFor(
-    async () => {
-      const kept = await page.evaluate(async () => {
-        const cache = await caches.open('driprail-shell-1');
-        // The shell goes in last, after the files it needs.
-        return navigator.serviceWorker.controller !== null && (await cache.match('/')) !== undefined;
-      });
-      if (!kept) throw new Error('not kept yet');
-    },
-    { timeout: PATIENCE, interval: 100 },
-  );
-}
+export { untilKept } from './kept.ts';

@@ -52,6 +52,14 @@ const LocalMailPage = lazyPage(
   async () => (await import('../features/access/pages/local-mail.page.tsx')).LocalMailPage,
 );
 
+/** Starts on the crew's page while the session is still asked for; a phone at the door opens it next. */
+export function preloadFirstPage(): void {
+  const { pathname } = window.location;
+  const isPhoneAtTheDoor = pathname === '/' && window.matchMedia('(max-width: 600px)').matches;
+  // A page that does not come is fetched again, and told of, when it is shown.
+  if (isPhoneAtTheDoor || pathname.startsWith(paths.runSheet)) void RunSheetPage.preload().catch(() => undefined);
+}
+
 /**
  * Pages load when they are opened, so that a phone never fetches the board. The plain router is enough, and half the
  * weight of the one with data loading: pages fetch through their queries.
