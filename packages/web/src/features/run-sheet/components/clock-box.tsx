@@ -13,9 +13,14 @@ export function ClockBox({ clock }: { clock: ClockStateDto }) {
     <Link to={paths.clock} className={clock.open ? 'clock-box' : 'clock-box is-out'}>
       <Icon name="clock" />
       <span>
-        {clock.open
-          ? `${clockKindNames[clock.open.kind]}, in since ${format.clock(clock.inSince ?? clock.open.startedAt)}`
-          : 'Not on the clock'}
+        {clock.open ? (
+          <>
+            {clockKindNames[clock.open.kind]},{' '}
+            <span className="whitespace-nowrap">in since {format.clock(clock.inSince ?? clock.open.startedAt)}</span>
+          </>
+        ) : (
+          'Not on the clock'
+        )}
         <b>{formatMinutes(clock.todayMinutes)}</b>
       </span>
     </Link>

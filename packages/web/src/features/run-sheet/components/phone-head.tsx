@@ -30,7 +30,7 @@ export function PhoneHead({
         <p className="t-2">
           {above}, {user.name}
         </p>
-        <span className="flex items-start gap-1">
+        <span className="flex items-start gap-1 shrink-0 whitespace-nowrap">
           <Link className="help" to={paths.firstAid}>
             First help
           </Link>
