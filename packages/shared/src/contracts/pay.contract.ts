@@ -254,6 +254,8 @@ export const payWeekDto = z.object({
   timeOff: z.record(z.string(), z.array(statementTimeOff)),
   /** When the clock entries and jobs that warnings name took place, by their ids. */
   warningTimes: z.record(z.string(), instant),
+  /** Of a week that is not locked: visits of days gone by that nobody ended, so that their work earns nothing yet. */
+  unended: z.array(z.object({ visitId: id, jobNumber: z.int(), day, crewNames: z.array(z.string()) })),
 });
 export type PayWeekDto = z.infer<typeof payWeekDto>;
 const weekParam = z.object({ startsOn: day });

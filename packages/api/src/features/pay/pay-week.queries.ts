@@ -9,7 +9,7 @@ import { correctedLinesOf, correctionsOfWeek, differences } from './corrections.
 import { readFrozen } from './frozen.queries.ts';
 import { payInputOf } from './pay-input.queries.ts';
 import { statementTimeOffOf } from './time-off/statement-time-off.queries.ts';
-import { salesOf } from './week-figures.queries.ts';
+import { salesOf, unendedOf } from './week-figures.queries.ts';
 import { yearsToDate } from './year-to-date.queries.ts';
 import { headOf } from './weeks.service.ts';
 
@@ -40,6 +40,7 @@ export async function readPayWeek(
     yearsToDate: await yearsToDate(week, people, tx),
     timeOff: frozen?.timeOff ?? (withTimeOff ? await statementTimeOffOf(week, people, tx) : {}),
     warningTimes: warningTimes(people, input),
+    unended: frozen ? [] : await unendedOf(week, now, tx),
   };
 }
 

@@ -1,6 +1,6 @@
 import type { Transaction } from 'sequelize';
 import type { OutputOf } from '@driprail/shared/contracts/endpoint';
-import type { listPayWeeks } from '@driprail/shared/contracts/pay.contract';
+import type { PayWeekDto, listPayWeeks } from '@driprail/shared/contracts/pay.contract';
 import { PayWeek } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
 import { headOf, weekAt } from './weeks.service.ts';
@@ -18,6 +18,22 @@ export async function salesOf(week: PayWeek, tx?: Transaction): Promise<number> 
     tx,
   );
   return row?.cents ?? 0;
+}
+
+/** Visits planned on days of the week that are over, which nobody marked done, part done or called off. */
+export function unendedOf(week: PayWeek, now: Date, tx?: Transaction): Promise<PayWeekDto['unended']> {
+  return select(
+    `SELECT v.id AS "visitId", j.number AS "jobNumber", (lower(v.planned) AT TIME ZONE s.zone)::date::text AS day,
+            coalesce((SELECT json_agg(p.name ORDER BY c.position) FROM van_crew c JOIN people p ON p.id = c.person_id
+               WHERE c.van_id = v.van_id AND c.span && v.planned), '[]') AS "crewNames"
+       FROM visits v JOIN jobs j ON j.id = v.job_id CROSS JOIN company_settings s
+      WHERE v.planned && tstzrange(:from, :to) AND lower(v.planned) >= :from
+        AND v.progress IN ('placed', 'on_the_way', 'on_site', 'working')
+        AND (lower(v.planned) AT TIME ZONE s.zone)::date < (:now::timestamptz AT TIME ZONE s.zone)::date
+      ORDER BY v.planned, j.number`,
+    { from: week.startsAt, to: week.endsAt, now: now.toISOString() },
+    tx,
+  );
 }
 
 interface WeekFigures {

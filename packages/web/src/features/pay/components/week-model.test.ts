@@ -71,6 +71,7 @@ describe('what asks for somebody', () => {
     lineIds: {},
     engineVersion: '1',
     lateDifferences: [],
+    unended: [],
     correctedLines: {},
     customers: {},
     yearsToDate: {},

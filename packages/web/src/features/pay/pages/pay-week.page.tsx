@@ -26,6 +26,7 @@ import { planWords, rulesOn } from '../components/plan-words.ts';
 import { StageRail } from '../components/stage-rail.tsx';
 import { TimeOffSheet } from '../components/time-off/time-off-sheet.tsx';
 import { TroubleTape } from '../components/trouble-tape.tsx';
+import { UnendedTape } from '../components/unended-tape.tsx';
 import { WeekActions } from '../components/week-actions.tsx';
 import {
   hoursSum,
@@ -120,6 +121,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
               </p>
             ) : null}
             <TroubleTape dto={dto} warnings={warnings} />
+            <UnendedTape unended={dto.unended} />
             <WaitingTape rules={rules ?? []} />
             <LateTape
               late={dto.lateDifferences}

@@ -1,0 +1,79 @@
+import { beforeAll, expect, test } from 'vitest';
+import type TestAgent from 'supertest/lib/agent.js';
+import { v4 as uuid } from 'uuid';
+import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
+import { useApp } from '../../testing/app.ts';
+import { aCompany, first } from '../../testing/company.ts';
+import type { TestCompany } from '../../testing/company.ts';
+
+const app = useApp();
+let company: TestCompany;
+let owner: TestAgent;
+let sefa: TestAgent;
+beforeAll(async () => {
+  company = await aCompany(app);
+  owner = await company.owner();
+  sefa = await company.sefa();
+});
+
+const WEEK = '2026-05-11';
+const read = async () => (await owner.get(`/api/pay/weeks/${WEEK}`).expect(200)).body as PayWeekDto;
+const lock = async () => {
+  for (const to of ['checked', 'locked']) {
+    const { week } = await read();
+    await owner.post(`/api/pay/weeks/${WEEK}/state`).send({ to, version: week.version }).expect(200);
+  }
+};
+
+/** A job placed on Thursday, 11:30 to 12:20 in New York. */
+async function placed(): Promise<string> {
+  app.time.now = '2026-05-14T15:00:00.000Z';
+  const { visit } = await company.aJob();
+  const span = { from: '2026-05-14T15:30:00.000Z', to: '2026-05-14T16:20:00.000Z' };
+  const move = { visitId: visit.id, planVersion: 0, vanId: company.vans.gannet.id, ...span };
+  await owner
+    .post('/api/board/moves')
+    .send({ moves: [move] })
+    .expect(200);
+  return visit.id;
+}
+
+/** What a phone that lay dead sends days later. */
+async function finishLate(visitId: string): Promise<void> {
+  const steps = { set_off: '15:20', arrive: '15:30', start_work: '15:35', finish: '16:25' };
+  for (const [kind, time] of Object.entries(steps)) {
+    const deviceAt = `2026-05-14T${time}:00.000Z`;
+    await sefa.post(`/api/visits/${visitId}/actions`).send({ key: uuid(), kind, deviceAt }).expect(200);
+  }
+}
+
+test('a visit that nobody ended is named from the day after until it is, and pays once its late marks are in', async () => {
+  const personId = company.people.sefa.id;
+  const commission = { kind: 'commission_percent', personId, serviceId: null, clockKind: null, value: '40' };
+  await owner
+    .post('/api/pay/rates')
+    .send({ ...commission, startsOn: '2026-01-01' })
+    .expect(200);
+  const [before, after] = [await placed(), await placed()];
+  expect((await read()).unended).toEqual([]);
+
+  app.time.now = '2026-05-18T12:00:00.000Z';
+  const { unended } = await read();
+  expect(unended.map((visit) => visit.visitId)).toEqual([before, after]);
+  expect(first(unended)).toMatchObject({ day: '2026-05-14', crewNames: ['Sefa Lund'] });
+
+  await finishLate(before);
+  const open = await read();
+  expect(open.unended.map((visit) => visit.visitId)).toEqual([after]);
+  // 40 % of 240.00 (arithmetic).
+  expect(first(open.people).totals.gross).toBe(9600);
+
+  await lock();
+  expect((await read()).unended).toEqual([]);
+  await finishLate(after);
+  const locked = await read();
+  expect(first(locked.people).totals.gross).toBe(9600);
+  expect(locked.lateDifferences).toEqual([
+    { personId, name: 'Sefa Lund', lockedCents: 9600, nowCents: 19_200, correctedCents: 0 },
+  ]);
+});
