@@ -15,7 +15,7 @@ import { AppError, conflict, notFound, unprocessable } from '../../http/errors.t
 import { takeOnce } from '../../http/once.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { clockOfPerson, crewOf, findEntry } from './clock.queries.ts';
-import { switchClock } from './switch-clock.ts';
+import { isOfLaterDay, switchClock } from './switch-clock.ts';
 
 export interface ClockPress {
   key: string;
@@ -40,11 +40,10 @@ export async function pressClock(ctx: Ctx, press: ClockPress): Promise<{ clock: 
   const { answer, isRepeat } = await takeOnce<ClockStateDto>(ctx, press.key, press, async (tx) => {
     if (isOther) await refuseStranger(tx, ownId, personId, new Date(times.occurredAt));
     const running = await ClockEntry.findOne({ where: { personId, endedAt: null }, transaction: tx });
-    if (press.action === 'stop' && !running) {
-      const message = isOther ? 'That person is not on the clock.' : 'You are not on the clock.';
-      return {
-        refused: new AppError(409, 'clash', message, { hint: { current: await clockOfPerson(ownId, ctx.now(), tx) } }),
-      };
+    const clash = clashOf(press.action, running, new Date(times.occurredAt), isOther);
+    if (clash) {
+      const current = await clockOfPerson(ownId, ctx.now(), tx);
+      return { refused: new AppError(409, 'clash', clash, { hint: { current } }) };
     }
     const kind = press.action === 'stop' ? null : (press.kind ?? 'shop');
     const visitId = kind === 'job' || kind === 'travel' ? (running?.visitId ?? null) : null;
@@ -62,6 +61,14 @@ export async function pressClock(ctx: Ctx, press: ClockPress): Promise<{ clock: 
     return { answer: await clockOfPerson(ownId, ctx.now(), tx) };
   });
   return { clock: answer, isRepeat };
+}
+
+/** Why a press can't be taken as it is: what it says stays on the phone until a person decides. */
+function clashOf(action: ClockPress['action'], running: ClockEntry | null, at: Date, isOther: boolean): string | null {
+  if (running && isOfLaterDay(running, at))
+    return 'This press came days late, and the clock runs for another day by now. Ask dispatch to write down that time.';
+  if (action === 'start' || running) return null;
+  return isOther ? 'That person is not on the clock.' : 'You are not on the clock.';
 }
 
 async function refuseStranger(tx: Transaction, ownId: string, personId: string, at: Date): Promise<void> {

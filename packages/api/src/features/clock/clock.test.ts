@@ -158,3 +158,12 @@ test('the house’s rule on reminding of breaks goes along with the clock; only 
   const clock = state((await sefa.get('/api/clock').expect(200)).body);
   expect(clock.breaks).toEqual({ mealAfterMinutes: 300, restAfterMinutes: null });
 });
+
+test('a press that arrives days late leaves what runs today alone, and says what to do', async () => {
+  const today = '2026-05-22T12:00:00.000Z';
+  await press(today, 'start', 'training').expect(200);
+  const late = { key: uuid(), action: 'stop', deviceAt: '2026-05-20T20:00:00.000Z' };
+  const answer = await sefa.post('/api/clock/actions').send(late).expect(409);
+  expect(answer.body).toMatchObject({ error: { code: 'clash', hint: { current: { open: { kind: 'training' } } } } });
+  await press('2026-05-22T12:30:00.000Z', 'stop').expect(200);
+});

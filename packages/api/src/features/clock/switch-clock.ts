@@ -50,6 +50,11 @@ const kindByProgress: Partial<Record<Progress, ClockKindName>> = {
 /** What began longer after a press than this is another day's time (common practice, no source). */
 const OTHER_DAY_MS = 14 * 3_600_000;
 
+/** Whether what runs is of another day than a press that arrives late. */
+export function isOfLaterDay(running: { startedAt: Date }, at: Date): boolean {
+  return running.startedAt.getTime() - at.getTime() >= OTHER_DAY_MS;
+}
+
 /**
  * Time follows a visit's progress for those on the clock; a meal break is theirs to end. A press that comes days late
  * changes nothing of what runs today.
@@ -64,7 +69,7 @@ export async function followProgress(
   const kind = kindByProgress[progress];
   if (!kind) return;
   const open = await ClockEntry.findAll({ where: { personId: personIds, endedAt: null }, transaction: tx });
-  const ofThatDay = open.filter(({ startedAt }) => startedAt.getTime() - at.getTime() < OTHER_DAY_MS);
+  const ofThatDay = open.filter((entry) => !isOfLaterDay(entry, at));
   for (const entry of ofThatDay.filter((e) => e.kind !== 'meal_break')) {
     await switchClock(tx, entry.personId, { kind, visitId: kind === 'waiting' ? null : visitId, at });
   }
