@@ -25,3 +25,19 @@ export const getPayDifference = endpoint({
     unchanged: z.int(),
   }),
 });
+
+export const listLateWeeks = endpoint({
+  method: 'get',
+  path: '/api/pay/late-weeks',
+  roles: ['owner'],
+  summary: 'Locked weeks of the last month that today’s records would pay otherwise, and no correction has made up.',
+  response: z.object({
+    weeks: z.array(
+      z.object({
+        startsOn: day,
+        number: z.int(),
+        people: z.array(z.object({ name: z.string(), missingCents: z.int() })),
+      }),
+    ),
+  }),
+});

@@ -2,7 +2,7 @@ import type { Request } from 'express';
 import * as api from '@driprail/shared/contracts/pay.contract';
 import * as agreements from '@driprail/shared/contracts/pay-agreements.contract';
 import * as jobsPaid from '@driprail/shared/contracts/jobs-paid.contract';
-import { getPayDifference } from '@driprail/shared/contracts/pay-difference.contract';
+import { getPayDifference, listLateWeeks } from '@driprail/shared/contracts/pay-difference.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
 import { companyOf, todayOf } from '../../db/company.ts';
@@ -18,6 +18,7 @@ import { markJobPaid, takeBackJobPaid } from './deferred/jobs-paid.service.ts';
 import { linesCsv } from './export.ts';
 import { handoverRoutes } from './handover/handover.routes.ts';
 import { readDifference } from './difference.queries.ts';
+import { lateWeeks } from './late-weeks.queries.ts';
 import { setWeekState } from './lock.service.ts';
 import { readPayWeek } from './pay-week.queries.ts';
 import { addPlace, addWage, listPersonPlaces, listPlaces, placePerson } from './places.service.ts';
@@ -76,6 +77,7 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
     read(params.startsOn, now(), { withTimeOff: query.timeOff === 'all' }),
   );
   route(table, getPayDifference, ({ params, query }, { now }) => readDifference(params.startsOn, query.against, now()));
+  route(table, listLateWeeks, async (_, { now }) => ({ weeks: await lateWeeks(now()) }));
   route(table, api.setPayWeekState, ({ params, body }, ctx, { req }) =>
     setWeekState(ctx, params.startsOn, body.to, body.version, baseUrlOf(req)),
   );

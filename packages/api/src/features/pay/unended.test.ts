@@ -76,4 +76,20 @@ test('a visit that nobody ended is named from the day after until it is, and pay
   expect(locked.lateDifferences).toEqual([
     { personId, name: 'Sefa Lund', lockedCents: 9600, nowCents: 19_200, correctedCents: 0 },
   ]);
+  const late = await owner.get('/api/pay/late-weeks').expect(200);
+  expect(late.body).toEqual({
+    weeks: [{ startsOn: WEEK, number: 20, people: [{ name: 'Sefa Lund', missingCents: 9600 }] }],
+  });
+  await sefa.get('/api/pay/late-weeks').expect(403);
+
+  const lineId = first(Object.values(locked.lineIds));
+  const correction = {
+    personId,
+    kind: 'correction',
+    amountCents: 9600,
+    reason: 'Job of May 14',
+    correctsLineId: lineId,
+  };
+  await owner.post('/api/pay/weeks/2026-05-18/adjustments').send(correction).expect(200);
+  expect((await owner.get('/api/pay/late-weeks').expect(200)).body).toEqual({ weeks: [] });
 });

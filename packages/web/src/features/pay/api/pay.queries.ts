@@ -1,7 +1,7 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
 import type { QueryClient } from '@tanstack/react-query';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
-import { getPayDifference } from '@driprail/shared/contracts/pay-difference.contract';
+import { getPayDifference, listLateWeeks } from '@driprail/shared/contracts/pay-difference.contract';
 import {
   addAdjustment,
   getPayWeek,
@@ -36,6 +36,10 @@ export const differenceQuery = (startsOn: string, against: 'week_before' | 'last
     queryKey: ['pay', 'difference', startsOn, against],
     queryFn: ({ signal }) => call(getPayDifference, { params: { startsOn }, query: { against } }, signal),
   });
+export const lateWeeksQuery = queryOptions({
+  queryKey: ['pay', 'late-weeks'],
+  queryFn: ({ signal }) => call(listLateWeeks, {}, signal),
+});
 export const statementsQuery = queryOptions({
   queryKey: ['pay', 'statements'],
   queryFn: ({ signal }) => call(listStatements, {}, signal),

@@ -18,6 +18,7 @@ import { AdjustmentSheet } from '../components/adjustment-sheet.tsx';
 import type { AdjustmentStart } from '../components/adjustment-sheet.tsx';
 import { WaitingTape } from '../components/jobs-paid/waiting-tape.tsx';
 import { LateTape } from '../components/late-tape.tsx';
+import { LateWeeksTape } from '../components/late-weeks-tape.tsx';
 import { PastWeeks } from '../components/past-weeks.tsx';
 import type { WeekFigures } from '../components/past-weeks.tsx';
 import { PersonSheet } from '../components/person-sheet.tsx';
@@ -122,6 +123,7 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
             ) : null}
             <TroubleTape dto={dto} warnings={warnings} />
             <UnendedTape unended={dto.unended} />
+            {week.state === 'locked' ? null : <LateWeeksTape />}
             <WaitingTape rules={rules ?? []} />
             <LateTape
               late={dto.lateDifferences}
