@@ -4,7 +4,7 @@ import type { z } from 'zod';
 import type { VisitWorkDto, workActionBody } from '@driprail/shared/contracts/job-work.contract';
 import { isEnded } from '@driprail/shared/domain/board/progress';
 import type { WorkKind } from '@driprail/shared/domain/job-work/fold-work';
-import { stamp } from '@driprail/shared/domain/time/device';
+import { afterKnown, stamp } from '@driprail/shared/domain/time/device';
 import { companyOf } from '../../db/company.ts';
 import type { Visit } from '../../db/models/index.ts';
 import { WorkEventRow } from '../../db/models/index.ts';
@@ -68,7 +68,7 @@ async function perform(
     await fixChecklists(tx, visit.id);
   }
   if (action.kind === 'start_line' || action.kind === 'stop_line') refuseLine(row, action.lineId);
-  const times = stamp(action.deviceAt, action.offsetMs, ctx.now());
+  const times = afterKnown(stamp(action.deviceAt, action.offsetMs, ctx.now()), row.extras.events.at(-1)?.at ?? null);
   await WorkEventRow.create(
     {
       ...{ id: uuid(), visitId: visit.id, kind: action.kind, steps: action.steps, lineId: action.lineId },

@@ -19,3 +19,17 @@ export function stamp(deviceAt: string, offsetMs: number, received: Date): Stamp
   const isCorrected = Math.abs(Date.parse(deviceAt) - Date.parse(occurredAt)) > FLAG_OVER_MS;
   return { deviceAt: wholeSeconds(deviceAt), receivedAt, occurredAt, isCorrected };
 }
+
+/** A press that took less to arrive was made with signal; the corrected clocks of two phones differ by seconds. */
+const PROMPT_MS = 10_000;
+
+/**
+ * A press that arrived at once came after what the server already knew, whatever two phones' clocks say; one that waited
+ * in a dead zone keeps its own time.
+ * @param known the latest instant on record, null for none
+ */
+export function afterKnown(times: StampedTimes, known: string | null): StampedTimes {
+  const isPrompt = Date.parse(times.receivedAt) - Date.parse(times.occurredAt) <= PROMPT_MS;
+  const isEarlier = known !== null && isBefore(times.occurredAt, known) && !isBefore(times.receivedAt, known);
+  return isPrompt && isEarlier ? { ...times, occurredAt: known } : times;
+}

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { stamp } from './device.ts';
+import { afterKnown, stamp } from './device.ts';
 import { formatClock, formatMinutes, formatSpan } from './format.ts';
 import { workweekAt, workweekOf } from './workweek.ts';
 import { clockOf, dayOf, minutesBetween, weekStartOf } from './zone.ts';
@@ -75,4 +75,14 @@ describe('a phone’s clock', () => {
       isCorrected: true,
     });
   });
+});
+
+test('of two phones with signal the order of arrival counts; a press from a dead zone keeps its time', () => {
+  const known = '2026-05-14T15:00:02.000Z';
+  const prompt = stamp('2026-05-14T15:00:01.000Z', 0, new Date('2026-05-14T15:00:03.000Z'));
+  expect(afterKnown(prompt, known).occurredAt).toBe(known);
+  expect(afterKnown(prompt, '2026-05-14T15:00:00.000Z').occurredAt).toBe('2026-05-14T15:00:01.000Z');
+  expect(afterKnown(prompt, null)).toEqual(prompt);
+  const kept = stamp('2026-05-14T15:00:01.000Z', 0, new Date('2026-05-14T16:00:00.000Z'));
+  expect(afterKnown(kept, known)).toEqual(kept);
 });
