@@ -140,4 +140,5 @@ test('the owner opens an amount, and locks the week', async () => {
   await pressOn(owner, button(owner, 'Lock week 19'));
   await pressOn(owner, button(owner, 'Lock for good'));
   await button(owner, 'Correction').waitFor();
+  await owner.waitForURL(/\/pay\/2026-05-04$/);
 });

@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { Link } from 'react-router';
+import { Link, useNavigate } from 'react-router';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
@@ -20,9 +20,15 @@ interface Props {
 /** Printing and the file at any time; checking, going back and locking as the stage allows. */
 export function WeekActions({ dto, toSettle, now, move }: Props) {
   const [isLocking, setLocking] = useState(false);
+  const navigate = useNavigate();
   const { week } = dto;
   const go = (to: 'draft' | 'checked' | 'locked') =>
     move.mutate({ to, version: week.version }, { onSettled: () => (to === 'locked' ? setLocking(false) : undefined) });
+  const lock = () => {
+    // A locked week is no longer the one at hand: its own address keeps it on the screen.
+    void navigate(paths.payWeek(week.startsOn), { replace: true });
+    go('locked');
+  };
   const canCheck = !isRunning(week, now) && toSettle === 0;
   return (
     <>
@@ -74,7 +80,7 @@ export function WeekActions({ dto, toSettle, now, move }: Props) {
           </p>
           <SheetFoot>
             <Button onClick={() => setLocking(false)}>Keep it open</Button>
-            <Button look="seal" isBusy={move.isPending} onClick={() => go('locked')}>
+            <Button look="seal" isBusy={move.isPending} onClick={lock}>
               <Icon name="lock" /> Lock for good
             </Button>
           </SheetFoot>
