@@ -29,7 +29,7 @@ const workNow = async () => {
   if (!work) throw new Error('the visit is on the run sheet');
   return work;
 };
-const path = (part: string) => `/run-sheet/${TODAY}/work/${visitId}/${part}`;
+const path = (part: string) => `/run-sheet/${TODAY}/job/${visitId}/${part}`;
 const step = (page: Page, words: string) => page.getByRole('checkbox', { name: words });
 
 test('two phones see each other’s ticks, and a tick taken back', async () => {

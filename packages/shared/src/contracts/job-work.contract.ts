@@ -183,7 +183,7 @@ export const answerJobChange = endpoint({
 });
 export const getOpenWork = endpoint({
   method: 'get',
-  path: '/api/work/open',
+  path: '/api/open-work',
   roles: desk,
   summary: 'What waits for the desk: keys that were not handed back, and changes that crews ask for.',
   response: z.object({

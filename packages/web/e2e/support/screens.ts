@@ -81,7 +81,7 @@ const jobPath = (part: string, isIt: (work: { progress: string; mustKnows: objec
   async function path(context: BrowserContext): Promise<string> {
     type Work = { visitId: string; progress: string; mustKnows: object[] };
     const { works } = await read<{ works: Work[] }>(context, `/api/run-sheet/${TODAY}/work`);
-    return `/run-sheet/${TODAY}/work/${works.find(isIt)?.visitId ?? ''}/${part}`;
+    return `/run-sheet/${TODAY}/job/${works.find(isIt)?.visitId ?? ''}/${part}`;
   };
 const isWorking = (work: { progress: string }) => work.progress === 'working';
 

@@ -9,7 +9,7 @@ export const paths = {
   boardDay: (day: string) => `/board/${day}`,
   runSheet: '/run-sheet',
   runSheetDay: (day: string) => `/run-sheet/${day}`,
-  work: (day: string, visitId: string, part = 'steps') => `/run-sheet/${day}/work/${visitId}/${part}`,
+  work: (day: string, visitId: string, part = 'steps') => `/run-sheet/${day}/job/${visitId}/${part}`,
   walkRound: (visitId: string) => `/walk-round/${visitId}`,
   /** The same at the desk, to read. */
   walkRecord: (visitId: string) => `/visits/${visitId}/walk-round`,

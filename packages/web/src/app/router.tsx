@@ -78,7 +78,7 @@ export function Router() {
             <Route element={<Gate />}>
               <Route path={paths.runSheet} element={<RunSheetPage />} />
               <Route path={`${paths.runSheet}/:day`} element={<RunSheetPage />} />
-              <Route path={`${paths.runSheet}/:day/work/:visitId/:part`} element={<WorkPage />} />
+              <Route path={`${paths.runSheet}/:day/job/:visitId/:part`} element={<WorkPage />} />
               <Route path={paths.walkRound(':visitId')} element={<WalkRoundPage />} />
               <Route path={paths.clock} element={<ClockPage />} />
               <Route element={<Shelled />}>

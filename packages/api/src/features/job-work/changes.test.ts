@@ -47,7 +47,7 @@ const add = (service: ServiceDto) =>
 const jobOf = async () => ((await dispatcher.get(`/api/jobs/${visit.jobId}`).expect(200)).body as { job: JobDto }).job;
 const lastChange = (body: unknown): JobChangeDto => first(workOf(body).changes);
 const asked = async () =>
-  ((await dispatcher.get('/api/work/open').expect(200)).body as OpenWorkDto).changes.filter(
+  ((await dispatcher.get('/api/open-work').expect(200)).body as OpenWorkDto).changes.filter(
     (change) => change.visitId === visit.id,
   );
 

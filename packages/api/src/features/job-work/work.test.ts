@@ -222,7 +222,7 @@ describe('must-knows', () => {
 });
 
 test('a key that was taken stays on the desk’s list until it is handed back', async () => {
-  const keys = async () => ((await dispatcher.get('/api/work/open').expect(200)).body as OpenWorkDto).keys;
+  const keys = async () => ((await dispatcher.get('/api/open-work').expect(200)).body as OpenWorkDto).keys;
   await presses().work('key_taken', { words: 'Lockbox' }).expect(200);
   expect(await keys()).toMatchObject([
     { visitId: visit.id, takenBy: 'Sefa Lund', words: 'Lockbox', vanName: 'Gannet' },
@@ -230,5 +230,5 @@ test('a key that was taken stays on the desk’s list until it is handed back', 
   app.time.now = clock('15:01');
   await pressesOf(app, dispatcher, visit.id).work('key_back').expect(200);
   expect(await keys()).toEqual([]);
-  await sefa.get('/api/work/open').expect(403);
+  await sefa.get('/api/open-work').expect(403);
 });
