@@ -1,4 +1,6 @@
+import { DataTypes } from 'sequelize';
 import type { ProgressAction } from '@driprail/shared/domain/board/progress';
+import type { StampedTimes } from '@driprail/shared/domain/time/device';
 
 /** Half-open span of instants as Sequelize takes it; it hands back bounds with their inclusion. */
 export type PlannedRange = [Date | { value: Date; inclusive: boolean }, Date | { value: Date; inclusive: boolean }];
@@ -22,3 +24,21 @@ export interface AcceptedWarning {
 }
 
 export type VisitEventKind = ProgressAction | 'undo' | 'trouble' | 'plan';
+
+/** The columns of when a press was made: by the device, at the server, and corrected. New ones for each model, which changes them. */
+export const stampColumns = () => ({
+  deviceAt: { type: DataTypes.DATE, allowNull: false },
+  receivedAt: { type: DataTypes.DATE, allowNull: false },
+  occurredAt: { type: DataTypes.DATE, allowNull: false },
+  isCorrected: { type: DataTypes.BOOLEAN },
+});
+
+/** A press's times as those columns hold them. */
+export function stampOf(times: StampedTimes) {
+  return {
+    deviceAt: new Date(times.deviceAt),
+    receivedAt: new Date(times.receivedAt),
+    occurredAt: new Date(times.occurredAt),
+    isCorrected: times.isCorrected,
+  };
+}

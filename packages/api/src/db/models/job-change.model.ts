@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import { stampColumns } from './columns.ts';
 import type { JobChangeDto } from '@driprail/shared/contracts/job-work.contract';
 import type { ChangedLine, ChangeLine, Hindrance } from '@driprail/shared/domain/job-work/judge-change';
 
@@ -52,10 +53,7 @@ export function initJobChange(sequelize: Sequelize): void {
       saidYesAt: { type: DataTypes.DATE, allowNull: false },
       userId: { type: DataTypes.UUID, allowNull: false },
       personId: { type: DataTypes.UUID, allowNull: true },
-      deviceAt: { type: DataTypes.DATE, allowNull: false },
-      receivedAt: { type: DataTypes.DATE, allowNull: false },
-      occurredAt: { type: DataTypes.DATE, allowNull: false },
-      isCorrected: { type: DataTypes.BOOLEAN },
+      ...stampColumns(),
       answeredBy: { type: DataTypes.UUID, allowNull: true },
       answeredAt: { type: DataTypes.DATE, allowNull: true },
       answer: { type: DataTypes.TEXT },

@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import { stampColumns } from './columns.ts';
 import type { PhotoMoment, PhotoView } from '@driprail/shared/domain/walk-round/views';
 
 export class Photo extends Model<InferAttributes<Photo>, InferCreationAttributes<Photo>> {
@@ -42,10 +43,7 @@ export function initPhoto(sequelize: Sequelize): void {
       storedAt: { type: DataTypes.DATE },
       isAddition: { type: DataTypes.BOOLEAN },
       userId: { type: DataTypes.UUID, allowNull: false },
-      deviceAt: { type: DataTypes.DATE, allowNull: false },
-      receivedAt: { type: DataTypes.DATE, allowNull: false },
-      occurredAt: { type: DataTypes.DATE, allowNull: false },
-      isCorrected: { type: DataTypes.BOOLEAN },
+      ...stampColumns(),
     },
     { sequelize, modelName: 'Photo', tableName: 'photos', underscored: true, timestamps: false },
   );

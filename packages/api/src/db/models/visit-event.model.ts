@@ -2,6 +2,7 @@ import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
 import type { Progress } from '@driprail/shared/domain/board/progress';
 import type { VisitEventKind } from './columns.ts';
+import { stampColumns } from './columns.ts';
 
 export class VisitEvent extends Model<InferAttributes<VisitEvent>, InferCreationAttributes<VisitEvent>> {
   declare id: string;
@@ -33,10 +34,7 @@ export function initVisitEvent(sequelize: Sequelize): void {
       toProgress: { type: DataTypes.TEXT, allowNull: false },
       userId: { type: DataTypes.UUID, allowNull: true },
       personId: { type: DataTypes.UUID, allowNull: true },
-      deviceAt: { type: DataTypes.DATE, allowNull: false },
-      receivedAt: { type: DataTypes.DATE, allowNull: false },
-      occurredAt: { type: DataTypes.DATE, allowNull: false },
-      isCorrected: { type: DataTypes.BOOLEAN },
+      ...stampColumns(),
       isUndone: { type: DataTypes.BOOLEAN },
       trouble: { type: DataTypes.TEXT, allowNull: true },
       reason: { type: DataTypes.TEXT },

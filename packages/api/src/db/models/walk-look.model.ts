@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import { stampColumns } from './columns.ts';
 import type { LookOutcome } from '@driprail/shared/domain/walk-round/condition';
 
 export class WalkLook extends Model<InferAttributes<WalkLook>, InferCreationAttributes<WalkLook>> {
@@ -24,10 +25,7 @@ export function initWalkLook(sequelize: Sequelize): void {
       outcome: { type: DataTypes.TEXT, allowNull: false },
       note: { type: DataTypes.TEXT },
       userId: { type: DataTypes.UUID, allowNull: false },
-      deviceAt: { type: DataTypes.DATE, allowNull: false },
-      receivedAt: { type: DataTypes.DATE, allowNull: false },
-      occurredAt: { type: DataTypes.DATE, allowNull: false },
-      isCorrected: { type: DataTypes.BOOLEAN },
+      ...stampColumns(),
     },
     { sequelize, modelName: 'WalkLook', tableName: 'walk_looks', underscored: true, timestamps: false },
   );

@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import { stampColumns } from './columns.ts';
 import type { Body } from '@driprail/shared/domain/walk-round/body';
 import type { Condition } from '@driprail/shared/domain/walk-round/condition';
 import type { PhotoView } from '@driprail/shared/domain/walk-round/views';
@@ -48,10 +49,7 @@ export function initWalkRound(sequelize: Sequelize): void {
       photoViews: { type: DataTypes.JSONB },
       isLate: { type: DataTypes.BOOLEAN },
       userId: { type: DataTypes.UUID, allowNull: false },
-      deviceAt: { type: DataTypes.DATE, allowNull: false },
-      receivedAt: { type: DataTypes.DATE, allowNull: false },
-      occurredAt: { type: DataTypes.DATE, allowNull: false },
-      isCorrected: { type: DataTypes.BOOLEAN },
+      ...stampColumns(),
     },
     { sequelize, modelName: 'WalkRound', tableName: 'walk_rounds', underscored: true, timestamps: false },
   );

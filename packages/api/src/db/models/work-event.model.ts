@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import { stampColumns } from './columns.ts';
 import type { WorkKind } from '@driprail/shared/domain/job-work/fold-work';
 import type { StepRef } from '@driprail/shared/domain/job-work/step';
 
@@ -31,10 +32,7 @@ export function initWorkEventRow(sequelize: Sequelize): void {
       words: { type: DataTypes.TEXT },
       userId: { type: DataTypes.UUID, allowNull: false },
       personId: { type: DataTypes.UUID, allowNull: true },
-      deviceAt: { type: DataTypes.DATE, allowNull: false },
-      receivedAt: { type: DataTypes.DATE, allowNull: false },
-      occurredAt: { type: DataTypes.DATE, allowNull: false },
-      isCorrected: { type: DataTypes.BOOLEAN },
+      ...stampColumns(),
     },
     { sequelize, modelName: 'WorkEventRow', tableName: 'work_events', underscored: true, timestamps: false },
   );

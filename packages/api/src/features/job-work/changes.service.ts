@@ -9,6 +9,7 @@ import type { StampedTimes } from '@driprail/shared/domain/time/device';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { audit } from '../../db/audit.ts';
 import { companyOf } from '../../db/company.ts';
+import { stampOf } from '../../db/models/columns.ts';
 import type { Visit } from '../../db/models/index.ts';
 import { JobChange } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
@@ -43,9 +44,9 @@ export async function changeJob(
     const visit = await lockVisit(tx, visitId);
     const [row] = await readWorkRows({ visitId }, tx);
     if (!visit || !row) throw notFound('That visit');
-    const { occurredAt } = stamp(press.deviceAt, press.offsetMs, ctx.now());
-    authorizeVisit(ctx, 'mark', row.visit, zone, occurredAt);
-    return perform(tx, ctx, visit, row, press);
+    const times = stamp(press.deviceAt, press.offsetMs, ctx.now());
+    authorizeVisit(ctx, 'mark', row.visit, zone, times.occurredAt);
+    return perform(tx, ctx, visit, row, press, times);
   });
   return { work: await readVisitWork(ctx, visitId), changeId: taken.answer.changeId, isRepeat: taken.isRepeat };
 }
@@ -56,12 +57,12 @@ async function perform(
   visit: Visit,
   row: WorkRow,
   press: ChangePress,
+  times: StampedTimes,
 ): Promise<Outcome<{ changeId: string }>> {
   const clash = (message: string) => ({ refused: new AppError(409, 'clash', message) });
   if (visit.progress !== 'on_site' && visit.progress !== 'working')
     return clash('A job is changed while the crew is at the car. Call dispatch.');
   const { zone, clock } = await companyOf(tx);
-  const times = stamp(press.deviceAt, press.offsetMs, ctx.now());
   const work = toVisitWork(row, { now: ctx.now(), zone, isDesk: false });
   const offers = await offersOn(dayOf(times.occurredAt, zone), tx);
   const judgement = judgeChange(changeFactsOf(work, { offers, zone, clock }), press.change, times.occurredAt);
@@ -90,10 +91,7 @@ function record(
       isBoardNotAsked: press.isBoardNotAsked && hindrances.length > 0,
       ...{ saidYesBy: press.saidYes.by, saidYesAt: new Date(press.saidYes.at) },
       ...{ userId: actor.userId, personId: actor.personId },
-      deviceAt: new Date(times.deviceAt),
-      receivedAt: new Date(times.receivedAt),
-      occurredAt: new Date(times.occurredAt),
-      isCorrected: times.isCorrected,
+      ...stampOf(times),
     },
     { transaction: tx },
   );

@@ -5,7 +5,9 @@ import type { VisitWorkDto, workActionBody } from '@driprail/shared/contracts/jo
 import { isEnded } from '@driprail/shared/domain/board/progress';
 import type { WorkKind } from '@driprail/shared/domain/job-work/fold-work';
 import { afterKnown, stamp } from '@driprail/shared/domain/time/device';
+import type { StampedTimes } from '@driprail/shared/domain/time/device';
 import { companyOf } from '../../db/company.ts';
+import { stampOf } from '../../db/models/columns.ts';
 import type { Visit } from '../../db/models/index.ts';
 import { WorkEventRow } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';
@@ -45,9 +47,9 @@ export async function actAtWork(
     const visit = await lockVisit(tx, visitId);
     const [row] = await readWorkRows({ visitId }, tx);
     if (!visit || !row) throw notFound('That visit');
-    const { occurredAt } = stamp(action.deviceAt, action.offsetMs, ctx.now());
-    authorizeVisit(ctx, 'mark', row.visit, zone, occurredAt);
-    return perform(tx, ctx, visit, row, action);
+    const times = stamp(action.deviceAt, action.offsetMs, ctx.now());
+    authorizeVisit(ctx, 'mark', row.visit, zone, times.occurredAt);
+    return perform(tx, ctx, visit, row, action, times);
   });
   return { work: await readVisitWork(ctx, visitId), isRepeat };
 }
@@ -58,6 +60,7 @@ async function perform(
   visit: Visit,
   row: WorkRow,
   action: WorkAction,
+  times: StampedTimes,
 ): Promise<Outcome<{ visitId: string }>> {
   const sentence = worded[action.kind];
   if (sentence && action.words === '') throw unprocessable('words', sentence, { fields: { words: sentence } });
@@ -68,15 +71,11 @@ async function perform(
     await fixChecklists(tx, visit.id);
   }
   if (action.kind === 'start_line' || action.kind === 'stop_line') refuseLine(row, action.lineId);
-  const times = afterKnown(stamp(action.deviceAt, action.offsetMs, ctx.now()), row.extras.events.at(-1)?.at ?? null);
   await WorkEventRow.create(
     {
       ...{ id: uuid(), visitId: visit.id, kind: action.kind, steps: action.steps, lineId: action.lineId },
       ...{ keys: action.keys, words: action.words, userId: ctx.actor.userId, personId: ctx.actor.personId },
-      deviceAt: new Date(times.deviceAt),
-      receivedAt: new Date(times.receivedAt),
-      occurredAt: new Date(times.occurredAt),
-      isCorrected: times.isCorrected,
+      ...stampOf(afterKnown(times, row.extras.events.at(-1)?.at ?? null)),
     },
     { transaction: tx },
   );

@@ -4,6 +4,7 @@ import type { Progress } from '@driprail/shared/domain/board/progress';
 import { actionNames } from '@driprail/shared/domain/board/progress';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
 import { formatClock } from '@driprail/shared/domain/time/format';
+import { stampOf } from '../../db/models/columns.ts';
 import type { CompanySettings, Visit } from '../../db/models/index.ts';
 import { VisitEvent } from '../../db/models/index.ts';
 import { select } from '../../db/sequelize.ts';
@@ -52,10 +53,7 @@ export async function tellDesk(
       ...{ id: uuid(), visitId: visit.id, kind: 'trouble', trouble: 'clash' },
       ...{ fromProgress: visit.progress, toProgress: visit.progress },
       ...{ userId: ctx.actor.userId, personId: ctx.actor.personId },
-      deviceAt: new Date(times.deviceAt),
-      receivedAt: new Date(times.receivedAt),
-      occurredAt: new Date(times.occurredAt),
-      isCorrected: times.isCorrected,
+      ...stampOf(times),
       reason: `${ctx.name} marked ${what} at ${at}. ${action.reason}`.trim(),
     },
     { transaction: tx },

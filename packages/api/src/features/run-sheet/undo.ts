@@ -2,6 +2,7 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import { progressActions } from '@driprail/shared/domain/board/progress';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
+import { stampOf } from '../../db/models/columns.ts';
 import type { Visit } from '../../db/models/index.ts';
 import { VisitEvent } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';
@@ -41,10 +42,7 @@ export async function undoLast(
       toProgress: last.fromProgress,
       userId: ctx.actor.userId,
       personId: ctx.actor.personId,
-      deviceAt: new Date(times.deviceAt),
-      receivedAt: new Date(times.receivedAt),
-      occurredAt: new Date(times.occurredAt),
-      isCorrected: times.isCorrected,
+      ...stampOf(times),
     },
     { transaction: tx },
   );

@@ -7,6 +7,7 @@ import { takeStep } from '@driprail/shared/domain/board/progress';
 import { stamp } from '@driprail/shared/domain/time/device';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
 import { companyOf } from '../../db/company.ts';
+import { stampOf } from '../../db/models/columns.ts';
 import type { CompanySettings, Visit } from '../../db/models/index.ts';
 import { VisitEvent } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';
@@ -51,7 +52,7 @@ export async function actOnVisit(
         return { refused: movedAway() };
       }
       authorizeVisit(ctx, 'mark', row.visit, company.zone, times.occurredAt);
-      return perform(tx, ctx, company, visit, row, action);
+      return perform(tx, ctx, company, visit, row, action, times);
     },
   );
   return { visit: answer.visit, isRepeat };
@@ -81,8 +82,8 @@ async function perform(
   visit: Visit,
   row: RunRow,
   action: VisitAction,
+  times: StampedTimes,
 ): Promise<Outcome<{ visit: RunVisitDto }>> {
-  const times = stamp(action.deviceAt, action.offsetMs, ctx.now());
   const shown = async () => {
     const after = (await readRunRows({ visitId: visit.id }, tx))[0] ?? row;
     return { visit: toRunVisit(after, { now: ctx.now(), zone: company.zone, undoSeconds: company.undoSeconds }) };
@@ -169,10 +170,7 @@ async function record(
       toProgress: to,
       userId: ctx.actor.userId,
       personId: ctx.actor.personId,
-      deviceAt: new Date(times.deviceAt),
-      receivedAt: new Date(times.receivedAt),
-      occurredAt: new Date(times.occurredAt),
-      isCorrected: times.isCorrected,
+      ...stampOf(times),
       trouble: action.trouble ?? null,
       reason: action.reason,
     },

@@ -3,6 +3,7 @@ import type { Progress } from '@driprail/shared/domain/board/progress';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
 import type { WalkCarDto, WalkSheetDto } from '@driprail/shared/contracts/walk-round.contract';
 import { stamp } from '@driprail/shared/domain/time/device';
+import type { StampedTimes } from '@driprail/shared/domain/time/device';
 import { audit } from '../../db/audit.ts';
 import { companyOf } from '../../db/company.ts';
 import type { Ctx } from '../../http/context.ts';
@@ -16,6 +17,8 @@ export interface MarkedVisit {
   sheet: WalkSheetDto;
   car: WalkCarDto;
   hasBegun: boolean;
+  /** When the press was made. */
+  times: StampedTimes;
 }
 
 export const hasBegun = (progress: Progress) =>
@@ -35,10 +38,11 @@ export async function markedVisit(
   const [visit] = await readVisits({ ids: [visitId] }, tx);
   const sheet = await readWalkSheet(visitId, tx);
   if (!locked || !visit || !sheet) throw notFound('That visit');
-  authorizeVisit(ctx, 'mark', visit, (await companyOf(tx)).zone, stamp(deviceAt, offsetMs, ctx.now()).occurredAt);
+  const times = stamp(deviceAt, offsetMs, ctx.now());
+  authorizeVisit(ctx, 'mark', visit, (await companyOf(tx)).zone, times.occurredAt);
   const car = sheet.cars.find((other) => other.vehicleId === vehicleId);
   if (!car) throw unprocessable('no_such_car', 'That car is not on this visit any more. Ask dispatch.');
-  return { visit, sheet, car, hasBegun: hasBegun(visit.progress) };
+  return { visit, sheet, car, hasBegun: hasBegun(visit.progress), times };
 }
 
 /** Leaves the trail, tells open screens, and answers the sheet as it is now. */

@@ -2,11 +2,11 @@ import { createHash } from 'node:crypto';
 import type { Transaction } from 'sequelize';
 import type { PhotoBody, WalkPhotoDto } from '@driprail/shared/contracts/walk-round.contract';
 import { walkPhotoDto } from '@driprail/shared/contracts/walk-round.contract';
-import { stamp } from '@driprail/shared/domain/time/device';
 import { isBefore } from '@driprail/shared/domain/time/zone';
 import type { FileKind } from '@driprail/shared/domain/walk-round/jpeg';
 import { kindOfFile, readJpeg } from '@driprail/shared/domain/walk-round/jpeg';
 import { PHOTO_MAX_BYTES } from '@driprail/shared/domain/walk-round/photo-limits';
+import { stampOf } from '../../db/models/columns.ts';
 import { Photo } from '../../db/models/index.ts';
 import { inTransaction, run, select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
@@ -33,8 +33,7 @@ export async function announcePhoto(
     if (!(await lockVisit(tx, visitId))) throw notFound('That visit');
     const known = await Photo.findByPk(body.key, { transaction: tx });
     if (known) return { photo: await announcedBefore(tx, ctx, known, visitId, body), isRepeat: true };
-    const { visit, sheet, hasBegun } = await markedVisit(tx, ctx, visitId, body);
-    const times = stamp(body.deviceAt, body.offsetMs, ctx.now());
+    const { visit, sheet, hasBegun, times } = await markedVisit(tx, ctx, visitId, body);
     const isAfterStart = hasBegun && sheet.startedAt !== null && isBefore(sheet.startedAt, times.occurredAt);
     await Photo.create(
       {
@@ -47,10 +46,7 @@ export async function announcePhoto(
         sha256: body.sha256,
         isAddition: body.moment === 'before' && isAfterStart,
         userId: ctx.actor.userId,
-        deviceAt: new Date(times.deviceAt),
-        receivedAt: new Date(times.receivedAt),
-        occurredAt: new Date(times.occurredAt),
-        isCorrected: times.isCorrected,
+        ...stampOf(times),
       },
       { transaction: tx },
     );

@@ -1,7 +1,7 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { WalkAdditionBody, WalkSheetDto } from '@driprail/shared/contracts/walk-round.contract';
-import { stamp } from '@driprail/shared/domain/time/device';
+import { stampOf } from '../../db/models/columns.ts';
 import { WalkLook, WalkMark } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';
 import { AppError } from '../../http/errors.ts';
@@ -32,9 +32,8 @@ async function add(
   body: WalkAdditionBody,
 ): Promise<Outcome<{ sheet: WalkSheetDto }>> {
   const marked = await markedVisit(tx, ctx, visitId, body);
-  const { sheet, car } = marked;
+  const { sheet, car, times } = marked;
   const where = { visitId, vehicleId: body.vehicleId };
-  const times = stamp(body.deviceAt, body.offsetMs, ctx.now());
   if (body.kind === 'mark') {
     const mark = { ...body.mark, carriedFrom: null, answer: null };
     const row = { ...markRow(mark, ctx, times), ...where, position: 0, isAddition: true };
@@ -52,10 +51,7 @@ async function add(
       outcome: body.outcome,
       note: body.note,
       userId: ctx.actor.userId,
-      deviceAt: new Date(times.deviceAt),
-      receivedAt: new Date(times.receivedAt),
-      occurredAt: new Date(times.occurredAt),
-      isCorrected: times.isCorrected,
+      ...stampOf(times),
     },
     { transaction: tx },
   );

@@ -2,10 +2,10 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { WalkRoundBody, WalkSheetDto } from '@driprail/shared/contracts/walk-round.contract';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
-import { stamp } from '@driprail/shared/domain/time/device';
 import { lackingIn } from '@driprail/shared/domain/walk-round/lacking';
 import type { Mark } from '@driprail/shared/domain/walk-round/marks';
 import { withCarried } from '@driprail/shared/domain/walk-round/marks';
+import { stampOf } from '../../db/models/columns.ts';
 import { WalkMark, WalkRound } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';
 import { AppError, unprocessable } from '../../http/errors.ts';
@@ -46,9 +46,8 @@ async function finish(
   const fields = lackingIn(body, car.photoSet);
   const [lacking] = Object.values(fields);
   if (lacking) throw unprocessable('walk_round_lacking', lacking, { fields });
-  const times = stamp(body.deviceAt, body.offsetMs, ctx.now());
-  await writeRound(tx, ctx, marked, body, times);
-  await writeMarks(tx, ctx, marked, body.marks, times);
+  await writeRound(tx, ctx, marked, body);
+  await writeMarks(tx, ctx, marked, body.marks);
   const details = { vehicleId: body.vehicleId, marks: body.marks.length, isLate: marked.hasBegun };
   return { answer: await answered(tx, ctx, marked, 'walk-round finished', details) };
 }
@@ -56,19 +55,15 @@ async function finish(
 async function writeRound(
   tx: Transaction,
   { actor }: Ctx,
-  { visit, car, hasBegun }: MarkedVisit,
+  { visit, car, hasBegun, times }: MarkedVisit,
   body: WalkRoundBody,
-  times: StampedTimes,
 ): Promise<void> {
   const { key: _key, deviceAt: _device, offsetMs: _offset, marks: _marks, ...facts } = body;
   const row = {
     ...facts,
     isLate: hasBegun,
     userId: actor.userId,
-    deviceAt: new Date(times.deviceAt),
-    receivedAt: new Date(times.receivedAt),
-    occurredAt: new Date(times.occurredAt),
-    isCorrected: times.isCorrected,
+    ...stampOf(times),
   };
   if (car.walkRound) await WalkRound.update(row, { where: { id: car.walkRound.id }, transaction: tx });
   else await WalkRound.create({ id: uuid(), visitId: visit.id, ...row }, { transaction: tx });
@@ -77,9 +72,8 @@ async function writeRound(
 async function writeMarks(
   tx: Transaction,
   ctx: Ctx,
-  { visit, car, hasBegun }: MarkedVisit,
+  { visit, car, hasBegun, times }: MarkedVisit,
   marks: Mark[],
-  times: StampedTimes,
 ): Promise<void> {
   const where = { visitId: visit.id, vehicleId: car.vehicleId };
   await WalkMark.destroy({ where: { ...where, isAddition: false }, transaction: tx });
