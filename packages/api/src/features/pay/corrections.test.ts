@@ -5,6 +5,7 @@ import { OutboxMail } from '../../db/models/index.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
+import { payWeeks } from '../../testing/pay-weeks.ts';
 
 const app = useApp();
 let company: TestCompany;
@@ -14,13 +15,8 @@ beforeAll(async () => {
   owner = await company.owner();
 });
 
-const read = async (day: string) => (await owner.get(`/api/pay/weeks/${day}`).expect(200)).body as PayWeekDto;
-const lockWeek = async (day: string) => {
-  for (const to of ['checked', 'locked']) {
-    const { week } = await read(day);
-    await owner.post(`/api/pay/weeks/${day}/state`).send({ to, version: week.version }).expect(200);
-  }
-};
+const read = (day: string) => payWeeks(owner).read(day);
+const lockWeek = (day: string) => payWeeks(owner).lock(day);
 const clock = (startedAt: string, endedAt: string) =>
   owner
     .post('/api/clock/entries')

@@ -8,6 +8,7 @@ import { select } from '../../db/sequelize.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
+import { payWeeks } from '../../testing/pay-weeks.ts';
 import { verifyWeeks } from './verify.ts';
 
 const app = useApp();
@@ -30,12 +31,7 @@ const clock = (startedAt: string, endedAt: string) =>
       ...{ isInterrupted: false, reason: 'Forgot to clock in' },
     })
     .expect(200);
-const lock = async (day: string) => {
-  for (const to of ['checked', 'locked']) {
-    const { week } = await read(day);
-    await owner.post(`/api/pay/weeks/${day}/state`).send({ to, version: week.version }).expect(200);
-  }
-};
+const lock = (day: string) => payWeeks(owner).lock(day);
 const draw: PlanBase = { kind: 'draw', percent: '40', weekly: '400', other: { hourly: '10', agreement: null } };
 
 describe('plans', () => {

@@ -1,12 +1,12 @@
 import type TestAgent from 'supertest/lib/agent.js';
 import { beforeAll, expect, test } from 'vitest';
-import { v4 as key } from 'uuid';
 import { QueryTypes, Sequelize } from 'sequelize';
 import type { PayWeekDto, StatementDto } from '@driprail/shared/contracts/pay.contract';
 import { select } from '../../db/sequelize.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
+import { aDoneJob, payWeeks } from '../../testing/pay-weeks.ts';
 import { verifyWeeks } from './verify.ts';
 
 const app = useApp();
@@ -17,7 +17,7 @@ beforeAll(async () => {
   owner = await company.owner();
 });
 
-const read = async (day: string) => (await owner.get(`/api/pay/weeks/${day}`).expect(200)).body as PayWeekDto;
+const read = (day: string) => payWeeks(owner).read(day);
 
 /** What only somebody with the right to switch triggers off could do to a locked week. */
 async function tamper(sql: string): Promise<void> {
@@ -47,29 +47,10 @@ test('a locked week names customers by job number, is worked out again to the by
     .post('/api/pay/rates')
     .send({ ...percent, startsOn: '2026-01-01' })
     .expect(200);
-  const { visit, job } = await company.aJob();
-  const move = { visitId: visit.id, planVersion: 0, vanId: company.vans.gannet.id };
-  const times = { from: '2026-05-14T15:30:00Z', to: '2026-05-14T17:00:00Z' };
-  await owner
-    .post('/api/board/moves')
-    .send({ moves: [{ ...move, ...times }] })
-    .expect(200);
+  const { job } = await aDoneJob(app, company, owner);
   const sefa = await company.sefa();
-  const presses = [
-    ['set_off', '15:10'],
-    ['arrive', '15:20'],
-    ['start_work', '15:30'],
-    ['finish', '16:30'],
-  ];
-  for (const [kind, time] of presses) {
-    app.time.now = `2026-05-14T${time}:00Z`;
-    await sefa.post(`/api/visits/${visit.id}/actions`).send({ key: key(), kind, deviceAt: app.time.now }).expect(200);
-  }
   app.time.now = '2026-05-18T12:00:00Z';
-  for (const to of ['checked', 'locked']) {
-    const { week } = await read('2026-05-11');
-    await owner.post('/api/pay/weeks/2026-05-11/state').send({ to, version: week.version }).expect(200);
-  }
+  await payWeeks(owner).lock('2026-05-11');
   const locked = await read('2026-05-11');
   const commission = first(first(locked.people).lines.filter((line) => line.kind === 'commission'));
   expect([commission.label, commission.jobNumber]).toEqual(['Wash and wax', job.number]);

@@ -1,10 +1,10 @@
 import { beforeAll, expect, test } from 'vitest';
 import type TestAgent from 'supertest/lib/agent.js';
 import { v4 as uuid } from 'uuid';
-import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
+import { payWeeks } from '../../testing/pay-weeks.ts';
 
 const app = useApp();
 let company: TestCompany;
@@ -17,13 +17,7 @@ beforeAll(async () => {
 });
 
 const WEEK = '2026-05-11';
-const read = async () => (await owner.get(`/api/pay/weeks/${WEEK}`).expect(200)).body as PayWeekDto;
-const lock = async () => {
-  for (const to of ['checked', 'locked']) {
-    const { week } = await read();
-    await owner.post(`/api/pay/weeks/${WEEK}/state`).send({ to, version: week.version }).expect(200);
-  }
-};
+const read = () => payWeeks(owner).read(WEEK);
 
 /** A job placed on Thursday, 11:30 to 12:20 in New York. */
 async function placed(): Promise<string> {
@@ -68,7 +62,7 @@ test('a visit that nobody ended is named from the day after until it is, and pay
   // 40 % of 240.00 (arithmetic).
   expect(first(open.people).totals.gross).toBe(9600);
 
-  await lock();
+  await payWeeks(owner).lock(WEEK);
   expect((await read()).unended).toEqual([]);
   await finishLate(after);
   const locked = await read();
