@@ -99,6 +99,15 @@ export function SelectField({
   );
 }
 
+/** What a SelectField offers when it is things with a name. */
+export function NamedOptions({ of }: { of: readonly { id: string; name: string }[] }) {
+  return of.map(({ id, name }) => (
+    <option key={id} value={id}>
+      {name}
+    </option>
+  ));
+}
+
 export function CheckField({ label, ...input }: { label: ReactNode } & Omit<ComponentProps<'input'>, 'type'>) {
   return (
     <label className="check">

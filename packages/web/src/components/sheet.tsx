@@ -1,6 +1,7 @@
-import { useEffect, useId, useRef } from 'react';
+import { useId } from 'react';
 import type { ReactNode } from 'react';
 import { Icon } from './icon.tsx';
+import { useModal } from './use-modal.ts';
 
 /** A modal sheet of paper hung by two hooks. Esc and the cross close it; focus goes back to where it came from. */
 export function Sheet({
@@ -14,12 +15,8 @@ export function Sheet({
   width?: number;
   children: ReactNode;
 }) {
-  const dialog = useRef<HTMLDialogElement>(null);
+  const dialog = useModal();
   const titleId = useId();
-  useEffect(() => {
-    const element = dialog.current;
-    if (element && !element.open) element.showModal();
-  }, []);
   return (
     <dialog
       ref={dialog}

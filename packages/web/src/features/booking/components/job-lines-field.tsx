@@ -3,7 +3,7 @@ import { sizeClassNames, sizeClasses } from '@driprail/shared/contracts/fields';
 import type { SizeClass } from '@driprail/shared/contracts/fields';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { Button } from '../../../components/button.tsx';
-import { SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../components/field.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { money } from '../../../lib/format.ts';
 import type { LineDraft } from './job-draft.ts';
@@ -41,11 +41,7 @@ export function JobLinesField({ lines, services, customer, fields, onChange }: J
                 onChange={(event) => change(index, { serviceId: event.target.value, price: '' })}
               >
                 <option value="">Choose …</option>
-                {sold.map((service) => (
-                  <option key={service.id} value={service.id}>
-                    {service.name}
-                  </option>
-                ))}
+                <NamedOptions of={sold} />
               </SelectField>
               <SelectField
                 label="Vehicle"

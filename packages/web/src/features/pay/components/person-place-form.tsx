@@ -3,7 +3,7 @@ import type { PayPlaceDto } from '@driprail/shared/contracts/pay-plans.contract'
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
-import { SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../components/field.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { useSetPersonPlace } from '../api/plans.queries.ts';
 
@@ -37,11 +37,7 @@ export function PersonPlaceForm({ people, places, startsOn, onDone }: Props) {
           onChange={(event) => setValue({ ...value, personId: event.target.value })}
         >
           <option value="">Choose</option>
-          {people.map((person) => (
-            <option key={person.id} value={person.id}>
-              {person.name}
-            </option>
-          ))}
+          <NamedOptions of={people} />
         </SelectField>
         <SelectField
           label="Works in"
@@ -49,11 +45,7 @@ export function PersonPlaceForm({ people, places, startsOn, onDone }: Props) {
           error={fields['placeId']}
           onChange={(event) => setValue({ ...value, placeId: event.target.value })}
         >
-          {places.map((place) => (
-            <option key={place.id} value={place.id}>
-              {place.name}
-            </option>
-          ))}
+          <NamedOptions of={places} />
           <option value="">the company’s rules alone</option>
         </SelectField>
         <TextField

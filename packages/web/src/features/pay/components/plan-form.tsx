@@ -3,7 +3,7 @@ import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import type { PayPlan, PlanKind } from '@driprail/shared/domain/pay/plans/pay-plan';
 import { Button } from '../../../components/button.tsx';
-import { SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddPlan } from '../api/plans.queries.ts';
@@ -58,11 +58,7 @@ export function PlanForm({ people, services, personId, startsOn, onDone, onTry }
             onChange={(event) => setWho({ ...who, personId: event.target.value })}
           >
             <option value="">Choose the person</option>
-            {people.map((person) => (
-              <option key={person.id} value={person.id}>
-                {person.name}
-              </option>
-            ))}
+            <NamedOptions of={people} />
           </SelectField>
           <TextField
             label="From, the first day of a workweek"

@@ -6,7 +6,7 @@ import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
-import { SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { useAddRate } from '../api/rates.queries.ts';
@@ -100,11 +100,7 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
           onChange={(event) => setValue({ ...value, personId: event.target.value })}
         >
           <option value="">Everybody, company-wide</option>
-          {people.map((person) => (
-            <option key={person.id} value={person.id}>
-              {person.name}
-            </option>
-          ))}
+          <NamedOptions of={people} />
         </SelectField>
         <SelectField
           label="Kind"
@@ -141,11 +137,7 @@ export function RateForm({ people, services, personId, startsOn, onDone }: Props
             onChange={(event) => setValue({ ...value, serviceId: event.target.value })}
           >
             <option value="">{needsService ? 'Choose the service' : isHourly ? 'Any time' : 'Every service'}</option>
-            {services.map((service) => (
-              <option key={service.id} value={service.id}>
-                {service.name}
-              </option>
-            ))}
+            <NamedOptions of={services} />
           </SelectField>
         ) : null}
         <div className="grid grid-cols-2 gap-3">

@@ -1,6 +1,6 @@
 import { sizeClassNames, sizeClasses } from '@driprail/shared/contracts/fields';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
-import { SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../components/field.tsx';
 import { DraftRows } from './draft-rows.tsx';
 import type { ServiceRow } from './plan-draft.ts';
 
@@ -35,11 +35,7 @@ export function ServiceRows({ label, amountLabel, hasSizes, services, rows, faul
             onChange={(event) => change({ serviceId: event.target.value })}
           >
             <option value="">Choose</option>
-            {services.map((service) => (
-              <option key={service.id} value={service.id}>
-                {service.name}
-              </option>
-            ))}
+            <NamedOptions of={services} />
           </SelectField>
           {hasSizes ? (
             <SelectField

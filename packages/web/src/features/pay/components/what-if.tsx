@@ -5,7 +5,7 @@ import type { PayWeekHead } from '@driprail/shared/contracts/pay.contract';
 import type { PayPlan } from '@driprail/shared/domain/pay/plans/pay-plan';
 import type { whatIf } from '@driprail/shared/contracts/pay-plans.contract';
 import { Button } from '../../../components/button.tsx';
-import { SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../components/field.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { placesQuery, ruleSetsQuery, whatIfQuery } from '../api/plans.queries.ts';
@@ -78,11 +78,7 @@ export function WhatIf({ person, weeks, now, plan, onChoosePlan, onDropPlan }: P
           <option value="">as they are</option>
           {places.length > 0 ? (
             <optgroup label="Places">
-              {places.map((place) => (
-                <option key={place.id} value={place.id}>
-                  {place.name}
-                </option>
-              ))}
+              <NamedOptions of={places} />
             </optgroup>
           ) : null}
           <optgroup label="Overtime rules">

@@ -9,6 +9,7 @@ import { addDays, dayOf, weekStartOf } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
+import { NamedOptions } from '../../../components/field.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Sheet } from '../../../components/sheet.tsx';
 import { useNow } from '../../../lib/now.ts';
@@ -103,11 +104,7 @@ function Rates({ rates, rules }: { rates: RateDto[]; rules: PayRulesDto[] }) {
               onChange={(event) => choose(event.target.value)}
             >
               <option value="">the company</option>
-              {people.map((own) => (
-                <option key={own.id} value={own.id}>
-                  {own.name}
-                </option>
-              ))}
+              <NamedOptions of={people} />
             </select>
           </>
         }

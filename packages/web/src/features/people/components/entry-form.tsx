@@ -6,7 +6,7 @@ import type { ClockEntryDto } from '@driprail/shared/contracts/clock.contract';
 import { addDays, clockOf, dayOf } from '@driprail/shared/domain/time/zone';
 import { instantOf } from '@driprail/shared/domain/time/zone-instants';
 import { Button } from '../../../components/button.tsx';
-import { CheckField, SelectField, TextField } from '../../../components/field.tsx';
+import { NamedOptions, CheckField, SelectField, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
 import { useSession } from '../../../lib/session.tsx';
 import { dayVisitsQuery, useProposeChange, useSaveEntry } from '../api/hours.queries.ts';
@@ -79,11 +79,7 @@ export function EntryForm({ entry, day, onDone }: { entry: ClockEntryDto | null;
           onChange={(event) => setValue({ ...value, personId: event.target.value })}
         >
           <option value="">Choose …</option>
-          {people.data?.people.map((person) => (
-            <option key={person.id} value={person.id}>
-              {person.name}
-            </option>
-          ))}
+          <NamedOptions of={people.data?.people ?? []} />
         </SelectField>
       )}
       <div className="grid grid-cols-4 gap-3 max-[560px]:grid-cols-2">

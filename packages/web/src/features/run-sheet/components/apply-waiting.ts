@@ -81,15 +81,23 @@ function applyToVisit(visit: RunVisitDto, { body }: KeptPress): RunVisitDto {
   };
 }
 
+/** What a copy lacks that the phone kept before the clock held it. */
+const kept: Pick<ClockStateDto, 'crew' | 'breaks'> = {
+  crew: [],
+  breaks: { mealAfterMinutes: null, restAfterMinutes: null },
+};
+
 /** The clock, and those of who rides along, with what waits on this phone. */
 export function applyToClocks(clock: ClockStateDto, waiting: KeptPress[]): ClockStateDto {
   return waiting
     .filter((press) => press.path === 'clock')
-    .reduce((shown, press) => (press.body['forPersonId'] ? applyToMate : applyToClock)(shown, press), clock);
+    .reduce((shown, press) => (press.body['forPersonId'] ? applyToMate : applyToClock)(shown, press), {
+      ...kept,
+      ...clock,
+    });
 }
 
-/** @param clock its `crew` may be missing where the phone kept it before there was such a list */
-function applyToMate({ crew = [], ...clock }: ClockStateDto, { body }: KeptPress): ClockStateDto {
+function applyToMate(clock: ClockStateDto, { body }: KeptPress): ClockStateDto {
   const isIn = body['action'] === 'start';
   const pressed = {
     kind: isIn ? ((body['kind'] as ClockKindName | undefined) ?? 'shop') : null,
@@ -97,7 +105,7 @@ function applyToMate({ crew = [], ...clock }: ClockStateDto, { body }: KeptPress
   };
   return {
     ...clock,
-    crew: crew.map((mate) => (mate.personId === body['forPersonId'] ? { ...mate, ...pressed } : mate)),
+    crew: clock.crew.map((mate) => (mate.personId === body['forPersonId'] ? { ...mate, ...pressed } : mate)),
   };
 }
 

@@ -7,9 +7,7 @@ import { usePressClock } from '../api/run-sheet.queries.ts';
 /** Reminds of the break that the house's rule asks for by now; takes nothing away and records nothing by itself. */
 export function BreakTape({ clock, now }: { clock: ClockStateDto; now: string }) {
   const press = usePressClock();
-  // A copy that the phone kept from before there was a rule has none.
-  const { today, breaks = { mealAfterMinutes: null, restAfterMinutes: null } } = clock as Partial<ClockStateDto>;
-  const due = breakDue(today ?? [], breaks, now);
+  const due = breakDue(clock.today, clock.breaks, now);
   if (!due || clock.open?.isForgotten) return null;
   return (
     <div className="tape changes" role="status">

@@ -4,7 +4,7 @@ import { useFormats } from '../../../lib/format.ts';
 import { usePressClock } from '../api/run-sheet.queries.ts';
 
 /** The clocks of who rides along: one phone may stay dry while two people work. */
-export function CrewClocks({ crew = [] }: Partial<Pick<ClockStateDto, 'crew'>>) {
+export function CrewClocks({ crew }: Pick<ClockStateDto, 'crew'>) {
   const format = useFormats();
   const press = usePressClock();
   if (crew.length === 0) return null;

@@ -1,4 +1,5 @@
-import { useEffect, useRef, useState } from 'react';
+import { useState } from 'react';
+import { useModal } from '../../../components/use-modal.ts';
 
 /** Ignores touches while a wet screen is dried. Two presses in opposite corners, in order, end it: a towel does not do that. */
 export function WipeLock() {
@@ -15,11 +16,7 @@ export function WipeLock() {
 
 function Lock({ onOpen }: { onOpen: () => void }) {
   const [isHalfway, setHalfway] = useState(false);
-  const dialog = useRef<HTMLDialogElement>(null);
-  useEffect(() => {
-    const element = dialog.current;
-    if (element && !element.open) element.showModal();
-  }, []);
+  const dialog = useModal();
   return (
     <dialog
       ref={dialog}

@@ -3,7 +3,7 @@ import { agreementKinds } from '@driprail/shared/contracts/pay-agreements.contra
 import type { AgreementDto } from '@driprail/shared/contracts/pay-agreements.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import { Button } from '../../../../components/button.tsx';
-import { CheckField, SelectField, TextField } from '../../../../components/field.tsx';
+import { NamedOptions, CheckField, SelectField, TextField } from '../../../../components/field.tsx';
 import { FormError } from '../../../../components/form-error.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { useAddAgreement } from '../../api/agreements.queries.ts';
@@ -49,11 +49,7 @@ export function AgreementForm({ people, personId, startsOn, onDone }: Props) {
           error={fields['personId']}
           onChange={(event) => setValue({ ...value, personId: event.target.value })}
         >
-          {people.map((person) => (
-            <option key={person.id} value={person.id}>
-              {person.name}
-            </option>
-          ))}
+          <NamedOptions of={people} />
         </SelectField>
         <SelectField
           label="Agreed to"

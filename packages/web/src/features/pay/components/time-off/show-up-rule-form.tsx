@@ -3,7 +3,7 @@ import type { PayPlaceDto } from '@driprail/shared/contracts/pay-plans.contract'
 import type { ShowUpRule } from '@driprail/shared/domain/pay/time-off/show-up-rule';
 import { FormError } from '../../../../components/form-error.tsx';
 import { Button } from '../../../../components/button.tsx';
-import { SelectField, TextField } from '../../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../../components/field.tsx';
 import { SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { useAddShowUpRule } from '../../api/time-off.queries.ts';
@@ -58,11 +58,7 @@ export function ShowUpRuleForm({
           onChange={(event) => set({ placeId: event.target.value })}
         >
           <option value="">the company</option>
-          {places.map((place) => (
-            <option key={place.id} value={place.id}>
-              {place.name}
-            </option>
-          ))}
+          <NamedOptions of={places} />
         </SelectField>
         <StartField value={value.startsOn} error={fields['startsOn']} onChange={(from) => set({ startsOn: from })} />
         {value.pays === 'show_up' ? (

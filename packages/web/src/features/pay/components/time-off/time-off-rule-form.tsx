@@ -3,7 +3,7 @@ import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import type { TimeOffKind, TimeOffRule } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { FormError } from '../../../../components/form-error.tsx';
 import { Button } from '../../../../components/button.tsx';
-import { SelectField, TextArea, TextField } from '../../../../components/field.tsx';
+import { NamedOptions, SelectField, TextArea, TextField } from '../../../../components/field.tsx';
 import { SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { useAddTimeOffRule } from '../../api/time-off.queries.ts';
@@ -58,11 +58,7 @@ export function TimeOffRuleForm({ people, personId, startsOn, onDone }: Props) {
           onChange={(event) => set({ personId: event.target.value })}
         >
           <option value="">the company</option>
-          {people.map((person) => (
-            <option key={person.id} value={person.id}>
-              {person.name}
-            </option>
-          ))}
+          <NamedOptions of={people} />
         </SelectField>
         <StartField value={value.startsOn} error={fields['startsOn']} onChange={(from) => set({ startsOn: from })} />
         <SelectField label="Earned by" value={value.by} onChange={(event) => set({ by: event.target.value as By })}>

@@ -6,7 +6,7 @@ import type { TimeOffKind } from '@driprail/shared/domain/pay/time-off/time-off-
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { FormError } from '../../../../components/form-error.tsx';
 import { Button } from '../../../../components/button.tsx';
-import { SelectField, TextField } from '../../../../components/field.tsx';
+import { NamedOptions, SelectField, TextField } from '../../../../components/field.tsx';
 import { Sheet, SheetFoot } from '../../../../components/sheet.tsx';
 import { fieldsOf } from '../../../../lib/fields.ts';
 import { hoursMinutes, money } from '../../../../lib/format.ts';
@@ -99,11 +99,7 @@ export function TimeOffSheet({ personId, startsOn: asked, children, onClose }: P
               onChange={(event) => change({ personId: event.target.value })}
             >
               <option value="">Choose</option>
-              {people.map((person) => (
-                <option key={person.id} value={person.id}>
-                  {person.name}
-                </option>
-              ))}
+              <NamedOptions of={people} />
             </SelectField>
           ) : null}
           <KindField
