@@ -1,9 +1,13 @@
 import type { OutputOf } from '@driprail/shared/contracts/endpoint';
 import type { listLateWeeks } from '@driprail/shared/contracts/pay-difference.contract';
+import { computePayWeek } from '@driprail/shared/domain/pay/compute-pay-week';
+import { missingCents } from '@driprail/shared/domain/pay/late-difference';
 import { weekNumberOf } from '@driprail/shared/domain/time/zone';
 import { PayWeek } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
-import { readPayWeek } from './pay-week.queries.ts';
+import { correctionsOfWeek, differences } from './corrections.queries.ts';
+import { readFrozen } from './frozen.queries.ts';
+import { payInputOf } from './pay-input.queries.ts';
 
 /** As far back as marks still arrive late (two weeks), and the owner's corrections of hours mostly reach. */
 const LOOK_BACK_WEEKS = 4;
@@ -16,15 +20,14 @@ export function lateWeeks(now: Date): Promise<OutputOf<typeof listLateWeeks>['we
       ...{ where, order: [['startsOn', 'DESC']], limit: LOOK_BACK_WEEKS },
       transaction: tx,
     });
-    const late: OutputOf<typeof listLateWeeks>['weeks'] = [];
+    const weeks: OutputOf<typeof listLateWeeks>['weeks'] = [];
     for (const week of locked) {
-      const { lateDifferences } = await readPayWeek(week, now, tx);
-      const people = lateDifferences.map(({ name, nowCents, lockedCents, correctedCents }) => ({
-        name,
-        missingCents: nowCents - lockedCents - correctedCents,
-      }));
-      if (people.length > 0) late.push({ startsOn: week.startsOn, number: weekNumberOf(week.startsOn), people });
+      const frozen = await readFrozen(week.id, null, tx);
+      const computed = computePayWeek(await payInputOf(week, now, tx));
+      const late = differences(frozen.people, computed.people, await correctionsOfWeek(week.id, tx));
+      const people = late.map((person) => ({ name: person.name, missingCents: missingCents(person) }));
+      if (people.length > 0) weeks.push({ startsOn: week.startsOn, number: weekNumberOf(week.startsOn), people });
     }
-    return late;
+    return weeks;
   });
 }

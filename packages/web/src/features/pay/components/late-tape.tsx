@@ -1,4 +1,5 @@
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
+import { missingCents } from '@driprail/shared/domain/pay/late-difference';
 import { money } from '../../../lib/format.ts';
 
 export type LateDifference = PayWeekDto['lateDifferences'][number];
@@ -9,7 +10,7 @@ export function LateTape({ late, onCorrect }: { late: LateDifference[]; onCorrec
   return (
     <div className="tape pay-tape" role="status">
       {late.map((item) => {
-        const missing = item.nowCents - item.lockedCents - item.correctedCents;
+        const missing = missingCents(item);
         return (
           <p key={item.personId}>
             <span>

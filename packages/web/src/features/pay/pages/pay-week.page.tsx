@@ -2,6 +2,7 @@ import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link, useNavigate, useParams, useSearchParams } from 'react-router';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
+import { missingCents } from '@driprail/shared/domain/pay/late-difference';
 import { addDays } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
@@ -127,8 +128,8 @@ function Week({ dto, weeks, now }: { dto: PayWeekDto; weeks: WeekFigures[]; now:
             <WaitingTape rules={rules ?? []} />
             <LateTape
               late={dto.lateDifferences}
-              onCorrect={({ personId, name, nowCents, lockedCents, correctedCents }) =>
-                adjust({ personId, name, amount: money(nowCents - lockedCents - correctedCents) })
+              onCorrect={(late) =>
+                adjust({ personId: late.personId, name: late.name, amount: money(missingCents(late)) })
               }
             />
             {people.length === 0 ? (
