@@ -3,6 +3,7 @@ import * as api from '@driprail/shared/contracts/pay.contract';
 import * as agreements from '@driprail/shared/contracts/pay-agreements.contract';
 import * as jobsPaid from '@driprail/shared/contracts/jobs-paid.contract';
 import { getPayDifference, listLateWeeks } from '@driprail/shared/contracts/pay-difference.contract';
+import * as rates from '@driprail/shared/contracts/pay-rates.contract';
 import * as plans from '@driprail/shared/contracts/pay-plans.contract';
 import { OVERTIME_RULE_SETS } from '@driprail/shared/domain/pay/overtime-rule-sets';
 import { companyOf, todayOf } from '../../db/company.ts';
@@ -40,10 +41,10 @@ export function payRoutes(table: RouteTable, { baseUrlOf }: PayOptions): void {
   const read = (day: string, now: Date, parts: { withTimeOff?: boolean } = {}) =>
     inTransaction(async (tx) => readPayWeek(await weekAt(day, tx), now, tx, parts));
 
-  route(table, api.listRates, async () => ({ rates: await listRates() }));
-  route(table, api.addRate, async ({ body }, ctx) => ({ rate: await addRate(ctx, body) }));
-  route(table, api.listPayRules, async () => ({ rules: await listRules() }));
-  route(table, api.addPayRules, async ({ body }, ctx) => ({ rules: await addRules(ctx, body) }));
+  route(table, rates.listRates, async () => ({ rates: await listRates() }));
+  route(table, rates.addRate, async ({ body }, ctx) => ({ rate: await addRate(ctx, body) }));
+  route(table, rates.listPayRules, async () => ({ rules: await listRules() }));
+  route(table, rates.addPayRules, async ({ body }, ctx) => ({ rules: await addRules(ctx, body) }));
   route(table, plans.listPayPlans, async () => ({ plans: await listPlans() }));
   route(table, plans.addPayPlan, async ({ body }, ctx) => ({ plan: await addPlan(ctx, body) }));
   route(table, plans.listRuleSets, () => Promise.resolve({ ruleSets: [...OVERTIME_RULE_SETS] }));

@@ -1,5 +1,5 @@
 import { v7 as uuid } from 'uuid';
-import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import { audit } from '../../db/audit.ts';
 import { PayRate, PayRuleSet } from '../../db/models/index.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';

@@ -1,6 +1,6 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
-import { addPayRules, addRate, listPayRules, listRates } from '@driprail/shared/contracts/pay.contract';
+import { addPayRules, addRate, listPayRules, listRates } from '@driprail/shared/contracts/pay-rates.contract';
 import { listPeople } from '@driprail/shared/contracts/people.contract';
 import { listServices } from '@driprail/shared/contracts/services.contract';
 import { call } from '../../../lib/call.ts';

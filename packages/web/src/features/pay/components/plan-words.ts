@@ -1,4 +1,4 @@
-import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { shortText } from '@driprail/shared/domain/money/rounding';
 import { rateText } from './ledger.ts';

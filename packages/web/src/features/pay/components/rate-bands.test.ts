@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import { planWords, ratesOn, rulesOn } from './plan-words.ts';
 import { rateRows, ruleRows } from './rate-bands.ts';
 import { timeAxis } from './time-axis.ts';

@@ -1,5 +1,5 @@
 import { clockKindNames } from '@driprail/shared/domain/time/clock-kinds';
-import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import type { PayPlanDto } from '@driprail/shared/contracts/pay-plans.contract';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { shortText } from '@driprail/shared/domain/money/rounding';

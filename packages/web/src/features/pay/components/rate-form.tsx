@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { clockKindNames, clockKinds } from '@driprail/shared/domain/time/clock-kinds';
 import type { ClockKindName } from '@driprail/shared/domain/time/clock-kinds';
-import type { RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { FormError } from '../../../components/form-error.tsx';

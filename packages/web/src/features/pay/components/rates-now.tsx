@@ -1,5 +1,5 @@
 import { Link } from 'react-router';
-import type { RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import type { PayPlanDto } from '@driprail/shared/contracts/pay-plans.contract';
 import type { PersonDto } from '@driprail/shared/contracts/people.contract';
 import { basePlanWords, planOn } from './plan-base-words.ts';

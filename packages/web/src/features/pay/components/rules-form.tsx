@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import type { PayRulesDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto } from '@driprail/shared/contracts/pay-rates.contract';
 import { FormError } from '../../../components/form-error.tsx';
 import { Button } from '../../../components/button.tsx';
 import { SelectField, TextField } from '../../../components/field.tsx';

@@ -1,7 +1,7 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link, useSearchParams } from 'react-router';
-import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto, RateDto } from '@driprail/shared/contracts/pay-rates.contract';
 import type { PayPlan } from '@driprail/shared/domain/pay/plans/pay-plan';
 import { exact } from '@driprail/shared/domain/money/exact';
 import { formatDate } from '@driprail/shared/domain/time/format';

@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
-import type { PayRulesDto } from '@driprail/shared/contracts/pay.contract';
+import type { PayRulesDto } from '@driprail/shared/contracts/pay-rates.contract';
 import { Button } from '../../../../components/button.tsx';
 import { Sheet } from '../../../../components/sheet.tsx';
 import { money } from '../../../../lib/format.ts';
