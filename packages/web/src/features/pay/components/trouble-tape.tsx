@@ -1,34 +1,23 @@
-import { useState } from 'react';
 import { Link } from 'react-router';
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import type { PayWarning } from '@driprail/shared/domain/pay/pay-week.types';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { useFormats } from '../../../lib/format.ts';
+import { FoldedTape } from './folded-tape.tsx';
 import { boardJob, hoursOf } from './working.ts';
 
-/** What must be settled, each with its way out: two are shown, the rest unfold. */
+/** What must be settled, each with its way out. */
 export function TroubleTape({ dto, warnings }: { dto: PayWeekDto; warnings: PayWarning[] }) {
-  const [isOpen, setOpen] = useState(false);
-  if (warnings.length === 0) return null;
-  const shown = isOpen ? warnings : warnings.slice(0, 3);
-  const more = warnings.length - shown.length;
-  return (
-    <div className="tape pay-tape" role="status">
-      {shown.map((warning) => (
-        <p key={`${warning.personId}:${warning.code}:${warning.entryId ?? warning.jobId ?? warning.message}`}>
-          <Message dto={dto} warning={warning} /> <WayOut dto={dto} warning={warning} />
-        </p>
-      ))}
-      {more > 0 || isOpen ? (
-        <p>
-          <button type="button" className="link" aria-expanded={isOpen} onClick={() => setOpen(!isOpen)}>
-            {isOpen ? 'Show fewer' : `and ${more} more`}
-          </button>
-        </p>
-      ) : null}
-    </div>
-  );
+  const items = warnings.map((warning) => ({
+    key: `${warning.personId}:${warning.code}:${warning.entryId ?? warning.jobId ?? warning.message}`,
+    children: (
+      <>
+        <Message dto={dto} warning={warning} /> <WayOut dto={dto} warning={warning} />
+      </>
+    ),
+  }));
+  return <FoldedTape items={items} />;
 }
 
 function Message({ dto, warning }: { dto: PayWeekDto; warning: PayWarning }) {
