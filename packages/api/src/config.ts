@@ -1,6 +1,9 @@
 import { z } from 'zod';
+import type { PaymentsPlace } from './integrations/payments/payments.ts';
 
 const flag = z.enum(['0', '1']).default('0');
+
+const LOOPBACK = ['127.0.0.1', 'localhost', '::1', '[::1]'];
 
 const environment = z.object({
   DATABASE_URL: z.string().min(1),
@@ -28,6 +31,16 @@ const environment = z.object({
   S3_ENDPOINT: z.url().optional(),
   S3_ACCESS_KEY_ID: z.string().optional(),
   S3_SECRET_ACCESS_KEY: z.string().optional(),
+  /** Card payments go through this account; without it, through the local stand-in on loopback. */
+  STRIPE_SECRET_KEY: z.string().optional(),
+  STRIPE_WEBHOOK_SECRET: z.string().optional(),
+  /** A stand-in that runs as a process of its own; for tests. */
+  PAYMENTS_HOST: z
+    .url({ protocol: /^https?$/, abort: true, error: 'give an address such as http://127.0.0.1:4690.' })
+    .refine((text) => new URL(text).protocol === 'https:' || LOOPBACK.includes(new URL(text).hostname), {
+      error: 'without https only this machine (http://127.0.0.1:PORT) may be named.',
+    })
+    .optional(),
 });
 
 export type Config = ReturnType<typeof readConfig>;
@@ -39,7 +52,8 @@ export function readConfig(env: NodeJS.ProcessEnv) {
     throw new Error(parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`).join(' '));
   }
   const e = parsed.data;
-  const isLoopback = ['127.0.0.1', 'localhost', '::1'].includes(e.HOST);
+  const isLoopback = LOOPBACK.includes(e.HOST);
+  const payments = paymentsPlace(e);
   return {
     databaseUrl: e.DATABASE_URL,
     migrationUrl: e.DATABASE_MIGRATION_URL ?? e.DATABASE_URL,
@@ -70,8 +84,23 @@ export function readConfig(env: NodeJS.ProcessEnv) {
       e.VAPID_PUBLIC_KEY && e.VAPID_PRIVATE_KEY
         ? { publicKey: e.VAPID_PUBLIC_KEY, privateKey: e.VAPID_PRIVATE_KEY }
         : null,
+    payments,
+    /** Nobody beyond this machine can be shown the stand-in, or think that it took money. */
+    hasLocalPayments: !payments && isLoopback && (!e.PUBLIC_URL || LOOPBACK.includes(new URL(e.PUBLIC_URL).hostname)),
     trustsProxy: e.TRUST_PROXY === '1',
     /** The page of the local mail fake exists only with the fake, on loopback. */
     hasLocalMail: !e.SMTP_URL && isLoopback,
   };
+}
+
+/** @throws Error when only a part of what card payments need is set */
+function paymentsPlace(e: z.infer<typeof environment>): PaymentsPlace | null {
+  const { STRIPE_SECRET_KEY: secretKey, STRIPE_WEBHOOK_SECRET: webhookSecret, PAYMENTS_HOST: host } = e;
+  if (!secretKey && !webhookSecret && !host) return null;
+  if (!secretKey) throw new Error('STRIPE_SECRET_KEY: set it too, or card payments can’t be asked for.');
+  if (!webhookSecret) throw new Error('STRIPE_WEBHOOK_SECRET: set it too, or no card payment would ever be noted.');
+  if (host && secretKey.startsWith('sk_live_')) {
+    throw new Error('PAYMENTS_HOST: a live key may only be sent to the payment service itself.');
+  }
+  return { secretKey, webhookSecret, host: host ?? null };
 }
