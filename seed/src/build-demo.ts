@@ -2,6 +2,7 @@ import { writeTimeOff } from './away.ts';
 import type { Calendar } from './calendar.ts';
 import { ZONE, calendarOf, instant, minuteOf } from './calendar.ts';
 import { writeComingDays } from './coming-days.ts';
+import { writeCustomerFacts } from './customer-facts.ts';
 import { writeCustomers } from './customers.ts';
 import { writeHistory } from './history.ts';
 import type { Book } from './job-rows.ts';
@@ -56,6 +57,7 @@ export function buildDemo(now: Date): Demo {
   writeTimeOffPay(book, people);
   writeWork(book, people);
   writeWalkRounds(book);
+  writeCustomerFacts(book, people);
   rows.jobs.sort((a, b) => a.createdAt.getTime() - b.createdAt.getTime());
   return { calendar, rows, ownerUserId: people.ownerUserId };
 }

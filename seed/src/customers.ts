@@ -8,8 +8,10 @@ import type { Random } from './random.ts';
 import type { DemoRows } from './rows.ts';
 
 const CUSTOMERS = 180;
-/** 555-0100 to 555-0199 are set aside for fiction; the first sixteen belong to the company, so most others serve twice. */
+/** 555-0100 to 555-0199 are set aside for fiction in every area code; the first sixteen belong to the company. */
 const FIRST_PHONE = 16;
+/** No area code is 555, so these reach nobody either; whoever comes after has no phone and writes. */
+const AREAS = ['', '(555) '] as const;
 
 export interface DemoVehicle {
   id: string;
@@ -56,12 +58,13 @@ function writeCustomer(rows: DemoRows, ids: () => string, random: Random, spec: 
   const id = ids();
   const { name, isCompany, index } = spec;
   const slug = name.toLowerCase().replace(/[^a-z]+/g, isCompany ? '' : '.');
+  const phone = phoneOf(index);
   rows.customers.push({
     id,
     name,
     isCompany,
-    phone: `555-01${String(FIRST_PHONE + (index % (100 - FIRST_PHONE)))}`,
-    email: isCompany ? `desk@${slug}.example` : random.chance(0.85) ? `${slug}@mail.example` : '',
+    phone,
+    email: isCompany ? `desk@${slug}.example` : random.chance(0.85) || phone === '' ? `${slug}@mail.example` : '',
     notes: isCompany ? 'Invoice at the end of the month.' : random.chance(0.12) ? random.pick(wayIn.wishes) : '',
   });
   const area = areas.find((one) => one.name === spec.area) ?? random.pick(areas);
@@ -71,6 +74,13 @@ function writeCustomer(rows: DemoRows, ids: () => string, random: Random, spec: 
     writeVehicle(rows, ids, random, { customerId: id, position, isCompany, number: rows.vehicles.length }),
   );
   return { id, name, isCompany, ...address, vehicles };
+}
+
+/** One for each customer, so that no two look like one. */
+function phoneOf(index: number): string {
+  const numbers = 100 - FIRST_PHONE;
+  const area = AREAS[Math.floor(index / numbers)];
+  return area === undefined ? '' : `${area}555-01${String(FIRST_PHONE + (index % numbers))}`;
 }
 
 function writeAddress(

@@ -22,6 +22,8 @@ export interface DemoRows {
   vans: Row<models.Van>[];
   vanCrew: Row<models.VanCrew>[];
   customers: Row<models.Customer>[];
+  customerCrew: Row<models.CustomerCrew>[];
+  customerConsents: Row<models.CustomerConsent>[];
   addresses: Row<models.Address>[];
   vehicles: Row<models.Vehicle>[];
   services: Row<models.Service>[];
@@ -62,6 +64,8 @@ export function noRows(): DemoRows {
     vans: [],
     vanCrew: [],
     customers: [],
+    customerCrew: [],
+    customerConsents: [],
     addresses: [],
     vehicles: [],
     services: [],

@@ -20,6 +20,8 @@ export function storeRows(rows: DemoRows, passwordHash: string): Promise<void> {
     await models.Van.bulkCreate(rows.vans, options);
     await models.VanCrew.bulkCreate(rows.vanCrew, options);
     await models.Customer.bulkCreate(rows.customers, options);
+    await models.CustomerCrew.bulkCreate(rows.customerCrew, options);
+    await models.CustomerConsent.bulkCreate(rows.customerConsents, options);
     await models.Address.bulkCreate(rows.addresses, options);
     await models.Vehicle.bulkCreate(rows.vehicles, options);
     await models.Service.bulkCreate(rows.services, options);

@@ -38,7 +38,7 @@ function writeMustKnows({ rows }: Book): void {
     const hasDog = notes.startsWith('Dog');
     const takesKey = notes.startsWith('Key in');
     if (notes.startsWith('Ring')) ringing.add(address.customerId);
-    Object.assign(address, { hasDog, shutsGate: hasDog, drainsToCreek: notes.startsWith('Storm drain'), takesKey });
+    Object.assign(address, { hasDog, shutsGate: hasDog, takesKey });
     address.keyGoesBack = takesKey ? 'Lock box by the side door' : '';
   }
   for (const customer of rows.customers) {

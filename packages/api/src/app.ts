@@ -14,6 +14,7 @@ import type { RouteTable } from './http/route.ts';
 import { registerUsers, sessionChain } from './http/session.ts';
 import { serveWeb } from './http/web.ts';
 import type { PushKeys } from './integrations/push/index.ts';
+import { geocoderFor } from './integrations/maps/index.ts';
 import { storeFor } from './integrations/storage/index.ts';
 import type { Logger } from './log.ts';
 import type { TakenMail } from './mail/transport.ts';
@@ -77,6 +78,7 @@ export function createApp({ config, now, log, secret, setUpCode, localMail, push
     setUpCode,
     localMail,
     store: storeFor(config),
+    geocoder: geocoderFor(config),
     push,
     baseUrlOf: (req) => config.publicUrl ?? `${req.protocol}://${req.get('host') ?? ''}`,
   });

@@ -21,6 +21,7 @@ import { notFound } from './http/errors.ts';
 import { openApiOf } from './http/openapi.ts';
 import type { RouteTable } from './http/route.ts';
 import { publicRoute, route } from './http/route.ts';
+import type { Geocoder } from './integrations/maps/index.ts';
 import type { FileStore } from './integrations/storage/index.ts';
 import type { TakenMail } from './mail/transport.ts';
 
@@ -29,6 +30,7 @@ export interface RouteParts {
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
   store: FileStore;
+  geocoder: Geocoder | null;
   push: PushRules | null;
   baseUrlOf: (req: Request) => string;
 }
@@ -49,10 +51,10 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   pushRoutes(table, parts.push);
   payRoutes(table, parts);
   walkRoundRoutes(table, parts.store);
+  customersRoutes(table, parts);
   settingsRoutes(table, { code: parts.setUpCode, hasLocalMail: parts.hasLocalMail });
   for (const mount of [
     peopleRoutes,
-    customersRoutes,
     servicesRoutes,
     jobsRoutes,
     boardRoutes,

@@ -15,6 +15,7 @@ import { jobWork } from './2026-12-01-013-job-work.ts';
 import { payIndexes } from './2026-12-01-014-pay-indexes.ts';
 import { phone } from './2026-12-01-015-phone.ts';
 import { breakReminders } from './2026-12-01-016-break-reminders.ts';
+import { customers } from './2026-12-01-018-customers.ts';
 
 /** In the order in which they are run. */
 export const migrations: Migration[] = [
@@ -34,4 +35,5 @@ export const migrations: Migration[] = [
   payIndexes,
   phone,
   breakReminders,
+  customers,
 ];

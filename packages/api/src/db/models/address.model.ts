@@ -1,9 +1,11 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { Drain, WashWater } from '@driprail/shared/domain/customer/place-facts';
 
 export class Address extends Model<InferAttributes<Address>, InferCreationAttributes<Address>> {
   declare id: string;
   declare customerId: string;
+  declare label: CreationOptional<string>;
   declare line: string;
   declare city: CreationOptional<string>;
   declare postcode: CreationOptional<string>;
@@ -16,7 +18,12 @@ export class Address extends Model<InferAttributes<Address>, InferCreationAttrib
   declare hasPower: CreationOptional<boolean>;
   declare hasDog: CreationOptional<boolean>;
   declare shutsGate: CreationOptional<boolean>;
-  declare drainsToCreek: CreationOptional<boolean>;
+  declare drain: CreationOptional<Drain>;
+  declare washWater: CreationOptional<WashWater | null>;
+  declare permitNumber: CreationOptional<string>;
+  declare permitUntil: CreationOptional<string | null>;
+  declare ownerConsentBy: CreationOptional<string>;
+  declare ownerConsentOn: CreationOptional<string | null>;
   declare takesKey: CreationOptional<boolean>;
   declare keyGoesBack: CreationOptional<string>;
   declare mustKnow: CreationOptional<string>;
@@ -29,6 +36,7 @@ export function initAddress(sequelize: Sequelize): void {
     {
       id: { type: DataTypes.UUID, primaryKey: true },
       customerId: { type: DataTypes.UUID, allowNull: false },
+      label: { type: DataTypes.TEXT },
       line: { type: DataTypes.TEXT, allowNull: false },
       city: { type: DataTypes.TEXT },
       postcode: { type: DataTypes.TEXT },
@@ -41,7 +49,12 @@ export function initAddress(sequelize: Sequelize): void {
       hasPower: { type: DataTypes.BOOLEAN },
       hasDog: { type: DataTypes.BOOLEAN },
       shutsGate: { type: DataTypes.BOOLEAN },
-      drainsToCreek: { type: DataTypes.BOOLEAN },
+      drain: { type: DataTypes.TEXT },
+      washWater: { type: DataTypes.TEXT, allowNull: true },
+      permitNumber: { type: DataTypes.TEXT },
+      permitUntil: { type: DataTypes.DATEONLY, allowNull: true },
+      ownerConsentBy: { type: DataTypes.TEXT },
+      ownerConsentOn: { type: DataTypes.DATEONLY, allowNull: true },
       takesKey: { type: DataTypes.BOOLEAN },
       keyGoesBack: { type: DataTypes.TEXT },
       mustKnow: { type: DataTypes.TEXT },

@@ -11,6 +11,10 @@ export class Customer extends Model<InferAttributes<Customer>, InferCreationAttr
   declare isScentFree: CreationOptional<boolean>;
   declare ringsFirst: CreationOptional<boolean>;
   declare mustKnow: CreationOptional<string>;
+  declare tags: CreationOptional<string[]>;
+  declare mergedInto: CreationOptional<string | null>;
+  declare mergedAt: CreationOptional<Date | null>;
+  declare erasedAt: CreationOptional<Date | null>;
   declare version: CreationOptional<number>;
 }
 
@@ -26,6 +30,10 @@ export function initCustomer(sequelize: Sequelize): void {
       isScentFree: { type: DataTypes.BOOLEAN },
       ringsFirst: { type: DataTypes.BOOLEAN },
       mustKnow: { type: DataTypes.TEXT },
+      tags: { type: DataTypes.ARRAY(DataTypes.TEXT) },
+      mergedInto: { type: DataTypes.UUID, allowNull: true },
+      mergedAt: { type: DataTypes.DATE, allowNull: true },
+      erasedAt: { type: DataTypes.DATE, allowNull: true },
       version: { type: DataTypes.INTEGER },
     },
     { sequelize, modelName: 'Customer', tableName: 'customers', underscored: true, timestamps: false },

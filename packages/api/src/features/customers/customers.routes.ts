@@ -2,15 +2,23 @@ import * as api from '@driprail/shared/contracts/customers.contract';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { route } from '../../http/route.ts';
-import { findCustomer, findCustomers, historyOf } from './customers.queries.ts';
+import type { Geocoder } from '../../integrations/maps/index.ts';
+import { findCustomer, findCustomers, leadingTo, vehicleWords } from './customers.queries.ts';
 import { createCustomer, updateCustomer } from './customers.service.ts';
+import { customerSince, historyOf } from './history.queries.ts';
+import { placeOf } from './places.queries.ts';
 
-export function customersRoutes(table: RouteTable): void {
-  route(table, api.listCustomers, ({ query }) => findCustomers(query.find, query.limit));
+export function customersRoutes(table: RouteTable, { geocoder }: { geocoder: Geocoder | null }): void {
+  route(table, api.listCustomers, ({ query }) => findCustomers(query));
+  route(table, api.getVehicleWords, () => vehicleWords());
+  route(table, api.findPlace, ({ body }) => placeOf(geocoder, body));
   route(table, api.getCustomer, async ({ params }) => {
-    const customer = await findCustomer(params.id);
+    const found = await leadingTo(params.id);
+    const customer = found && (await findCustomer(found.id));
     if (!customer) throw notFound('That customer');
-    return { customer, history: await historyOf(params.id) };
+    const [since, history] = await Promise.all([customerSince(customer.id), historyOf(customer.id)]);
+    const { mergedName, erasedAt } = found;
+    return { customer, mergedName, erasedAt, since, history };
   });
   route(table, api.createCustomer, async ({ body }, ctx) => ({ customer: await createCustomer(ctx, body) }));
   route(table, api.updateCustomer, async ({ params, body }, ctx) => ({

@@ -1,16 +1,17 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
-import type { z } from 'zod';
-import type { CustomerDto, customerBody } from '@driprail/shared/contracts/customers.contract';
+import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
+import type { CustomerBody } from '@driprail/shared/contracts/customers-record.contract';
 import { audit } from '../../db/audit.ts';
-import { Address, Customer, Vehicle } from '../../db/models/index.ts';
+import { Customer } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { findCustomer } from './customers.queries.ts';
+import { keepAddresses, keepConsents, keepPreferredCrew, keepVehicles } from './keep-parts.ts';
 
-export type CustomerFields = z.input<typeof customerBody>;
+export type CustomerFields = CustomerBody;
 
 export function createCustomer(ctx: Ctx, fields: CustomerFields, id = uuid()): Promise<CustomerDto> {
   return inTransaction((tx) => addCustomer(tx, ctx, fields, id));
@@ -20,57 +21,51 @@ export function createCustomer(ctx: Ctx, fields: CustomerFields, id = uuid()): P
 export async function addCustomer(
   tx: Transaction,
   ctx: Ctx,
-  { addresses, vehicles, ...fields }: CustomerFields,
+  { addresses, vehicles, preferredCrew, consents, ...fields }: CustomerFields,
   id = uuid(),
 ): Promise<CustomerDto> {
   await Customer.create({ id, ...fields }, { transaction: tx });
-  await keepAddresses(tx, id, addresses);
-  await keepVehicles(tx, id, vehicles);
+  await keepParts(tx, ctx, id, { addresses, vehicles, preferredCrew, consents });
   return saved(tx, ctx, id, 'added');
 }
 
+/** @throws 404, 409 when it was changed, merged or erased meanwhile */
 export function updateCustomer(
   ctx: Ctx,
   id: string,
-  { addresses, vehicles, version, ...fields }: CustomerFields & { version: number },
+  { addresses, vehicles, preferredCrew, consents, version, ...fields }: CustomerFields & { version: number },
 ): Promise<CustomerDto> {
   return inTransaction(async (tx) => {
-    const customer = await Customer.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
-    if (!customer) throw notFound('That customer');
+    const customer = await lockCustomer(tx, id);
     if (customer.version !== version)
       throw conflict('stale', `Somebody changed ${customer.name} meanwhile. Reload and try again.`);
     await customer.update({ ...fields, version: version + 1 }, { transaction: tx });
-    await keepAddresses(tx, id, addresses);
-    await keepVehicles(tx, id, vehicles);
+    await keepParts(tx, ctx, id, { addresses, vehicles, preferredCrew, consents });
     return saved(tx, ctx, id, 'changed');
   });
 }
 
-/** Those left out go out of sight, but stay on record: past jobs name them. */
-async function keepAddresses(tx: Transaction, customerId: string, list: CustomerFields['addresses']): Promise<void> {
-  const known = new Map(
-    (await Address.findAll({ where: { customerId }, transaction: tx })).map((row) => [row.id, row]),
-  );
-  for (const [position, { id, ...fields }] of list.entries()) {
-    const row = id ? known.get(id) : undefined;
-    if (row) await row.update({ ...fields, position, isActive: true }, { transaction: tx });
-    else await Address.create({ id: uuid(), customerId, ...fields, position }, { transaction: tx });
-    if (row) known.delete(row.id);
-  }
-  for (const row of known.values()) await row.update({ isActive: false }, { transaction: tx });
+/** A record that still lives, locked for a change. @throws 404, 409 for one that was merged or erased */
+export async function lockCustomer(tx: Transaction, id: string): Promise<Customer> {
+  const customer = await Customer.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
+  if (!customer) throw notFound('That customer');
+  if (customer.mergedInto) throw conflict('merged', `${customer.name} was merged into another record. Open that one.`);
+  if (customer.erasedAt) throw conflict('erased', 'That customer was erased. What is left can’t be changed.');
+  return customer;
 }
 
-async function keepVehicles(tx: Transaction, customerId: string, list: CustomerFields['vehicles']): Promise<void> {
-  const known = new Map(
-    (await Vehicle.findAll({ where: { customerId }, transaction: tx })).map((row) => [row.id, row]),
-  );
-  for (const [position, { id, ...fields }] of list.entries()) {
-    const row = id ? known.get(id) : undefined;
-    if (row) await row.update({ ...fields, position, isActive: true }, { transaction: tx });
-    else await Vehicle.create({ id: uuid(), customerId, ...fields, position }, { transaction: tx });
-    if (row) known.delete(row.id);
-  }
-  for (const row of known.values()) await row.update({ isActive: false }, { transaction: tx });
+type Parts = Pick<CustomerFields, 'addresses' | 'vehicles' | 'preferredCrew' | 'consents'>;
+
+async function keepParts(
+  tx: Transaction,
+  ctx: Ctx,
+  id: string,
+  { addresses, vehicles, preferredCrew, consents }: Parts,
+): Promise<void> {
+  await keepAddresses(tx, id, addresses);
+  await keepVehicles(tx, id, vehicles);
+  if (preferredCrew) await keepPreferredCrew(tx, id, preferredCrew);
+  if (consents) await keepConsents(tx, ctx, id, consents);
 }
 
 async function saved(tx: Transaction, { actor, now }: Ctx, id: string, action: string): Promise<CustomerDto> {

@@ -183,7 +183,7 @@ describe('must-knows', () => {
   };
 
   test('come before Start work, unless it was pressed in a dead zone after what was known there', async () => {
-    await flags({ hasDog: true, drainsToCreek: true });
+    await flags({ hasDog: true, drain: 'storm' });
     for (const kind of ['set_off', 'arrive']) await presses().mark(kind).expect(200);
     const refused = await presses().mark('start_work', { reason: 'Walked round before' }).expect(422);
     expect(refused.body).toMatchObject({
@@ -198,7 +198,7 @@ describe('must-knows', () => {
     await presses()
       .mark('start_work', { reason: 'Walked round before', deviceAt: clock('15:05') })
       .expect(200);
-    await flags({ hasDog: false, drainsToCreek: false, shutsGate: false });
+    await flags({ hasDog: false, drain: 'unknown', shutsGate: false });
   });
 
   test('the desk does not confirm for a crew; it records what it was told', async () => {

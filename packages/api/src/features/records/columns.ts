@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { clockTime, day, email, name, phone, sizeClasses, sizeClassNames } from '@driprail/shared/contracts/fields';
+import { customerEmail } from '@driprail/shared/contracts/customers-record.contract';
+import { clockTime, day, name, phone, sizeClasses, sizeClassNames } from '@driprail/shared/contracts/fields';
 import type { SizeClass } from '@driprail/shared/contracts/fields';
 
 const optional = (max: number) => z.string().max(max, `At most ${max} letters.`).default('');
@@ -37,7 +38,7 @@ export const customerRow = z.strictObject({
   name,
   company: yesNo,
   phone: phone.default(''),
-  email: email.or(z.literal('')).default(''),
+  email: customerEmail.default(''),
   street: z.string().min(1, 'Give the street and number.').max(160),
   city: optional(80),
   zip: optional(16),

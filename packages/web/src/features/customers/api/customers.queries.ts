@@ -5,7 +5,7 @@ import {
   listCustomers,
   updateCustomer,
 } from '@driprail/shared/contracts/customers.contract';
-import type { CustomerBody } from '@driprail/shared/contracts/customers.contract';
+import type { CustomerBody } from '@driprail/shared/contracts/customers-record.contract';
 import { call } from '../../../lib/call.ts';
 
 export const customersQuery = (find: string) =>

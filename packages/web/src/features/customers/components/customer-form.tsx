@@ -1,7 +1,8 @@
 import { useFieldArray, useForm } from 'react-hook-form';
 import { zodResolver } from '@hookform/resolvers/zod';
-import { customerBody } from '@driprail/shared/contracts/customers.contract';
-import type { CustomerBody, CustomerDto } from '@driprail/shared/contracts/customers.contract';
+import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
+import { customerBody } from '@driprail/shared/contracts/customers-record.contract';
+import type { CustomerBody } from '@driprail/shared/contracts/customers-record.contract';
 import { sizeClassNames, sizeClasses } from '@driprail/shared/contracts/fields';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
@@ -31,7 +32,7 @@ const address = {
   hasPower: false,
   hasDog: false,
   shutsGate: false,
-  drainsToCreek: false,
+  drain: 'unknown' as const,
   takesKey: false,
   keyGoesBack: '',
   mustKnow: '',

@@ -1,5 +1,5 @@
 import type { FieldErrors, UseFormRegister } from 'react-hook-form';
-import type { CustomerBody } from '@driprail/shared/contracts/customers.contract';
+import type { CustomerBody } from '@driprail/shared/contracts/customers-record.contract';
 import { CheckField, TextField } from '../../../components/field.tsx';
 
 interface Fields {
@@ -34,7 +34,6 @@ export function AddressMustKnows({ at, register, errors }: Fields & { at: `addre
       <legend className="sr">Must-knows of this address</legend>
       <CheckField label="Dog" {...register(`${at}.hasDog`)} />
       <CheckField label="Shut the gate" {...register(`${at}.shutsGate`)} />
-      <CheckField label="Drain to creek" {...register(`${at}.drainsToCreek`)} />
       <CheckField label="Key is taken" {...register(`${at}.takesKey`)} />
       <TextField
         className="col-span-2"
