@@ -71,7 +71,7 @@ export function usePayments(): PaymentsRig {
       };
       const answer = await fetch(`${rig.fake.url}/test${path}`, init);
       if (!answer.ok) throw new Error(`${path}: ${answer.status} ${await answer.text()}`);
-      return answer.status === 204 ? null : ((await answer.json()));
+      return answer.status === 204 ? null : await answer.json();
     };
     rig.arrived = async (kind) => {
       const found = () => rig.events.find((event) => event.kind === kind);

@@ -41,6 +41,8 @@ describe('a link', () => {
     expect(html).toContain('Pay $123.45');
     expect(html).toContain('no money moves');
     expect(html).not.toMatch(/<input|<script/);
+    const font = await fetch(`${rig.fake.url}/pay/font.woff2`);
+    expect([font.status, font.headers.get('content-type')]).toEqual([200, 'font/woff2']);
   });
 
   test('is the same for the same attempt, and another for another', async () => {

@@ -13,7 +13,8 @@ export function payPageRouter(books: Books): Router {
   const router = express.Router();
   router.use(guarded, express.urlencoded({ extended: false, limit: '1kb' }));
 
-  router.get('/font.woff2', (_req, res) => res.sendFile(FONT, { maxAge: '1d' }));
+  // Packages lie in a folder whose name begins with a dot.
+  router.get('/font.woff2', (_req, res) => res.sendFile(FONT, { maxAge: '1d', dotfiles: 'allow' }));
   router.get('/:session', (req, res) => {
     const session = found(books, req.params.session, res);
     if (session) res.send(pageOf(books, session, req.query['refused'] === '1'));

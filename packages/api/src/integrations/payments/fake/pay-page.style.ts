@@ -41,6 +41,7 @@ h1 { margin: 4px 0 2px; font-size: 26px; line-height: 32px; font-weight: 400; te
   clip-path: polygon(0 0, 4px 18%, 1px 38%, 5px 58%, 2px 78%, 4px 100%, 100% 100%, calc(100% - 5px) 82%, calc(100% - 1px) 60%, calc(100% - 5px) 40%, calc(100% - 2px) 20%, 100% 0);
 }
 form { margin: auto 0 0 -8px; padding-top: 24px; display: grid; gap: 10px; }
+@media (min-width: 700px) { form { margin-top: 0; max-width: 420px; } }
 button {
   min-height: 52px; padding: 0 16px; font: inherit; color: var(--ink); background: var(--sheet);
   border: 1.5px solid var(--line); border-radius: 3px; cursor: pointer;
