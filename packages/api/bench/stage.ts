@@ -13,6 +13,7 @@ import { analyze, migrate } from '../src/db/migrate.ts';
 import { connect, disconnect } from '../src/db/sequelize.ts';
 import { SetUpCode } from '../src/features/settings/index.ts';
 import { sessionChain } from '../src/http/session.ts';
+import { paymentsFor } from '../src/integrations/payments/index.ts';
 import { createLogger } from '../src/log.ts';
 import { localMail } from '../src/mail/transport.ts';
 import { cloneDatabase, ensureMigratedTemplate, testPostgresFromEnvironment } from '../src/testing/database.ts';
@@ -62,6 +63,7 @@ export async function openApp(fill: (now: Date) => Promise<unknown>): Promise<Op
     secret: SECRET,
     setUpCode: new SetUpCode(),
     localMail: mail.taken,
+    payments: paymentsFor(null),
     pushKeys: null,
   });
   const url = await listen(app.server);

@@ -6,6 +6,7 @@ import pg from 'pg';
 import type { Clock } from './clock.ts';
 import type { Config } from './config.ts';
 import { registerLocalStrategy, wakePhones } from './features/access/index.ts';
+import { CustomerLinks } from './features/billing/index.ts';
 import type { SetUpCode } from './features/settings/index.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { forbidden, notFound } from './http/errors.ts';
@@ -13,6 +14,7 @@ import { isOwnOrigin } from './http/origin.ts';
 import type { RouteTable } from './http/route.ts';
 import { registerUsers, sessionChain } from './http/session.ts';
 import { serveWeb } from './http/web.ts';
+import type { Payments } from './integrations/payments/index.ts';
 import type { PushKeys } from './integrations/push/index.ts';
 import { geocoderFor } from './integrations/maps/index.ts';
 import { storeFor } from './integrations/storage/index.ts';
@@ -29,6 +31,7 @@ export interface AppParts {
   secret: string;
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
+  payments: Payments;
   /** Null: phones are not woken. */
   pushKeys: PushKeys | null;
 }
@@ -40,7 +43,7 @@ export interface App {
 }
 
 /** Puts the service together without listening. The database must be connected and migrated. */
-export function createApp({ config, now, log, secret, setUpCode, localMail, pushKeys }: AppParts): App {
+export function createApp({ config, now, log, secret, setUpCode, localMail, payments, pushKeys }: AppParts): App {
   const app = express();
   const server = createServer(app);
   const pool = new pg.Pool({ connectionString: config.databaseUrl, max: 4 });
@@ -61,6 +64,8 @@ export function createApp({ config, now, log, secret, setUpCode, localMail, push
       isWrite && !isOwnOrigin(req, config.publicUrl) ? forbidden('This request came from another site.') : undefined,
     );
   });
+  // Signed over its bytes: read as it came, and by no session.
+  app.use('/api/webhooks', express.raw({ type: () => true, limit: '1mb' }));
   app.use('/api', ...sessions.chain, express.json({ limit: '1mb' }));
   app.use('/api', (_req, res, next) => {
     res.setHeader('cache-control', 'no-store');
@@ -80,6 +85,8 @@ export function createApp({ config, now, log, secret, setUpCode, localMail, push
     store: storeFor(config),
     geocoder: geocoderFor(config),
     push,
+    payments,
+    links: new CustomerLinks(secret),
     baseUrlOf: (req) => config.publicUrl ?? `${req.protocol}://${req.get('host') ?? ''}`,
   });
   app.use(table.router);

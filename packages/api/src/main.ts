@@ -5,7 +5,10 @@ import { readConfig } from './config.ts';
 import { analyze, migrate } from './db/migrate.ts';
 import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
+import { issueDueInvoices, lookUpOpenPages, settleAskedRefunds } from './features/billing/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
+import { startFakePayments } from './integrations/payments/fake/fake-payments.ts';
+import { paymentsFor } from './integrations/payments/index.ts';
 import { pushKeys } from './integrations/push/index.ts';
 import { every } from './jobs/every.ts';
 import { createLogger } from './log.ts';
@@ -35,6 +38,10 @@ async function main(): Promise<void> {
   const send = mail?.send ?? smtpMail(config.smtpUrl ?? '', config.mailFrom);
   if (mail && config.isLoopback) printLinks((line) => process.stderr.write(`${line}\n`));
   const secret = await sessionSecret(config.sessionSecret, config.dataDir);
+  let port = config.port;
+  const webhookUrl = () => `http://${config.host}:${port}/api/webhooks/payments`;
+  const localPayments = config.hasLocalPayments ? await startFakePayments({ webhookUrl }) : null;
+  const payments = paymentsFor(localPayments?.place ?? config.payments);
   const app = createApp({
     config,
     now,
@@ -42,6 +49,7 @@ async function main(): Promise<void> {
     secret,
     setUpCode,
     localMail: config.hasLocalMail && mail ? mail.taken : null,
+    payments,
     pushKeys: await pushKeys(config.push, config.dataDir, config.publicUrl ?? 'mailto:no-reply@driprail.example'),
   });
   const outbox = every(
@@ -50,9 +58,19 @@ async function main(): Promise<void> {
     (error) => log.warn({ err: error }, 'mail outbox'),
   );
 
+  const billing = every(
+    30,
+    async () => {
+      await issueDueInvoices(now());
+      await settleAskedRefunds(payments);
+      await lookUpOpenPages(payments, now());
+    },
+    (error) => log.warn({ err: error }, 'billing'),
+  );
+
   await listen(app.server, config.port, config.host);
   const address = app.server.address();
-  const port = typeof address === 'object' && address ? address.port : config.port;
+  port = typeof address === 'object' && address ? address.port : config.port;
   const code = (await isSetUpNeeded()) ? `Set up the company with this one-time code: ${setUpCode.make()}\n` : '';
   const signIns = (await hasDemoLogins()) ? demoSignIns : '';
   // In one piece: whoever waits for the ready line has the rest with it.
@@ -62,9 +80,9 @@ async function main(): Promise<void> {
   const stop = (): void => {
     if (isStopping) return;
     isStopping = true;
-    void outbox
-      .stop()
+    void Promise.all([outbox.stop(), billing.stop()])
       .then(() => app.close())
+      .then(() => localPayments?.stop())
       .then(() => disconnect())
       .then(() => process.exit(0));
   };

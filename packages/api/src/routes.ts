@@ -4,6 +4,8 @@ import { listLocalMail } from '@driprail/shared/contracts/mail.contract';
 import { select } from './db/sequelize.ts';
 import { accessRoutes, loginsRoutes, pushRoutes } from './features/access/index.ts';
 import type { PushRules } from './features/access/index.ts';
+import { billingRoutes } from './features/billing/index.ts';
+import type { BillingParts } from './features/billing/index.ts';
 import { boardRoutes } from './features/board/index.ts';
 import { jobsRoutes } from './features/booking/index.ts';
 import { clockRoutes } from './features/clock/index.ts';
@@ -32,6 +34,8 @@ export interface RouteParts {
   store: FileStore;
   geocoder: Geocoder | null;
   push: PushRules | null;
+  payments: BillingParts['payments'];
+  links: BillingParts['links'];
   baseUrlOf: (req: Request) => string;
 }
 
@@ -50,6 +54,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   loginsRoutes(table, parts);
   pushRoutes(table, parts.push);
   payRoutes(table, parts);
+  billingRoutes(table, parts);
   walkRoundRoutes(table, parts.store);
   customersRoutes(table, parts);
   settingsRoutes(table, { code: parts.setUpCode, hasLocalMail: parts.hasLocalMail });

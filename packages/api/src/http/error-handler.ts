@@ -38,6 +38,8 @@ function asAppError(error: unknown): AppError | null {
     return conflict('handed_over', 'This payday is handed over and never changes. Look at it again.');
   if (codeOf(error) === 'DR004')
     return conflict('work_began', 'Work has begun, so the walk-round stays as it is. Add what you see now instead.');
+  if (codeOf(error) === 'DR005')
+    return unprocessable('more_than_received', 'That is more than was received. Look at the bill again.');
   const status = (error as { status?: unknown }).status;
   if (status === 413) return new AppError(413, 'too_large', 'That is too large to send.');
   if (status === 415) return new AppError(415, 'unsupported', 'Send JSON.');

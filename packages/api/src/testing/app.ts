@@ -10,6 +10,8 @@ import type { App } from '../app.ts';
 import { readConfig } from '../config.ts';
 import { connect, disconnect } from '../db/sequelize.ts';
 import { useCheapHashes } from '../features/access/index.ts';
+import type { Payments } from '../integrations/payments/index.ts';
+import { paymentsFor } from '../integrations/payments/index.ts';
 import { SetUpCode } from '../features/settings/index.ts';
 import { createLogger } from '../log.ts';
 import { localMail } from '../mail/transport.ts';
@@ -30,8 +32,8 @@ export interface TestApp {
   anonymous: () => TestAgent;
 }
 
-/** One app on this test file's own database, closed at its end. */
-export function useApp(): TestApp {
+/** One app on this test file's own database, closed at its end. @param payments who takes cards; nobody by default */
+export function useApp({ payments }: { payments?: () => Payments } = {}): TestApp {
   const test = { time: { now: NOON } } as TestApp;
   beforeAll(() => {
     useCheapHashes();
@@ -48,6 +50,7 @@ export function useApp(): TestApp {
       secret: 'only for tests',
       setUpCode: code,
       localMail: mail.taken,
+      payments: payments?.() ?? paymentsFor(null),
       pushKeys: { ...webPush.generateVAPIDKeys(), contact: 'mailto:no-reply@driprail.example' },
     });
     test.setUpCode = code.make();

@@ -17,6 +17,7 @@ const planned: SubjectName[] = ['Visit', 'Job', 'Customer', 'Person', 'Van'];
 const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
   owner(_actor, allow) {
     for (const name of planned) allow(['read', 'create', 'update', 'remove', 'plan', 'mark', 'tip'], name);
+    allow(['read', 'create', 'collect', 'refund'], 'Bill');
     allow(['read', 'create', 'update'], 'Service');
     allow(['read', 'create', 'update'], 'ClockEntry');
     allow(['read', 'update'], 'Settings');
@@ -32,6 +33,7 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
   },
   dispatcher(actor, allow) {
     for (const name of planned) allow(['read', 'create', 'update', 'remove', 'plan', 'mark', 'tip'], name);
+    allow(['read', 'create', 'collect'], 'Bill');
     allow('read', 'Service');
     allow(['read', 'create', 'update'], 'ClockEntry');
     allow('read', 'Settings');
@@ -43,6 +45,8 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
     if (!actor.personId) return;
     allow('read', 'Visit', ownNear(actor.personId, NEAR_DAYS.ahead));
     allow('mark', 'Visit', ownNear(actor.personId, 0));
+    allow('read', 'Bill', ownNear(actor.personId, NEAR_DAYS.ahead));
+    allow('collect', 'Bill', ownNear(actor.personId, 0));
     allow('tip', 'Job', { crewPersonIds: { $all: [actor.personId] } });
     allow(['read', 'create'], 'ClockEntry', { personId: actor.personId });
     ownStatements(actor, allow);

@@ -2,6 +2,8 @@
 export interface SubjectFields {
   Visit: { id: string; crewPersonIds: string[]; day: string | null; daysFromToday: number | null };
   Job: { id: string; crewPersonIds: string[] };
+  /** What a job costs and what was paid, seen from one of its visits. */
+  Bill: { id: string; crewPersonIds: string[]; day: string | null; daysFromToday: number | null };
   Customer: { id: string };
   Person: { id: string };
   Van: { id: string };
@@ -23,4 +25,4 @@ export interface SubjectFields {
   AuditEntry: { id: number };
 }
 export type SubjectName = keyof SubjectFields;
-export type Action = 'read' | 'create' | 'update' | 'remove' | 'plan' | 'mark' | 'tip';
+export type Action = 'read' | 'create' | 'update' | 'remove' | 'plan' | 'mark' | 'tip' | 'collect' | 'refund';

@@ -13,6 +13,7 @@ export type HintEntity =
   | 'clock'
   | 'settings'
   | 'pay'
+  | 'bill'
   | 'login';
 
 export interface Hint {

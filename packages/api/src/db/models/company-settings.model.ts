@@ -17,6 +17,8 @@ export class CompanySettings extends Model<InferAttributes<CompanySettings>, Inf
   declare emergencyNumber: CreationOptional<string>;
   declare mealReminderMinutes: CreationOptional<number | null>;
   declare restReminderMinutes: CreationOptional<number | null>;
+  declare invoiceDueDays: CreationOptional<number>;
+  declare billsFrom: CreationOptional<Date>;
   declare version: CreationOptional<number>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -39,6 +41,8 @@ export function initCompanySettings(sequelize: Sequelize): void {
       emergencyNumber: { type: DataTypes.TEXT },
       mealReminderMinutes: { type: DataTypes.INTEGER },
       restReminderMinutes: { type: DataTypes.INTEGER },
+      invoiceDueDays: { type: DataTypes.INTEGER },
+      billsFrom: { type: DataTypes.DATE },
       version: { type: DataTypes.INTEGER },
       updatedAt: { type: DataTypes.DATE },
     },

@@ -56,6 +56,20 @@ import { initWalkRound } from './walk-round.model.ts';
 import { initWalkMark } from './walk-mark.model.ts';
 import { initWalkLook } from './walk-look.model.ts';
 import { initPhoto } from './photo.model.ts';
+import { initTaxRateRow } from './tax-rate.model.ts';
+import { initInvoice } from './invoice.model.ts';
+import { initInvoiceLine } from './invoice-line.model.ts';
+import { initInvoiceTax } from './invoice-tax.model.ts';
+import { initCardAttempt } from './card-attempt.model.ts';
+import { initPayment } from './payment.model.ts';
+import { initCreditNote } from './credit-note.model.ts';
+import { initCreditNoteLine } from './credit-note-line.model.ts';
+import { initCreditNoteTax } from './credit-note-tax.model.ts';
+import { initRefund } from './refund.model.ts';
+import { initCashCount } from './cash-count.model.ts';
+import { initCashCountPayment } from './cash-count-payment.model.ts';
+import { initCustomerLink } from './customer-link.model.ts';
+import { initFeedback } from './feedback.model.ts';
 
 /** Gives every model its connection. Reads across tables are SQL, so no associations are declared. */
 export function initModels(sequelize: Sequelize): void {
@@ -116,6 +130,20 @@ export function initModels(sequelize: Sequelize): void {
   initWalkMark(sequelize);
   initWalkLook(sequelize);
   initPhoto(sequelize);
+  initTaxRateRow(sequelize);
+  initInvoice(sequelize);
+  initInvoiceLine(sequelize);
+  initInvoiceTax(sequelize);
+  initCardAttempt(sequelize);
+  initPayment(sequelize);
+  initCreditNote(sequelize);
+  initCreditNoteLine(sequelize);
+  initCreditNoteTax(sequelize);
+  initRefund(sequelize);
+  initCashCount(sequelize);
+  initCashCountPayment(sequelize);
+  initCustomerLink(sequelize);
+  initFeedback(sequelize);
 }
 
 export { CompanySettings } from './company-settings.model.ts';
@@ -175,3 +203,17 @@ export { WalkRound } from './walk-round.model.ts';
 export { WalkMark } from './walk-mark.model.ts';
 export { WalkLook } from './walk-look.model.ts';
 export { Photo } from './photo.model.ts';
+export { TaxRateRow } from './tax-rate.model.ts';
+export { Invoice } from './invoice.model.ts';
+export { InvoiceLine } from './invoice-line.model.ts';
+export { InvoiceTax } from './invoice-tax.model.ts';
+export { CardAttempt } from './card-attempt.model.ts';
+export { Payment } from './payment.model.ts';
+export { CreditNote } from './credit-note.model.ts';
+export { CreditNoteLine } from './credit-note-line.model.ts';
+export { CreditNoteTax } from './credit-note-tax.model.ts';
+export { Refund } from './refund.model.ts';
+export { CashCount } from './cash-count.model.ts';
+export { CashCountPayment } from './cash-count-payment.model.ts';
+export { CustomerLink } from './customer-link.model.ts';
+export { Feedback } from './feedback.model.ts';

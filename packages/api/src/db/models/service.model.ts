@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { TaxClass } from '@driprail/shared/domain/billing/tax-rates';
 import type { PhotoSet } from '@driprail/shared/domain/walk-round/views';
 
 export class Service extends Model<InferAttributes<Service>, InferCreationAttributes<Service>> {
@@ -10,6 +11,7 @@ export class Service extends Model<InferAttributes<Service>, InferCreationAttrib
   declare skills: CreationOptional<string[]>;
   declare equipment: CreationOptional<string[]>;
   declare photoSet: CreationOptional<PhotoSet>;
+  declare taxClass: CreationOptional<TaxClass>;
   declare isActive: CreationOptional<boolean>;
   declare position: CreationOptional<number>;
   declare version: CreationOptional<number>;
@@ -25,6 +27,7 @@ export function initService(sequelize: Sequelize): void {
       skills: { type: DataTypes.ARRAY(DataTypes.TEXT) },
       equipment: { type: DataTypes.ARRAY(DataTypes.TEXT) },
       photoSet: { type: DataTypes.TEXT },
+      taxClass: { type: DataTypes.TEXT },
       isActive: { type: DataTypes.BOOLEAN },
       position: { type: DataTypes.INTEGER },
       version: { type: DataTypes.INTEGER },

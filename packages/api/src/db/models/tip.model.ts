@@ -9,7 +9,9 @@ export class Tip extends Model<InferAttributes<Tip>, InferCreationAttributes<Tip
   declare alreadyReceived: CreationOptional<boolean>;
   declare receivedAt: Date;
   declare forPersonId: CreationOptional<string | null>;
-  declare userId: string;
+  /** Null where the customer gave it with a card, by the own page. */
+  declare userId: CreationOptional<string | null>;
+  declare paymentId: CreationOptional<string | null>;
 }
 
 export function initTip(sequelize: Sequelize): void {
@@ -22,7 +24,8 @@ export function initTip(sequelize: Sequelize): void {
       alreadyReceived: { type: DataTypes.BOOLEAN },
       receivedAt: { type: DataTypes.DATE, allowNull: false },
       forPersonId: { type: DataTypes.UUID, allowNull: true },
-      userId: { type: DataTypes.UUID, allowNull: false },
+      userId: { type: DataTypes.UUID, allowNull: true },
+      paymentId: { type: DataTypes.UUID, allowNull: true },
     },
     { sequelize, modelName: 'Tip', tableName: 'tips', underscored: true, timestamps: false },
   );

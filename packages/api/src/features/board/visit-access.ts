@@ -20,14 +20,23 @@ export function authorizeVisit(
   madeAt?: string,
 ): void {
   const asOfNow = subjectOf(visit, zone, now().toISOString());
-  const isTaken = madeAt !== undefined && now().getTime() - Date.parse(madeAt) <= LATE_DAYS * DAY_MS;
-  if (isTaken && ability.can(action, subjectOf(visit, zone, madeAt))) return;
+  if (madeAt !== undefined && isTakenLate(madeAt, now()) && ability.can(action, subjectOf(visit, zone, madeAt))) return;
   if (actor.role === 'technician' && ability.cannot('read', asOfNow)) throw notFound('That visit');
   authorize(ability, action, asOfNow);
 }
 
+/** A press made this long ago is still taken: a phone may lie dead for a while. */
+export function isTakenLate(madeAt: string, now: Date): boolean {
+  return now.getTime() - Date.parse(madeAt) <= LATE_DAYS * DAY_MS;
+}
+
 function subjectOf(visit: VisitDto, zone: string, asOf: string) {
+  return tag('Visit', { id: visit.id, ...nearness(visit, zone, asOf) });
+}
+
+/** What the rules look at: who is of the crew, and how far the day is from `asOf`. */
+export function nearness(visit: VisitDto, zone: string, asOf: string) {
   const day = visit.from ? dayOf(visit.from, zone) : null;
   const daysFromToday = day ? Math.round((Date.parse(day) - Date.parse(dayOf(asOf, zone))) / DAY_MS) : 0;
-  return tag('Visit', { id: visit.id, crewPersonIds: visit.crew.map((p) => p.personId), day, daysFromToday });
+  return { crewPersonIds: visit.crew.map((p) => p.personId), day, daysFromToday };
 }

@@ -2,4 +2,4 @@ export { jobsRoutes } from './jobs.routes.ts';
 export { createJob, orderJob } from './jobs.service.ts';
 export { putJobLines } from './put-job-lines.ts';
 export type { JobFields } from './jobs.service.ts';
-export { recordTip } from './tips.service.ts';
+export { keepTip, recordTip } from './tips.service.ts';

@@ -1,3 +1,4 @@
+import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import { tag } from '@driprail/shared/authz/ability';
 import { authorize } from '../../authz/authorize.ts';
@@ -8,6 +9,18 @@ import type { Ctx } from '../../http/context.ts';
 import { notFound, unprocessable } from '../../http/errors.ts';
 import { takeOnce } from '../../http/once.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+
+/** A tip as a row, in a caller's transaction; `userId` is null where the customer gave it with a card. */
+export async function keepTip(
+  tx: Transaction,
+  by: { userId: string | null; at: Date },
+  job: { id: string; number: number },
+  tip: Omit<TipFields, 'key'> & { paymentId: string | null },
+): Promise<void> {
+  const id = uuid();
+  await Tip.create({ id, jobId: job.id, ...tip, receivedAt: by.at, userId: by.userId }, { transaction: tx });
+  await audit(tx, by, 'tip', id, 'recorded', { jobNumber: job.number, ...tip });
+}
 
 export interface TipFields {
   key: string;
@@ -37,12 +50,7 @@ export async function recordTip(ctx: Ctx, jobId: string, tip: TipFields): Promis
       throw unprocessable('not_in_crew', message, { fields: { forPersonId: message } });
     }
     const { key: _key, ...fields } = tip;
-    const id = uuid();
-    await Tip.create({ id, jobId, ...fields, receivedAt: ctx.now(), userId: ctx.actor.userId }, { transaction: tx });
-    await audit(tx, { userId: ctx.actor.userId, at: ctx.now() }, 'tip', id, 'recorded', {
-      jobNumber: job.number,
-      ...fields,
-    });
+    await keepTip(tx, { userId: ctx.actor.userId, at: ctx.now() }, job, { ...fields, paymentId: null });
     hintAfterCommit(tx, ['desk', { personIds: crewPersonIds }], 'job', jobId, job.version);
     return { answer: { ok: true } };
   });

@@ -4,7 +4,7 @@ import { progressActions } from '@driprail/shared/domain/board/progress';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
 import { stampOf } from '../../db/models/columns.ts';
 import type { Visit } from '../../db/models/index.ts';
-import { VisitEvent } from '../../db/models/index.ts';
+import { Invoice, VisitEvent } from '../../db/models/index.ts';
 import type { Ctx } from '../../http/context.ts';
 import { clearCrew, takeFinishBack } from './visit-steps.ts';
 
@@ -28,6 +28,8 @@ export async function undoLast(
   if (Date.parse(times.receivedAt) - last.receivedAt.getTime() > undoSeconds * 1000)
     return 'It is too late to take that back. Call dispatch.';
   const isEnd = last.kind === 'finish' || last.kind === 'part_done';
+  const invoice = isEnd && (await Invoice.findOne({ where: { jobId: visit.jobId, voidedAt: null }, transaction: tx }));
+  if (invoice) return `Invoice ${invoice.number} has gone out. Call dispatch.`;
   if (isEnd && !(await takeFinishBack(tx, visit, last.kind === 'part_done'))) {
     return 'Dispatch has placed the rest already. Call dispatch.';
   }

@@ -52,7 +52,10 @@ export async function setUpCompany(start: CompanyStart, now: Clock): Promise<Use
     await run('SELECT pg_advisory_xact_lock(4600)', {}, tx);
     if ((await CompanySettings.count({ transaction: tx })) > 0)
       throw conflict('set_up', 'This company is set up already. Sign in.');
-    await CompanySettings.create({ id: 1, name: start.companyName, zone: start.zone }, { transaction: tx });
+    await CompanySettings.create(
+      { id: 1, name: start.companyName, zone: start.zone, billsFrom: now() },
+      { transaction: tx },
+    );
     const user = await User.create(
       { id: uuid(), name: start.ownerName, email: start.email, passwordHash, role: 'owner' },
       { transaction: tx },

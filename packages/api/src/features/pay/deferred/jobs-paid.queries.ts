@@ -25,9 +25,9 @@ export async function jobsWaiting(): Promise<UnpaidJob[]> {
 export async function jobsPaidLately(): Promise<PaidJob[]> {
   const { zone } = await companyOf();
   return select<PaidJob>(
-    `${jobs}, (jp.paid_at AT TIME ZONE :zone)::date::text AS "paidOn", u.name AS "recordedBy",
+    `${jobs}, (jp.paid_at AT TIME ZONE :zone)::date::text AS "paidOn", coalesce(u.name, 'card payment') AS "recordedBy",
             NOT EXISTS (SELECT 1 FROM pay_weeks w WHERE w.state = 'locked' AND jp.paid_at >= w.starts_at AND jp.paid_at < w.ends_at) AS "mayTakeBack"
-       ${finished} JOIN jobs_paid jp ON jp.job_id = j.id JOIN users u ON u.id = jp.recorded_by
+       ${finished} JOIN jobs_paid jp ON jp.job_id = j.id LEFT JOIN users u ON u.id = jp.recorded_by
       GROUP BY j.id, c.name, jp.job_id, u.name ORDER BY jp.recorded_at DESC LIMIT 30`,
     { zone },
   );

@@ -52,6 +52,18 @@ export function takeBackJobPaid({ actor, now }: Ctx, jobId: string): Promise<voi
   });
 }
 
+/** The bill of a job is settled; commission that waited for it is now earned. Known once: a later payment changes nothing. */
+export async function noteJobPaid(
+  tx: Transaction,
+  { userId, at }: { userId: string | null; at: Date },
+  job: { id: string; number: number },
+): Promise<void> {
+  if (await JobPaid.findByPk(job.id, { transaction: tx })) return;
+  await JobPaid.create({ jobId: job.id, paidAt: at, recordedBy: userId, recordedAt: at }, { transaction: tx });
+  await audit(tx, { userId, at }, 'job_paid', job.id, 'recorded', { jobNumber: job.number });
+  hintAfterCommit(tx, ['owners'], 'pay', job.id);
+}
+
 async function refuseLockedWeek(day: string, tx: Transaction): Promise<void> {
   const week = await weekAt(day, tx);
   if (week.state === 'locked')

@@ -1,0 +1,73 @@
+import type { Request } from 'express';
+import * as api from '@driprail/shared/contracts/billing.contract';
+import { addTaxRate, listTaxRates } from '@driprail/shared/contracts/taxes.contract';
+import { inTransaction } from '../../db/sequelize.ts';
+import { badRequest } from '../../http/errors.ts';
+import type { RouteTable } from '../../http/route.ts';
+import { okay, publicRoute, route } from '../../http/route.ts';
+import { PaymentSignatureError } from '../../integrations/payments/index.ts';
+import type { PaymentEvent, Payments } from '../../integrations/payments/index.ts';
+import { authorizeBill } from './bill-access.ts';
+import { readBill } from './bill.presenter.ts';
+import type { CustomerLinks } from './customer-links.ts';
+import { customerPageRoutes } from './customer-page.routes.ts';
+import { readDayBills } from './day-bills.queries.ts';
+import { findInvoices } from './invoices.queries.ts';
+import { issueInvoice } from './issue-invoice.service.ts';
+import { takeEvent } from './payment-events.service.ts';
+import { recordPayment } from './payments.service.ts';
+import { refundPayment } from './refunds.service.ts';
+import * as taxes from './taxes.service.ts';
+
+export interface BillingParts {
+  payments: Payments;
+  links: CustomerLinks;
+  baseUrlOf: (req: Request) => string;
+}
+
+export function billingRoutes(table: RouteTable, parts: BillingParts): void {
+  const { payments, links, baseUrlOf } = parts;
+  route(table, api.getBill, async ({ params }, ctx) => {
+    await authorizeBill(ctx, 'read', params.id);
+    return { bill: await readBill(params.id, ctx.now()) };
+  });
+  route(table, api.getDayBills, async ({ params }, ctx) => ({ bills: await readDayBills(ctx, params.day) }));
+  route(table, api.issueInvoice, async ({ params }, ctx) => {
+    await authorizeBill(ctx, 'create', params.id);
+    const by = { userId: ctx.actor.userId, at: ctx.now() };
+    await inTransaction((tx) => issueInvoice(tx, params.id, by));
+    return { bill: await readBill(params.id, ctx.now()) };
+  });
+  route(table, api.recordPayment, async ({ params, body }, ctx) => ({
+    bill: await recordPayment(ctx, params.id, body),
+  }));
+  route(table, api.openPayLink, async ({ params }, ctx, { req }) => {
+    await authorizeBill(ctx, 'collect', params.id);
+    const token = await inTransaction((tx) => links.tokenFor(tx, params.id, ctx.now()));
+    return { url: `${baseUrlOf(req)}/c/${token}` };
+  });
+  route(table, api.refundPayment, async ({ params, body }, ctx) => ({
+    bill: await refundPayment(payments, ctx, params.id, body),
+  }));
+  route(table, api.listInvoices, ({ query }, ctx) => findInvoices(query, ctx.now()));
+  route(table, listTaxRates, async () => ({ taxRates: await taxes.listTaxRates() }));
+  route(table, addTaxRate, async ({ body }, ctx) => {
+    await taxes.addTaxRate(ctx, body);
+    return okay;
+  });
+  publicRoute(table, api.takePaymentEvent, async (_input, now, { req }) => {
+    await takeEvent(readSigned(payments, req), now());
+    return okay;
+  });
+  customerPageRoutes(table, parts);
+}
+
+/** The body as it came: the signature is over its bytes. @throws 400 for a wrong, missing or stale signature */
+function readSigned(payments: Payments, req: Request): PaymentEvent {
+  try {
+    return payments.readEvent(req.body as Buffer, req.get('stripe-signature'));
+  } catch (error) {
+    if (error instanceof PaymentSignatureError) throw badRequest('This event is not signed by the payments service.');
+    throw error;
+  }
+}

@@ -1,0 +1,223 @@
+import { beforeAll, describe, expect, it, vi } from 'vitest';
+import type { Response } from 'supertest';
+import type TestAgent from 'supertest/lib/agent.js';
+import { v4 as key } from 'uuid';
+import type { BillDto } from '@driprail/shared/contracts/bill.dto';
+import type { CustomerPageDto } from '@driprail/shared/contracts/customer-page.contract';
+import type { ErrorBody } from '@driprail/shared/contracts/error.contract';
+import { JobPaid, Tip } from '../../db/models/index.ts';
+import { aCompany } from '../../testing/company.ts';
+import type { TestCompany } from '../../testing/company.ts';
+import { useCardsApp } from '../../testing/local-cards.ts';
+import { aDoneJob } from '../../testing/pay-weeks.ts';
+import { issueDueInvoices } from './index.ts';
+
+const test = useCardsApp();
+let company: TestCompany;
+let owner: TestAgent;
+let sefa: TestAgent;
+let jobId: string;
+let lastNumber = 1000;
+
+beforeAll(async () => {
+  company = await aCompany(test);
+  [owner, sefa] = [await company.owner(), await company.sefa()];
+  await owner
+    .post('/api/tax-rates')
+    .send({ name: 'State sales tax', taxClass: 'standard', place: '', percent: '6.25', startsOn: '2026-01-01' })
+    .expect(200);
+});
+
+const billOf = async (agent: TestAgent, id = jobId) =>
+  ((await agent.get(`/api/jobs/${id}/bill`).expect(200)).body as { bill: BillDto }).bill;
+const pay = (agent: TestAgent, fields: object, id = jobId) =>
+  agent.post(`/api/jobs/${id}/payments`).send({ key: key(), method: 'cash', deviceAt: test.time.now, ...fields });
+
+const faultOf = (answer: Response) => (answer.body as ErrorBody).error;
+
+describe('the bill of a job', () => {
+  it('is a draft while the work is under way, and only the desk and its crew see it', async () => {
+    const { job } = await company.aJob();
+    const dispatcher = await company.dispatcher();
+    expect(await billOf(dispatcher, job.id)).toMatchObject({
+      ...{ state: 'draft', invoice: null, netCents: 24_000, taxCents: 1500, totalCents: 25_500, owedCents: 25_500 },
+    });
+    const idris = await company.idris();
+    await idris.get(`/api/jobs/${job.id}/bill`).expect(404);
+    expect((await idris.get('/api/run-sheet/2026-05-14/bills').expect(200)).body).toEqual({ bills: [] });
+    const early = await dispatcher.post(`/api/jobs/${job.id}/invoice`).expect(422);
+    expect(faultOf(early).message).toContain('is not done yet');
+  });
+
+  it('gets the next number once the time to take Done back is over, and keeps its tax', async () => {
+    jobId = (await aDoneJob(test, company, owner)).job.id;
+    expect(await issueDueInvoices(new Date(test.time.now))).toBe(0);
+    test.time.now = '2026-05-14T16:35:00Z';
+    expect(await issueDueInvoices(new Date(test.time.now))).toBe(1);
+    expect(await issueDueInvoices(new Date(test.time.now))).toBe(0);
+    await owner
+      .post('/api/tax-rates')
+      .send({ name: 'State sales tax', taxClass: 'standard', place: '', percent: '9', startsOn: '2026-02-01' })
+      .expect(200);
+    const bill = await billOf(sefa);
+    expect(bill).toMatchObject({ state: 'open', taxCents: 1500, owedCents: 25_500 });
+    expect((await sefa.get('/api/run-sheet/2026-05-14/bills').expect(200)).body).toEqual({ bills: [bill] });
+    expect(bill.invoice).toMatchObject({ number: ++lastNumber, dueOn: '2026-05-28' });
+  });
+
+  it('numbers invoices of many at once without a gap', async () => {
+    const jobs = [];
+    for (let nth = 0; nth < 4; nth += 1) jobs.push((await aDoneJob(test, company, owner)).job.id);
+    await Promise.all(jobs.flatMap((id) => [0, 1].map(() => owner.post(`/api/jobs/${id}/invoice`).expect(200))));
+    const numbers = await Promise.all(jobs.map(async (id) => (await billOf(owner, id)).invoice?.number));
+    expect(numbers.map(Number).sort((a, b) => a - b)).toEqual([1, 2, 3, 4].map((nth) => lastNumber + nth));
+    lastNumber += 4;
+  });
+});
+
+describe('what is handed over', () => {
+  it('is taken once per key, and no more than is owed', async () => {
+    const tooMuch = await pay(sefa, { amountCents: 30_000 }).expect(422);
+    expect(faultOf(tooMuch).fields?.['amountCents']).toBe(
+      'Only 255.00 is owed. Give change, or record the rest as a tip.',
+    );
+    const once = { key: key(), method: 'cash', amountCents: 10_000, tipCents: 500, deviceAt: test.time.now };
+    await Promise.all([1, 2].map(() => sefa.post(`/api/jobs/${jobId}/payments`).send(once).expect(200)));
+    expect(await billOf(owner)).toMatchObject({ owedCents: 15_500, payments: [{ method: 'cash', by: 'Sefa Lund' }] });
+    expect(await Tip.count({ where: { jobId, amountCents: 500 } })).toBe(1);
+    expect(await JobPaid.findByPk(jobId)).toBeNull();
+  });
+
+  it('is of the crew’s own jobs only', async () => {
+    await pay(await company.idris(), { amountCents: 100 }).expect(404);
+  });
+
+  it('by a phone without signal is recorded, whatever was owed when it arrived', async () => {
+    const { job } = await aDoneJob(test, company, owner);
+    await pay(owner, { amountCents: 25_000 }, job.id).expect(200);
+    const at = test.time.now;
+    test.time.now = '2026-05-14T18:00:00Z';
+    await pay(sefa, { amountCents: 26_160, deviceAt: at }, job.id).expect(200);
+    expect(await billOf(owner, job.id)).toMatchObject({ state: 'owes_back', owedCents: -25_000 });
+    lastNumber += 1;
+  });
+
+  it('a payment for a job that was called off is refused with a sentence', async () => {
+    const { job } = await company.aJob();
+    await owner.post(`/api/jobs/${job.id}/call-off`).send({ version: job.version, reason: 'Weather' }).expect(200);
+    const refused = await pay(owner, { amountCents: 100 }, job.id).expect(422);
+    expect(faultOf(refused).message).toMatch(/^Nothing is owed on job \d+/);
+  });
+});
+
+describe('a customer’s own page', () => {
+  let token: string;
+  const page = async () =>
+    ((await test.anonymous().get(`/api/customer-pages/${token}`).expect(200)).body as { page: CustomerPageDto }).page;
+  const card = (tipCents: number) => test.anonymous().post(`/api/customer-pages/${token}/card`).send({ tipCents });
+  const urlOf = (answer: Response) => (answer.body as { url: string }).url;
+  const owed = async (): Promise<number> => (await billOf(owner)).owedCents;
+
+  it('shows the job and the bill, and neither address nor gate code nor a crew’s phone', async () => {
+    const { url } = (await sefa.post(`/api/jobs/${jobId}/pay-link`).expect(200)).body as { url: string };
+    token = url.split('/c/')[1] ?? '';
+    const shown = await page();
+    expect(shown).toMatchObject({
+      progress: 'done',
+      name: 'Nakagawa',
+      crewNames: ['Sefa'],
+      bill: { owedCents: 15_500 },
+    });
+    expect(JSON.stringify(shown)).not.toMatch(/Saltpan|4471|555-0101/);
+  });
+
+  it('is not there for a token that was not signed here', async () => {
+    const forged = `${token.slice(0, -2)}${token.endsWith('AA') ? 'BB' : 'AA'}`;
+    await test.anonymous().get(`/api/customer-pages/${forged}`).expect(404);
+  });
+
+  it('pays by card with a tip: two tabs share a page, another tip ends it first', async () => {
+    const [a, b] = await Promise.all([card(800), card(800)]);
+    expect(urlOf(a)).toEqual(urlOf(b));
+    const other = await card(1500).expect(200);
+    expect(urlOf(other)).not.toBe(urlOf(a));
+    expect((await test.press(urlOf(a), 'pay')).status).not.toBe(302);
+    await test.press(urlOf(other), 'pay');
+    await vi.waitFor(async () => expect(await owed()).toBe(0));
+    expect(await Tip.count({ where: { jobId, amountCents: 1500, method: 'card' } })).toBe(1);
+    expect(await JobPaid.findByPk(jobId)).toMatchObject({ recordedBy: null });
+    await card(0).expect(422);
+  });
+
+  it('an event told twice or unsigned changes nothing', async () => {
+    const { events } = await test.hook<{ events: { id: string; type: string }[] }>('/events');
+    const paid = events.findLast(({ type }) => type === 'checkout.session.completed');
+    await test.hook(`/events/${paid?.id}/send`, { times: 2 });
+    const { answers } = await test.hook<{ answers: number[] }>(`/events/${paid?.id}/send`, { signature: 'wrong' });
+    expect(answers).toEqual([400]);
+    expect((await billOf(owner)).payments).toHaveLength(2);
+  });
+
+  it('takes feedback once the work is done, the last word counts', async () => {
+    const say = (stars: number) =>
+      test.anonymous().post(`/api/customer-pages/${token}/feedback`).send({ stars, words: 'Spotless.' });
+    await say(4).expect(200);
+    await say(5).expect(200);
+    expect((await page()).feedback).toEqual({ stars: 5, words: 'Spotless.' });
+    await say(6).expect(400);
+  });
+});
+
+describe('money back', () => {
+  const refund = (agent: TestAgent, paymentId: string, fields: object) =>
+    agent
+      .post(`/api/payments/${paymentId}/refunds`)
+      .send({ key: key(), kind: 'refund', lines: [], reasonId: null, note: 'Streaks on the hood', ...fields });
+
+  it('goes back by a numbered credit note with its tax, through the payments service', async () => {
+    const bill = await billOf(owner);
+    const paid = bill.payments.find(({ method }) => method === 'card');
+    const lines = [{ id: bill.lines[0]?.id, netCents: 4800 }];
+    await refund(await company.dispatcher(), paid?.id ?? '', { lines, amountCents: 5100 }).expect(403);
+    const tooMuch = await refund(owner, paid?.id ?? '', { lines, amountCents: 5101 }).expect(422);
+    expect(faultOf(tooMuch).fields?.['amountCents']).toContain('51.00 was paid too much');
+    await refund(owner, paid?.id ?? '', { lines, amountCents: 5100 }).expect(200);
+    await vi.waitFor(async () =>
+      expect(await billOf(owner)).toMatchObject({
+        ...{
+          owedCents: 0,
+          creditedCents: 5100,
+          refunds: [{ state: 'done', amountCents: 5100, creditNoteNumber: 101 }],
+        },
+      }),
+    );
+  });
+
+  it('takes back whole what was recorded by mistake, and never more than was received', async () => {
+    const { job } = await aDoneJob(test, company, owner);
+    await pay(owner, { amountCents: 10_000, method: 'check' }, job.id).expect(200);
+    const [payment] = (await billOf(owner, job.id)).payments;
+    await refund(owner, payment?.id ?? '', { kind: 'mistake', amountCents: 9000 }).expect(422);
+    await refund(owner, payment?.id ?? '', { kind: 'mistake', amountCents: 10_000 }).expect(200);
+    await refund(owner, payment?.id ?? '', { kind: 'mistake', amountCents: 10_000 }).expect(422);
+    expect(await billOf(owner, job.id)).toMatchObject({ owedCents: 26_160 });
+  });
+});
+
+describe('the list of invoices', () => {
+  it('finds by number and customer, and sums what is owed', async () => {
+    const all = await owner.get('/api/invoices').query({ state: 'all', find: 'naka' }).expect(200);
+    expect((all.body as { total: number; owedCents: number }).total).toBe(lastNumber - 1000 + 1);
+    const unpaid = await owner.get('/api/invoices').expect(200);
+    expect((unpaid.body as { total: number; owedCents: number }).owedCents).toBe(4 * 26_160 + 26_160);
+    await sefa.get('/api/invoices').expect(403);
+  });
+
+  it('Done can’t be taken back once its invoice has gone out', async () => {
+    const { job, visit } = await aDoneJob(test, company, owner);
+    await owner.post(`/api/jobs/${job.id}/invoice`).expect(200);
+    const undo = { key: key(), kind: 'undo', deviceAt: test.time.now };
+    const answer = await sefa.post(`/api/visits/${visit.id}/actions`).send(undo).expect(409);
+    expect(faultOf(answer).message).toMatch(/^Invoice \d+ has gone out/);
+  });
+});

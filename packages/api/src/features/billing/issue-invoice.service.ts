@@ -1,0 +1,86 @@
+import type { Transaction } from 'sequelize';
+import { v7 as uuid } from 'uuid';
+import { invoiceAmounts } from '@driprail/shared/domain/billing/invoice-amounts';
+import { taxesInForce } from '@driprail/shared/domain/billing/tax-rates';
+import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
+import { audit } from '../../db/audit.ts';
+import { companyOf } from '../../db/company.ts';
+import { Invoice, InvoiceLine, InvoiceTax, Job } from '../../db/models/index.ts';
+import { inTransaction, select } from '../../db/sequelize.ts';
+import { notFound, unprocessable } from '../../http/errors.ts';
+import { hintAfterCommit } from '../../realtime/hints.ts';
+import { billableLines, isOver } from './bill.presenter.ts';
+import { readJobRow, readTaxRates } from './bill.queries.ts';
+import { noteIfPaid } from './note-paid.ts';
+import type { By } from './note-paid.ts';
+import { nextNumber } from './numbers.ts';
+
+/**
+ * Bills the finished lines of a job that is over, once; one that is billed stays as it is.
+ * @returns the invoice's id
+ * @throws 404, 422 for a job that is not over
+ */
+export async function issueInvoice(tx: Transaction, jobId: string, { userId, at }: By): Promise<string> {
+  // Whoever comes second waits here, and then finds the invoice.
+  await Job.findByPk(jobId, { transaction: tx, lock: tx.LOCK.UPDATE });
+  const standing = await Invoice.findOne({ where: { jobId, voidedAt: null }, transaction: tx });
+  if (standing) return standing.id;
+  const job = await readJobRow(jobId, tx);
+  if (!job) throw notFound('That job');
+  if (!isOver(job))
+    throw unprocessable('not_over', `Job ${job.jobNumber} is not done yet. It can be billed when its work is.`);
+  const company = await companyOf(tx);
+  const today = dayOf(at.toISOString(), company.zone);
+  const lines = billableLines(job);
+  const amounts = invoiceAmounts(lines, job.discountCents, taxesInForce(await readTaxRates(tx), today, job.place));
+  const id = uuid();
+  const number = await nextNumber(tx, 'invoice');
+  await Invoice.create(
+    {
+      ...{ id, number, jobId, customerId: job.customerId, issuedAt: at, issuedBy: userId },
+      dueOn: addDays(today, company.invoiceDueDays),
+      ...{ billTo: job.billTo, place: job.place, discountReason: job.discountReason },
+      ...{ netCents: amounts.netCents, taxCents: amounts.taxCents, totalCents: amounts.totalCents },
+    },
+    { transaction: tx },
+  );
+  await InvoiceLine.bulkCreate(
+    amounts.lines.map(({ id: jobLineId, taxClass, priceCents, discountCents }, position) => ({
+      ...{ id: uuid(), invoiceId: id, jobLineId, taxClass, priceCents, discountCents, position },
+      ...{ label: lines[position]?.label ?? '', detail: lines[position]?.detail ?? '' },
+    })),
+    { transaction: tx },
+  );
+  await InvoiceTax.bulkCreate(
+    amounts.taxes.map((tax, position) => ({ id: uuid(), invoiceId: id, ...tax, position })),
+    { transaction: tx },
+  );
+  await audit(tx, { userId, at }, 'invoice', id, 'issued', { number, jobNumber: job.jobNumber, ...totalsOf(amounts) });
+  // A deposit may have covered it all.
+  await noteIfPaid(tx, { id: jobId, number: job.jobNumber }, { userId, at });
+  hintAfterCommit(tx, ['everyone'], 'bill', jobId);
+  return id;
+}
+
+const totalsOf = ({ netCents, taxCents, totalCents }: { netCents: number; taxCents: number; totalCents: number }) => ({
+  netCents,
+  taxCents,
+  totalCents,
+});
+
+/** Jobs that are over and past the time in which Done may be taken back are billed, oldest first, each in its own transaction. */
+export async function issueDueInvoices(now: Date): Promise<number> {
+  const due = await select<{ jobId: string }>(
+    `SELECT j.id AS "jobId" FROM jobs j CROSS JOIN company_settings s
+      WHERE EXISTS (SELECT 1 FROM job_lines l WHERE l.job_id = j.id AND l.finished_at >= s.bills_from)
+        AND NOT EXISTS (SELECT 1 FROM invoices i WHERE i.job_id = j.id)
+        AND NOT EXISTS (SELECT 1 FROM visits v WHERE v.job_id = j.id AND v.progress NOT IN ('part_done', 'done', 'called_off'))
+        AND NOT EXISTS (SELECT 1 FROM visit_events e JOIN visits v ON v.id = e.visit_id WHERE v.job_id = j.id
+              AND e.kind IN ('finish', 'part_done') AND NOT e.is_undone
+              AND e.received_at > :now::timestamptz - make_interval(secs => s.undo_seconds))
+      ORDER BY j.number LIMIT 200`,
+    { now },
+  );
+  for (const { jobId } of due) await inTransaction((tx) => issueInvoice(tx, jobId, { userId: null, at: now }));
+  return due.length;
+}

@@ -1,0 +1,70 @@
+import { z } from 'zod';
+import { billDto } from './bill.dto.ts';
+import { endpoint } from './endpoint.ts';
+import { done, instant, positiveCents } from './fields.ts';
+import { progressStates } from '../domain/board/progress.ts';
+
+const token = z.object({ token: z.string().min(20).max(80) });
+
+/**
+ * A customer's own page of one job. No address, no gate code, no phone but the company's; of the crew first names, of the
+ * van its name. Where the van is stays unsaid.
+ */
+export const customerPageDto = z.object({
+  companyName: z.string(),
+  companyPhone: z.string(),
+  zone: z.string(),
+  clock: z.enum(['12', '24']),
+  /** A first name to be greeted by; a company's whole name. */
+  name: z.string(),
+  jobNumber: z.int(),
+  /** Of the visit that is under way, comes next, or was the last. */
+  progress: z.enum(progressStates),
+  since: instant.nullable(),
+  windowFrom: instant.nullable(),
+  windowTo: instant.nullable(),
+  /** The start planned for today, once the crew is on its way: an estimate. */
+  expectedAt: instant.nullable(),
+  vanName: z.string(),
+  crewNames: z.array(z.string()),
+  bill: billDto.omit({ customerId: true, billTo: true, refunds: true }),
+  /** What was given to the crew so far. */
+  tipCents: z.int(),
+  /** A payment page is open, or has just been left: the money may be under way. */
+  isPaying: z.boolean(),
+  feedback: z.object({ stars: z.int(), words: z.string() }).nullable(),
+});
+export type CustomerPageDto = z.infer<typeof customerPageDto>;
+
+export const getCustomerPage = endpoint({
+  method: 'get',
+  path: '/api/customer-pages/:token',
+  roles: 'public',
+  summary: 'What a customer sees of one job, by the link that was sent; no account.',
+  params: token,
+  query: z.object({ returned: z.stringbool().default(false) }),
+  response: z.object({ page: customerPageDto }),
+});
+export const payByCard = endpoint({
+  method: 'post',
+  path: '/api/customer-pages/:token/card',
+  roles: 'public',
+  summary: 'The payment service’s page for what is owed, with a tip for the crew.',
+  params: token,
+  body: z.strictObject({
+    tipCents: positiveCents.max(1_000_000, 'That tip looks like a slip. Give at most 10,000.'),
+  }),
+  response: z.object({ url: z.url() }),
+});
+export const giveFeedback = endpoint({
+  method: 'post',
+  path: '/api/customer-pages/:token/feedback',
+  roles: 'public',
+  summary: 'How it went, one to five stars and words; given again it replaces what was said.',
+  params: token,
+  body: z.strictObject({
+    stars: z.int().min(1, 'Choose one to five stars.').max(5, 'Choose one to five stars.'),
+    words: z.string().trim().max(2000, 'At most 2,000 letters.'),
+  }),
+  response: done,
+});
