@@ -6,7 +6,29 @@ import { startFakePayments } from '../integrations/payments/fake/fake-payments.t
 import type { PaymentEvent, Payments } from '../integrations/payments/index.ts';
 import { PaymentSignatureError, paymentsFor } from '../integrations/payments/index.ts';
 
-export interface PaymentsRig {
+/** What tests do at the stand-in from outside. */
+export interface StandIn {
+  /** Presses a button of a pay page. @returns the answer, redirects not followed */
+  press: (url: string, button: 'pay' | 'refuse') => Promise<Response>;
+  /** Troubles on order, see docs/payments.md. @throws Error with the answer when it is not 2xx */
+  hook: <T>(path: string, body?: object) => Promise<T>;
+}
+
+export function standInAt(url: () => string): StandIn {
+  return {
+    press: (page, button) =>
+      fetch(page, { method: 'POST', body: new URLSearchParams({ press: button }), redirect: 'manual' }),
+    async hook<T>(path: string, body?: object) {
+      const headers = { 'content-type': 'application/json' };
+      const init = body && { method: 'POST', headers, body: JSON.stringify(body) };
+      const answer = await fetch(`${url()}/test${path}`, init);
+      if (!answer.ok) throw new Error(`${path}: ${answer.status} ${await answer.text()}`);
+      return (answer.status === 204 ? null : await answer.json()) as T;
+    },
+  };
+}
+
+export interface PaymentsRig extends StandIn {
   fake: FakePayments;
   payments: Payments;
   /** Every event that came in and was believed, in order of arrival. */
@@ -17,9 +39,6 @@ export interface PaymentsRig {
   failNext: (times: number) => void;
   /** Resolves when an event of this kind has come, also when it came before. */
   arrived: <K extends PaymentEvent['kind']>(kind: K) => Promise<Extract<PaymentEvent, { kind: K }>>;
-  /** Presses a button of a pay page. @returns the answer, redirects not followed */
-  press: (url: string, button: 'pay' | 'refuse') => Promise<Response>;
-  hook: (path: string, body?: object) => Promise<unknown>;
 }
 
 /** The SDK, the stand-in and a receiver of its events, each behind a real socket; events start anew with each test. */
@@ -61,18 +80,10 @@ export function usePayments(): PaymentsRig {
     rig.payments = paymentsFor(rig.fake.place);
     rig.refused = () => refused;
     rig.failNext = (times) => (failing = times);
-    rig.press = (url, button) =>
-      fetch(url, { method: 'POST', body: new URLSearchParams({ press: button }), redirect: 'manual' });
-    rig.hook = async (path, body) => {
-      const init = body && {
-        method: 'POST',
-        headers: { 'content-type': 'application/json' },
-        body: JSON.stringify(body),
-      };
-      const answer = await fetch(`${rig.fake.url}/test${path}`, init);
-      if (!answer.ok) throw new Error(`${path}: ${answer.status} ${await answer.text()}`);
-      return answer.status === 204 ? null : await answer.json();
-    };
+    Object.assign(
+      rig,
+      standInAt(() => rig.fake.url),
+    );
     rig.arrived = async (kind) => {
       const found = () => rig.events.find((event) => event.kind === kind);
       while (!found()) await new Promise<void>((resolve) => wake.push(resolve));

@@ -26,7 +26,7 @@ async function aPayment(more: Partial<LinkAsk> = {}) {
 
 /** The ids of the events that the stand-in has sent or would have sent. */
 async function told(type?: string): Promise<string[]> {
-  const { events } = (await rig.hook('/events')) as { events: { id: string; type: string }[] };
+  const { events } = await rig.hook<{ events: { id: string; type: string }[] }>('/events');
   return events.filter((event) => !type || event.type === type).map(({ id }) => id);
 }
 
@@ -224,7 +224,7 @@ describe('a link that must take no more money', () => {
 
 test.each(['won', 'lost'] as const)('a dispute is told when opened and when %s, and holds refunds', async (as) => {
   const { paymentRef } = await aPayment();
-  const { id } = (await rig.hook('/disputes', { paymentRef })) as { id: string };
+  const { id } = await rig.hook<{ id: string }>('/disputes', { paymentRef });
   expect(await rig.arrived('dispute_opened')).toMatchObject({ paymentRef, disputeRef: id, amountCents: 12_345 });
   expect(await reasonOf(rig.payments.refund({ paymentRef, amountCents: 1, key: uuid() }))).toBe('disputed');
   await rig.hook(`/disputes/${id}/close`, { as });
