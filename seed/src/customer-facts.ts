@@ -29,6 +29,8 @@ function tellPlace(places: Random, address: DemoRows['addresses'][number], isCom
   address.drain = isStorm ? 'storm' : places.pick(['unknown', 'unknown', 'sewer', 'sewer', 'soakaway'] as const);
   const waters = isCompany ? (['reclaim', 'mat', 'wash_bay'] as const) : (['mat', 'lawn', null] as const);
   address.washWater = isStorm ? 'lawn' : places.pick<'reclaim' | 'mat' | 'lawn' | 'wash_bay' | null>(waters);
+  // Rows written together have the same columns.
+  Object.assign(address, { permitNumber: '', permitUntil: null, ownerConsentBy: '', ownerConsentOn: null });
   if (!isCompany) return;
   address.ownerConsentBy = places.pick(['Facilities desk', 'Site manager', 'Front office']);
   address.ownerConsentOn = addDays(today, -places.int(40, 400));
@@ -39,7 +41,7 @@ function tellPlace(places: Random, address: DemoRows['addresses'][number], isCom
 
 function tellVehicle(cars: Random, vehicle: DemoRows['vehicles'][number]): void {
   const name = nameFromLabel(vehicle.label);
-  Object.assign(vehicle, name);
+  Object.assign(vehicle, name, { vin: '', paint: '', interior: '' });
   vehicle.wheelFinish = cars.pick([
     'unsure',
     'unsure',

@@ -36,7 +36,7 @@ export function AddressMustKnows({ at, register, errors }: Fields & { at: `addre
       <CheckField label="Shut the gate" {...register(`${at}.shutsGate`)} />
       <CheckField label="Key is taken" {...register(`${at}.takesKey`)} />
       <TextField
-        className="col-span-2"
+        className="col-span-3 max-[560px]:col-span-2"
         label="Where the key goes back"
         {...register(`${at}.keyGoesBack`)}
         error={errors?.keyGoesBack?.message}
@@ -53,7 +53,7 @@ export function AddressMustKnows({ at, register, errors }: Fields & { at: `addre
 
 export function VehicleMustKnows({ at, register, errors }: Fields & { at: `vehicles.${number}`; errors: Wrong }) {
   return (
-    <fieldset className="col-span-6 max-[720px]:col-span-2 grid grid-cols-[auto_1fr] gap-x-6 items-end">
+    <fieldset className="col-span-6 max-[560px]:col-span-2 grid grid-cols-[auto_1fr] gap-x-6 items-end">
       <legend className="sr">Must-knows of this vehicle</legend>
       <CheckField label="Ceramic coating" {...register(`${at}.isCoated`)} />
       <TextField
