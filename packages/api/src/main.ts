@@ -10,6 +10,7 @@ import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/ind
 import { startFakePayments } from './integrations/payments/fake/fake-payments.ts';
 import { paymentsFor } from './integrations/payments/index.ts';
 import { pushKeys } from './integrations/push/index.ts';
+import { listenHost, originOf } from './http/listen-host.ts';
 import { every } from './jobs/every.ts';
 import { createLogger } from './log.ts';
 import { localMail, smtpMail } from './mail/transport.ts';
@@ -39,8 +40,8 @@ async function main(): Promise<void> {
   if (mail && config.isLoopback) printLinks((line) => process.stderr.write(`${line}\n`));
   const secret = await sessionSecret(config.sessionSecret, config.dataDir);
   let port = config.port;
-  const webhookUrl = () => `http://${config.host}:${port}/api/webhooks/payments`;
-  const localPayments = config.hasLocalPayments ? await startFakePayments({ webhookUrl }) : null;
+  const webhookUrl = () => `${originOf(config.host, port)}/api/webhooks/payments`;
+  const localPayments = config.hasLocalPayments ? await startFakePayments({ webhookUrl, now }) : null;
   const payments = paymentsFor(localPayments?.place ?? config.payments);
   const app = createApp({
     config,
@@ -68,13 +69,13 @@ async function main(): Promise<void> {
     (error) => log.warn({ err: error }, 'billing'),
   );
 
-  await listen(app.server, config.port, config.host);
+  await listen(app.server, config.port, listenHost(config.host));
   const address = app.server.address();
   port = typeof address === 'object' && address ? address.port : config.port;
   const code = (await isSetUpNeeded()) ? `Set up the company with this one-time code: ${setUpCode.make()}\n` : '';
   const signIns = (await hasDemoLogins()) ? demoSignIns : '';
   // In one piece: whoever waits for the ready line has the rest with it.
-  process.stdout.write(`Driprail is ready at http://${config.host}:${port}\n${signIns}${code}`);
+  process.stdout.write(`Driprail is ready at ${originOf(config.host, port)}\n${signIns}${code}`);
 
   let isStopping = false;
   const stop = (): void => {

@@ -3,11 +3,12 @@ import { audit } from '../../db/audit.ts';
 import { companyOf } from '../../db/company.ts';
 import { CardAttempt } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
-import { conflict, unprocessable } from '../../http/errors.ts';
+import { AppError, conflict, unprocessable } from '../../http/errors.ts';
 import { PaymentError } from '../../integrations/payments/index.ts';
 import type { Payments } from '../../integrations/payments/index.ts';
 import { readBill } from './bill.presenter.ts';
 import type { By } from './note-paid.ts';
+import { lookUpPage } from './payment-events.service.ts';
 import { billIfOver, lockJob } from './payments.service.ts';
 
 export interface CardAsk {
@@ -24,12 +25,18 @@ const LINK_LIVES_MS = 20 * 3_600_000;
 /**
  * The payments service's own page for what is owed now and a tip. Asked twice it is the same page; with another tip the
  * page before stops taking money first, so that nobody pays twice from two tabs.
- * @throws 404, 409 when the page before has just been paid, 422 when nothing is owed or the service refuses
+ * @throws 404, 409 when the page before has just been paid, 422 when nothing is owed or the service refuses, 503 when it
+ * can't be reached
  */
 export async function openCardPage(payments: Payments, ask: CardAsk, by: By): Promise<{ url: string }> {
   const { attempt, outdated, label } = await beginAttempt(ask, by);
   for (const other of outdated) await endAttempt(payments, other, by.at);
-  if (attempt.url) return { url: attempt.url };
+  if (attempt.url) {
+    // The page may be gone meanwhile.
+    const state = await lookUpPage(payments, attempt, by.at).catch(asRefusal);
+    if (state === 'paid') throw beingPaid();
+    return state === 'open' ? { url: attempt.url } : openCardPage(payments, ask, by);
+  }
   const link = await payments
     .createLink({
       ...{ attemptId: attempt.id, amountCents: attempt.amountCents + attempt.tipCents, currency: 'usd' },
@@ -72,14 +79,23 @@ async function endAttempt(payments: Payments, attempt: CardAttempt, at: Date): P
   try {
     if (attempt.providerRef) await payments.expireLink(attempt.providerRef);
   } catch (error) {
-    if (error instanceof PaymentError && error.reason === 'paid')
-      throw conflict('being_paid', 'A card payment has just been made. Wait a moment and look again.');
-    asRefusal(error);
+    const reason = error instanceof PaymentError ? error.reason : null;
+    if (reason === 'paid') throw beingPaid();
+    // A page that the service does not know takes no money.
+    if (reason !== 'unknown') asRefusal(error);
   }
   await attempt.update({ state: 'expired', settledAt: at });
 }
 
+const beingPaid = () => conflict('being_paid', 'A card payment has just been made. Wait a moment and look again.');
+
 function asRefusal(error: unknown): never {
-  if (error instanceof PaymentError) throw unprocessable('card_refused', error.message);
-  throw error;
+  if (!(error instanceof PaymentError)) throw error;
+  if (error.reason === 'unreachable')
+    throw new AppError(
+      503,
+      'cards_unreachable',
+      'The card page can’t be reached just now and nothing was taken. Try again in a minute.',
+    );
+  throw unprocessable('card_refused', error.message);
 }

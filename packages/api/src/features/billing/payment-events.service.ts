@@ -3,6 +3,7 @@ import { Op } from 'sequelize';
 import { CardAttempt, Job, Payment, Refund } from '../../db/models/index.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
 import { conflict } from '../../http/errors.ts';
+import { PaymentError } from '../../integrations/payments/index.ts';
 import type { PaymentEvent, Payments } from '../../integrations/payments/index.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { keepTip } from '../booking/index.ts';
@@ -160,14 +161,38 @@ export async function lookUpOpenPages(payments: Payments, now: Date, jobId: stri
     order: [['createdAt', 'ASC']],
     limit: 50,
   });
-  for (const { id, providerRef, amountCents, tipCents } of open) {
-    const found = await payments.lookUp(providerRef ?? '');
-    const base = { id: `looked-up:${providerRef}:${found.state}`, at: now, ref: providerRef ?? '', attemptId: id };
-    if (found.state === 'paid' && found.paymentRef)
-      await takeEvent(
-        { ...base, kind: 'paid', paymentRef: found.paymentRef, amountCents: amountCents + tipCents },
-        now,
-      );
-    else if (found.state === 'expired') await takeEvent({ ...base, kind: 'expired' }, now);
+  for (const attempt of open) {
+    try {
+      await lookUpPage(payments, attempt, now);
+    } catch (error) {
+      // One that can't be looked up must not keep the others waiting; it is asked after again.
+      if (!(error instanceof PaymentError)) throw error;
+    }
   }
+}
+
+/**
+ * Asks what became of one page and takes it like the event that would have told it. A page that the service does not
+ * know takes no money: it has expired.
+ * @throws PaymentError when the service does not answer
+ */
+export async function lookUpPage(
+  payments: Payments,
+  { id, providerRef, amountCents, tipCents }: CardAttempt,
+  now: Date,
+): Promise<PageState['state']> {
+  const ref = providerRef ?? '';
+  const found = await payments.lookUp(ref).catch(asExpired);
+  const base = { id: `looked-up:${ref}:${found.state}`, at: now, ref, attemptId: id };
+  if (found.state === 'paid' && found.paymentRef)
+    await takeEvent({ ...base, kind: 'paid', paymentRef: found.paymentRef, amountCents: amountCents + tipCents }, now);
+  else if (found.state === 'expired') await takeEvent({ ...base, kind: 'expired' }, now);
+  return found.state;
+}
+
+type PageState = Awaited<ReturnType<Payments['lookUp']>>;
+
+function asExpired(error: unknown): PageState {
+  if (error instanceof PaymentError && error.reason === 'unknown') return { state: 'expired', paymentRef: null };
+  throw error;
 }
