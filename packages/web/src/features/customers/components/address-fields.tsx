@@ -46,7 +46,7 @@ export function AddressFields({ form, index, onRemove }: AddressFieldsProps) {
       <PlaceOnMap form={form} index={index} />
       <TextField label="Gate code" {...register(`${at}.gateCode`)} error={wrong?.gateCode?.message} />
       <TextField
-        className="is-3"
+        className="is-4"
         label="Access notes for the crew, shown on the day"
         {...register(`${at}.accessNotes`)}
         error={wrong?.accessNotes?.message}
@@ -142,7 +142,7 @@ function PlaceOnMap({ form, index }: Omit<AddressFieldsProps, 'onRemove'>) {
         {...register(`${at}.lng`, { setValueAs: degrees })}
         error={wrong?.lng?.message}
       />
-      <div className="is-2 cu-map">
+      <div className="is-3 cu-map">
         <Button isBusy={place.isPending} onClick={() => void find()}>
           <Icon name="map" /> Find on the map
         </Button>
