@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { billDto, billStates } from './bill.dto.ts';
 import { endpoint } from './endpoint.ts';
-import { day, done, id, instant, positiveCents, shortText } from './fields.ts';
+import { bytes, day, done, id, instant, positiveCents, shortText } from './fields.ts';
 import { desk, everyone } from '../authz/actor.ts';
 
 const bill = z.object({ bill: billDto });
@@ -29,6 +29,15 @@ export const issueInvoice = endpoint({
   summary: 'Bill the finished lines of a job now; once, with the next number.',
   params: z.object({ id }),
   response: bill,
+});
+export const getInvoicePdf = endpoint({
+  method: 'get',
+  path: '/api/jobs/:id/invoice.pdf',
+  roles: desk,
+  summary: 'A job’s invoice on paper; 404 while it is not billed.',
+  params: z.object({ id }),
+  response: bytes,
+  format: 'pdf',
 });
 /** Cash, checks and transfers are recorded by a person; card payments come from the payments service alone. */
 export const handMethods = ['cash', 'check', 'transfer'] as const;

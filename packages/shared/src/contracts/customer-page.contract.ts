@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { billDto } from './bill.dto.ts';
 import { endpoint } from './endpoint.ts';
-import { done, instant, positiveCents } from './fields.ts';
+import { bytes, done, instant, positiveCents } from './fields.ts';
 import { progressStates } from '../domain/board/progress.ts';
 
 const token = z.object({ token: z.string().min(20).max(80) });
@@ -44,6 +44,15 @@ export const getCustomerPage = endpoint({
   params: token,
   query: z.object({ returned: z.stringbool().default(false) }),
   response: z.object({ page: customerPageDto }),
+});
+export const getCustomerInvoice = endpoint({
+  method: 'get',
+  path: '/api/customer-pages/:token/invoice.pdf',
+  roles: 'public',
+  summary: 'The invoice on paper, by the link that was sent; 404 while it is not billed.',
+  params: token,
+  response: bytes,
+  format: 'pdf',
 });
 export const payByCard = endpoint({
   method: 'post',

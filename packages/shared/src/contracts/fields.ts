@@ -64,6 +64,8 @@ export const equipmentNames: Record<Equipment, string> = {
 
 export const roleName = z.enum(['owner', 'dispatcher', 'technician'], 'Choose a role.');
 export const done = z.object({ ok: z.literal(true) });
+/** A file, as it is sent. */
+export const bytes = z.custom<Uint8Array>((value) => value instanceof Uint8Array);
 
 function isZone(value: string): boolean {
   try {

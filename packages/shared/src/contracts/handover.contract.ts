@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
-import { day, done, id, instant, planVersion, shortText } from './fields.ts';
+import { bytes, day, done, id, instant, planVersion, shortText } from './fields.ts';
 import { everyone } from '../authz/actor.ts';
 
 const owner = ['owner'] as const;
@@ -101,7 +101,6 @@ export const handOverPayday = endpoint({
 });
 
 const weekParam = z.object({ startsOn: day });
-const bytes = z.custom<Uint8Array>((value) => value instanceof Uint8Array);
 
 export const exportPaydayKinds = endpoint({
   method: 'get',

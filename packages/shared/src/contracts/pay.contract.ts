@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
-import { cents, day, decimal, done, id, instant, shortText } from './fields.ts';
+import { bytes, cents, day, decimal, done, id, instant, shortText } from './fields.ts';
 import { everyone } from '../authz/actor.ts';
 import type { PayLine, PayWarning, PersonWeek } from '../domain/pay/pay-week.types.ts';
 import { statementTimeOff } from '../domain/pay/time-off/statement-time-off.ts';
@@ -244,7 +244,7 @@ export const getStatementPdf = endpoint({
   roles: everyone,
   summary: 'The same statement as a PDF on Letter paper, fonts embedded.',
   params: weekParam.extend({ personId: id }),
-  response: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
+  response: bytes,
   format: 'pdf',
 });
 export type StatementDto = z.infer<(typeof getStatement)['response']>;

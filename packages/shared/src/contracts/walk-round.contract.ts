@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
-import { id, instant, shortText, sizeClass } from './fields.ts';
+import { bytes, id, instant, shortText, sizeClass } from './fields.ts';
 import { everyone } from '../authz/actor.ts';
 import { progressStates } from '../domain/board/progress.ts';
 import { bodies } from '../domain/walk-round/body.ts';
@@ -200,6 +200,6 @@ export const getPhoto = endpoint({
   roles: everyone,
   summary: 'A photo, for the visit’s crew near its day and the desk.',
   params: z.object({ id }),
-  response: z.custom<Uint8Array>((value) => value instanceof Uint8Array),
+  response: bytes,
   format: 'jpeg',
 });

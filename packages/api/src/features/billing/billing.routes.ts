@@ -12,6 +12,7 @@ import { readBill } from './bill.presenter.ts';
 import type { CustomerLinks } from './customer-links.ts';
 import { customerPageRoutes } from './customer-page.routes.ts';
 import { readDayBills } from './day-bills.queries.ts';
+import { readInvoicePdf } from './invoice-pdf.ts';
 import { findInvoices } from './invoices.queries.ts';
 import { issueInvoice } from './issue-invoice.service.ts';
 import { takeEvent } from './payment-events.service.ts';
@@ -37,6 +38,10 @@ export function billingRoutes(table: RouteTable, parts: BillingParts): void {
     const by = { userId: ctx.actor.userId, at: ctx.now() };
     await inTransaction((tx) => issueInvoice(tx, params.id, by));
     return { bill: await readBill(params.id, ctx.now()) };
+  });
+  route(table, api.getInvoicePdf, async ({ params }, ctx) => {
+    await authorizeBill(ctx, 'read', params.id);
+    return readInvoicePdf(params.id, ctx.now());
   });
   route(table, api.recordPayment, async ({ params, body }, ctx) => ({
     bill: await recordPayment(ctx, params.id, body),

@@ -2,6 +2,7 @@ import { createHmac, timingSafeEqual } from 'node:crypto';
 import type { Transaction } from 'sequelize';
 import { parse, stringify, v7 as uuid } from 'uuid';
 import { CustomerLink } from '../../db/models/index.ts';
+import { select } from '../../db/sequelize.ts';
 
 const SIGNATURE_BYTES = 16;
 /** How long a customer's page stays open after it was last handed out. */
@@ -18,12 +19,13 @@ export class CustomerLinks {
   /** The token of a job's page; made anew it is the same, and good for another while. */
   async tokenFor(tx: Transaction, jobId: string, now: Date): Promise<string> {
     const expiresAt = new Date(now.getTime() + LIVES_DAYS * 86_400_000);
-    const [link, isNew] = await CustomerLink.findOrCreate({
-      where: { jobId },
-      defaults: { id: uuid(), jobId, createdAt: now, expiresAt },
-      transaction: tx,
-    });
-    if (!isNew) await link.update({ expiresAt, revokedAt: null }, { transaction: tx });
+    const [link] = await select<{ id: string }>(
+      `INSERT INTO customer_links (id, job_id, created_at, expires_at) VALUES (:id, :jobId, :now, :expiresAt)
+       ON CONFLICT (job_id) DO UPDATE SET expires_at = excluded.expires_at, revoked_at = NULL RETURNING id`,
+      { id: uuid(), jobId, now, expiresAt },
+      tx,
+    );
+    if (!link) throw new Error('an upsert answers its row');
     const id = Buffer.from(parse(link.id));
     return Buffer.concat([id, this.sign(id)]).toString('base64url');
   }

@@ -7,6 +7,7 @@ import { openCardPage } from './card.service.ts';
 import type { BillingParts } from './billing.routes.ts';
 import { readCustomerPage } from './customer-page.queries.ts';
 import { giveFeedback } from './feedback.service.ts';
+import { readInvoicePdf } from './invoice-pdf.ts';
 import { lookUpOpenPages } from './payment-events.service.ts';
 
 /** Pages that a customer opens by a signed link: whoever has the link sees that one job. */
@@ -24,6 +25,9 @@ export function customerPageRoutes(table: RouteTable, { links, payments, baseUrl
     if (query.returned) await lookUpOpenPages(payments, now(), jobId);
     return { page: await readCustomerPage(jobId, now()) };
   });
+  publicRoute(table, api.getCustomerInvoice, async ({ params }, now) =>
+    readInvoicePdf(await jobOf(params.token, now()), now()),
+  );
   publicRoute(table, api.payByCard, async ({ params, body }, now, { req }) => {
     const jobId = await jobOf(params.token, now());
     const returnUrl = `${pageUrl(req, params.token)}?returned=true`;

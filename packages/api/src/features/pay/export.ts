@@ -1,6 +1,6 @@
 import type { PayWeekDto } from '@driprail/shared/contracts/pay.contract';
 import { lineColumns, namesOf } from './handover/columns.ts';
-import { csvText, fourPlaces, harmless, plainCents } from './handover/csv.ts';
+import { csvText, fourPlaces, harmless, plainCents } from '../../paper/csv.ts';
 
 /** Weeks for a payroll processor: a row per person and line (RFC 4180), amounts as plain decimals. */
 export function linesCsv(weeks: readonly Pick<PayWeekDto, 'week' | 'people'>[]): string {

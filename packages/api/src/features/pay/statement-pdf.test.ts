@@ -3,6 +3,7 @@ import { ClockEntry, PayRate } from '../../db/models/index.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
+import { fileOf, pdfText } from '../../testing/pdf-text.ts';
 import { v7 as uuid } from 'uuid';
 
 const app = useApp();
@@ -22,21 +23,13 @@ beforeAll(async () => {
 
 test('a statement is a PDF with its fonts in it, for the owner, not for others before the lock', async () => {
   const path = `/api/pay/statements/2026-05-11/${company.people.sefa.id}/statement.pdf`;
-  const answer = await (
-    await company.owner()
-  )
-    .get(path)
-    .buffer(true)
-    .parse((res, done) => {
-      const parts: Buffer[] = [];
-      res.on('data', (part: Buffer) => parts.push(part));
-      res.on('end', () => done(null, Buffer.concat(parts)));
-    });
+  const answer = await fileOf((await company.owner()).get(path));
   expect([answer.status, answer.type]).toEqual([200, 'application/pdf']);
-  const pdf = (answer.body as Buffer).toString('latin1');
+  const pdf = answer.bytes.toString('latin1');
   expect(pdf.startsWith('%PDF-')).toBe(true);
   expect(pdf).toMatch(/\/FontFile[23]/);
   expect(pdf).toContain('RobotoFlex');
+  expect(pdfText(answer.bytes)).toMatch(/Sefa Lund[^]*2\.00 h worked[^]*Gross\n40\.00/);
   await (await company.sefa()).get(path).expect(403);
   await (await company.idris()).get(path).expect(403);
 });

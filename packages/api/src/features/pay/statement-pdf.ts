@@ -1,5 +1,3 @@
-import { createRequire as requireFrom } from 'node:module';
-import PDFDocument from 'pdfkit';
 import type { StatementDto, YearToDate } from '@driprail/shared/contracts/pay.contract';
 import type { PayLine } from '@driprail/shared/domain/pay/pay-week.types';
 import { exact } from '@driprail/shared/domain/money/exact';
@@ -7,29 +5,19 @@ import { centsText, decimalText } from '@driprail/shared/domain/money/rounding';
 import { formatDate, formatDay } from '@driprail/shared/domain/time/format';
 import { timeOffKindNames } from '@driprail/shared/domain/pay/time-off/time-off-rule';
 import { dayOf } from '@driprail/shared/domain/time/zone';
+import { PAGE, closePaper, head, money, openPaper, paragraph, room, section, total } from '../../paper/paper.ts';
+import type { Paper } from '../../paper/paper.ts';
 
-// One weight only ships for paper: rank is by size and by rules.
-const FONT = requireFrom(import.meta.url).resolve('@fontsource/roboto-flex/files/roboto-flex-latin-400-normal.woff');
-const PAGE = { left: 54, right: 558, top: 54, bottom: 738 };
-const COLUMNS = { date: 54, job: 108, label: 156, working: 330, amount: 558 };
-
-type Document = InstanceType<typeof PDFDocument>;
+const COLUMNS = { date: 54, job: 108, label: 156, working: 330 };
 
 /** A pay statement on Letter paper, fonts embedded: every line with its job, totals double-ruled, page x of y. */
 export function statementPdf(
   { week, person, companyName, customers, yearToDate, timeOff }: StatementDto,
   zone: string,
 ): Promise<Buffer> {
-  const doc = new PDFDocument({
-    size: 'LETTER',
-    margin: 54,
-    bufferPages: true,
-    font: FONT,
-    info: { Title: `Pay statement, week ${week.number}, ${person.name}`, Author: companyName },
-  });
-  const done = collected(doc);
-  head(doc, companyName, person.name, stateWords(week, zone));
-  text(
+  const { doc, bytes } = openPaper(`Pay statement, week ${week.number}, ${person.name}`, companyName);
+  head(doc, person.name, companyName, stateWords(week, zone));
+  paragraph(
     doc,
     9,
     `Week ${week.number}, ${formatDay(week.startsOn)} to ${formatDate(week.endsOn)}. ${decimalText(exact(person.hoursWorked), 2)} h worked, ${decimalText(exact(person.overtimeHours), 2)} h over the limit.`,
@@ -43,17 +31,16 @@ export function statementPdf(
     );
     for (const line of lines) row(doc, line, line.jobId ? (customers[line.jobId] ?? '') : '');
   }
-  total(doc, person.totals.gross);
-  text(doc, 9, yearWords(yearToDate));
-  if (timeOff.length > 0) text(doc, 9, timeOffWords(timeOff, week.state === 'locked'));
-  text(
+  total(doc, 'Gross', person.totals.gross);
+  paragraph(doc, 9, yearWords(yearToDate));
+  if (timeOff.length > 0) paragraph(doc, 9, timeOffWords(timeOff, week.state === 'locked'));
+  paragraph(
     doc,
     8,
     'Gross pay before any tax withholding, which a licensed payroll processor works out. Ask about any line: each has its working on screen.',
   );
-  pageNumbers(doc);
-  doc.end();
-  return done;
+  closePaper(doc);
+  return bytes;
 }
 
 function yearWords({ year, weeks, hours, grossCents, tipCents, overtimePremiumCents }: YearToDate): string {
@@ -77,33 +64,12 @@ function timeOffWords(rows: StatementDto['timeOff'], isLocked: boolean): string 
   return `Paid time off${isLocked ? '' : ', expected until the week is locked'}. ${words.join('. ')}.`;
 }
 
-function collected(doc: Document): Promise<Buffer> {
-  const parts: Buffer[] = [];
-  return new Promise((resolve, reject) => {
-    doc.on('data', (part: Buffer) => parts.push(part));
-    doc.on('end', () => resolve(Buffer.concat(parts)));
-    doc.on('error', reject);
-  });
-}
-
 function stateWords(week: StatementDto['week'], zone: string): string {
   if (week.state !== 'locked' || !week.lockedAt) return 'Draft';
   return `Locked ${formatDate(dayOf(week.lockedAt, zone))}`;
 }
 
-function head(doc: Document, companyName: string, name: string, state: string): void {
-  doc.fontSize(9).text(companyName, PAGE.left, PAGE.top).text(state, PAGE.left, PAGE.top, { align: 'right' });
-  doc.fontSize(30).text(name, PAGE.left, PAGE.top + 18);
-  rule(doc, doc.y + 4, 1);
-  doc.y += 12;
-}
-
-function text(doc: Document, size: number, words: string): void {
-  doc.fontSize(size).text(words, PAGE.left, doc.y, { width: PAGE.right - PAGE.left });
-  doc.y += 6;
-}
-
-function hoursRow(doc: Document, hoursByDay: Record<string, string>): void {
+function hoursRow(doc: Paper, hoursByDay: Record<string, string>): void {
   const days = Object.entries(hoursByDay).sort(([a], [b]) => a.localeCompare(b));
   const width = (PAGE.right - PAGE.left) / 7;
   const top = doc.y;
@@ -138,16 +104,7 @@ function groupsOf(lines: PayLine[]): Map<string, PayLine[]> {
   return groups;
 }
 
-function section(doc: Document, name: string, cents: number): void {
-  room(doc, 40);
-  const y = doc.y + 8;
-  doc.fontSize(12).text(name, PAGE.left, y, { lineBreak: false });
-  money(doc, 12, cents, y);
-  rule(doc, y + 17, 0.5);
-  doc.y = y + 22;
-}
-
-function row(doc: Document, line: PayLine, customer: string): void {
+function row(doc: Paper, line: PayLine, customer: string): void {
   room(doc, 16);
   const y = doc.y;
   const label = [line.label, customer].filter(Boolean).join(', ');
@@ -159,48 +116,7 @@ function row(doc: Document, line: PayLine, customer: string): void {
   doc.text(line.isPayable ? (line.working.at(-1)?.arithmetic ?? '') : 'already received', COLUMNS.working, y, {
     width: 160,
   });
-  money(doc, 9, line.amountCents, y, !line.isPayable);
+  const amount = centsText(line.amountCents);
+  money(doc, 9, line.isPayable ? amount : `(${amount})`, y);
   doc.y = Math.max(bottom, doc.y, y + 12) + 3;
-}
-
-function money(doc: Document, size: number, cents: number, y: number, isShownOnly = false): void {
-  const words = isShownOnly ? `(${centsText(cents)})` : centsText(cents);
-  doc.fontSize(size).text(words, COLUMNS.amount - 110, y, { width: 110, align: 'right', lineBreak: false });
-}
-
-function total(doc: Document, cents: number): void {
-  room(doc, 60);
-  const y = doc.y + 10;
-  rule(doc, y, 1);
-  doc.fontSize(14).text('Gross', PAGE.left, y + 6, { lineBreak: false });
-  money(doc, 14, cents, y + 6);
-  rule(doc, y + 26, 1);
-  rule(doc, y + 29, 1);
-  doc.y = y + 42;
-}
-
-/** A new page where the next rows would not fit. */
-function room(doc: Document, height: number): void {
-  if (doc.y + height > PAGE.bottom) {
-    doc.addPage();
-    doc.y = PAGE.top;
-  }
-}
-
-function rule(doc: Document, y: number, width: number): void {
-  doc.moveTo(PAGE.left, y).lineTo(PAGE.right, y).lineWidth(width).stroke();
-}
-
-function pageNumbers(doc: Document): void {
-  const { start, count } = doc.bufferedPageRange();
-  for (let page = start; page < start + count; page += 1) {
-    doc.switchToPage(page);
-    // Below the margin pdfkit would begin another page.
-    doc.page.margins.bottom = 0;
-    doc.fontSize(8).text(`Page ${page - start + 1} of ${count}`, PAGE.left, 756, {
-      width: PAGE.right - PAGE.left,
-      align: 'right',
-      lineBreak: false,
-    });
-  }
 }

@@ -10,7 +10,7 @@ import { useApp } from '../../../testing/app.ts';
 import { aCompany, first } from '../../../testing/company.ts';
 import type { TestCompany } from '../../../testing/company.ts';
 import { aDoneJob, payWeeks } from '../../../testing/pay-weeks.ts';
-import { plainCents } from './csv.ts';
+import { plainCents } from '../../../paper/csv.ts';
 import { bytesOf, hourly, rowsOf, worked } from './testing/paid-weeks.ts';
 
 const app = useApp();

@@ -2,7 +2,7 @@ import { fractionText } from '@driprail/shared/domain/money/exact';
 import { workedEntries } from '@driprail/shared/domain/pay/handover/worked-entries';
 import { withOffset } from '@driprail/shared/domain/time/zone-instants';
 import { EXPORT_SCHEMA_VERSION, hourColumns, namesOf } from './columns.ts';
-import { csvText, fourPlaces, harmless } from './csv.ts';
+import { csvText, fourPlaces, harmless } from '../../../paper/csv.ts';
 import type { LockedWeek } from './locked-weeks.queries.ts';
 
 /** The clock entries that the weeks were paid from, out of the snapshots, cut by day: a row per person, day and entry. */

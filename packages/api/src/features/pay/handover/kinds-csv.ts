@@ -2,7 +2,7 @@ import { exact, sum } from '@driprail/shared/domain/money/exact';
 import { addKinds, kindsOfPay, payKinds, type KindSums } from '@driprail/shared/domain/pay/handover/kinds-of-pay';
 import type { PayLine, PayTip, PayWeekInput, PersonWeek } from '@driprail/shared/domain/pay/pay-week.types';
 import { EXPORT_SCHEMA_VERSION, kindColumns, namesOf, peopleColumns } from './columns.ts';
-import { csvText, fourPlaces, harmless, plainCents } from './csv.ts';
+import { csvText, fourPlaces, harmless, plainCents } from '../../../paper/csv.ts';
 import type { HoursBefore, LockedWeek } from './locked-weeks.queries.ts';
 
 /** A row per person and week, a column per kind of pay. */

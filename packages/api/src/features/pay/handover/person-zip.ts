@@ -7,7 +7,7 @@ import type { Ctx } from '../../../http/context.ts';
 import { notFound } from '../../../http/errors.ts';
 import { linesCsv } from '../export.ts';
 import { clockColumns, namesOf, tipColumns, EXPORT_SCHEMA_VERSION } from './columns.ts';
-import { csvText, harmless, plainCents } from './csv.ts';
+import { csvText, harmless, plainCents } from '../../../paper/csv.ts';
 import { statementFiles } from './handover-zip.ts';
 import { hoursCsv } from './hours-csv.ts';
 import { kindsCsv, tipMethodOf } from './kinds-csv.ts';
