@@ -1,11 +1,15 @@
 import * as api from '@driprail/shared/contracts/customers.contract';
+import * as merge from '@driprail/shared/contracts/customers-merge.contract';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
-import { route } from '../../http/route.ts';
+import { okay, route } from '../../http/route.ts';
 import type { Geocoder } from '../../integrations/maps/index.ts';
 import { findCustomer, findCustomers, leadingTo, vehicleWords } from './customers.queries.ts';
 import { createCustomer, updateCustomer } from './customers.service.ts';
+import { findDuplicates } from './duplicates.queries.ts';
 import { customerSince, historyOf } from './history.queries.ts';
+import { keepApart } from './keep-apart.service.ts';
+import { mergeCustomers, previewOf } from './merge.service.ts';
 import { placeOf } from './places.queries.ts';
 
 export function customersRoutes(table: RouteTable, { geocoder }: { geocoder: Geocoder | null }): void {
@@ -24,4 +28,11 @@ export function customersRoutes(table: RouteTable, { geocoder }: { geocoder: Geo
   route(table, api.updateCustomer, async ({ params, body }, ctx) => ({
     customer: await updateCustomer(ctx, params.id, body),
   }));
+  route(table, merge.listDuplicates, async () => ({ pairs: await findDuplicates() }));
+  route(table, merge.keepApart, async ({ body }, ctx) => {
+    await keepApart(ctx, body.ids);
+    return okay;
+  });
+  route(table, merge.previewMerge, ({ params }) => previewOf(params.id, params.goesId));
+  route(table, merge.mergeCustomers, ({ params, body }, ctx) => mergeCustomers(ctx, params.id, body));
 }
