@@ -30,7 +30,7 @@ export function historyOf(customerId: string): Promise<PastJobDto[]> {
                   (array_agg(json_build_object('id', f.id, 'moment', 'before')::jsonb ORDER BY f.occurred_at) FILTER (WHERE f.moment = 'before'))[1],
                   (array_agg(json_build_object('id', f.id, 'moment', 'after')::jsonb ORDER BY f.occurred_at DESC) FILTER (WHERE f.moment = 'after'))[1]], NULL)) AS shown
            FROM photos f JOIN visits v ON v.id = f.visit_id WHERE v.job_id = j.id AND f.stored_at IS NOT NULL) photos
-      WHERE j.customer_id = :customerId ORDER BY j.number DESC LIMIT ${MOST_JOBS}`,
+      WHERE j.customer_id = :customerId ORDER BY last.starts_at DESC NULLS FIRST, j.number DESC LIMIT ${MOST_JOBS}`,
     { customerId },
   );
 }

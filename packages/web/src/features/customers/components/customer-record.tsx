@@ -1,4 +1,3 @@
-import type { ReactNode } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
 import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
@@ -18,12 +17,11 @@ import { RecordVehicles } from './record-vehicles.tsx';
 interface RecordProps {
   id: string;
   onEdit: (customer: CustomerDto) => void;
-  /** What else can be done with the record. */
-  foot?: (customer: CustomerDto) => ReactNode;
+  onMerge: (customer: CustomerDto) => void;
 }
 
 /** One customer's whole record, hung beside the list. */
-export function CustomerRecord({ id, onEdit, foot }: RecordProps) {
+export function CustomerRecord({ id, onEdit, onMerge }: RecordProps) {
   const { zone } = useFormats();
   const one = useQuery(customerQuery(id));
   return (
@@ -93,7 +91,13 @@ export function CustomerRecord({ id, onEdit, foot }: RecordProps) {
             </div>
             <div>
               {erasedAt ? null : <RecordSide customer={customer} />}
-              {erasedAt ? null : foot?.(customer)}
+              {erasedAt ? null : (
+                <p className="cu-foot">
+                  <button type="button" className="link" onClick={() => onMerge(customer)}>
+                    Merge with another record
+                  </button>
+                </p>
+              )}
             </div>
           </>
         )}

@@ -1,4 +1,5 @@
 import { useState } from 'react';
+import { useQuery } from '@tanstack/react-query';
 import { useNavigate, useParams } from 'react-router';
 import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
 import { paths } from '../../../app/paths.ts';
@@ -6,54 +7,86 @@ import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Sheet } from '../../../components/sheet.tsx';
+import { duplicatesQuery } from '../api/merge.queries.ts';
 import { CustomerForm } from '../components/customer-form.tsx';
 import { CustomerList } from '../components/customer-list.tsx';
 import { CustomerRecord } from '../components/customer-record.tsx';
+import { DuplicatesSheet } from '../components/duplicates-sheet.tsx';
+import { MergeSheet } from '../components/merge-sheet.tsx';
+import { OtherRecordSheet } from '../components/other-record-sheet.tsx';
 import './customers.css';
 
-/** Who is edited, or the name a new customer begins with. */
-type Editing = { customer: CustomerDto } | { name: string };
+/** What is open over the page. */
+type Open =
+  | { kind: 'form'; customer: CustomerDto | null; name: string }
+  | { kind: 'duplicates' }
+  | { kind: 'other'; customer: CustomerDto }
+  | { kind: 'merge'; ids: [string, string] };
 
 /** Households and fleets: a list found by any part of what is known, and one whole record beside it. */
 export function CustomersPage() {
   const { id } = useParams();
   const navigate = useNavigate();
-  const [editing, setEditing] = useState<Editing | null>(null);
-  const customer = editing && 'customer' in editing ? editing.customer : null;
+  const [open, setOpen] = useState<Open | null>(null);
+  const duplicates = useQuery(duplicatesQuery);
+  const pairs = duplicates.data?.pairs.length ?? 0;
+  const close = () => setOpen(null);
+  const show = (one: string) => {
+    close();
+    void navigate(paths.customer(one));
+  };
   return (
     <>
       <PageHead
         title="Customers"
         above="Households and fleets"
         actions={
-          <Button look="main" onClick={() => setEditing({ name: '' })}>
-            <Icon name="plus" /> New customer
-          </Button>
+          <>
+            <Button onClick={() => setOpen({ kind: 'duplicates' })}>
+              Likely duplicates{pairs > 0 ? ` (${pairs})` : ''}
+            </Button>
+            <Button look="main" onClick={() => setOpen({ kind: 'form', customer: null, name: '' })}>
+              <Icon name="plus" /> New customer
+            </Button>
+          </>
         }
       />
       <RailPage>
         <div className={id ? 'beside cu-page is-open' : 'beside cu-page'}>
-          <CustomerList chosenId={id} onNew={(name) => setEditing({ name })} />
+          <CustomerList chosenId={id} onNew={(name) => setOpen({ kind: 'form', customer: null, name })} />
           {id ? (
-            <CustomerRecord key={id} id={id} onEdit={(one) => setEditing({ customer: one })} />
+            <CustomerRecord
+              key={id}
+              id={id}
+              onEdit={(customer) => setOpen({ kind: 'form', customer, name: customer.name })}
+              onMerge={(customer) => setOpen({ kind: 'other', customer })}
+            />
           ) : (
             <p className="empty max-[900px]:hidden">Choose a customer to see addresses, vehicles and past jobs.</p>
           )}
         </div>
       </RailPage>
-      {editing ? (
-        <Sheet title={customer?.name ?? 'New customer'} onClose={() => setEditing(null)} width={980}>
+      {open?.kind === 'form' ? (
+        <Sheet title={open.customer?.name ?? 'New customer'} onClose={close} width={980}>
           <CustomerForm
-            customer={customer}
-            name={'name' in editing ? editing.name : ''}
-            onCancel={() => setEditing(null)}
-            onSaved={(saved) => {
-              setEditing(null);
-              void navigate(paths.customer(saved.id));
-            }}
+            customer={open.customer}
+            name={open.name}
+            onCancel={close}
+            onSaved={(saved) => show(saved.id)}
           />
         </Sheet>
       ) : null}
+      {open?.kind === 'duplicates' ? (
+        <DuplicatesSheet onMerge={(ids) => setOpen({ kind: 'merge', ids })} onClose={close} />
+      ) : null}
+      {open?.kind === 'other' ? (
+        <OtherRecordSheet
+          customer={open.customer}
+          onChoose={(goesId) => setOpen({ kind: 'merge', ids: [open.customer.id, goesId] })}
+          onClose={close}
+        />
+      ) : null}
+      {open?.kind === 'merge' ? <MergeSheet ids={open.ids} onMerged={show} onClose={close} /> : null}
     </>
   );
 }
