@@ -67,6 +67,21 @@ describe('balances of paid time off', () => {
   });
 });
 
+describe('cash and bills', () => {
+  test.each([
+    ['owner', owner, true, true],
+    ['dispatcher', dispatcher, true, false],
+    ['technician', technician, false, false],
+  ] as const)('%s', (_name, actor, counts, refunds) => {
+    const ability = abilityFor(actor);
+    expect(ability.can('create', tag('Cash', { personId: 'pt' }))).toBe(counts);
+    expect(ability.can('read', 'Cash')).toBe(counts);
+    const far = tag('Bill', { id: 'j', crewPersonIds: [], day: null, daysFromToday: null });
+    expect(ability.can('create', far)).toBe(counts);
+    expect(ability.can('refund', far)).toBe(refunds);
+  });
+});
+
 describe('a technician', () => {
   const ability = abilityFor(technician);
   test('reads and marks visits of the own crew on near days only', () => {

@@ -18,6 +18,7 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
   owner(_actor, allow) {
     for (const name of planned) allow(['read', 'create', 'update', 'remove', 'plan', 'mark', 'tip'], name);
     allow(['read', 'create', 'collect', 'refund'], 'Bill');
+    allow(['read', 'create'], 'Cash');
     allow(['read', 'create', 'update'], 'Service');
     allow(['read', 'create', 'update'], 'ClockEntry');
     allow(['read', 'update'], 'Settings');
@@ -34,6 +35,7 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
   dispatcher(actor, allow) {
     for (const name of planned) allow(['read', 'create', 'update', 'remove', 'plan', 'mark', 'tip'], name);
     allow(['read', 'create', 'collect'], 'Bill');
+    allow(['read', 'create'], 'Cash');
     allow('read', 'Service');
     allow(['read', 'create', 'update'], 'ClockEntry');
     allow('read', 'Settings');

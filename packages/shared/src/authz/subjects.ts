@@ -4,6 +4,8 @@ export interface SubjectFields {
   Job: { id: string; crewPersonIds: string[] };
   /** What a job costs and what was paid, seen from one of its visits. */
   Bill: { id: string; crewPersonIds: string[]; day: string | null; daysFromToday: number | null };
+  /** Money that a person took in hand and has not handed in. */
+  Cash: { personId: string };
   Customer: { id: string };
   Person: { id: string };
   Van: { id: string };

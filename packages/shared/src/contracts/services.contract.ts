@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
 import { day, equipment, id, longText, minutes, name, planVersion, positiveCents, sizeClass, skill } from './fields.ts';
 import { desk } from '../authz/actor.ts';
+import { taxClasses } from '../domain/billing/tax-rates.ts';
 import { photoSets } from '../domain/walk-round/views.ts';
 
 const priceBody = z.strictObject({ sizeClass, priceCents: positiveCents, minutes });
@@ -15,6 +16,8 @@ export const serviceDto = z.object({
   equipment: z.array(equipment),
   /** What is photographed before work. */
   photoSet: z.enum(photoSets),
+  /** What its price is taxed as. */
+  taxClass: z.enum(taxClasses),
   isActive: z.boolean(),
   position: z.int(),
   /** The prices in force on the day asked for, one per size class that is sold. */
@@ -31,6 +34,8 @@ export const serviceBody = z.strictObject({
   equipment: z.array(equipment),
   /** Left out: quick, for add-ons none. */
   photoSet: z.enum(photoSets, 'Choose what is photographed.').optional(),
+  /** Left out: taxed, or as it was. */
+  taxClass: z.enum(taxClasses, 'Choose how it is taxed.').optional(),
   isActive: z.boolean(),
   position: z.int().min(0).max(999),
 });

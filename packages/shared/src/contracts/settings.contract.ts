@@ -24,6 +24,11 @@ export const settingsDto = z.object({
   /** Minutes of work without a break after which the phone reminds; null: it does not. Places differ, the owner sets it. */
   mealReminderMinutes: z.int().min(60).max(720).nullable().default(null),
   restReminderMinutes: z.int().min(30).max(720).nullable().default(null),
+  /** Days from an invoice's own to the day it is due. */
+  invoiceDueDays: z
+    .int('Give whole days.')
+    .min(0, 'An invoice can’t be due before it is sent.')
+    .max(120, 'At most 120 days.'),
   version: z.int(),
 });
 export type SettingsDto = z.infer<typeof settingsDto>;

@@ -1,5 +1,7 @@
 import type { Request } from 'express';
 import * as api from '@driprail/shared/contracts/billing.contract';
+import { countCash, getCash } from '@driprail/shared/contracts/cash.contract';
+import { exportMoneyDay, getMoneyDay } from '@driprail/shared/contracts/money-day.contract';
 import { addTaxRate, listTaxRates } from '@driprail/shared/contracts/taxes.contract';
 import { inTransaction } from '../../db/sequelize.ts';
 import { badRequest } from '../../http/errors.ts';
@@ -9,12 +11,16 @@ import { PaymentSignatureError } from '../../integrations/payments/index.ts';
 import type { PaymentEvent, Payments } from '../../integrations/payments/index.ts';
 import { authorizeBill } from './bill-access.ts';
 import { readBill } from './bill.presenter.ts';
+import { readCounts, readHolders } from './cash.queries.ts';
+import * as cash from './cash.service.ts';
 import type { CustomerLinks } from './customer-links.ts';
 import { customerPageRoutes } from './customer-page.routes.ts';
 import { readDayBills } from './day-bills.queries.ts';
 import { readInvoicePdf } from './invoice-pdf.ts';
 import { findInvoices } from './invoices.queries.ts';
 import { issueInvoice } from './issue-invoice.service.ts';
+import { moneyDayCsv } from './money-day-csv.ts';
+import { readMoneyDay } from './money-day.queries.ts';
 import { takeEvent } from './payment-events.service.ts';
 import { recordPayment } from './payments.service.ts';
 import { refundPayment } from './refunds.service.ts';
@@ -55,6 +61,13 @@ export function billingRoutes(table: RouteTable, parts: BillingParts): void {
     bill: await refundPayment(payments, ctx, params.id, body),
   }));
   route(table, api.listInvoices, ({ query }, ctx) => findInvoices(query, ctx.now()));
+  route(table, getCash, readCash);
+  route(table, countCash, async ({ body }, ctx) => {
+    await cash.countCash(ctx, body);
+    return readCash();
+  });
+  route(table, getMoneyDay, async ({ params }) => ({ close: await readMoneyDay(params.day) }));
+  route(table, exportMoneyDay, ({ params }) => moneyDayCsv(params.day));
   route(table, listTaxRates, async () => ({ taxRates: await taxes.listTaxRates() }));
   route(table, addTaxRate, async ({ body }, ctx) => {
     await taxes.addTaxRate(ctx, body);
@@ -75,4 +88,8 @@ function readSigned(payments: Payments, req: Request): PaymentEvent {
     if (error instanceof PaymentSignatureError) throw badRequest('This event is not signed by the payments service.');
     throw error;
   }
+}
+
+async function readCash() {
+  return { holders: await readHolders(), counts: await readCounts() };
 }

@@ -2,6 +2,7 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { SizeClass } from '@driprail/shared/contracts/fields';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import type { TaxClass } from '@driprail/shared/domain/billing/tax-rates';
 import type { PhotoSet } from '@driprail/shared/domain/walk-round/views';
 import { usualPhotoSet } from '@driprail/shared/domain/walk-round/views';
 import { audit } from '../../db/audit.ts';
@@ -16,7 +17,12 @@ import { listServices } from './services.queries.ts';
 export type ServiceFields = Pick<
   ServiceDto,
   'name' | 'kind' | 'description' | 'skills' | 'equipment' | 'isActive' | 'position'
-> & { /** Left out: the usual one of its kind. */ photoSet?: PhotoSet | undefined };
+> & {
+  /** Left out: the usual one of its kind. */
+  photoSet?: PhotoSet | undefined;
+  /** Left out: taxed, or as it was. */
+  taxClass?: TaxClass | undefined;
+};
 export interface PriceFields {
   sizeClass: SizeClass;
   priceCents: number;
@@ -30,7 +36,7 @@ export function createService(
 ): Promise<ServiceDto> {
   return inTransaction(async (tx) => {
     const photoSet = fields.photoSet ?? usualPhotoSet(fields.kind);
-    await Service.create({ id, ...fields, photoSet }, { transaction: tx });
+    await Service.create({ id, ...fields, photoSet, taxClass: fields.taxClass ?? 'standard' }, { transaction: tx });
     await putPrices(tx, id, startsOn, prices);
     return saved(tx, ctx, id, 'added');
   });
@@ -39,14 +45,15 @@ export function createService(
 export function updateService(
   ctx: Ctx,
   id: string,
-  { version, photoSet, ...fields }: ServiceFields & { version: number },
+  { version, photoSet, taxClass, ...fields }: ServiceFields & { version: number },
 ): Promise<ServiceDto> {
   return inTransaction(async (tx) => {
     const service = await Service.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
     if (!service) throw notFound('That service');
     if (service.version !== version)
       throw conflict('stale', `Somebody changed ${service.name} meanwhile. Reload and try again.`);
-    await service.update({ ...fields, ...(photoSet && { photoSet }), version: version + 1 }, { transaction: tx });
+    const kept = { ...(photoSet && { photoSet }), ...(taxClass && { taxClass }) };
+    await service.update({ ...fields, ...kept, version: version + 1 }, { transaction: tx });
     return saved(tx, ctx, id, 'changed');
   });
 }

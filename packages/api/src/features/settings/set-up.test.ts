@@ -58,4 +58,9 @@ test('settings name the version they saw, and reach everybody’s session', asyn
     .send({ ...settings, clock: '12' })
     .expect(409);
   expect((await owner.get('/api/session')).body).toMatchObject({ company: { clock: '24' } });
+  const late = await owner
+    .put('/api/settings')
+    .send({ ...settings, invoiceDueDays: 121 })
+    .expect(400);
+  expect(late.body).toMatchObject({ error: { fields: { invoiceDueDays: 'At most 120 days.' } } });
 });

@@ -10,6 +10,7 @@ import {
 import type { Equipment, SizeClass, Skill } from '@driprail/shared/contracts/fields';
 import { serviceKinds } from '@driprail/shared/contracts/services.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
+import { taxClassNames, taxClasses } from '@driprail/shared/domain/billing/tax-rates';
 import { photoSetNames, photoSets, usualPhotoSet } from '@driprail/shared/domain/walk-round/views';
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
@@ -39,6 +40,7 @@ export function ServiceForm({
     skills: service?.skills ?? [],
     equipment: service?.equipment ?? [],
     photoSet: service?.photoSet ?? usualPhotoSet('package'),
+    taxClass: service?.taxClass ?? ('standard' as const),
     isActive: service?.isActive ?? true,
     position: service?.position ?? 0,
   });
@@ -134,22 +136,38 @@ export function ServiceForm({
           ))}
         </fieldset>
       </div>
-      <SelectField
-        className="mt-3"
-        label="Walk-round before work"
-        hint="A visit asks for the largest of its lines."
-        value={value.photoSet}
-        error={fields['photoSet']}
-        onChange={(event) =>
-          setValue({ ...value, photoSet: photoSets.find((set) => set === event.target.value) ?? value.photoSet })
-        }
-      >
-        {photoSets.map((set) => (
-          <option key={set} value={set}>
-            {photoSetNames[set]}
-          </option>
-        ))}
-      </SelectField>
+      <div className="grid grid-cols-2 gap-6 mt-3 max-[560px]:grid-cols-1">
+        <SelectField
+          label="Walk-round before work"
+          hint="A visit asks for the largest of its lines."
+          value={value.photoSet}
+          error={fields['photoSet']}
+          onChange={(event) =>
+            setValue({ ...value, photoSet: photoSets.find((set) => set === event.target.value) ?? value.photoSet })
+          }
+        >
+          {photoSets.map((set) => (
+            <option key={set} value={set}>
+              {photoSetNames[set]}
+            </option>
+          ))}
+        </SelectField>
+        <SelectField
+          label="Sales tax"
+          hint="How much, and where, the owner enters under Settings. Which services are taxed differs by place and law."
+          value={value.taxClass}
+          error={fields['taxClass']}
+          onChange={(event) =>
+            setValue({ ...value, taxClass: taxClasses.find((one) => one === event.target.value) ?? value.taxClass })
+          }
+        >
+          {taxClasses.map((one) => (
+            <option key={one} value={one}>
+              {taxClassNames[one]}
+            </option>
+          ))}
+        </SelectField>
+      </div>
       <h3 className="sec mt-4">Price and minutes by size class</h3>
       <div className="grid gap-2 mt-2">
         {sizeClasses.map((size) => (

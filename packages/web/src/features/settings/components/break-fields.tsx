@@ -58,6 +58,6 @@ export function BreakFields({
 }
 
 /** A length set by other means stays in the list. */
-function withSet(minutes: readonly number[], set: number | null): number[] {
+export function withSet(minutes: readonly number[], set: number | null): number[] {
   return set === null || minutes.includes(set) ? [...minutes] : [...minutes, set].sort((a, b) => a - b);
 }

@@ -10,7 +10,7 @@ import { CheckField, SelectField, TextField } from '../../../components/field.ts
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { call } from '../../../lib/call.ts';
-import { BreakFields } from '../components/break-fields.tsx';
+import { BreakFields, withSet } from '../components/break-fields.tsx';
 import { zoneNames } from '../zones.ts';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { FormFault } from '../../../components/form-fault.tsx';
@@ -132,6 +132,19 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
             />
           ))}
         </fieldset>
+        <SelectField
+          label="Invoices are due"
+          value={value.invoiceDueDays}
+          error={fields['invoiceDueDays']}
+          hint="What was billed keeps its day."
+          onChange={(event) => setValue({ ...value, invoiceDueDays: Number(event.target.value) })}
+        >
+          {withSet([0, 7, 10, 14, 15, 21, 30, 45, 60, 90], value.invoiceDueDays).map((days) => (
+            <option key={days} value={days}>
+              {days === 0 ? 'On the same day' : `After ${days} days`}
+            </option>
+          ))}
+        </SelectField>
         <BreakFields value={value} fields={fields} onChange={(breaks) => setValue({ ...value, ...breaks })} />
         <fieldset>
           <legend className="sec w-full">Mail when a pay week is locked</legend>
