@@ -1,4 +1,5 @@
 import { writeTimeOff } from './away.ts';
+import { writeBilling } from './billing-rows.ts';
 import type { Calendar } from './calendar.ts';
 import { ZONE, calendarOf, instant, minuteOf } from './calendar.ts';
 import { writeComingDays } from './coming-days.ts';
@@ -37,6 +38,7 @@ export function buildDemo(now: Date): Demo {
     ...{ id: 1, name: 'Tern & Tide Mobile Detailing', phone: '555-0100', email: 'desk@ternandtide.example' },
     ...{ zone: ZONE, clock: '12', units: 'us', dayStartsAt: '07:30', dayEndsAt: '18:00' },
     mealReminderMinutes: 300,
+    billsFrom: instant(calendar.rulesFrom, minuteOf('00:00')),
   });
   const people = writePeople(rows, ids, calendar.rulesFrom);
   writeTimeOff(rows, ids, calendar, people);
@@ -58,6 +60,7 @@ export function buildDemo(now: Date): Demo {
   writeWork(book, people);
   writeWalkRounds(book);
   writeCustomerFacts(book, people);
+  writeBilling(book, people);
   rows.jobs.sort((a, b) => a.createdAt.getTime() - b.createdAt.getTime());
   return { calendar, rows, ownerUserId: people.ownerUserId };
 }

@@ -52,6 +52,12 @@ export interface DemoRows {
   walkRounds: Row<models.WalkRound>[];
   walkMarks: Row<models.WalkMark>[];
   walkLooks: Row<models.WalkLook>[];
+  taxRates: Row<models.TaxRateRow>[];
+  invoices: Row<models.Invoice>[];
+  invoiceLines: Row<models.InvoiceLine>[];
+  invoiceTaxes: Row<models.InvoiceTax>[];
+  payments: Row<models.Payment>[];
+  jobsPaid: Row<models.JobPaid>[];
 }
 
 export function noRows(): DemoRows {
@@ -94,6 +100,12 @@ export function noRows(): DemoRows {
     walkRounds: [],
     walkMarks: [],
     walkLooks: [],
+    taxRates: [],
+    invoices: [],
+    invoiceLines: [],
+    invoiceTaxes: [],
+    payments: [],
+    jobsPaid: [],
   };
 }
 

@@ -3,7 +3,8 @@ import * as models from '@driprail/api/db/models/index';
 import type { inTransaction } from '@driprail/api/db/sequelize';
 import type { DemoRows } from './rows.ts';
 
-type Transaction = Parameters<Parameters<typeof inTransaction>[0]>[0];
+/** The transaction that the seeding is in. */
+export type Transaction = Parameters<Parameters<typeof inTransaction>[0]>[0];
 
 /**
  * Visits in the order in which they happened: the crew is on site, walks round the cars, then work begins. The

@@ -1,6 +1,7 @@
 import * as models from '@driprail/api/db/models/index';
 import { inTransaction } from '@driprail/api/db/sequelize';
 import type { DemoRows } from './rows.ts';
+import { storeBilling } from './store-billing.ts';
 import { storeVisits } from './store-visits.ts';
 
 /**
@@ -47,5 +48,6 @@ export function storeRows(rows: DemoRows, passwordHash: string): Promise<void> {
     await models.ServiceChecklist.bulkCreate(rows.serviceChecklists, options);
     await models.WorkEventRow.bulkCreate(rows.workEvents, options);
     await models.JobChange.bulkCreate(rows.jobChanges, options);
+    await storeBilling(rows, transaction);
   });
 }

@@ -7,6 +7,8 @@ const NEEDED = [
   'src/features/run-sheet/components/trouble-sheet.tsx',
   'src/features/run-sheet/components/part-done-sheet.tsx',
   'src/features/run-sheet/components/tip-sheet.tsx',
+  'src/features/billing/index.ts',
+  'src/features/billing/pages/collect.page.tsx',
   'src/features/first-aid/pages/first-aid.page.tsx',
   'src/features/job-work/index.ts',
   'src/features/job-work/pages/work.page.tsx',

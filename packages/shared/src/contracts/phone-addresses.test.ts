@@ -1,4 +1,5 @@
 import { expect, test } from 'vitest';
+import * as billing from './billing.contract.ts';
 import * as clock from './clock.contract.ts';
 import * as hours from './hours.contract.ts';
 import * as jobWork from './job-work.contract.ts';
@@ -12,7 +13,7 @@ import * as walkAddresses from './walk-round-addresses.ts';
 import * as walkRound from './walk-round.contract.ts';
 
 const contracts: Record<string, unknown> = {
-  ...{ ...clock, ...hours, ...jobs, ...jobWork, ...push },
+  ...{ ...billing, ...clock, ...hours, ...jobs, ...jobWork, ...push },
   ...{ ...runSheet, ...session, ...walkRound },
 };
 

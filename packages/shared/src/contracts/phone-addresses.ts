@@ -1,4 +1,5 @@
 import { addressOf } from './address.ts';
+import type * as billing from './billing.contract.ts';
 import type * as clock from './clock.contract.ts';
 import type * as hours from './hours.contract.ts';
 import type * as jobWork from './job-work.contract.ts';
@@ -19,6 +20,9 @@ export const postJobChangeAt = addressOf<typeof jobWork.postJobChange>('post', '
 export const getClockAt = addressOf<typeof clock.getClock>('get', '/api/clock');
 export const postClockActionAt = addressOf<typeof clock.postClockAction>('post', '/api/clock/actions');
 export const recordTipAt = addressOf<typeof jobs.recordTip>('post', '/api/jobs/:id/tips');
+export const getDayBillsAt = addressOf<typeof billing.getDayBills>('get', '/api/run-sheet/:day/bills');
+export const recordPaymentAt = addressOf<typeof billing.recordPayment>('post', '/api/jobs/:id/payments');
+export const openPayLinkAt = addressOf<typeof billing.openPayLink>('post', '/api/jobs/:id/pay-link');
 export const listClockRequestsAt = addressOf<typeof hours.listClockRequests>('get', '/api/clock/requests');
 export const listHoursWordsAt = addressOf<typeof hours.listHoursWords>('get', '/api/clock/weeks/:startsOn');
 export const askClockChangeAt = addressOf<typeof hours.askClockChange>('post', '/api/clock/requests');

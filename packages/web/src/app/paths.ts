@@ -10,6 +10,9 @@ export const paths = {
   runSheet: '/run-sheet',
   runSheetDay: (day: string) => `/run-sheet/${day}`,
   work: (day: string, visitId: string, part = 'steps') => `/run-sheet/${day}/job/${visitId}/${part}`,
+  collect: (day: string, visitId: string) => `/run-sheet/${day}/job/${visitId}/pay`,
+  /** A customer's own page of a job. */
+  customerPage: '/c/:token',
   walkRound: (visitId: string) => `/walk-round/${visitId}`,
   /** The same at the desk, to read. */
   walkRecord: (visitId: string) => `/visits/${visitId}/walk-round`,

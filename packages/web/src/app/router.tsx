@@ -24,6 +24,10 @@ const WalkRoundPage = lazyPage(
 const WalkRecordPage = lazyPage(
   async () => (await import('../features/walk-round/pages/walk-record.page.tsx')).WalkRecordPage,
 );
+const CollectPage = lazyPage(async () => (await import('../features/billing/pages/collect.page.tsx')).CollectPage);
+const CustomerPage = lazyPage(
+  async () => (await import('../features/billing/pages/customer-page.page.tsx')).CustomerPage,
+);
 const ClockPage = lazyPage(async () => (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage);
 const Shell = lazyPage(async () => (await import('./shell/shell.tsx')).Shell);
 const BoardPage = lazyPage(async () => (await import('../features/board/pages/board.page.tsx')).BoardPage);
@@ -75,9 +79,11 @@ export function Router() {
             <Route path={paths.forgotten} element={<ForgottenPage />} />
             <Route path={paths.link} element={<LinkPage />} />
             <Route path={paths.setUp} element={<SetUpPage />} />
+            <Route path={paths.customerPage} element={<CustomerPage />} />
             <Route element={<Gate />}>
               <Route path={paths.runSheet} element={<RunSheetPage />} />
               <Route path={`${paths.runSheet}/:day`} element={<RunSheetPage />} />
+              <Route path={paths.collect(':day', ':visitId')} element={<CollectPage />} />
               <Route path={`${paths.runSheet}/:day/job/:visitId/:part`} element={<WorkPage />} />
               <Route path={paths.walkRound(':visitId')} element={<WalkRoundPage />} />
               <Route path={paths.clock} element={<ClockPage />} />

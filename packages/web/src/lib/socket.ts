@@ -6,9 +6,9 @@ import type { Hint, HintEntity } from '@driprail/shared/realtime/hints';
 
 /** Which cached queries a changed thing touches, by the first part of their key. */
 const touched: Record<HintEntity, string[]> = {
-  visit: ['board', 'run-sheet', 'jobs', 'work', 'walk-round'],
+  visit: ['board', 'run-sheet', 'jobs', 'work', 'walk-round', 'bills'],
   work: ['work'],
-  job: ['board', 'run-sheet', 'jobs', 'customers', 'work'],
+  job: ['board', 'run-sheet', 'jobs', 'customers', 'work', 'bills'],
   crew: ['board', 'run-sheet'],
   customer: ['customers', 'board', 'run-sheet', 'work'],
   person: ['people', 'board'],
@@ -17,6 +17,7 @@ const touched: Record<HintEntity, string[]> = {
   clock: ['clock', 'run-sheet', 'board', 'pay'],
   settings: ['settings', 'session', 'board'],
   pay: ['pay'],
+  bill: ['bills', 'money', 'customers'],
   login: ['logins'],
 };
 

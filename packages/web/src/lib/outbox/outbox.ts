@@ -1,5 +1,6 @@
 import { useEffect, useSyncExternalStore } from 'react';
 import type { QueryClient } from '@tanstack/react-query';
+import type { recordPayment } from '@driprail/shared/contracts/billing.contract';
 import type { postClockAction } from '@driprail/shared/contracts/clock.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
@@ -9,6 +10,7 @@ import {
   postJobChangeAt,
   postVisitActionAt,
   postWorkActionAt,
+  recordPaymentAt,
   recordTipAt,
 } from '@driprail/shared/contracts/phone-addresses';
 import type { postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
@@ -32,6 +34,7 @@ const touched: Record<KeptPress['path'], string[]> = {
   visit: ['run-sheet', 'clock', 'work'],
   clock: ['run-sheet', 'clock'],
   tip: ['run-sheet'],
+  payment: ['bills'],
   work: ['work'],
   change: ['work', 'run-sheet'],
   walk: ['walk-round', 'run-sheet'],
@@ -130,6 +133,9 @@ async function send(kept: KeptPress): Promise<boolean> {
       return false;
     case 'tip':
       await call(recordTipAt, { params, body: body as RequestOf<typeof recordTip>['body'] });
+      return false;
+    case 'payment':
+      await call(recordPaymentAt, { params, body: body as RequestOf<typeof recordPayment>['body'] });
       return false;
     case 'walk':
     case 'walk_addition':

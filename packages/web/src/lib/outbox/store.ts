@@ -8,7 +8,7 @@ export interface KeptPress {
   userId: string;
   /** Order of pressing on this phone. */
   at: number;
-  path: 'visit' | 'clock' | 'tip' | 'work' | 'change' | 'walk' | 'walk_addition' | 'photo';
+  path: 'visit' | 'clock' | 'tip' | 'payment' | 'work' | 'change' | 'walk' | 'walk_addition' | 'photo';
   /** The visit or job it belongs to. */
   targetId: string;
   body: Record<string, unknown>;

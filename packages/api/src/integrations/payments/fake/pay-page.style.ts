@@ -30,7 +30,7 @@ html { background: var(--ground); }
 .top small { font-size: 15px; line-height: 20px; color: var(--ink-2); }
 main { position: relative; flex: 1; padding: 24px 16px 24px 46px; display: flex; }
 .rail, .rail::after { position: absolute; border: solid var(--ink); border-width: var(--rail) 0 0 var(--rail); border-top-left-radius: 28px; }
-.rail { inset: 0 0 0 20px; }
+.rail { inset: 0 0 0 20px; pointer-events: none; }
 .rail::after { content: ''; inset: 4px 0 0 4px; border-top-left-radius: 24px; }
 .hung { flex: 1; display: flex; flex-direction: column; }
 h1 { margin: 4px 0 2px; font-size: 26px; line-height: 32px; font-weight: 400; text-wrap: balance; overflow-wrap: anywhere; }

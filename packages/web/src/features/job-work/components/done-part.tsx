@@ -34,7 +34,7 @@ export function DonePart({ view, at, day }: { view: WorkView; at: AtVisit; day: 
     if (missing.length > 0)
       await work.mutateAsync({ kind: 'go_on', keys: missing.map((one) => one.key), words: reason.trim() });
     await done.mutateAsync();
-    void navigate(paths.runSheetDay(day));
+    void navigate(paths.collect(day, at.visitId));
   };
   return (
     <section aria-label="Done">

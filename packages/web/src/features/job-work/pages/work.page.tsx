@@ -4,7 +4,7 @@ import type { DayWorkDto, VisitWorkDto } from '@driprail/shared/contracts/job-wo
 import { progressNames } from '@driprail/shared/domain/board/progress';
 import { minutesBetween } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
-import { Icon } from '../../../components/icon.tsx';
+import { PhonePageHead } from '../../../components/phone-page-head.tsx';
 import { Empty, Loaded } from '../../../components/states.tsx';
 import { useNow } from '../../../lib/now.ts';
 import { useOutbox } from '../../../lib/outbox/outbox.ts';
@@ -73,23 +73,18 @@ function Work({ data, work, part }: { data: DayWorkDto; work: VisitWorkDto; part
   const at = { visitId: work.visitId, customerName: work.customerName };
   return (
     <>
-      <header className="wk-top">
-        <Link to={paths.runSheetDay(data.day)} aria-label="Back to the run sheet">
-          <Icon name="back" />
-        </Link>
-        <div>
-          <h1 className="t-hang">{work.customerName}</h1>
-          <p>
-            {[...new Set(work.lines.map((line) => line.vehicle).filter(Boolean)), `job ${work.jobNumber}`].join(', ')}
-          </p>
-        </div>
+      <PhonePageHead
+        back={paths.runSheetDay(data.day)}
+        title={work.customerName}
+        below={[...new Set(work.lines.map((line) => line.vehicle).filter(Boolean)), `job ${work.jobNumber}`].join(', ')}
+      >
         {minutes === null ? null : (
           <p className="el">
             {Math.floor(minutes / 60)}:{String(minutes % 60).padStart(2, '0')}
             <small>{progressNames[view.progress].toLowerCase()}</small>
           </p>
         )}
-      </header>
+      </PhonePageHead>
       <OutboxLine isOnline={isOnline} isLive={isLive} />
       <nav aria-label="Parts of this job">
         <ol className="steps wk-parts">

@@ -14,6 +14,7 @@ export function NextCard({
   visit,
   now,
   workPath,
+  collectPath,
   onTrouble,
   onTip,
 }: {
@@ -21,6 +22,8 @@ export function NextCard({
   now: string;
   /** The job's own page: must-knows, steps, a change. */
   workPath: string;
+  /** The bill, and how it is paid. */
+  collectPath: string;
   onTrouble: () => void;
   onTip: () => void;
 }) {
@@ -109,9 +112,14 @@ export function NextCard({
           <Icon name="note" /> Trouble
         </button>
         {visit.progress === 'on_site' || visit.progress === 'working' || visit.progress === 'done' ? (
-          <button type="button" className="btn" onClick={onTip}>
-            <Icon name="tip" /> Tip
-          </button>
+          <>
+            <button type="button" className="btn" onClick={onTip}>
+              <Icon name="tip" /> Tip
+            </button>
+            <Link className="btn" to={collectPath}>
+              <Icon name="pay" /> Get paid
+            </Link>
+          </>
         ) : null}
       </div>
     </article>

@@ -83,6 +83,7 @@ export function RunPanel({
               visit={visit}
               now={now}
               workPath={paths.work(sheet.day, visit.id)}
+              collectPath={paths.collect(sheet.day, visit.id)}
               onTrouble={() => onPanel({ kind: 'trouble', visitId: visit.id })}
               onTip={() => onPanel({ kind: 'tip', visitId: visit.id })}
             />

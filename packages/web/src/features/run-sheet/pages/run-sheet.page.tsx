@@ -111,6 +111,7 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
                         visit={visit}
                         now={now}
                         workPath={paths.work(sheet.day, visit.id)}
+                        collectPath={paths.collect(sheet.day, visit.id)}
                         onTrouble={() => setPanel({ kind: 'trouble', visitId: visit.id })}
                         onTip={() => setPanel({ kind: 'tip', visitId: visit.id })}
                       />
@@ -155,6 +156,9 @@ function RunSheet({ kept }: { kept: RunSheetDto }) {
             >
               Take back “Done”
             </button>
+            <Link className="btn" to={paths.collect(sheet.day, last.id)}>
+              Get paid
+            </Link>
           </div>
         ) : (
           <p className="t-2 py-2">

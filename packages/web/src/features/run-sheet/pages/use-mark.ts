@@ -27,6 +27,7 @@ export function useMark(
   useEffect(() => {
     void keepDays(client, user.id, addDays(today, 1));
     void jobWork().then((work) => work?.keepWork(client, user.id, [today, addDays(today, 1)]));
+    void billing().then((bills) => bills?.keepBills(client, user.id, today));
   }, [client, user.id, today, plans]);
   const visitIds = visits.map((visit) => visit.id).join(' ');
   useEffect(() => {
@@ -44,6 +45,10 @@ export function useMark(
 /** Null when it can't be fetched: then the server judges alone. */
 function jobWork() {
   return import('../../job-work/index.ts').catch(() => null);
+}
+
+function billing() {
+  return import('../../billing/index.ts').catch(() => null);
 }
 
 function walkRound() {

@@ -1,0 +1,1 @@
+export { keepBills } from './api/collect.queries.ts';
