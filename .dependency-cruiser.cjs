@@ -40,7 +40,9 @@ module.exports = {
     no(
       'low-floors-know-no-feature',
       'Plumbing knows no feature.',
-      { path: '^packages/(web/src/(components|lib)|api/src/(db|http|authz|outbox|mail|realtime|jobs|integrations|paper))/' },
+      {
+        path: '^packages/(web/src/(components|lib)|api/src/(db|http|authz|outbox|mail|realtime|jobs|integrations|paper))/',
+      },
       { path: '/src/features/' },
     ),
     no(

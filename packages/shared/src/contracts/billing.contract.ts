@@ -70,6 +70,9 @@ export const openPayLink = endpoint({
   params: z.object({ id }),
   response: z.object({ url: z.url() }),
 });
+const creditedLines = z
+  .array(z.strictObject({ id, netCents: positiveCents.min(1, 'Give the amount to credit.') }))
+  .max(100);
 export const refundPayment = endpoint({
   method: 'post',
   path: '/api/payments/:id/refunds',
@@ -80,8 +83,22 @@ export const refundPayment = endpoint({
     key: z.uuid(),
     kind: z.enum(['refund', 'mistake']),
     /** Net amounts by invoice line; their tax goes back with them. Empty: what was overpaid. */
-    lines: z.array(z.strictObject({ id, netCents: positiveCents.min(1, 'Give the amount to credit.') })).max(100),
+    lines: creditedLines,
     amountCents: positiveCents.min(1, 'Give the amount that goes back.'),
+    reasonId: id.nullable(),
+    note: shortText.min(1, 'Say why.'),
+  }),
+  response: bill,
+});
+export const creditBill = endpoint({
+  method: 'post',
+  path: '/api/jobs/:id/credit-notes',
+  roles: ['owner'],
+  summary: 'Credit lines of an invoice without moving money: it lowers what is owed.',
+  params: z.object({ id }),
+  body: z.strictObject({
+    key: z.uuid(),
+    lines: creditedLines.min(1, 'Choose what to credit.'),
     reasonId: id.nullable(),
     note: shortText.min(1, 'Say why.'),
   }),
@@ -96,6 +113,8 @@ export const listInvoices = endpoint({
     state: z.enum([...billStates, 'unpaid', 'all']).default('unpaid'),
     find: z.string().trim().max(80).default(''),
     limit: z.coerce.number().int().min(1).max(200).default(50),
+    /** Those numbered below it: the next of a long list. */
+    before: z.coerce.number().int().optional(),
   }),
   response: z.object({
     invoices: z.array(

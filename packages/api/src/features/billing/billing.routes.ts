@@ -23,7 +23,7 @@ import { moneyDayCsv } from './money-day-csv.ts';
 import { readMoneyDay } from './money-day.queries.ts';
 import { takeEvent } from './payment-events.service.ts';
 import { recordPayment } from './payments.service.ts';
-import { refundPayment } from './refunds.service.ts';
+import { creditBill, refundPayment } from './refunds.service.ts';
 import * as taxes from './taxes.service.ts';
 
 export interface BillingParts {
@@ -60,6 +60,7 @@ export function billingRoutes(table: RouteTable, parts: BillingParts): void {
   route(table, api.refundPayment, async ({ params, body }, ctx) => ({
     bill: await refundPayment(payments, ctx, params.id, body),
   }));
+  route(table, api.creditBill, async ({ params, body }, ctx) => ({ bill: await creditBill(ctx, params.id, body) }));
   route(table, api.listInvoices, ({ query }, ctx) => findInvoices(query, ctx.now()));
   route(table, getCash, readCash);
   route(table, countCash, async ({ body }, ctx) => {

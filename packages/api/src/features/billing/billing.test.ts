@@ -193,6 +193,25 @@ describe('money back', () => {
     );
   });
 
+  it('lines are credited without money too: that lowers what is owed, with their tax, and pays the bill at last', async () => {
+    const { job } = await aDoneJob(test, company, owner);
+    await owner.post(`/api/jobs/${job.id}/invoice`).expect(200);
+    const { lines } = await billOf(owner, job.id);
+    const credit = (agent: TestAgent, netCents: number, note = 'Goodwill') =>
+      agent
+        .post(`/api/jobs/${job.id}/credit-notes`)
+        .send({ key: key(), lines: [{ id: lines[0]?.id, netCents }], reasonId: null, note });
+    await credit(await company.dispatcher(), 4000).expect(403);
+    await credit(owner, 4000, '').expect(400);
+    expect(faultOf(await credit(owner, 24_001).expect(422)).fields).toHaveProperty('lines');
+    await credit(owner, 4000).expect(200);
+    expect(await billOf(owner, job.id)).toMatchObject({ creditedCents: 4360, owedCents: 26_160 - 4360, refunds: [] });
+    await credit(owner, 20_000).expect(200);
+    expect(await billOf(owner, job.id)).toMatchObject({ creditedCents: 26_160, owedCents: 0, state: 'paid' });
+    expect(await JobPaid.findByPk(job.id)).not.toBeNull();
+    lastNumber += 1;
+  });
+
   it('takes back whole what was recorded by mistake, and never more than was received', async () => {
     const { job } = await aDoneJob(test, company, owner);
     await pay(owner, { amountCents: 10_000, method: 'check' }, job.id).expect(200);
@@ -211,6 +230,15 @@ describe('the list of invoices', () => {
     const unpaid = await owner.get('/api/invoices').expect(200);
     expect((unpaid.body as { total: number; owedCents: number }).owedCents).toBe(4 * 26_160 + 26_160);
     await sefa.get('/api/invoices').expect(403);
+    const page = async (before?: number) =>
+      (await owner.get('/api/invoices').query({ state: 'all', limit: 2, ...(before && { before }) })).body as {
+        total: number;
+        invoices: { number: number }[];
+      };
+    const one = await page();
+    const two = await page(one.invoices[0]?.number);
+    expect([one.total, two.total]).toEqual([lastNumber - 1000 + 1, lastNumber - 1000 + 1]);
+    expect(two.invoices[0]?.number).toBe(one.invoices[1]?.number);
   });
 
   it('Done can’t be taken back once its invoice has gone out', async () => {

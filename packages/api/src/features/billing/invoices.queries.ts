@@ -18,7 +18,7 @@ const among: Record<Ask['state'], string> = {
 };
 
 /** Invoices that stand, newest first, with what is owed on their jobs, and the sums over all that match. */
-export async function findInvoices({ state, find, limit }: Ask, now: Date): Promise<Answer> {
+export async function findInvoices({ state, find, limit, before }: Ask, now: Date): Promise<Answer> {
   const like = `%${find.replace(/[\\%_]/g, '\\$&')}%`;
   const rows = await select<Row>(
     `WITH sums AS (
@@ -34,13 +34,14 @@ export async function findInvoices({ state, find, limit }: Ask, now: Date): Prom
        SELECT sums.*, owed::bigint AS "owedCents", CASE WHEN owed < 0 THEN 'owes_back' WHEN owed = 0 THEN 'paid'
                 WHEN "dueOn" < :today THEN 'overdue' ELSE 'open' END AS state FROM sums
      )
-     SELECT id, number, "jobId", "jobNumber", "customerName", "issuedAt", "dueOn", "totalCents", "owedCents", state,
+     SELECT * FROM (SELECT id, number, "jobId", "jobNumber", "customerName", "issuedAt", "dueOn", "totalCents", "owedCents", state,
             count(*) OVER ()::int AS total, coalesce(sum(owed) FILTER (WHERE owed > 0) OVER (), 0)::bigint AS "allOwedCents",
             coalesce(sum(owed) FILTER (WHERE state = 'overdue') OVER (), 0)::bigint AS "allOverdueCents"
        FROM stated
       WHERE ${among[state]} AND (:find = '' OR "customerName" ILIKE :like OR number::text LIKE :prefix OR "jobNumber"::text LIKE :prefix)
-      ORDER BY number DESC LIMIT :limit`,
-    { today: await todayOf(now), find, like, prefix: like.slice(1), limit },
+) found
+      WHERE :before::int IS NULL OR number < :before::int ORDER BY number DESC LIMIT :limit`,
+    { today: await todayOf(now), find, like, prefix: like.slice(1), limit, before: before ?? null },
   );
   const [first] = rows;
   return {

@@ -1,7 +1,10 @@
 import type { Transaction } from 'sequelize';
 import type { z } from 'zod';
 import type { BillDto } from '@driprail/shared/contracts/bill.dto';
-import type { refundPayment as contract } from '@driprail/shared/contracts/billing.contract';
+import type {
+  creditBill as creditContract,
+  refundPayment as contract,
+} from '@driprail/shared/contracts/billing.contract';
 import { tag } from '@driprail/shared/authz/ability';
 import { centsText } from '@driprail/shared/domain/money/rounding';
 import { authorize } from '../../authz/authorize.ts';
@@ -15,10 +18,12 @@ import type { Payments } from '../../integrations/payments/index.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { readBill } from './bill.presenter.ts';
 import { creditLines } from './credit-notes.service.ts';
+import { noteIfPaid } from './note-paid.ts';
 import { lockJob } from './payments.service.ts';
 import { refundRow } from './refund-rows.ts';
 
 type RefundFields = z.infer<(typeof contract)['body']>;
+type CreditFields = z.infer<(typeof creditContract)['body']>;
 
 /**
  * Gives money of one payment back: with a credit note for what was billed, or what was paid too much. Tips stay with the crew.
@@ -33,8 +38,7 @@ export async function refundPayment(
 ): Promise<BillDto> {
   const found = await Payment.findByPk(paymentId);
   if (!found) throw notFound('That payment');
-  const seen = { id: found.jobId, crewPersonIds: [], day: null, daysFromToday: null };
-  authorize(ctx.ability, 'refund', tag('Bill', seen));
+  authorizeRefund(ctx, found.jobId);
   await takeOnce(ctx, fields.key, { paymentId, ...fields }, async (tx) => {
     const job = await lockJob(tx, found.jobId);
     const by = { userId: ctx.actor.userId, at: ctx.now() };
@@ -55,6 +59,27 @@ export async function refundPayment(
   });
   await settleAskedRefunds(payments);
   return readBill(found.jobId, ctx.now());
+}
+
+/**
+ * Credits lines of an invoice and moves no money: it lowers what is owed, once per key.
+ * @throws 404, 403, 422 at the lines
+ */
+export async function creditBill(ctx: Ctx, jobId: string, fields: CreditFields): Promise<BillDto> {
+  authorizeRefund(ctx, jobId);
+  await takeOnce(ctx, fields.key, { jobId, ...fields }, async (tx) => {
+    const job = await lockJob(tx, jobId);
+    await creditLines(tx, job, fields.lines, { reasonId: fields.reasonId, note: fields.note }, ctx);
+    // Where nothing is owed any more it counts as paid.
+    await noteIfPaid(tx, job, { userId: ctx.actor.userId, at: ctx.now() });
+    hintAfterCommit(tx, ['everyone'], 'bill', job.id);
+    return { answer: { ok: true } };
+  });
+  return readBill(jobId, ctx.now());
+}
+
+function authorizeRefund(ctx: Ctx, jobId: string): void {
+  authorize(ctx.ability, 'refund', tag('Bill', { id: jobId, crewPersonIds: [], day: null, daysFromToday: null }));
 }
 
 /** A payment that never was is taken back whole; money that was counted or came by card was there. */
