@@ -7,9 +7,11 @@ import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
 import { issueDueInvoices, lookUpOpenPages, settleAskedRefunds } from './features/billing/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
+import { removeErasedFiles } from './features/walk-round/index.ts';
 import { startFakePayments } from './integrations/payments/fake/fake-payments.ts';
 import { paymentsFor } from './integrations/payments/index.ts';
 import { pushKeys } from './integrations/push/index.ts';
+import { storeFor } from './integrations/storage/index.ts';
 import { listenHost, originOf } from './http/listen-host.ts';
 import { every } from './jobs/every.ts';
 import { createLogger } from './log.ts';
@@ -69,6 +71,12 @@ async function main(): Promise<void> {
     (error) => log.warn({ err: error }, 'billing'),
   );
 
+  const files = every(
+    3600,
+    () => removeErasedFiles(storeFor(config)),
+    (error) => log.warn({ err: error }, 'files of erased customers'),
+  );
+
   await listen(app.server, config.port, listenHost(config.host));
   const address = app.server.address();
   port = typeof address === 'object' && address ? address.port : config.port;
@@ -81,7 +89,7 @@ async function main(): Promise<void> {
   const stop = (): void => {
     if (isStopping) return;
     isStopping = true;
-    void Promise.all([outbox.stop(), billing.stop()])
+    void Promise.all([outbox.stop(), billing.stop(), files.stop()])
       .then(() => app.close())
       .then(() => localPayments?.stop())
       .then(() => disconnect())

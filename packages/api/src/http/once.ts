@@ -53,3 +53,21 @@ export async function takeOnce<T extends object>(
   }
   return { answer: record.answer as T, isRepeat };
 }
+
+/** Rewrites the kept answers that name any of these ids, so that what was erased is not handed out again. */
+export async function rewriteAnswers(
+  tx: Transaction,
+  ids: readonly string[],
+  rewrite: (answer: object) => object,
+): Promise<void> {
+  if (ids.length === 0) return;
+  const rows = await select<{ userId: string; key: string }>(
+    `SELECT user_id AS "userId", key FROM actions WHERE answer::text ~ :any`,
+    { any: ids.join('|') },
+    tx,
+  );
+  for (const where of rows) {
+    const record = await ActionRecord.findOne({ where, transaction: tx, rejectOnEmpty: true });
+    await record.update({ answer: rewrite(record.answer) }, { transaction: tx });
+  }
+}

@@ -8,6 +8,11 @@ export interface Mail {
   body: string;
 }
 
+/** What was or would be sent there goes, with its words. */
+export async function dropMailsTo(tx: Transaction, recipient: string): Promise<void> {
+  await OutboxMail.destroy({ where: { recipient }, transaction: tx });
+}
+
 /** A promise to send: a row in the change's own transaction, sent by the outbox's job with retries. */
 export async function queueMail(tx: Transaction, now: Date, mail: Mail): Promise<void> {
   await OutboxMail.create(

@@ -82,6 +82,15 @@ describe('cash and bills', () => {
   });
 });
 
+test('only an owner erases a customer', () => {
+  for (const [actor, isAllowed] of [
+    [owner, true],
+    [dispatcher, false],
+    [technician, false],
+  ] as const)
+    expect(abilityFor(actor).can('erase', tag('Customer', { id: 'c' }))).toBe(isAllowed);
+});
+
 describe('a technician', () => {
   const ability = abilityFor(technician);
   test('reads and marks visits of the own crew on near days only', () => {

@@ -31,6 +31,7 @@ const rulesByRole: Record<Role, (actor: Actor, allow: Allow) => void> = {
     allow(['read', 'create', 'update'], 'Login');
     allow('read', 'LocalMail');
     allow('read', 'AuditEntry');
+    allow('erase', 'Customer');
   },
   dispatcher(actor, allow) {
     for (const name of planned) allow(['read', 'create', 'update', 'remove', 'plan', 'mark', 'tip'], name);

@@ -27,4 +27,4 @@ export interface SubjectFields {
   AuditEntry: { id: number };
 }
 export type SubjectName = keyof SubjectFields;
-export type Action = 'read' | 'create' | 'update' | 'remove' | 'plan' | 'mark' | 'tip' | 'collect' | 'refund';
+export type Action = 'read' | 'create' | 'update' | 'remove' | 'plan' | 'mark' | 'tip' | 'collect' | 'refund' | 'erase';

@@ -16,6 +16,7 @@ import { payIndexes } from './2026-12-01-014-pay-indexes.ts';
 import { phone } from './2026-12-01-015-phone.ts';
 import { breakReminders } from './2026-12-01-016-break-reminders.ts';
 import { customers } from './2026-12-01-018-customers.ts';
+import { erasedBills } from './2026-12-01-018-erased-bills.ts';
 import { billing } from './2026-12-01-017-billing.ts';
 
 /** In the order in which they are run. */
@@ -38,4 +39,5 @@ export const migrations: Migration[] = [
   breakReminders,
   customers,
   billing,
+  erasedBills,
 ];

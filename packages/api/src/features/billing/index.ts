@@ -1,6 +1,7 @@
 export { billingRoutes } from './billing.routes.ts';
 export type { BillingParts } from './billing.routes.ts';
 export { CustomerLinks } from './customer-links.ts';
+export { eraseFromBills } from './erase-customer.service.ts';
 export { issueDueInvoices } from './issue-invoice.service.ts';
 export { lookUpOpenPages } from './payment-events.service.ts';
 export { settleAskedRefunds } from './refunds.service.ts';

@@ -12,6 +12,7 @@ import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { wakeAfterCommit } from '../../realtime/wake.ts';
 import { createVisit, lockVisit, setVisitLines } from '../board/index.ts';
+import { refuseGoneCustomer } from './job-customer.service.ts';
 import type { LineFields, PricedLine } from './job-lines.ts';
 import { keepLines, priceLines } from './job-lines.ts';
 import { readJob } from './jobs.queries.ts';
@@ -34,6 +35,7 @@ export function createJob(ctx: Ctx, fields: JobFields, id = uuid()): Promise<Job
 
 /** The same inside a caller's transaction. */
 export async function orderJob(tx: Transaction, ctx: Ctx, fields: JobFields, id = uuid()): Promise<JobDto> {
+  await refuseGoneCustomer(tx, fields.customerId);
   const { zone } = await companyOf(tx);
   const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), zone));
   const { lines: _asked, windowFrom, windowTo, ...columns } = fields;

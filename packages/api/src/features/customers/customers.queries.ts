@@ -2,6 +2,7 @@ import type { Transaction } from 'sequelize';
 import type { CustomerDto, ListedCustomer } from '@driprail/shared/contracts/customers.contract';
 import { folded, phoneDigits, tight } from '@driprail/shared/domain/customer/fold';
 import { select } from '../../db/sequelize.ts';
+import { addressJson, vehicleJson } from './part-json.sql.ts';
 
 const columns = `c.id, c.name, c.is_company AS "isCompany", c.phone, c.email, c.notes, c.version, c.tags,
   c.is_scent_free AS "isScentFree", c.rings_first AS "ringsFirst", c.must_know AS "mustKnow",
@@ -9,16 +10,8 @@ const columns = `c.id, c.name, c.is_company AS "isCompany", c.phone, c.email, c.
   coalesce((SELECT json_agg(json_build_object('channel', o.channel, 'isGiven', o.is_given, 'on', o.given_on, 'how', o.how) ORDER BY o.channel)
       FROM (SELECT DISTINCT ON (channel) * FROM customer_consents WHERE customer_id = c.id
              ORDER BY channel, recorded_at DESC, id DESC) o), '[]') AS consents,
-  coalesce((SELECT json_agg(json_build_object('id', a.id, 'label', a.label, 'line', a.line, 'city', a.city, 'postcode', a.postcode,
-      'area', a.area, 'lat', a.lat, 'lng', a.lng, 'gateCode', a.gate_code, 'accessNotes', a.access_notes, 'hasWater', a.has_water,
-      'hasPower', a.has_power, 'hasDog', a.has_dog, 'shutsGate', a.shuts_gate, 'takesKey', a.takes_key, 'keyGoesBack', a.key_goes_back,
-      'drain', a.drain, 'washWater', a.wash_water, 'permitNumber', a.permit_number, 'permitUntil', a.permit_until,
-      'ownerConsentBy', a.owner_consent_by, 'ownerConsentOn', a.owner_consent_on, 'mustKnow', a.must_know)
-      ORDER BY a.position, a.id) FROM addresses a WHERE a.customer_id = c.id AND a.is_active), '[]') AS addresses,
-  coalesce((SELECT json_agg(json_build_object('id', v.id, 'label', v.label, 'year', v.year, 'make', v.make, 'model', v.model,
-      'color', v.color, 'plate', v.plate, 'vin', v.vin, 'sizeClass', v.size_class, 'wheelFinish', v.wheel_finish, 'paint', v.paint,
-      'interior', v.interior, 'notes', v.notes, 'isCoated', v.is_coated, 'mustKnow', v.must_know) ORDER BY v.position, v.id)
-      FROM vehicles v WHERE v.customer_id = c.id AND v.is_active), '[]') AS vehicles`;
+  coalesce((SELECT json_agg(${addressJson} ORDER BY a.position, a.id) FROM addresses a WHERE a.customer_id = c.id AND a.is_active), '[]') AS addresses,
+  coalesce((SELECT json_agg(${vehicleJson} ORDER BY v.position, v.id) FROM vehicles v WHERE v.customer_id = c.id AND v.is_active), '[]') AS vehicles`;
 
 /** What is next, else what waits, else what was last. */
 const standing = `(SELECT json_build_object('at', to_json(lower(v.planned)) #>> '{}', 'progress', v.progress)

@@ -1,18 +1,27 @@
 import * as api from '@driprail/shared/contracts/customers.contract';
+import * as data from '@driprail/shared/contracts/customers-data.contract';
 import * as merge from '@driprail/shared/contracts/customers-merge.contract';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
 import type { Geocoder } from '../../integrations/maps/index.ts';
+import type { FileStore } from '../../integrations/storage/index.ts';
 import { findCustomer, findCustomers, leadingTo, vehicleWords } from './customers.queries.ts';
 import { createCustomer, updateCustomer } from './customers.service.ts';
+import { readCustomerData } from './data.queries.ts';
 import { findDuplicates } from './duplicates.queries.ts';
+import { eraseCustomer, previewErasure } from './erasure.service.ts';
 import { customerSince, historyOf } from './history.queries.ts';
 import { keepApart } from './keep-apart.service.ts';
 import { mergeCustomers, previewOf } from './merge.service.ts';
 import { placeOf } from './places.queries.ts';
 
-export function customersRoutes(table: RouteTable, { geocoder }: { geocoder: Geocoder | null }): void {
+interface CustomerParts {
+  geocoder: Geocoder | null;
+  store: FileStore;
+}
+
+export function customersRoutes(table: RouteTable, { geocoder, store }: CustomerParts): void {
   route(table, api.listCustomers, ({ query }) => findCustomers(query));
   route(table, api.getVehicleWords, () => vehicleWords());
   route(table, api.findPlace, ({ body }) => placeOf(geocoder, body));
@@ -35,4 +44,15 @@ export function customersRoutes(table: RouteTable, { geocoder }: { geocoder: Geo
   });
   route(table, merge.previewMerge, ({ params }) => previewOf(params.id, params.goesId));
   route(table, merge.mergeCustomers, ({ params, body }, ctx) => mergeCustomers(ctx, params.id, body));
+  route(table, data.getCustomerData, async ({ params }, ctx, { res }) => {
+    const copy = await readCustomerData(ctx, params.id);
+    res.setHeader('content-disposition', 'attachment; filename="customer-data.json"');
+    res.setHeader('cache-control', 'private, no-store');
+    return copy;
+  });
+  route(table, data.previewErasure, ({ params }, ctx) => previewErasure(ctx, params.id));
+  route(table, data.eraseCustomer, async ({ params, body }, ctx) => {
+    await eraseCustomer(ctx, store, params.id, body);
+    return okay;
+  });
 }
