@@ -19,6 +19,7 @@ export const paths = {
   clock: '/clock',
   customers: '/customers',
   customer: (id: string) => `/customers/${id}`,
+  customerData: (id: string) => `/customers/${id}/data`,
   services: '/service-menu',
   vans: '/vans',
   people: '/people',

@@ -34,6 +34,9 @@ const BoardPage = lazyPage(async () => (await import('../features/board/pages/bo
 const CustomersPage = lazyPage(
   async () => (await import('../features/customers/pages/customers.page.tsx')).CustomersPage,
 );
+const CustomerDataPage = lazyPage(
+  async () => (await import('../features/customers/pages/customer-data.page.tsx')).CustomerDataPage,
+);
 const ServiceMenuPage = lazyPage(
   async () => (await import('../features/service-menu/pages/service-menu.page.tsx')).ServiceMenuPage,
 );
@@ -94,6 +97,7 @@ export function Router() {
                 <Route path={`${paths.board}/:day`} element={<BoardPage />} />
                 <Route path={paths.customers} element={<CustomersPage />} />
                 <Route path={`${paths.customers}/:id`} element={<CustomersPage />} />
+                <Route path={paths.customerData(':id')} element={<CustomerDataPage />} />
                 <Route path={paths.services} element={<ServiceMenuPage />} />
                 <Route path={paths.vans} element={<VansPage />} />
                 <Route path={paths.people} element={<PeoplePage />} />

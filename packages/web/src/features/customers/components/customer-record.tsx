@@ -1,5 +1,6 @@
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
+import { tag } from '@driprail/shared/authz/ability';
 import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
 import { formatDate } from '@driprail/shared/domain/time/format';
 import { dayOf } from '@driprail/shared/domain/time/zone';
@@ -8,6 +9,7 @@ import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { money, useFormats } from '../../../lib/format.ts';
+import { useAbility } from '../../../lib/session.tsx';
 import { customerQuery } from '../api/customers.queries.ts';
 import { RecordAddresses } from './record-addresses.tsx';
 import { RecordHistory } from './record-history.tsx';
@@ -18,11 +20,13 @@ interface RecordProps {
   id: string;
   onEdit: (customer: CustomerDto) => void;
   onMerge: (customer: CustomerDto) => void;
+  onErase: (customer: CustomerDto) => void;
 }
 
 /** One customer's whole record, hung beside the list. */
-export function CustomerRecord({ id, onEdit, onMerge }: RecordProps) {
+export function CustomerRecord({ id, onEdit, onMerge, onErase }: RecordProps) {
   const { zone } = useFormats();
+  const ability = useAbility();
   const one = useQuery(customerQuery(id));
   return (
     <article className="hung cu" aria-label="Customer">
@@ -96,6 +100,12 @@ export function CustomerRecord({ id, onEdit, onMerge }: RecordProps) {
                   <button type="button" className="link" onClick={() => onMerge(customer)}>
                     Merge with another record
                   </button>
+                  <Link to={paths.customerData(customer.id)}>Copy of the data</Link>
+                  {ability.can('erase', tag('Customer', { id: customer.id })) ? (
+                    <button type="button" className="link" onClick={() => onErase(customer)}>
+                      Erase the customer
+                    </button>
+                  ) : null}
                 </p>
               )}
             </div>

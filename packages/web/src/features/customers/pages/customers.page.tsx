@@ -12,6 +12,7 @@ import { CustomerForm } from '../components/customer-form.tsx';
 import { CustomerList } from '../components/customer-list.tsx';
 import { CustomerRecord } from '../components/customer-record.tsx';
 import { DuplicatesSheet } from '../components/duplicates-sheet.tsx';
+import { EraseSheet } from '../components/erase-sheet.tsx';
 import { MergeSheet } from '../components/merge-sheet.tsx';
 import { OtherRecordSheet } from '../components/other-record-sheet.tsx';
 import './customers.css';
@@ -21,7 +22,8 @@ type Open =
   | { kind: 'form'; customer: CustomerDto | null; name: string }
   | { kind: 'duplicates' }
   | { kind: 'other'; customer: CustomerDto }
-  | { kind: 'merge'; ids: [string, string] };
+  | { kind: 'merge'; ids: [string, string] }
+  | { kind: 'erase'; id: string };
 
 /** Households and fleets: a list found by any part of what is known, and one whole record beside it. */
 export function CustomersPage() {
@@ -59,6 +61,7 @@ export function CustomersPage() {
               key={id}
               id={id}
               onEdit={(customer) => setOpen({ kind: 'form', customer, name: customer.name })}
+              onErase={(customer) => setOpen({ kind: 'erase', id: customer.id })}
               onMerge={(customer) => setOpen({ kind: 'other', customer })}
             />
           ) : (
@@ -86,6 +89,7 @@ export function CustomersPage() {
           onClose={close}
         />
       ) : null}
+      {open?.kind === 'erase' ? <EraseSheet id={open.id} onErased={() => show(open.id)} onClose={close} /> : null}
       {open?.kind === 'merge' ? <MergeSheet ids={open.ids} onMerged={show} onClose={close} /> : null}
     </>
   );
