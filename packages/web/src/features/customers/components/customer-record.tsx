@@ -1,5 +1,7 @@
+import { useAbility } from '@casl/react';
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
+import type { AppAbility } from '@driprail/shared/authz/ability';
 import { tag } from '@driprail/shared/authz/ability';
 import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
 import { formatDate } from '@driprail/shared/domain/time/format';
@@ -9,7 +11,6 @@ import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { money, useFormats } from '../../../lib/format.ts';
-import { useAbility } from '../../../lib/session.tsx';
 import { customerQuery } from '../api/customers.queries.ts';
 import { RecordAddresses } from './record-addresses.tsx';
 import { RecordHistory } from './record-history.tsx';
@@ -26,7 +27,7 @@ interface RecordProps {
 /** One customer's whole record, hung beside the list. */
 export function CustomerRecord({ id, onEdit, onMerge, onErase }: RecordProps) {
   const { zone } = useFormats();
-  const ability = useAbility();
+  const ability = useAbility<AppAbility>();
   const one = useQuery(customerQuery(id));
   return (
     <article className="hung cu" aria-label="Customer">
