@@ -76,7 +76,8 @@ test('a customer comes in through the job form, and the job is booked', async ()
   const form = dialog('New job');
   await fill(form, { Customer: 'Orla Finch' });
   await form.getByRole('button', { name: 'New customer “Orla Finch”' }).click();
-  await fill(form, { Phone: '555-0148', 'Street and number': '3 Kiln Yard', Town: 'Ternmouth', Vehicle: '2020 sedan' });
+  await fill(form, { Phone: '555-0148', 'Street and number': '3 Kiln Yard', Town: 'Ternmouth' });
+  await fill(form, { Year: '2020', Model: 'sedan' });
   await form.getByRole('button', { name: 'Add customer' }).click();
   await form.getByRole('button', { name: 'Add a service' }).click();
   await form.getByLabel('Service', { exact: true }).selectOption({ label: 'Hand wash' });

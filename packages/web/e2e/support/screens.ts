@@ -120,6 +120,8 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
   { name: 'customers', role, path: '/customers' },
   { name: 'customer', role, path: customerPath },
   { name: 'customer-edit', role, path: customerPath, open: press('Edit') },
+  { name: 'customer-duplicates', role, path: '/customers', open: press(/^Likely duplicates/) },
+  { name: 'customer-data', role, path: async (context) => `${await customerPath(context)}/data` },
   { name: 'service-menu', role, path: '/service-menu' },
   { name: 'vans', role, path: '/vans' },
   { name: 'people', role, path: '/people' },

@@ -13,7 +13,8 @@ export const customerDataFile = (id: string) => getCustomerData.path.replace(':i
 
 export const erasureQuery = (id: string) =>
   queryOptions({
-    queryKey: ['customers', id, 'erasure'],
+    // Apart from the record: once it is erased there is nothing to look at any more.
+    queryKey: ['customer-erasure', id],
     queryFn: ({ signal }) => call(previewErasure, { params: { id } }, signal),
     // What is agreed to is what the server has just counted.
     staleTime: 0,
@@ -22,6 +23,7 @@ export const erasureQuery = (id: string) =>
 export function useErase(id: string) {
   return useMutation({
     mutationFn: (body: { version: number; name: string }) => call(eraseCustomer, { params: { id }, body }),
+    onError: (_error, _body, _saved, { client }) => client.invalidateQueries({ queryKey: ['customer-erasure', id] }),
     onSuccess: (_data, _body, _saved, { client }) => {
       client.removeQueries({ queryKey: ['customers', id] });
       return Promise.all(['customers', 'board', 'jobs'].map((key) => client.invalidateQueries({ queryKey: [key] })));

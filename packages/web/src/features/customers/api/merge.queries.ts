@@ -16,7 +16,8 @@ export const duplicatesQuery = queryOptions({
 
 export const mergeQuery = (staysId: string, goesId: string) =>
   queryOptions({
-    queryKey: ['customers', 'merge', staysId, goesId],
+    // Apart from the records: once they are merged there is nothing to look at any more.
+    queryKey: ['customer-merge', staysId, goesId],
     queryFn: ({ signal }) => call(previewMerge, { params: { id: staysId, goesId } }, signal),
     // What is agreed to is what the server has just counted.
     staleTime: 0,
@@ -43,6 +44,7 @@ export function useMerge() {
         params: { id: stays.id },
         body: { goesId: goes.id, version: stays.version, goesVersion: goes.version },
       }),
+    onError: (_error, _vars, _saved, { client }) => client.invalidateQueries({ queryKey: ['customer-merge'] }),
     onSuccess: (_data, _vars, _saved, { client }) =>
       Promise.all(['customers', 'board', 'jobs'].map((key) => client.invalidateQueries({ queryKey: [key] }))),
   });

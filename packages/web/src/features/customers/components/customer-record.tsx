@@ -84,14 +84,18 @@ export function CustomerRecord({ id, onEdit, onMerge, onErase }: RecordProps) {
               )}
             </header>
             <div>
-              <section>
-                <h3 className="sec">Addresses</h3>
-                <RecordAddresses addresses={customer.addresses} />
-              </section>
-              <section>
-                <h3 className="sec">Vehicles</h3>
-                <RecordVehicles vehicles={customer.vehicles} />
-              </section>
+              {erasedAt ? null : (
+                <>
+                  <section>
+                    <h3 className="sec">Addresses</h3>
+                    <RecordAddresses addresses={customer.addresses} />
+                  </section>
+                  <section>
+                    <h3 className="sec">Vehicles</h3>
+                    <RecordVehicles vehicles={customer.vehicles} />
+                  </section>
+                </>
+              )}
               <RecordHistory history={history} />
             </div>
             <div>

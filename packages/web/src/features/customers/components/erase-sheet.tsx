@@ -60,7 +60,9 @@ function WhatGoes({ shown: { name, nameAfter, goes, stays } }: { shown: ErasureP
           Street, map place, gate code, access notes and permit of {counted(goes.addresses, 'address', 'addresses')}
         </li>
         <li>Plate, VIN and notes of {counted(goes.vehicles, 'vehicle', 'vehicles')}</li>
-        <li>{counted(goes.photos, 'photo', 'photos')}, and the initials on walk-rounds</li>
+        <li>
+          {goes.photos > 0 ? `${counted(goes.photos, 'photo', 'photos')} and the` : 'The'} initials on walk-rounds
+        </li>
         <li>Mail kept for sending, notes on jobs, and links to bills</li>
       </ul>
       <h3 className="sec mt-3">What stays, without the name</h3>
