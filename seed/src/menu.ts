@@ -134,6 +134,17 @@ interface Needs {
   equipment?: readonly Equipment[];
 }
 
+/** What some ask of the weather and what comes after; 50 and 90 °F. Invented house rules, the label of a product comes first. */
+const facts: Partial<Record<ServiceName, Partial<DemoRows['services'][number]>>> = {
+  'Maintenance wash': { intervalDays: 28 },
+  'Wash and wax': { coldestTenths: 44, intervalDays: 90 },
+  'Two-step polish': { needsDry: true, depositPercent: 20 },
+  'Ceramic coating, one layer': {
+    ...{ needsDry: true, coldestTenths: 100, hottestTenths: 322, cureHours: 12, intervalDays: 365, depositPercent: 25 },
+  },
+  'Full interior': { intervalDays: 180 },
+};
+
 /** Writes the service menu and gives it back by name. */
 export function writeMenu(rows: DemoRows, ids: () => string, startsOn: string): Menu {
   const menu = new Map<ServiceName, MenuEntry>();
@@ -144,6 +155,7 @@ export function writeMenu(rows: DemoRows, ids: () => string, startsOn: string): 
     rows.services.push({
       ...{ id, name, kind, description, position, photoSet: usualPhotoSet(kind) },
       ...{ skills: [...skills], equipment: [...equipment] },
+      ...facts[name],
     });
     const prices: MenuEntry['prices'] = {};
     for (const [index, sizeClass] of sizeClasses.entries()) {

@@ -1,6 +1,7 @@
 import { foldWork } from '@driprail/shared/domain/job-work/fold-work';
 import type { WorkKind } from '@driprail/shared/domain/job-work/fold-work';
 import { judgeChange } from '@driprail/shared/domain/job-work/judge-change';
+import { usualSurcharges } from '@driprail/shared/domain/menu/condition-surcharge';
 import type { ChangeLine, Offer } from '@driprail/shared/domain/job-work/judge-change';
 import { planWork, upToHere } from '@driprail/shared/domain/job-work/work-plan';
 import type { WorkLine } from '@driprail/shared/domain/job-work/work-plan';
@@ -140,6 +141,7 @@ function askForChange(book: Book, visit: VisitRow, by: DemoPerson): void {
     {
       ...{ zone: ZONE, clock: '12', startedAt: instant(calendar.today, minuteOf('09:16')).toISOString() },
       ...{ plannedFrom: null, crewSize: 1, crewSkills: [...by.skills], lines, offers, next: null },
+      surcharges: usualSurcharges,
     },
     { kind: 'add', serviceId: lamps.serviceId, vehicleId: line.vehicleId, sizeClass: line.sizeClass },
     when.toISOString(),
@@ -158,7 +160,7 @@ function askForChange(book: Book, visit: VisitRow, by: DemoPerson): void {
 
 function offersOf({ menu, rows }: Book): Offer[] {
   return [...menu.values()].map(({ id, name, skills, prices }) => ({
-    ...{ serviceId: id, name, skills: [...skills] },
+    ...{ serviceId: id, name, skills: [...skills], weather: '' },
     kind: rows.services.find((one) => one.id === id)?.kind ?? 'single',
     prices: Object.entries(prices).map(([sizeClass, price]) => ({
       sizeClass: sizeClass as Offer['prices'][number]['sizeClass'],

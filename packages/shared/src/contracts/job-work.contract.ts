@@ -2,7 +2,7 @@ import { z } from 'zod';
 import { checkStepDto } from './checklist.contract.ts';
 import { endpoint } from './endpoint.ts';
 import { day, id, instant, positiveCents, shortText, sizeClass } from './fields.ts';
-import { serviceKinds } from './services.contract.ts';
+import { serviceKinds, surchargesDto } from './services.contract.ts';
 import { visitLineDto } from './visit.dto.ts';
 import { desk, everyone } from '../authz/actor.ts';
 import { progressStates } from '../domain/board/progress.ts';
@@ -96,9 +96,15 @@ export const offerDto = z.object({
   name: z.string(),
   kind: z.enum(serviceKinds),
   skills: z.array(z.string()),
+  weather: z.string(),
   prices: z.array(z.object({ sizeClass, priceCents: z.int(), minutes: z.int() })),
 });
-export const dayWorkDto = z.object({ day, works: z.array(visitWorkDto), offers: z.array(offerDto) });
+export const dayWorkDto = z.object({
+  day,
+  works: z.array(visitWorkDto),
+  offers: z.array(offerDto),
+  surcharges: surchargesDto,
+});
 export type DayWorkDto = z.infer<typeof dayWorkDto>;
 
 export const getDayWork = endpoint({

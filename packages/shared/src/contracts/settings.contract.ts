@@ -25,6 +25,8 @@ export const settingsDto = z.object({
   mealReminderMinutes: z.int().min(60).max(720).nullable().default(null),
   restReminderMinutes: z.int().min(30).max(720).nullable().default(null),
   /** Days from an invoice's own to the day it is due. */
+  /** The largest discount that a dispatcher gives without the owner, percent of the job. */
+  deskDiscountPercent: z.int('Give a whole percent.').min(0).max(100, 'At most 100 percent.').default(100),
   invoiceDueDays: z
     .int('Give whole days.')
     .min(0, 'An invoice can’t be due before it is sent.')

@@ -70,6 +70,9 @@ export const visitDto = z.object({
   lines: z.array(visitLineDto),
   skills: z.array(z.string()),
   equipment: z.array(z.string()),
+  /** What the open lines ask of the place. */
+  needsWater: z.boolean(),
+  needsPower: z.boolean(),
   crew: z.array(visitCrewDto),
   walkRound: visitWalkDto,
   /** Reasons given for warnings, by the key of the facts. */

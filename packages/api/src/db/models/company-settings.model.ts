@@ -18,6 +18,7 @@ export class CompanySettings extends Model<InferAttributes<CompanySettings>, Inf
   declare mealReminderMinutes: CreationOptional<number | null>;
   declare restReminderMinutes: CreationOptional<number | null>;
   declare invoiceDueDays: CreationOptional<number>;
+  declare deskDiscountPercent: CreationOptional<number>;
   declare billsFrom: CreationOptional<Date>;
   declare version: CreationOptional<number>;
   declare updatedAt: CreationOptional<Date>;
@@ -42,6 +43,7 @@ export function initCompanySettings(sequelize: Sequelize): void {
       mealReminderMinutes: { type: DataTypes.INTEGER },
       restReminderMinutes: { type: DataTypes.INTEGER },
       invoiceDueDays: { type: DataTypes.INTEGER },
+      deskDiscountPercent: { type: DataTypes.INTEGER },
       billsFrom: { type: DataTypes.DATE },
       version: { type: DataTypes.INTEGER },
       updatedAt: { type: DataTypes.DATE },

@@ -70,6 +70,8 @@ import { initCashCount } from './cash-count.model.ts';
 import { initCashCountPayment } from './cash-count-payment.model.ts';
 import { initCustomerLink } from './customer-link.model.ts';
 import { initFeedback } from './feedback.model.ts';
+import { initServiceInclude } from './service-include.model.ts';
+import { initConditionSurcharge } from './condition-surcharge.model.ts';
 
 /** Gives every model its connection. Reads across tables are SQL, so no associations are declared. */
 export function initModels(sequelize: Sequelize): void {
@@ -144,6 +146,8 @@ export function initModels(sequelize: Sequelize): void {
   initCashCountPayment(sequelize);
   initCustomerLink(sequelize);
   initFeedback(sequelize);
+  initServiceInclude(sequelize);
+  initConditionSurcharge(sequelize);
 }
 
 export { CompanySettings } from './company-settings.model.ts';
@@ -217,3 +221,5 @@ export { CashCount } from './cash-count.model.ts';
 export { CashCountPayment } from './cash-count-payment.model.ts';
 export { CustomerLink } from './customer-link.model.ts';
 export { Feedback } from './feedback.model.ts';
+export { ServiceInclude } from './service-include.model.ts';
+export { ConditionSurcharge } from './condition-surcharge.model.ts';

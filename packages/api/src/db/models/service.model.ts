@@ -12,6 +12,15 @@ export class Service extends Model<InferAttributes<Service>, InferCreationAttrib
   declare equipment: CreationOptional<string[]>;
   declare photoSet: CreationOptional<PhotoSet>;
   declare taxClass: CreationOptional<TaxClass>;
+  declare needsWater: CreationOptional<boolean>;
+  declare needsPower: CreationOptional<boolean>;
+  declare needsDry: CreationOptional<boolean>;
+  declare needsDaylight: CreationOptional<boolean>;
+  declare coldestTenths: CreationOptional<number | null>;
+  declare hottestTenths: CreationOptional<number | null>;
+  declare cureHours: CreationOptional<number>;
+  declare intervalDays: CreationOptional<number | null>;
+  declare depositPercent: CreationOptional<number>;
   declare isActive: CreationOptional<boolean>;
   declare position: CreationOptional<number>;
   declare version: CreationOptional<number>;
@@ -28,6 +37,15 @@ export function initService(sequelize: Sequelize): void {
       equipment: { type: DataTypes.ARRAY(DataTypes.TEXT) },
       photoSet: { type: DataTypes.TEXT },
       taxClass: { type: DataTypes.TEXT },
+      needsWater: { type: DataTypes.BOOLEAN },
+      needsPower: { type: DataTypes.BOOLEAN },
+      needsDry: { type: DataTypes.BOOLEAN },
+      needsDaylight: { type: DataTypes.BOOLEAN },
+      coldestTenths: { type: DataTypes.INTEGER },
+      hottestTenths: { type: DataTypes.INTEGER },
+      cureHours: { type: DataTypes.INTEGER },
+      intervalDays: { type: DataTypes.INTEGER },
+      depositPercent: { type: DataTypes.INTEGER },
       isActive: { type: DataTypes.BOOLEAN },
       position: { type: DataTypes.INTEGER },
       version: { type: DataTypes.INTEGER },

@@ -12,6 +12,7 @@ export const visitJson = `json_build_object(
   'hasGateCode', a.gate_code <> '', 'hasWater', a.has_water, 'hasPower', a.has_power,
   'windowFrom', ${iso('j.window_from')}, 'windowTo', ${iso('j.window_to')}, 'notes', j.notes,
   'lines', lines.list, 'skills', needs.skills, 'equipment', needs.equipment,
+  'needsWater', needs.water, 'needsPower', needs.power,
   'crew', coalesce(worked.list, riding.list, '[]'::json), 'accepted', v.accepted,
   'walkRound', json_build_object('photoSet', (ARRAY['none', 'quick', 'full'])[walk.rank], 'cars', walk.cars, 'made', walk.made, 'due', walk.due,
     'isSecondLookDue', walk.is_second_look_due, 'startReason', walk.start_reason)
@@ -28,9 +29,10 @@ export const visitFrom = `visits v
      WHERE vl.visit_id = v.id) lines
   CROSS JOIN LATERAL (
     SELECT coalesce(json_agg(DISTINCT need.name) FILTER (WHERE need.kind = 'skill'), '[]'::json) AS skills,
-           coalesce(json_agg(DISTINCT need.name) FILTER (WHERE need.kind = 'tool'), '[]'::json) AS equipment
+           coalesce(json_agg(DISTINCT need.name) FILTER (WHERE need.kind = 'tool'), '[]'::json) AS equipment,
+           coalesce(bool_or(s.needs_water), false) AS water, coalesce(bool_or(s.needs_power), false) AS power
       FROM visit_lines vl JOIN job_lines l ON l.id = vl.job_line_id JOIN services s ON s.id = l.service_id
-      CROSS JOIN LATERAL (SELECT 'skill' AS kind, unnest(s.skills) AS name UNION ALL SELECT 'tool', unnest(s.equipment)) need
+      LEFT JOIN LATERAL (SELECT 'skill' AS kind, unnest(s.skills) AS name UNION ALL SELECT 'tool', unnest(s.equipment)) need ON true
      WHERE vl.visit_id = v.id AND l.finished_at IS NULL) needs
   LEFT JOIN LATERAL (
     SELECT json_agg(json_build_object('personId', p.id, 'name', p.name) ORDER BY vc.position) AS list

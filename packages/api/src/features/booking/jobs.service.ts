@@ -2,10 +2,12 @@ import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
 import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
 import { visitMinutes } from '@driprail/shared/domain/board/crew-time';
+import { centsText } from '@driprail/shared/domain/money/rounding';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { audit } from '../../db/audit.ts';
 import { companyOf } from '../../db/company.ts';
-import { Address, Job, JobLine, Visit, VisitLine } from '../../db/models/index.ts';
+import type { CompanySettings } from '../../db/models/index.ts';
+import { Address, Invoice, Job, JobLine, Visit, VisitLine } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
@@ -36,8 +38,9 @@ export function createJob(ctx: Ctx, fields: JobFields, id = uuid()): Promise<Job
 /** The same inside a caller's transaction. */
 export async function orderJob(tx: Transaction, ctx: Ctx, fields: JobFields, id = uuid()): Promise<JobDto> {
   await refuseGoneCustomer(tx, fields.customerId);
-  const { zone } = await companyOf(tx);
-  const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), zone));
+  const company = await companyOf(tx);
+  const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), company.zone));
+  refuseLargeDiscount(ctx, company, fields.discountCents, lines);
   const { lines: _asked, windowFrom, windowTo, ...columns } = fields;
   const windows = { windowFrom: date(windowFrom), windowTo: date(windowTo) };
   await Job.create(
@@ -61,17 +64,40 @@ export function updateJob(
 ): Promise<JobDto> {
   return inTransaction(async (tx) => {
     const job = await lockJob(tx, id, version);
-    const { zone } = await companyOf(tx);
-    const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), zone));
+    const company = await companyOf(tx);
+    const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), company.zone));
+    const isPriceMoved = fields.discountCents !== job.discountCents;
+    if (isPriceMoved) refuseLargeDiscount(ctx, company, fields.discountCents, lines);
     const { lines: _asked, windowFrom, windowTo, ...columns } = fields;
     await job.update(
       { ...columns, windowFrom: date(windowFrom), windowTo: date(windowTo), version: version + 1 },
       { transaction: tx },
     );
     const { newIds, goneIds } = await keepLines(tx, id, lines);
+    if (isPriceMoved || newIds.length > 0 || goneIds.length > 0) await refuseBilled(tx, id);
     if (newIds.length > 0 || goneIds.length > 0) await giveToVisit(tx, job, newIds);
     return saved(tx, ctx, id, 'changed');
   });
+}
+
+/** An invoice stays as it went out: what is added is another job, what was too much is credited. @throws 422 */
+async function refuseBilled(tx: Transaction, jobId: string): Promise<void> {
+  const invoice = await Invoice.findOne({ where: { jobId, voidedAt: null }, transaction: tx });
+  if (!invoice) return;
+  throw unprocessable(
+    'billed',
+    `Invoice ${invoice.number} has gone out. Book what is added as another job, or credit what was too much.`,
+  );
+}
+
+/** The owner sets how much the desk gives alone. @throws 422 at the discount */
+function refuseLargeDiscount(ctx: Ctx, company: CompanySettings, discountCents: number, lines: PricedLine[]): void {
+  if (ctx.actor.role === 'owner' || discountCents === 0) return;
+  const gross = lines.reduce((sum, line) => sum + line.priceCents, 0);
+  const most = Math.floor((gross * company.deskDiscountPercent) / 100);
+  if (discountCents <= most) return;
+  const message = `At most ${centsText(most)} (${company.deskDiscountPercent} percent) without the owner.`;
+  throw unprocessable('large_discount', message, { fields: { discountCents: message } });
 }
 
 async function giveToVisit(tx: Transaction, job: Job, newIds: string[]): Promise<void> {

@@ -4,6 +4,7 @@ import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
+import { aDoneJob } from '../../testing/pay-weeks.ts';
 
 const app = useApp();
 let company: TestCompany;
@@ -140,4 +141,46 @@ test('a second crew on one job stands at the same parking place', async () => {
     [1, 2, true],
     [2, 2, true],
   ]);
+});
+
+test('dispatch gives as large a discount as the owner allows, the owner any', async () => {
+  const owner = await company.owner();
+  const { settings } = (await owner.get('/api/settings').expect(200)).body as { settings: object };
+  await owner
+    .put('/api/settings')
+    .send({ ...settings, deskDiscountPercent: 10 })
+    .expect(200);
+  const lines = order().lines.map((line) => ({ ...line, priceCents: 24_000 }));
+  const asked = order({ lines, discountCents: 2401, discountReason: 'Regular' });
+  const refused = await dispatcher.post('/api/jobs').send(asked).expect(422);
+  expect(refused.body).toMatchObject({
+    error: { fields: { discountCents: 'At most 24.00 (10 percent) without the owner.' } },
+  });
+  await dispatcher
+    .post('/api/jobs')
+    .send({ ...asked, discountCents: 2400 })
+    .expect(200);
+  const given = jobIn((await owner.post('/api/jobs').send(asked).expect(200)).body);
+  // What the owner gave stays when dispatch changes something else.
+  const kept = { discountCents: 2401, discountReason: 'Regular' };
+  await dispatcher
+    .put(`/api/jobs/${given.id}`)
+    .send(changeOf(given, { notes: 'Side gate', ...kept }))
+    .expect(200);
+});
+
+test('a job that is billed takes notes, but neither lines nor another discount', async () => {
+  const { job } = await aDoneJob(app, company, await company.owner());
+  await dispatcher.post(`/api/jobs/${job.id}/invoice`).expect(200);
+  const now = jobIn((await dispatcher.get(`/api/jobs/${job.id}`).expect(200)).body);
+  const more = changeOf(now, {}).lines.concat(order().lines as never);
+  const refused = await dispatcher
+    .put(`/api/jobs/${job.id}`)
+    .send(changeOf(now, { lines: more }))
+    .expect(422);
+  expect(refused.body).toMatchObject({ error: { code: 'billed' } });
+  await dispatcher
+    .put(`/api/jobs/${job.id}`)
+    .send(changeOf(now, { notes: 'Liked the shine' }))
+    .expect(200);
 });

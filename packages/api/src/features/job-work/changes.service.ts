@@ -21,6 +21,7 @@ import { hintAfterCommit } from '../../realtime/hints.ts';
 import { authorizeVisit, lockVisit } from '../board/index.ts';
 import { agreedPrice } from './agreed-price.ts';
 import { applyChange } from './apply-change.ts';
+import { surchargesOfDay } from '../service-menu/index.ts';
 import { offersOn, readVisitWork } from './job-work.queries.ts';
 import { changeFactsOf, toVisitWork } from './visit-work.presenter.ts';
 import type { WorkRow } from './work-rows.queries.ts';
@@ -64,8 +65,13 @@ async function perform(
     return clash('A job is changed while the crew is at the car. Call dispatch.');
   const { zone, clock } = await companyOf(tx);
   const work = toVisitWork(row, { now: ctx.now(), zone, isDesk: false });
-  const offers = await offersOn(dayOf(times.occurredAt, zone), tx);
-  const judgement = judgeChange(changeFactsOf(work, { offers, zone, clock }), press.change, times.occurredAt);
+  const day = dayOf(times.occurredAt, zone);
+  const [offers, surcharges] = [await offersOn(day, tx), await surchargesOfDay(day, tx)];
+  const judgement = judgeChange(
+    changeFactsOf(work, { offers, surcharges, zone, clock }),
+    press.change,
+    times.occurredAt,
+  );
   if (!judgement.ok) return clash(judgement.message);
   const judged = agreedPrice(judgement.change, press.shownCents);
   const state = press.isQuote ? 'quote' : judged.hindrances.length > 0 ? 'asked' : 'done';

@@ -2,12 +2,13 @@ import type { Transaction } from 'sequelize';
 import { NEAR_DAYS } from '@driprail/shared/authz/ability';
 import type { DayWorkDto, OpenWorkDto, VisitWorkDto } from '@driprail/shared/contracts/job-work.contract';
 import type { Offer } from '@driprail/shared/domain/job-work/judge-change';
+import { weatherWords } from '@driprail/shared/domain/menu/service-needs';
 import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
 import { companyOf } from '../../db/company.ts';
 import { select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { forbidden, notFound, unprocessable } from '../../http/errors.ts';
-import { listServices } from '../service-menu/index.ts';
+import { listServices, surchargesOfDay } from '../service-menu/index.ts';
 import { changeJson } from './change.sql.ts';
 import { toVisitWork } from './visit-work.presenter.ts';
 import { readWorkRows } from './work-rows.queries.ts';
@@ -22,7 +23,7 @@ export async function readDayWork({ actor, now }: Ctx, day: string): Promise<Day
   if (actor.role === 'technician' && !isNear) throw forbidden('The run sheet shows yesterday to two days ahead.');
   const rows = await readWorkRows({ personId, day });
   const works = rows.map((row) => toVisitWork(row, { now: now(), zone, isDesk: false }));
-  return { day, works, offers: await offersOn(today) };
+  return { day, works, offers: await offersOn(today), surcharges: await surchargesOfDay(today) };
 }
 
 /** @throws 404 */
@@ -35,11 +36,11 @@ export async function readVisitWork(ctx: Ctx, visitId: string, tx?: Transaction)
 
 /** What can be sold at the car on a day, at that day's prices. */
 export async function offersOn(day: string, tx?: Transaction): Promise<Offer[]> {
-  const services = await listServices(day, null, tx);
+  const [services, { units }] = [await listServices(day, null, tx), await companyOf(tx)];
   return services
     .filter((service) => service.isActive)
-    .map(({ id, name, kind, skills, prices }) => ({
-      ...{ serviceId: id, name, kind, skills },
+    .map(({ id, name, kind, skills, needs, prices }) => ({
+      ...{ serviceId: id, name, kind, skills, weather: weatherWords(needs, units) },
       prices: prices.map(({ sizeClass, priceCents, minutes }) => ({ sizeClass, priceCents, minutes })),
     }));
 }

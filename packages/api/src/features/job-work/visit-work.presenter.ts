@@ -49,10 +49,10 @@ export function toVisitWork({ visit, extras }: WorkRow, seen: Seen): VisitWorkDt
 /** What a change at the car is judged on. */
 export function changeFactsOf(
   work: VisitWorkDto,
-  { offers, zone, clock }: Pick<ChangeFacts, 'offers' | 'zone' | 'clock'>,
+  { offers, surcharges, zone, clock }: Pick<ChangeFacts, 'offers' | 'surcharges' | 'zone' | 'clock'>,
 ): ChangeFacts {
   const { startedAt, plannedFrom, crewSize, crewSkills, lines, next } = work;
-  return { zone, clock, startedAt, plannedFrom, crewSize, crewSkills, lines, offers, next };
+  return { zone, clock, startedAt, plannedFrom, crewSize, crewSkills, lines, offers, surcharges, next };
 }
 
 function isKeyShown(visit: WorkRow['visit'], { now, zone, isDesk }: Seen): boolean {

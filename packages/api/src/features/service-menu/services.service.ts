@@ -12,17 +12,20 @@ import { inTransaction } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import type { MenuFacts } from './menu-facts.ts';
+import { given, keepIncludes, needColumns } from './menu-facts.ts';
 import { listServices } from './services.queries.ts';
 
 export type ServiceFields = Pick<
   ServiceDto,
   'name' | 'kind' | 'description' | 'skills' | 'equipment' | 'isActive' | 'position'
-> & {
-  /** Left out: the usual one of its kind. */
-  photoSet?: PhotoSet | undefined;
-  /** Left out: taxed, or as it was. */
-  taxClass?: TaxClass | undefined;
-};
+> &
+  MenuFacts & {
+    /** Left out: the usual one of its kind. */
+    photoSet?: PhotoSet | undefined;
+    /** Left out: taxed, or as it was. */
+    taxClass?: TaxClass | undefined;
+  };
 export interface PriceFields {
   sizeClass: SizeClass;
   priceCents: number;
@@ -31,12 +34,14 @@ export interface PriceFields {
 
 export function createService(
   ctx: Ctx,
-  { prices, startsOn, ...fields }: ServiceFields & { prices: PriceFields[]; startsOn: string },
+  { prices, startsOn, needs, includes, ...fields }: ServiceFields & { prices: PriceFields[]; startsOn: string },
   id = uuid(),
 ): Promise<ServiceDto> {
   return inTransaction(async (tx) => {
     const photoSet = fields.photoSet ?? usualPhotoSet(fields.kind);
-    await Service.create({ id, ...fields, photoSet, taxClass: fields.taxClass ?? 'standard' }, { transaction: tx });
+    const columns = { ...given(fields), ...needColumns(needs), photoSet };
+    await Service.create({ id, ...columns }, { transaction: tx });
+    await keepIncludes(tx, id, includes);
     await putPrices(tx, id, startsOn, prices);
     return saved(tx, ctx, id, 'added');
   });
@@ -45,15 +50,15 @@ export function createService(
 export function updateService(
   ctx: Ctx,
   id: string,
-  { version, photoSet, taxClass, ...fields }: ServiceFields & { version: number },
+  { version, needs, includes, ...fields }: ServiceFields & { version: number },
 ): Promise<ServiceDto> {
   return inTransaction(async (tx) => {
     const service = await Service.findByPk(id, { transaction: tx, lock: tx.LOCK.UPDATE });
     if (!service) throw notFound('That service');
     if (service.version !== version)
       throw conflict('stale', `Somebody changed ${service.name} meanwhile. Reload and try again.`);
-    const kept = { ...(photoSet && { photoSet }), ...(taxClass && { taxClass }) };
-    await service.update({ ...fields, ...kept, version: version + 1 }, { transaction: tx });
+    await service.update({ ...given(fields), ...needColumns(needs), version: version + 1 }, { transaction: tx });
+    await keepIncludes(tx, id, includes);
     return saved(tx, ctx, id, 'changed');
   });
 }

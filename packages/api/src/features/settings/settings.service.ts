@@ -41,6 +41,7 @@ export function toSettingsDto(s: CompanySettings): SettingsDto {
     emergencyNumber: s.emergencyNumber,
     mealReminderMinutes: s.mealReminderMinutes,
     restReminderMinutes: s.restReminderMinutes,
+    deskDiscountPercent: s.deskDiscountPercent,
     invoiceDueDays: s.invoiceDueDays,
     version: s.version,
   };

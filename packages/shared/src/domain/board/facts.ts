@@ -6,6 +6,8 @@ import type { BoardFacts, PlannedVisit } from './plan.ts';
 export function plannedOf(visit: VisitDto): PlannedVisit {
   const { id, jobId, jobNumber, stopId, addressId, vanId, from, to, minutes, progress, customerName } = visit;
   const { lat, lng, windowFrom, windowTo, skills, equipment } = visit;
+  const bringsWater = visit.needsWater && !visit.hasWater;
+  const bringsPower = visit.needsPower && !visit.hasPower;
   const place = lat === null || lng === null ? null : { lat, lng };
   return {
     id,
@@ -24,6 +26,8 @@ export function plannedOf(visit: VisitDto): PlannedVisit {
     windowTo,
     skills,
     equipment,
+    bringsWater,
+    bringsPower,
   };
 }
 

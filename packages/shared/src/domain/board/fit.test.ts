@@ -22,6 +22,8 @@ function aVisit(id: string, more: Partial<PlannedVisit> = {}): PlannedVisit {
     windowTo: null,
     skills: [],
     equipment: [],
+    bringsWater: false,
+    bringsPower: false,
     ...more,
   };
 }
@@ -98,6 +100,13 @@ describe('refusals', () => {
 });
 
 describe('warnings', () => {
+  test('say that nobody brings the water or the power that the place lacks', () => {
+    const visit = aVisit('b', { bringsWater: true, bringsPower: true });
+    expect(codes(judge(facts([]), visit, '14:00', '15:00').warnings)).toEqual(['missing_water', 'missing_power']);
+    const laden = aVan('gannet', { equipment: ['water_tank', 'generator'] });
+    expect(codes(judge(facts([], { vans: [laden] }), visit, '14:00', '15:00').warnings)).toEqual([]);
+  });
+
   test('say the skill and the tool that are missing; a trainee brings none', () => {
     const trainee = aVan('gannet', { crew: [{ ...aVan('gannet').crew[0]!, isTrainee: true }] });
     const visit = aVisit('b', { skills: ['correction'], equipment: ['extractor'] });

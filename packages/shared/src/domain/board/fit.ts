@@ -130,6 +130,12 @@ function missing(visit: Placed, van: PlannedVan, riding: RidingPerson[]) {
     ...tools.map((t) =>
       warning(visit, 'missing_equipment', `${van.id}:${t}`, `${van.name} carries no ${t.replace('_', ' ')}.`),
     ),
+    ...(visit.bringsWater && !van.equipment.includes('water_tank')
+      ? [warning(visit, 'missing_water', van.id, `There is no spigot, and ${van.name} carries no water tank.`)]
+      : []),
+    ...(visit.bringsPower && !van.equipment.includes('generator')
+      ? [warning(visit, 'missing_power', van.id, `There is no outlet, and ${van.name} carries no generator.`)]
+      : []),
   ];
 }
 

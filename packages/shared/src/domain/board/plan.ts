@@ -19,6 +19,9 @@ export interface PlannedVisit {
   windowTo: string | null;
   skills: string[];
   equipment: string[];
+  /** Asked by the services, and not there at the place: the van has to bring it. */
+  bringsWater: boolean;
+  bringsPower: boolean;
 }
 
 export interface RidingPerson {

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import type { Change, ChangeFacts, ChangeLine } from './judge-change.ts';
+import { usualSurcharges } from '../menu/condition-surcharge.ts';
 import { judgeChange } from './judge-change.ts';
 
 const at = (clock: string) => `2026-05-14T${clock}:00.000Z`;
@@ -21,6 +22,7 @@ const offer = (serviceId: string, name: string, priceCents: number, minutes: num
     name,
     kind: 'single' as const,
     skills,
+    weather: '',
     prices: [{ sizeClass: 'sedan' as const, priceCents, minutes }],
   },
 });
@@ -32,6 +34,7 @@ const facts: ChangeFacts = {
     offer('polish', 'One-step polish', 28_000, 165, ['correction']),
     offer('lamps', 'Headlight restoration', 4800, 40),
   ],
+  surcharges: usualSurcharges,
   next: { customerName: 'Odette Yarrow', windowTo: at('19:00'), driveMinutes: 15 },
 };
 const judge = (change: Change, more: Partial<ChangeFacts> = {}, now = at('15:30')) => {
@@ -46,6 +49,15 @@ const refusal = (change: Change, more: Partial<ChangeFacts> = {}) => {
 const addLamps = { kind: 'add', serviceId: 'lamps', vehicleId: 'car', sizeClass: 'sedan' } as const;
 
 describe('a change at the car', () => {
+  test('raises the condition by the owner’s percents, price and minutes each by its own', () => {
+    const raise = { kind: 'condition', lineId: 'l1', condition: 'dirty', extraCents: 0, extraMinutes: 0 } as const;
+    const usual = judge(raise);
+    const set = judge(raise, { surcharges: { ...usualSurcharges, dirty: { pricePercent: 35, minutesPercent: 10 } } });
+    // 129.00 at 20 percent is 25.80, at 35 percent 45.15; 90 minutes at 20 percent are 18, at 10 percent 9, in fives.
+    expect([usual.priceDifferenceCents, usual.minutesDifference]).toEqual([2580, 20]);
+    expect([set.priceDifferenceCents, set.minutesDifference]).toEqual([4515, 10]);
+  });
+
   test('adds a service at the menu’s price; the finish moves by the crew’s minutes', () => {
     // 90 + 30 minutes from 15:00 is 17:00; 40 more is 17:40.
     expect(judge(addLamps)).toMatchObject({

@@ -1,6 +1,7 @@
 import type { SizeClass } from '../../contracts/fields.ts';
 import type { Condition } from '../board/crew-time.ts';
-import { conditionPercents, visitMinutes } from '../board/crew-time.ts';
+import { visitMinutes } from '../board/crew-time.ts';
+import type { Surcharges } from '../menu/condition-surcharge.ts';
 import type { ClockStyle } from '../time/format.ts';
 import { formatClock } from '../time/format.ts';
 import { addMinutes, isBefore } from '../time/zone.ts';
@@ -23,6 +24,8 @@ export interface Offer {
   name: string;
   kind: 'package' | 'single' | 'add_on';
   skills: string[];
+  /** What it asks of the weather, in words; empty for nothing. */
+  weather: string;
   prices: { sizeClass: SizeClass; priceCents: number; minutes: number }[];
 }
 
@@ -36,6 +39,8 @@ export interface ChangeFacts {
   crewSkills: string[];
   lines: ChangeLine[];
   offers: Offer[];
+  /** What a dirtier car costs and takes on top today. */
+  surcharges: Surcharges;
   /** The van's next visit of the day. */
   next: { customerName: string; windowTo: string | null; driveMinutes: number } | null;
 }
@@ -126,7 +131,7 @@ function changeLines(facts: ChangeFacts, change: Change): Changed {
     const words = `${line.serviceName} swapped for ${offer.service.name}`;
     return { ok: true, after: put(next), words, skills: offer.service.skills };
   }
-  const { extraCents, extraMinutes } = surcharge(line, change);
+  const { extraCents, extraMinutes } = surcharge(line, change, facts.surcharges);
   if (extraCents <= 0 && extraMinutes <= 0) return no('Give minutes or an amount.');
   const next = { ...line, priceCents: line.priceCents + extraCents, minutes: line.minutes + extraMinutes };
   const name = change.condition === 'other' ? 'raised' : conditionNames[change.condition].toLowerCase();
@@ -151,16 +156,17 @@ function offerFor(facts: ChangeFacts, serviceId: string, sizeClass: SizeClass) {
   return service && price ? { service, price } : null;
 }
 
-/** By the menu's factor of the condition; price cents round half up, minutes up to five. Else as typed. */
+/** By the menu's percents of the condition; price cents round half up, minutes up to five. Else as typed. */
 export function surcharge(
   line: Pick<ChangeLine, 'priceCents' | 'minutes'>,
   change: Pick<Extract<Change, { kind: 'condition' }>, 'condition' | 'extraCents' | 'extraMinutes'>,
+  surcharges: Surcharges,
 ): { extraCents: number; extraMinutes: number } {
   if (change.condition === 'other') return { extraCents: change.extraCents, extraMinutes: change.extraMinutes };
-  const extra = conditionPercents[change.condition] - 100;
+  const { pricePercent, minutesPercent } = surcharges[change.condition];
   return {
-    extraCents: Math.floor((line.priceCents * extra + 50) / 100),
-    extraMinutes: Math.ceil((line.minutes * extra) / 100 / 5) * 5,
+    extraCents: Math.floor((line.priceCents * pricePercent + 50) / 100),
+    extraMinutes: Math.ceil((line.minutes * minutesPercent) / 100 / 5) * 5,
   };
 }
 

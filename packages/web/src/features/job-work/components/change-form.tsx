@@ -1,6 +1,8 @@
 import { useState } from 'react';
+import { Link } from 'react-router';
 import type { Change, ChangeFacts } from '@driprail/shared/domain/job-work/judge-change';
 import { judgeChange } from '@driprail/shared/domain/job-work/judge-change';
+import { paths } from '../../../app/paths.ts';
 import { Icon } from '../../../components/icon.tsx';
 import { Picks } from '../../../components/picks.tsx';
 import type { AtVisit } from '../api/work.queries.ts';
@@ -86,11 +88,17 @@ export function ChangeForm({ facts, at, now, onDone }: ChangeFormProps) {
         />
       ) : null}
       {line && kind === 'condition' ? (
-        <ConditionFields
-          key={line.id}
-          line={line}
-          onChange={(fields) => setChange(fields && { kind: 'condition', lineId: line.id, ...fields })}
-        />
+        <>
+          <ConditionFields
+            key={line.id}
+            line={line}
+            surcharges={facts.surcharges}
+            onChange={(fields) => setChange(fields && { kind: 'condition', lineId: line.id, ...fields })}
+          />
+          <Link className="btn w-full" to={paths.walkRound(at.visitId)}>
+            <Icon name="camera" /> Photos of it, dated, in the walk-round
+          </Link>
+        </>
       ) : null}
       {judgement && !judgement.ok ? (
         <p className="tape my-3" role="alert">

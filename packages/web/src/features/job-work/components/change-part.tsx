@@ -1,5 +1,7 @@
 import { useState } from 'react';
-import type { ChangeFacts, Offer } from '@driprail/shared/domain/job-work/judge-change';
+import type { DayWorkDto } from '@driprail/shared/contracts/job-work.contract';
+import type { ChangeFacts } from '@driprail/shared/domain/job-work/judge-change';
+import { usualSurcharges } from '@driprail/shared/domain/menu/condition-surcharge';
 import { useSession } from '../../../lib/session.tsx';
 import type { AtVisit } from '../api/work.queries.ts';
 import { ChangeForm } from './change-form.tsx';
@@ -9,18 +11,20 @@ import type { WorkView } from './work-view.ts';
 interface ChangePartProps {
   view: WorkView;
   at: AtVisit;
-  offers: Offer[];
+  day: Pick<DayWorkDto, 'offers'> & Partial<Pick<DayWorkDto, 'surcharges'>>;
   now: string;
 }
 
 /** Changes of the job at the car: those made, and a new one. */
-export function ChangePart({ view, at, offers, now }: ChangePartProps) {
+export function ChangePart({ view, at, day, now }: ChangePartProps) {
   const { company } = useSession();
   const [isOpen, setOpen] = useState(false);
   const { work, startedAt, waitingChanges, progress } = view;
   const facts: ChangeFacts = {
     ...{ zone: company.zone, clock: company.clock, startedAt, plannedFrom: work.plannedFrom },
-    ...{ crewSize: work.crewSize, crewSkills: work.crewSkills, lines: work.lines, offers, next: work.next },
+    ...{ crewSize: work.crewSize, crewSkills: work.crewSkills, lines: work.lines, offers: day.offers, next: work.next },
+    // A copy that was kept before the owner could set them knows none.
+    surcharges: day.surcharges ?? usualSurcharges,
   };
   const canChange = progress === 'on_site' || progress === 'working';
   return (

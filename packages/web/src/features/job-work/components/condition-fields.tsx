@@ -1,6 +1,7 @@
 import { useState } from 'react';
 import type { ChangeLine, RaisedCondition } from '@driprail/shared/domain/job-work/judge-change';
 import { conditionNames, raisedConditions, surcharge } from '@driprail/shared/domain/job-work/judge-change';
+import type { Surcharges } from '@driprail/shared/domain/menu/condition-surcharge';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
 import { TextField } from '../../../components/field.tsx';
 import { Picks } from '../../../components/picks.tsx';
@@ -16,7 +17,15 @@ interface Fields {
 }
 
 /** How much dirtier the car is than booked: by the menu's factor, or an amount and minutes of one's own. */
-export function ConditionFields({ line, onChange }: { line: ChangeLine; onChange: (fields: Fields | null) => void }) {
+export function ConditionFields({
+  line,
+  surcharges,
+  onChange,
+}: {
+  line: ChangeLine;
+  surcharges: Surcharges;
+  onChange: (fields: Fields | null) => void;
+}) {
   const [condition, setCondition] = useState<RaisedCondition | null>(null);
   const [text, setText] = useState('');
   const [extraMinutes, setMinutes] = useState(30);
@@ -31,7 +40,7 @@ export function ConditionFields({ line, onChange }: { line: ChangeLine; onChange
   };
   const says = (one: RaisedCondition) => {
     if (one === 'other') return conditionNames[one];
-    const extra = surcharge(line, { condition: one, extraCents: 0, extraMinutes: 0 });
+    const extra = surcharge(line, { condition: one, extraCents: 0, extraMinutes: 0 }, surcharges);
     return `${conditionNames[one]}, +${money(extra.extraCents)}, ${formatMinutes(extra.extraMinutes)}`;
   };
   const isUnread = text !== '' && (parseMoney(text) ?? -1) < 0;

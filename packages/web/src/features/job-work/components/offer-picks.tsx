@@ -37,7 +37,10 @@ export function OfferPicks({ offers, sizeClass, pickedId, onPick }: OfferPicksPr
             >
               <span>{offer.name}</span>
               <span className="t-fig">{money(price.priceCents)}</span>
-              <small>{formatMinutes(price.minutes)}</small>
+              <small>
+                {formatMinutes(price.minutes)}
+                {offer.weather ? `. ${offer.weather}` : ''}
+              </small>
             </button>
           ))}
       </div>

@@ -105,7 +105,7 @@ function Work({ data, work, part }: { data: DayWorkDto; work: VisitWorkDto; part
       </nav>
       {part === 'know' ? <KnowPart view={view} at={at} day={data.day} /> : null}
       {part === 'steps' ? <StepsPart view={view} at={at} day={data.day} now={now} /> : null}
-      {part === 'change' ? <ChangePart view={view} at={at} offers={data.offers} now={now} /> : null}
+      {part === 'change' ? <ChangePart view={view} at={at} day={data} now={now} /> : null}
       {part === 'done' ? <DonePart view={view} at={at} day={data.day} /> : null}
     </>
   );

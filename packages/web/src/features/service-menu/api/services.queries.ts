@@ -3,6 +3,7 @@ import {
   createService,
   listServices,
   setServicePrices,
+  setSurcharge,
   updateService,
 } from '@driprail/shared/contracts/services.contract';
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
@@ -25,6 +26,13 @@ export function useSaveService() {
       const { service } = await call(updateService, { params: { id: save.id }, body: save.update });
       return save.prices ? call(setServicePrices, { params: { id: save.id }, body: save.prices }) : { service };
     },
+    onSuccess: (_data, _vars, _saved, { client }) => client.invalidateQueries({ queryKey: ['services'] }),
+  });
+}
+
+export function useSetSurcharge() {
+  return useMutation({
+    mutationFn: (body: NonNullable<RequestOf<typeof setSurcharge>['body']>) => call(setSurcharge, { body }),
     onSuccess: (_data, _vars, _saved, { client }) => client.invalidateQueries({ queryKey: ['services'] }),
   });
 }

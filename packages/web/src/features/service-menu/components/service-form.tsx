@@ -17,18 +17,26 @@ import { CheckField, SelectField, TextArea, TextField } from '../../../component
 import { SheetFoot } from '../../../components/sheet.tsx';
 import { parseMoney } from '../../../lib/format.ts';
 import { useSaveService } from '../api/services.queries.ts';
+import { IncludesField } from './includes-field.tsx';
+import { NeedsFields } from './needs-fields.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 
 export const kindNames = { package: 'Package', single: 'Single service', add_on: 'Add-on' } as const;
+const noNeeds: ServiceDto['needs'] = {
+  ...{ water: false, power: false, dry: false, daylight: false, coldestTenths: null, hottestTenths: null },
+};
 type PriceTexts = Record<SizeClass, { price: string; minutes: string }>;
 
 /** A service by size class. A new price starts on a date; what was quoted keeps its own. */
 export function ServiceForm({
   service,
+  services,
   today,
   onDone,
 }: {
   service: ServiceDto | null;
+  /** The whole menu, for what a package holds. */
+  services: ServiceDto[];
   today: string;
   onDone: () => void;
 }) {
@@ -41,6 +49,11 @@ export function ServiceForm({
     equipment: service?.equipment ?? [],
     photoSet: service?.photoSet ?? usualPhotoSet('package'),
     taxClass: service?.taxClass ?? ('standard' as const),
+    needs: service?.needs ?? noNeeds,
+    cureHours: service?.cureHours ?? 0,
+    intervalDays: service?.intervalDays ?? null,
+    depositPercent: service?.depositPercent ?? 0,
+    includes: service?.includes ?? [],
     isActive: service?.isActive ?? true,
     position: service?.position ?? 0,
   });
@@ -55,14 +68,15 @@ export function ServiceForm({
     const read = readPrices(prices);
     setUnread(read.fields);
     if (Object.keys(read.fields).length > 0 || save.isPending) return;
+    const kept = { includes: value.kind === 'package' ? value.includes : [] };
     const isChanged = JSON.stringify(prices) !== JSON.stringify(textsOf(service));
     const order = service
       ? {
           id: service.id,
-          update: { ...value, version: service.version },
+          update: { ...value, ...kept, version: service.version },
           prices: isChanged ? { startsOn, prices: read.prices } : null,
         }
-      : { create: { ...value, startsOn, prices: read.prices } };
+      : { create: { ...value, ...kept, startsOn, prices: read.prices } };
     save.mutate(order, { onSuccess: onDone });
   };
   return (
@@ -168,6 +182,43 @@ export function ServiceForm({
           ))}
         </SelectField>
       </div>
+      <div className="mt-4">
+        <NeedsFields value={value.needs} fields={fields} onChange={(needs) => setValue({ ...value, needs })} />
+      </div>
+      <div className="grid grid-cols-3 gap-3 mt-3 max-[560px]:grid-cols-1">
+        <TextField
+          label="Stays dry for, hours"
+          type="number"
+          value={value.cureHours}
+          error={fields['cureHours']}
+          onChange={(event) => setValue({ ...value, cureHours: Number(event.target.value) })}
+        />
+        <TextField
+          label="Due again after, days"
+          type="number"
+          placeholder="never"
+          value={value.intervalDays ?? ''}
+          error={fields['intervalDays']}
+          onChange={(event) =>
+            setValue({ ...value, intervalDays: event.target.value === '' ? null : Number(event.target.value) })
+          }
+        />
+        <TextField
+          label="Deposit, percent"
+          type="number"
+          value={value.depositPercent}
+          error={fields['depositPercent']}
+          onChange={(event) => setValue({ ...value, depositPercent: Number(event.target.value) })}
+        />
+      </div>
+      {value.kind === 'package' ? (
+        <IncludesField
+          services={services.filter((one) => one.id !== service?.id)}
+          value={value.includes}
+          error={fields['includes']}
+          onChange={(includes) => setValue({ ...value, includes })}
+        />
+      ) : null}
       <h3 className="sec mt-4">Price and minutes by size class</h3>
       <div className="grid gap-2 mt-2">
         {sizeClasses.map((size) => (

@@ -5,6 +5,9 @@ import type { AppAbility } from '@driprail/shared/authz/ability';
 import { equipmentNames, sizeClassNames, sizeClasses, skillNames } from '@driprail/shared/contracts/fields';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { serviceKinds } from '@driprail/shared/contracts/services.contract';
+import { conditionNames } from '@driprail/shared/domain/job-work/judge-change';
+import { surchargedConditions } from '@driprail/shared/domain/menu/condition-surcharge';
+import { weatherWords } from '@driprail/shared/domain/menu/service-needs';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { Button } from '../../../components/button.tsx';
@@ -18,10 +21,13 @@ import { useSession } from '../../../lib/session.tsx';
 import { servicesQuery } from '../api/services.queries.ts';
 import { ChecklistSheet } from '../components/checklist-sheet.tsx';
 import { ServiceForm, kindNames } from '../components/service-form.tsx';
+import { SurchargeForm } from '../components/surcharge-form.tsx';
 
 /** What is sold: price and minutes by size class. */
 export function ServiceMenuPage() {
-  const { zone } = useSession().company;
+  const { zone, units } = useSession().company;
+  const today = dayOf(serverNow().toISOString(), zone);
+  const [isSurcharging, setSurcharging] = useState(false);
   const ability = useAbility<AppAbility>();
   const canEdit = ability.can('update', 'Service');
   const [editing, setEditing] = useState<ServiceDto | 'new' | null>(null);
@@ -94,6 +100,7 @@ export function ServiceMenuPage() {
                               })}
                               <td className="!pl-6">
                                 {[
+                                  ...needWords(service, units),
                                   ...service.skills.map((s) => skillNames[s]),
                                   ...service.equipment.map((e) => equipmentNames[e]),
                                 ].join(', ') || '–'}
@@ -121,18 +128,57 @@ export function ServiceMenuPage() {
               }
             </Loaded>
           </div>
+          {menu.data ? (
+            <section className="mt-6 max-w-[560px]" aria-label="Surcharges by condition">
+              <h2 className="sec">
+                When the car is dirtier than booked
+                {canEdit ? (
+                  <Button look="bare" onClick={() => setSurcharging(true)}>
+                    <Icon name="pen" /> Change
+                  </Button>
+                ) : null}
+              </h2>
+              {surchargedConditions.map((condition) => (
+                <p key={condition} className="flex justify-between gap-4 py-1">
+                  <b>{conditionNames[condition]}</b>
+                  <span>
+                    {menu.data.surcharges[condition].pricePercent} percent on the price,{' '}
+                    {menu.data.surcharges[condition].minutesPercent} percent on the minutes
+                  </span>
+                </p>
+              ))}
+            </section>
+          ) : null}
         </div>
       </RailPage>
+      {isSurcharging && menu.data ? (
+        <Sheet title="Surcharge by condition" onClose={() => setSurcharging(false)} width={560}>
+          <SurchargeForm surcharges={menu.data.surcharges} today={today} onDone={() => setSurcharging(false)} />
+        </Sheet>
+      ) : null}
       {listOf ? <ChecklistSheet service={listOf} canEdit={canEdit} onClose={() => setListOf(null)} /> : null}
       {editing ? (
         <Sheet title={editing === 'new' ? 'New service' : editing.name} onClose={close} width={680}>
           <ServiceForm
             service={editing === 'new' ? null : editing}
-            today={dayOf(serverNow().toISOString(), zone)}
+            services={menu.data?.services ?? []}
+            today={today}
             onDone={close}
           />
         </Sheet>
       ) : null}
     </>
   );
+}
+
+/** What the place and the weather have to bring, and what comes after. */
+function needWords({ needs, cureHours, intervalDays, depositPercent }: ServiceDto, units: 'us' | 'metric'): string[] {
+  return [
+    needs.water ? 'Water' : '',
+    needs.power ? 'Power' : '',
+    weatherWords(needs, units),
+    cureHours > 0 ? `${cureHours} h to cure` : '',
+    intervalDays ? `due again after ${intervalDays} days` : '',
+    depositPercent > 0 ? `${depositPercent} percent deposit` : '',
+  ].filter(Boolean);
 }
