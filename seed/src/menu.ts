@@ -155,7 +155,8 @@ export function writeMenu(rows: DemoRows, ids: () => string, startsOn: string): 
     rows.services.push({
       ...{ id, name, kind, description, position, photoSet: usualPhotoSet(kind) },
       ...{ skills: [...skills], equipment: [...equipment] },
-      ...facts[name],
+      // Rows are written together: what one names, all name.
+      ...{ needsDry: false, cureHours: 0, depositPercent: 0, ...facts[name] },
     });
     const prices: MenuEntry['prices'] = {};
     for (const [index, sizeClass] of sizeClasses.entries()) {
