@@ -28,6 +28,10 @@ const CollectPage = lazyPage(async () => (await import('../features/billing/page
 const CustomerPage = lazyPage(
   async () => (await import('../features/billing/pages/customer-page.page.tsx')).CustomerPage,
 );
+const MoneyPage = lazyPage(async () => (await import('../features/billing/pages/money.page.tsx')).MoneyPage);
+const CashPage = lazyPage(async () => (await import('../features/billing/pages/cash.page.tsx')).CashPage);
+const MoneyDayPage = lazyPage(async () => (await import('../features/billing/pages/money-day.page.tsx')).MoneyDayPage);
+const TaxesPage = lazyPage(async () => (await import('../features/billing/pages/taxes.page.tsx')).TaxesPage);
 const ClockPage = lazyPage(async () => (await import('../features/run-sheet/pages/clock.page.tsx')).ClockPage);
 const Shell = lazyPage(async () => (await import('./shell/shell.tsx')).Shell);
 const BoardPage = lazyPage(async () => (await import('../features/board/pages/board.page.tsx')).BoardPage);
@@ -109,6 +113,10 @@ export function Router() {
                 <Route path={paths.rates} element={<RatesPage />} />
                 <Route path={paths.statements} element={<StatementsPage />} />
                 <Route path={`${paths.statements}/:day/:personId`} element={<StatementPage />} />
+                <Route path={paths.money} element={<MoneyPage />} />
+                <Route path={paths.cash} element={<CashPage />} />
+                <Route path={paths.moneyDay(':day')} element={<MoneyDayPage />} />
+                <Route path={paths.taxes} element={<TaxesPage />} />
                 <Route path={paths.settings} element={<SettingsPage />} />
                 <Route path={paths.logins} element={<LoginsPage />} />
                 <Route path={paths.account} element={<AccountPage />} />

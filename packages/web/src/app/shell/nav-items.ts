@@ -16,6 +16,7 @@ export function navItems(ability: AppAbility, rides: boolean): NavItem[] {
     ability.can('update', 'Van') && { to: paths.vans, label: 'Vans' },
     ability.can('update', 'Person') && { to: paths.people, label: 'People' },
     ability.can('update', 'ClockEntry') && { to: paths.hours, label: 'Hours' },
+    ability.can('read', 'Cash') && { to: paths.money, label: 'Money' },
     ability.can('read', 'PayWeek') && { to: paths.payWeeks, label: 'Pay week' },
   ];
   return items.filter((item): item is NavItem => item !== false);

@@ -32,6 +32,7 @@ interface VisitSheetProps {
   onCopy: (jobId: string) => void;
   onCallOff: (jobId: string) => void;
   onAddVisit: (jobId: string) => void;
+  onBill: (jobId: string) => void;
 }
 
 /** The open ticket: its paper hangs over the board, which stays live beside it. */
@@ -47,6 +48,7 @@ export function VisitSheet({
   onCopy,
   onCallOff,
   onAddVisit,
+  onBill,
 }: VisitSheetProps) {
   const format = useFormats();
   const job = useQuery({
@@ -205,6 +207,9 @@ export function VisitSheet({
             </Button>
             <Button onClick={() => onCopy(visit.jobId)}>
               <Icon name="copy" /> Copy
+            </Button>
+            <Button onClick={() => onBill(visit.jobId)}>
+              <Icon name="pay" /> Bill
             </Button>
             <Button onClick={() => onAddVisit(visit.jobId)}>Add visit</Button>
             {isEnded(visit.progress) ? null : <Button onClick={() => onCallOff(visit.jobId)}>Call off</Button>}

@@ -1,4 +1,4 @@
-import { useCallback, useEffect, useState } from 'react';
+import { Suspense, useCallback, useEffect, useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { useNavigate, useParams, useSearchParams } from 'react-router';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
@@ -11,6 +11,7 @@ import { serverNow } from '../../../lib/device-clock.ts';
 import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { useMedia } from '../../../lib/use-media.ts';
+import { BillSheet } from '../../billing/index.ts';
 import { AddVisitSheet, CallOffSheet, JobSheet } from '../../booking/index.ts';
 import { CustomerForm } from '../../customers/index.ts';
 import { VisitWork, useWorkNeeds } from '../../job-work/index.ts';
@@ -30,7 +31,7 @@ import { useHeld } from '../components/use-held.ts';
 import { VisitSheet } from '../components/visit-sheet.tsx';
 import './board.css';
 
-type JobTask = { kind: 'new' } | { kind: 'edit' | 'copy' | 'callOff' | 'addVisit'; jobId: string };
+type JobTask = { kind: 'new' } | { kind: 'edit' | 'copy' | 'callOff' | 'addVisit' | 'bill'; jobId: string };
 
 /** The day by vans. */
 export function BoardPage() {
@@ -145,6 +146,7 @@ function Board({ board }: { board: BoardDto }) {
             onCopy={(jobId) => setTask({ kind: 'copy', jobId })}
             onCallOff={(jobId) => setTask({ kind: 'callOff', jobId })}
             onAddVisit={(jobId) => setTask({ kind: 'addVisit', jobId })}
+            onBill={(jobId) => setTask({ kind: 'bill', jobId })}
           />
         ) : null}
       </div>
@@ -191,6 +193,12 @@ function JobTasks({
   onMade: (visitId: string) => void;
 }) {
   if (!task) return null;
+  if (task.kind === 'bill')
+    return (
+      <Suspense>
+        <BillSheet jobId={task.jobId} onClose={onClose} />
+      </Suspense>
+    );
   if (task.kind === 'callOff') return <CallOffSheet jobId={task.jobId} onClose={onClose} />;
   if (task.kind === 'addVisit')
     return <AddVisitSheet jobId={task.jobId} visits={[...visits.visits, ...visits.unplaced]} onClose={onClose} />;

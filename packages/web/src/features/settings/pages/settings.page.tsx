@@ -132,6 +132,7 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
             />
           ))}
         </fieldset>
+        <h2 className="sec">Invoices</h2>
         <SelectField
           label="Invoices are due"
           value={value.invoiceDueDays}
@@ -145,6 +146,9 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
             </option>
           ))}
         </SelectField>
+        <p className="t-2">
+          <Link to={paths.taxes}>Sales taxes</Link> stand on invoices by place and day.
+        </p>
         <BreakFields value={value} fields={fields} onChange={(breaks) => setValue({ ...value, ...breaks })} />
         <fieldset>
           <legend className="sec w-full">Mail when a pay week is locked</legend>
