@@ -99,11 +99,8 @@ export function ServiceMenuPage() {
                                 );
                               })}
                               <td className="!pl-6">
-                                {[
-                                  ...needWords(service, units),
-                                  ...service.skills.map((s) => skillNames[s]),
-                                  ...service.equipment.map((e) => equipmentNames[e]),
-                                ].join(', ') || '–'}
+                                {needWords(service).join(', ') || '–'}
+                                <span className="block t-2">{factWords(service, units).join('. ')}</span>
                               </td>
                               <td className="r whitespace-nowrap">
                                 <Button
@@ -171,14 +168,22 @@ export function ServiceMenuPage() {
   );
 }
 
-/** What the place and the weather have to bring, and what comes after. */
-function needWords({ needs, cureHours, intervalDays, depositPercent }: ServiceDto, units: 'us' | 'metric'): string[] {
+/** What the crew, the van and the place have to bring. */
+function needWords({ skills, equipment, needs }: ServiceDto): string[] {
   return [
-    needs.water ? 'Water' : '',
-    needs.power ? 'Power' : '',
+    ...skills.map((skill) => skillNames[skill]),
+    ...equipment.map((tool) => equipmentNames[tool]),
+    ...(needs.water ? ['Water'] : []),
+    ...(needs.power ? ['Power'] : []),
+  ];
+}
+
+/** What it asks of the weather, and what comes after it. */
+function factWords({ needs, cureHours, intervalDays, depositPercent }: ServiceDto, units: 'us' | 'metric'): string[] {
+  return [
     weatherWords(needs, units),
     cureHours > 0 ? `${cureHours} h to cure` : '',
-    intervalDays ? `due again after ${intervalDays} days` : '',
+    intervalDays ? `Due again after ${intervalDays} days` : '',
     depositPercent > 0 ? `${depositPercent} percent deposit` : '',
   ].filter(Boolean);
 }
