@@ -13,7 +13,6 @@ export const customerDataFile = (id: string) => getCustomerData.path.replace(':i
 
 export const erasureQuery = (id: string) =>
   queryOptions({
-    // Apart from the record: once it is erased there is nothing to look at any more.
     queryKey: ['customer-erasure', id],
     queryFn: ({ signal }) => call(previewErasure, { params: { id } }, signal),
     // What is agreed to is what the server has just counted.

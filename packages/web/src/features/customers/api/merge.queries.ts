@@ -16,7 +16,6 @@ export const duplicatesQuery = queryOptions({
 
 export const mergeQuery = (staysId: string, goesId: string) =>
   queryOptions({
-    // Apart from the records: once they are merged there is nothing to look at any more.
     queryKey: ['customer-merge', staysId, goesId],
     queryFn: ({ signal }) => call(previewMerge, { params: { id: staysId, goesId } }, signal),
     // What is agreed to is what the server has just counted.

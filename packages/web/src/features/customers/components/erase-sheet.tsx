@@ -17,14 +17,16 @@ interface EraseSheetProps {
 
 /** Asked twice: first what goes and what stays, then the name once more. */
 export function EraseSheet({ id, onErased, onClose }: EraseSheetProps) {
-  const preview = useQuery(erasureQuery(id));
+  const erase = useErase(id);
+  // While it is done, and after, there is nothing to look at any more.
+  const preview = useQuery({ ...erasureQuery(id), enabled: !erase.isPending && !erase.isSuccess });
   const [isSure, setSure] = useState(false);
   return (
     <Sheet title="Erase a customer" onClose={onClose} width={680}>
       <Loaded query={preview} what="what would go">
         {(shown) =>
           isSure ? (
-            <LastWord id={id} shown={shown} onErased={onErased} onClose={onClose} />
+            <LastWord erase={erase} shown={shown} onErased={onErased} onClose={onClose} />
           ) : (
             <>
               <WhatGoes shown={shown} />
@@ -82,8 +84,12 @@ function WhatGoes({ shown: { name, nameAfter, goes, stays } }: { shown: ErasureP
   );
 }
 
-function LastWord({ id, shown, onErased, onClose }: EraseSheetProps & { shown: ErasurePreview }) {
-  const erase = useErase(id);
+interface LastWordProps extends Omit<EraseSheetProps, 'id'> {
+  erase: ReturnType<typeof useErase>;
+  shown: ErasurePreview;
+}
+
+function LastWord({ erase, shown, onErased, onClose }: LastWordProps) {
   const [name, setName] = useState('');
   return (
     <form

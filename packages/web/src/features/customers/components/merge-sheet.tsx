@@ -17,8 +17,9 @@ interface MergeSheetProps {
 /** What moves from one record into another, to look at before it is done. */
 export function MergeSheet({ ids, onMerged, onClose }: MergeSheetProps) {
   const [[staysId, goesId], setIds] = useState(ids);
-  const preview = useQuery(mergeQuery(staysId, goesId));
   const merge = useMerge();
+  // While it is done, and after, there is nothing to look at any more.
+  const preview = useQuery({ ...mergeQuery(staysId, goesId), enabled: !merge.isPending && !merge.isSuccess });
   return (
     <Sheet title="Merge two records" onClose={onClose} width={680}>
       <Loaded query={preview} what="what would move">
