@@ -102,6 +102,11 @@ const press = (name: string | RegExp) => (page: Page) =>
     .first()
     .click();
 
+async function openBill(page: Page): Promise<void> {
+  await page.locator('.mo-table tbody a').first().click();
+  await page.locator('.bl-head').waitFor();
+}
+
 async function openMark(page: Page): Promise<void> {
   await press(/^Marks/)(page);
   await press('Add a mark from a list of places')(page);
@@ -126,6 +131,10 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
   { name: 'vans', role, path: '/vans' },
   { name: 'people', role, path: '/people' },
   { name: 'hours', role, path: '/hours' },
+  { name: 'money', role, path: '/money', hasGrounds: role === 'dispatcher' },
+  { name: 'money-bill', role, path: '/money?state=all', open: openBill },
+  { name: 'cash', role, path: '/money/cash' },
+  { name: 'money-day', role, path: `/money/day/${TODAY}` },
   { name: 'account', role, path: '/account' },
 ]);
 
@@ -146,6 +155,7 @@ const office: Screen[] = [
     path: async (context) => `/statements/${LOCKED_WEEK}/${await somebodyId(context)}`,
   },
   { name: 'settings', role: 'owner', path: '/settings' },
+  { name: 'taxes', role: 'owner', path: '/settings/taxes' },
   { name: 'logins', role: 'owner', path: '/logins' },
   { name: 'local-mail', role: 'owner', path: '/local-mail' },
 ];
