@@ -152,6 +152,9 @@ describe('an erasure', () => {
       .expect(200);
     const { customer } = await record(fresh.id);
     const { job, photoId } = await worked(customer);
+    expect((await record(customer.id)).history).toMatchObject([
+      { jobId: job.id, photoCount: 1, photos: [{ id: photoId, moment: 'before' }], progress: 'done' },
+    ]);
     await owner.post(`/api/jobs/${job.id}/invoice`).send({}).expect(200);
     await inTransaction((tx) =>
       queueMail(tx, new Date(app.time.now), { to: secrets.email, subject: SECRET, body: SECRET }),

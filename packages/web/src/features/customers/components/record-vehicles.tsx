@@ -17,7 +17,7 @@ export function RecordVehicles({ vehicles }: { vehicles: VehicleDto[] }) {
           </svg>
           <b dir="auto">{[vehicle.label, vehicle.color].filter(Boolean).join(', ')}</b>
           <span>
-            {sizeClassNames[vehicle.sizeClass]} class{vehicle.plate ? `, plate ${vehicle.plate}` : ''}
+            {sizeClassNames[vehicle.sizeClass]} class{vehicle.plate ? `, plate ${inOneLine(vehicle.plate)}` : ''}
           </span>
           {vehicle.vin ? <span>VIN {vehicle.vin}</span> : null}
           <span>Wheels: {wheelFinishNames[vehicle.wheelFinish].toLowerCase()}</span>
@@ -31,4 +31,9 @@ export function RecordVehicles({ vehicles }: { vehicles: VehicleDto[] }) {
       ))}
     </ul>
   );
+}
+
+/** A plate is read in one piece. */
+function inOneLine(plate: string): string {
+  return plate.replace(/ /g, '\u00a0');
 }
