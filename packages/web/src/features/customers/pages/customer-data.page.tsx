@@ -15,7 +15,7 @@ import { Loaded } from '../../../components/states.tsx';
 import { useFormats } from '../../../lib/format.ts';
 import { customerDataFile, customerDataQuery } from '../api/data.queries.ts';
 import { DataJobs } from '../components/data-jobs.tsx';
-import './customers.css';
+import './customer-data.css';
 
 /** All that is kept about one customer, to read, print or hand over as a file. */
 export function CustomerDataPage() {

@@ -15,6 +15,7 @@ import { DuplicatesSheet } from '../components/duplicates-sheet.tsx';
 import { EraseSheet } from '../components/erase-sheet.tsx';
 import { MergeSheet } from '../components/merge-sheet.tsx';
 import { OtherRecordSheet } from '../components/other-record-sheet.tsx';
+import './customer-sheets.css';
 import './customers.css';
 
 /** What is open over the page. */
