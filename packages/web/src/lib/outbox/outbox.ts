@@ -2,7 +2,7 @@ import { useEffect, useSyncExternalStore } from 'react';
 import type { QueryClient } from '@tanstack/react-query';
 import type { recordPayment } from '@driprail/shared/contracts/billing.contract';
 import type { postClockAction } from '@driprail/shared/contracts/clock.contract';
-import type { RequestOf } from '@driprail/shared/contracts/endpoint';
+import type { Endpoint, RequestOf } from '@driprail/shared/contracts/endpoint';
 import type { recordTip } from '@driprail/shared/contracts/jobs.contract';
 import type { postJobChange, postWorkAction } from '@driprail/shared/contracts/job-work.contract';
 import {
@@ -15,6 +15,7 @@ import {
 } from '@driprail/shared/contracts/phone-addresses';
 import type { postVisitAction } from '@driprail/shared/contracts/run-sheet.contract';
 import { ApiError, call } from '../call.ts';
+import { changeCopies, inList } from './keep-answer.ts';
 import type { KeptPress } from './store.ts';
 import { dropPress, keepPress, keptPresses } from './store.ts';
 
@@ -116,33 +117,48 @@ async function sendOne(kept: KeptPress): Promise<Sent> {
 
 /** @returns whether there is more of it to send */
 async function send(kept: KeptPress): Promise<boolean> {
-  const { path, targetId, body } = kept;
+  const { path, targetId, body, userId } = kept;
   const params = { id: targetId };
   switch (path) {
-    case 'visit':
-      await call(postVisitActionAt, { params, body: body as RequestOf<typeof postVisitAction>['body'] });
+    case 'visit': {
+      const { visit } = await call(postVisitActionAt, { params, body: body as Body<typeof postVisitAction> });
+      await changeCopies(`${userId}:run-sheet:`, inList('visits', 'id', visit));
       return false;
-    case 'work':
-      await call(postWorkActionAt, { params, body: body as RequestOf<typeof postWorkAction>['body'] });
+    }
+    case 'work': {
+      const { work } = await call(postWorkActionAt, { params, body: body as Body<typeof postWorkAction> });
+      await changeCopies(`${userId}:work:`, inList('works', 'visitId', work));
       return false;
-    case 'change':
-      await call(postJobChangeAt, { params, body: body as RequestOf<typeof postJobChange>['body'] });
+    }
+    case 'change': {
+      const { work } = await call(postJobChangeAt, { params, body: body as Body<typeof postJobChange> });
+      await changeCopies(`${userId}:work:`, inList('works', 'visitId', work));
       return false;
-    case 'clock':
-      await call(postClockActionAt, { body: body as RequestOf<typeof postClockAction>['body'] });
+    }
+    case 'clock': {
+      const { clock } = await call(postClockActionAt, { body: body as Body<typeof postClockAction> });
+      // Somebody else's clock is not in the copies.
+      if ('forPersonId' in body) return false;
+      await changeCopies(`${userId}:clock`, (value) => ({ ...value, clock }));
+      await changeCopies(`${userId}:run-sheet:`, (value) => (value['clock'] ? { ...value, clock } : null));
       return false;
+    }
     case 'tip':
-      await call(recordTipAt, { params, body: body as RequestOf<typeof recordTip>['body'] });
+      await call(recordTipAt, { params, body: body as Body<typeof recordTip> });
       return false;
-    case 'payment':
-      await call(recordPaymentAt, { params, body: body as RequestOf<typeof recordPayment>['body'] });
+    case 'payment': {
+      const { bill } = await call(recordPaymentAt, { params, body: body as Body<typeof recordPayment> });
+      await changeCopies(`${userId}:bills:`, inList('bills', 'jobId', bill));
       return false;
+    }
     case 'walk':
     case 'walk_addition':
     case 'photo':
       return (await import('./send-walk.ts')).sendWalk(kept);
   }
 }
+
+type Body<E extends Endpoint> = RequestOf<E>['body'];
 
 /** The person has seen a refused press and settles it another way. */
 export async function dismiss(key: string): Promise<void> {

@@ -1,6 +1,7 @@
 import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import type {
   WalkPhotoDto,
+  WalkSheetDto,
   postPhoto,
   postWalkAddition,
   postWalkRound,
@@ -13,6 +14,7 @@ import {
 } from '@driprail/shared/contracts/walk-round-addresses';
 import { PIECE_BYTES } from '@driprail/shared/domain/walk-round/photo-limits';
 import { ApiError, call } from '../call.ts';
+import { changeCopies } from './keep-answer.ts';
 import type { KeptPress } from './store.ts';
 import { fileOf } from './drafts.ts';
 
@@ -23,14 +25,30 @@ const offsets = new Map<string, number>();
 export async function sendWalk(kept: KeptPress): Promise<boolean> {
   const params = { id: kept.targetId };
   if (kept.path === 'walk') {
-    await call(postWalkRoundAt, { params, body: kept.body as RequestOf<typeof postWalkRound>['body'] });
+    const body = kept.body as RequestOf<typeof postWalkRound>['body'];
+    await keepSheet(kept, (await call(postWalkRoundAt, { params, body })).sheet);
     return false;
   }
   if (kept.path === 'walk_addition') {
-    await call(postWalkAdditionAt, { params, body: kept.body as RequestOf<typeof postWalkAddition>['body'] });
+    const body = kept.body as RequestOf<typeof postWalkAddition>['body'];
+    await keepSheet(kept, (await call(postWalkAdditionAt, { params, body })).sheet);
     return false;
   }
   return sendPiece(kept);
+}
+
+function keepSheet({ userId, targetId }: KeptPress, sheet: WalkSheetDto): Promise<void> {
+  return changeCopies(`${userId}:walk-round:${targetId}`, () => sheet);
+}
+
+/** A photo that has arrived whole no longer waits: the copy has to show it. */
+function keepPhoto({ userId, targetId, body }: KeptPress, photo: WalkPhotoDto): Promise<void> {
+  return changeCopies(`${userId}:walk-round:${targetId}`, (value) => {
+    const cars = value['cars'] as WalkSheetDto['cars'];
+    const isHere = (car: WalkSheetDto['cars'][number]) =>
+      car.vehicleId === body['vehicleId'] && !car.photos.some((one) => one.id === photo.id);
+    return { ...value, cars: cars.map((car) => (isHere(car) ? { ...car, photos: [...car.photos, photo] } : car)) };
+  });
 }
 
 async function sendPiece(kept: KeptPress): Promise<boolean> {
@@ -44,26 +62,29 @@ async function sendPiece(kept: KeptPress): Promise<boolean> {
       query: { offset: String(offset) },
       body: photo.slice(offset, offset + PIECE_BYTES),
     });
-    return isUnfinished(answer.photo);
+    return hasMore(kept, answer.photo);
   } catch (error) {
     if (!(error instanceof ApiError) || error.code !== 'offset') {
       offsets.delete(kept.key);
       throw error;
     }
     // An answer was lost on the way: the server says what it has.
-    return isUnfinished(error.hint.current as WalkPhotoDto);
+    return hasMore(kept, error.hint.current as WalkPhotoDto);
   }
 }
 
 async function announce(kept: KeptPress): Promise<number | 'stored'> {
   const body = kept.body as RequestOf<typeof postPhoto>['body'];
   const { photo } = await call(postPhotoAt, { params: { id: kept.targetId }, body });
-  if (!isUnfinished(photo)) return 'stored';
+  if (!(await hasMore(kept, photo))) return 'stored';
   return photo.receivedBytes;
 }
 
-function isUnfinished({ id, isStored, receivedBytes }: WalkPhotoDto): boolean {
-  if (isStored) offsets.delete(id);
-  else offsets.set(id, receivedBytes);
-  return !isStored;
+async function hasMore(kept: KeptPress, photo: WalkPhotoDto): Promise<boolean> {
+  if (!photo.isStored) offsets.set(photo.id, photo.receivedBytes);
+  else {
+    offsets.delete(photo.id);
+    await keepPhoto(kept, photo);
+  }
+  return !photo.isStored;
 }
