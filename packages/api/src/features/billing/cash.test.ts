@@ -1,11 +1,12 @@
-import { beforeAll, beforeEach, expect, it } from 'vitest';
+import { beforeAll, beforeEach, expect, it, vi } from 'vitest';
 import type { Response } from 'supertest';
 import type TestAgent from 'supertest/lib/agent.js';
 import { v4 as key } from 'uuid';
 import type { BillDto } from '@driprail/shared/contracts/bill.dto';
 import type { CashCountDto, CashHolderDto } from '@driprail/shared/contracts/cash.contract';
 import type { ErrorBody } from '@driprail/shared/contracts/error.contract';
-import { CashCount, PayAdjustment } from '../../db/models/index.ts';
+import { CashCount, PayAdjustment, Person } from '../../db/models/index.ts';
+import { select } from '../../db/sequelize.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
@@ -39,6 +40,14 @@ const count = (agent: TestAgent, held: CashHolderDto | undefined, fields: object
     ...{ key: key(), personId: held?.personId, paymentIds: held?.payments.map(({ id }) => id), note: '' },
     ...fields,
   });
+/** Backends of this test's database that wait for another's lock. */
+const waiting = `SELECT DISTINCT l.pid FROM pg_locks l JOIN pg_stat_activity a ON a.pid = l.pid
+  WHERE NOT l.granted AND a.datname = current_database()`;
+const connection = () => {
+  const { sequelize } = Person;
+  if (!sequelize) throw new Error('the models are not connected');
+  return sequelize;
+};
 const faultOf = (answer: Response) => (answer.body as ErrorBody).error;
 
 it('is held with the tips handed over; what the crew kept, checks and mistakes are not in it', async () => {
@@ -77,7 +86,13 @@ it('is counted once: of two at the same moment one is told so, a repeated press 
   await take(sefa, { amountCents: 2000 });
   const held = await heldBySefa();
   const before = await CashCount.count();
-  const answers = await Promise.all([owner, dispatcher].map((agent) => count(agent, held, { countedCents: 2000 })));
+  // Both have begun before either can go on: they stand at the person, whom somebody holds.
+  const tx = await connection().transaction();
+  await Person.findByPk(company.people.sefa.id, { transaction: tx, lock: tx.LOCK.UPDATE });
+  const asked = Promise.all([owner, dispatcher].map((agent) => count(agent, held, { countedCents: 2000 })));
+  await vi.waitFor(async () => expect(await select(waiting)).toHaveLength(2), { timeout: 20_000 });
+  await tx.commit();
+  const answers = await asked;
   expect(answers.map(({ status }) => status).sort()).toEqual([200, 409]);
   const late = answers.find(({ status }) => status === 409);
   expect(late && faultOf(late).message).toMatch(/^The cash of Sefa Lund was counted just now/);

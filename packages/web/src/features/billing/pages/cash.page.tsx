@@ -1,3 +1,4 @@
+import { useEffect, useRef } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { Link, useSearchParams } from 'react-router';
 import type { CashHolderDto } from '@driprail/shared/contracts/cash.contract';
@@ -7,6 +8,7 @@ import { paths } from '../../../app/paths.ts';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Empty, Loaded } from '../../../components/states.tsx';
 import { money, useFormats } from '../../../lib/format.ts';
+import { useMedia } from '../../../lib/use-media.ts';
 import { cashQuery } from '../api/cash.queries.ts';
 import { CashCounts } from '../components/cash-counts.tsx';
 import { CountForm } from '../components/count-form.tsx';
@@ -62,7 +64,12 @@ export function CashPage() {
                 )}
               </section>
               {chosen ? (
-                <Held key={keyOf(chosen)} holder={chosen} onDone={() => setSearch({}, { replace: true })} />
+                <Held
+                  key={keyOf(chosen)}
+                  holder={chosen}
+                  isPicked={search.has('who')}
+                  onDone={() => setSearch({}, { replace: true })}
+                />
               ) : null}
               <CashCounts counts={counts} />
             </div>
@@ -73,10 +80,16 @@ export function CashPage() {
   );
 }
 
-function Held({ holder, onDone }: { holder: CashHolderDto; onDone: () => void }) {
+function Held({ holder, isPicked, onDone }: { holder: CashHolderDto; isPicked: boolean; onDone: () => void }) {
+  const section = useRef<HTMLElement>(null);
+  const isNarrow = useMedia('(max-width: 1100px)');
+  useEffect(() => {
+    // Below the list, where a press on a name would seem to do nothing.
+    if (isPicked && isNarrow) section.current?.scrollIntoView();
+  }, [isPicked, isNarrow]);
   const { zone, clock } = useFormats();
   return (
-    <section className="hung mo-held" aria-label={`Cash of ${holder.name}`}>
+    <section ref={section} className="hung mo-held" aria-label={`Cash of ${holder.name}`}>
       <h2 className="t-hang">{holder.name}</h2>
       {holder.personId === null ? (
         <p className="t-2">
