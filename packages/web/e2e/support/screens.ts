@@ -85,6 +85,20 @@ const jobPath = (part: string, isIt: (work: { progress: string; mustKnows: objec
   };
 const isWorking = (work: { progress: string }) => work.progress === 'working';
 
+/** The bill of a visit that is done, at the car. */
+async function collectPath(context: BrowserContext): Promise<string> {
+  const { visits } = await read<{ visits: { id: string; progress: string }[] }>(context, `/api/run-sheet/${TODAY}`);
+  return `/run-sheet/${TODAY}/job/${visits.findLast(({ progress }) => progress === 'done')?.id ?? ''}/pay`;
+}
+
+/** The customer's own page of that job. */
+async function customerPagePath(context: BrowserContext): Promise<string> {
+  const { visits } = await read<{ visits: { jobId: string; progress: string }[] }>(context, `/api/run-sheet/${TODAY}`);
+  const jobId = visits.findLast(({ progress }) => progress === 'done')?.jobId ?? '';
+  const answer = await context.request.post(`/api/jobs/${jobId}/pay-link`);
+  return new URL(((await answer.json()) as { url: string }).url).pathname;
+}
+
 async function openChange(page: Page): Promise<void> {
   for (const name of ['Change the job', 'Add a service', /^Odor treatment/])
     await page.getByRole('button', { name }).first().click();
@@ -170,6 +184,8 @@ const phone: Screen[] = [
   { name: 'run-sheet', role: 'technician', path: '/run-sheet', isPhoneOnly: true, hasGrounds: true },
   { name: 'run-sheet-tomorrow', role: 'technician', path: '/run-sheet/2026-05-15', isPhoneOnly: true },
   { name: 'trouble', role: 'technician', path: '/run-sheet', open: press('Trouble'), isPhoneOnly: true },
+  { name: 'collect', role: 'technician', path: collectPath, isPhoneOnly: true, hasGrounds: true },
+  { name: 'customer-page', role: 'technician', path: customerPagePath, isPhoneOnly: true, hasGrounds: true },
   {
     ...{ name: 'job-know', role: 'technician', isPhoneOnly: true, hasGrounds: true },
     path: jobPath('know', ({ progress, mustKnows }) => progress === 'placed' && mustKnows.length > 0),
