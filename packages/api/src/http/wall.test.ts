@@ -46,8 +46,8 @@ describe('every endpoint', () => {
   });
 });
 
-/** Keys under which a rate, a commission or an amount of pay would travel. */
-const payWords = /rate|commission|hourly|gross|premium|percent|"value"|wage/i;
+/** Keys under which a rate, a commission or an amount of pay would travel; the menu and discounts have percents of their own. */
+const payWords = /rate|commission|hourly|gross|premium|(?<!deposit|price|minutes|discount)percent|"value"|wage/i;
 
 test('a dispatcher’s answers hold no rate, commission or pay, nor a key for one', async () => {
   await agents.owner
