@@ -11,11 +11,22 @@ export async function fileOf(asked: Test): Promise<{ status: number; type: strin
   return { status: answer.status, type: answer.type, bytes: answer.body as Buffer };
 }
 
-/**
- * The words of a PDF of ours, line by line: its one font is embedded as a subset, whose own map says which letter each
- * glyph is.
- */
+/** Words on paper, and where: points from the left edge and from the foot of the page. */
+export interface Printed {
+  words: string;
+  x: number;
+  y: number;
+}
+
+/** The words of a PDF of ours, line by line. */
 export function pdfText(pdf: Buffer): string {
+  return printedOn(pdf)
+    .map(({ words }) => words)
+    .join('\n');
+}
+
+/** What is printed, in the order in which it was written: the one font is a subset, whose own map names each glyph's letter. */
+export function printedOn(pdf: Buffer): Printed[] {
   const streams = streamsOf(pdf);
   const letters = new Map<string, string>();
   for (const stream of streams.filter((one) => one.includes('beginbfrange'))) {
@@ -29,13 +40,12 @@ export function pdfText(pdf: Buffer): string {
       );
     }
   }
-  const shown = streams.flatMap((stream) => [...stream.matchAll(/\[([^\]]*)\] TJ/g)]);
-  return shown
-    .map(([, parts = '']) => {
-      const glyphs = [...parts.matchAll(/<(\w+)>/g)].flatMap(([, hex = '']) => hex.match(/\w{4}/g) ?? []);
-      return glyphs.map((glyph) => letters.get(glyph.toLowerCase()) ?? '').join('');
-    })
-    .join('\n');
+  const shown = streams.flatMap((one) => [...one.matchAll(/1 0 0 1 ([\d.]+) ([\d.]+) Tm[^[]*\[([^\]]*)\] TJ/g)]);
+  return shown.map(([, x, y, parts = '']) => {
+    const glyphs = [...parts.matchAll(/<(\w+)>/g)].flatMap(([, hex = '']) => hex.match(/\w{4}/g) ?? []);
+    const words = glyphs.map((glyph) => letters.get(glyph.toLowerCase()) ?? '').join('');
+    return { words, x: Number(x), y: Number(y) };
+  });
 }
 
 function streamsOf(pdf: Buffer): string[] {

@@ -6,7 +6,7 @@ import { aCompany } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
 import { useCardsApp } from '../../testing/local-cards.ts';
 import { aDoneJob } from '../../testing/pay-weeks.ts';
-import { fileOf, pdfText } from '../../testing/pdf-text.ts';
+import { fileOf, pdfText, printedOn } from '../../testing/pdf-text.ts';
 
 const test = useCardsApp();
 let company: TestCompany;
@@ -19,6 +19,10 @@ beforeAll(async () => {
   await owner
     .post('/api/tax-rates')
     .send({ name: 'City tax', taxClass: 'standard', place: 'Ternmouth', percent: '6.25', startsOn: '2026-01-01' })
+    .expect(200);
+  await owner
+    .post('/api/tax-rates')
+    .send({ name: 'State tax', taxClass: 'standard', place: '', percent: '0.5', startsOn: '2026-01-01' })
     .expect(200);
   jobId = (await aDoneJob(test, company, owner)).job.id;
 });
@@ -48,10 +52,23 @@ it('holds lines, tax by place, what was received and what is owed, with its font
   const words = pdfText(answer.bytes).split('\n');
   for (const line of [
     ...['Invoice 1001', 'Nakagawa', '14 Saltpan Lane', 'Wash and wax', 'grey 2019 hatchback', '240.00'],
-    ...['City tax, 6.25 percent', 'Ternmouth, on 240.00', '15.00', 'Total', '255.00'],
-    ...['Check', 'May 14, 2026, Check 1043', '-100.00', 'Owed', '155.00', 'Page 1 of 1'],
+    ...[
+      'City tax, 6.25 percent',
+      'Ternmouth, on 240.00',
+      '15.00',
+      'State tax, 0.5 percent',
+      'Everywhere, on 240.00',
+      '1.20',
+      'Total',
+      '256.20',
+    ],
+    ...['Check', 'May 14, 2026, Check 1043', '-100.00', 'Owed', '156.20', 'Page 1 of 1'],
   ])
     expect(words).toContain(line);
+  const lefts = printedOn(answer.bytes).filter(({ x }) => x === 54);
+  const gaps = lefts.slice(1).map(({ y }, index) => (lefts[index]?.y ?? 0) - y);
+  // No line is written over the one before: the smallest are 8 points high.
+  expect(Math.min(...gaps)).toBeGreaterThanOrEqual(8);
   expect(words.join()).not.toMatch(/Typed twice|Cash|4471|Dog|555-0142/);
 });
 

@@ -84,8 +84,9 @@ function row(doc: Paper, name: string, detail: string, cents: number): void {
   const y = doc.y;
   doc.fontSize(10).text(name, PAGE.left, y, { width: 370 });
   if (detail) doc.fontSize(8).text(detail, PAGE.left, doc.y, { width: 370 });
+  const bottom = doc.y;
   money(doc, 10, centsText(cents), y);
-  doc.y = Math.max(doc.y, y + 13) + 4;
+  doc.y = bottom + 4;
 }
 
 /** What came in and what was taken off, by day. A payment that was recorded by mistake never was. */
