@@ -1,10 +1,18 @@
 import { z } from 'zod';
 import { billDto } from './bill.dto.ts';
 import { endpoint } from './endpoint.ts';
-import { bytes, done, instant, positiveCents } from './fields.ts';
+import { bytes, done, id, instant, positiveCents } from './fields.ts';
 import { progressStates } from '../domain/board/progress.ts';
+import { photoViews } from '../domain/walk-round/views.ts';
 
 const token = z.object({ token: z.string().min(20).max(80) });
+
+export const customerPhotoDto = z.object({
+  id,
+  view: z.enum(photoViews),
+  moment: z.enum(['before', 'after']),
+});
+export type CustomerPhotoDto = z.infer<typeof customerPhotoDto>;
 
 /**
  * A customer's own page of one job. No address, no gate code, no phone but the company's; of the crew first names, of the
@@ -32,6 +40,8 @@ export const customerPageDto = z.object({
   tipCents: z.int(),
   /** A payment page is open, or has just been left: the money may be under way. */
   isPaying: z.boolean(),
+  /** Before and after, once the work is done. */
+  photos: z.array(customerPhotoDto),
   feedback: z.object({ stars: z.int(), words: z.string() }).nullable(),
 });
 export type CustomerPageDto = z.infer<typeof customerPageDto>;
@@ -53,6 +63,15 @@ export const getCustomerInvoice = endpoint({
   params: token,
   response: bytes,
   format: 'pdf',
+});
+export const getCustomerPhoto = endpoint({
+  method: 'get',
+  path: '/api/customer-pages/:token/photos/:id',
+  roles: 'public',
+  summary: 'A photo of the job, by the link that was sent.',
+  params: token.extend({ id }),
+  response: bytes,
+  format: 'jpeg',
 });
 export const payByCard = endpoint({
   method: 'post',

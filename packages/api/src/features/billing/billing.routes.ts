@@ -9,6 +9,7 @@ import type { RouteTable } from '../../http/route.ts';
 import { okay, publicRoute, route } from '../../http/route.ts';
 import { PaymentSignatureError } from '../../integrations/payments/index.ts';
 import type { PaymentEvent, Payments } from '../../integrations/payments/index.ts';
+import type { FileStore } from '../../integrations/storage/index.ts';
 import { authorizeBill } from './bill-access.ts';
 import { readBill } from './bill.presenter.ts';
 import { readCounts, readHolders } from './cash.queries.ts';
@@ -29,6 +30,8 @@ import * as taxes from './taxes.service.ts';
 export interface BillingParts {
   payments: Payments;
   links: CustomerLinks;
+  /** Where photos are kept. */
+  store: FileStore;
   baseUrlOf: (req: Request) => string;
 }
 

@@ -5,7 +5,8 @@ import { v4 as key } from 'uuid';
 import type { BillDto } from '@driprail/shared/contracts/bill.dto';
 import type { CustomerPageDto } from '@driprail/shared/contracts/customer-page.contract';
 import type { ErrorBody } from '@driprail/shared/contracts/error.contract';
-import { JobPaid, Tip } from '../../db/models/index.ts';
+import { JobPaid, Photo, Tip } from '../../db/models/index.ts';
+import { storeFor } from '../../integrations/storage/index.ts';
 import { aCompany } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
 import { useCardsApp } from '../../testing/local-cards.ts';
@@ -156,6 +157,34 @@ describe('a customer’s own page', () => {
     const { answers } = await test.hook<{ answers: number[] }>(`/events/${paid?.id}/send`, { signature: 'wrong' });
     expect(answers).toEqual([400]);
     expect((await billOf(owner)).payments).toHaveLength(2);
+  });
+
+  it('shows before and after of its own job, and no photo of a second look or of another job', async () => {
+    const store = storeFor({ dataDir: test.dataDir, s3: null });
+    const other = await aDoneJob(test, company, owner);
+    const visitOf = async (id: string) =>
+      ((await owner.get(`/api/jobs/${id}`).expect(200)).body as { job: { visits: { id: string }[] } }).job.visits[0]
+        ?.id;
+    const photo = async (visitId: string, moment: 'before' | 'after' | 'second_look') => {
+      const id = key();
+      await store.put(`2026-05/${id}.jpg`, new Uint8Array([1, 2, 3]));
+      const at = new Date(test.time.now);
+      await Photo.create({
+        ...{ id, visitId, view: 'front', moment, bytes: 3, sha256: id.replaceAll('-', '').padEnd(64, '0') },
+        ...{ receivedBytes: 3, storageKey: `2026-05/${id}.jpg`, storedAt: at, userId: company.ctx.actor.userId },
+        ...{ width: 4, height: 3, deviceAt: at, receivedAt: at, occurredAt: at },
+      });
+      return id;
+    };
+    const own = (await visitOf(jobId)) ?? '';
+    const after = await photo(own, 'after');
+    const look = await photo(own, 'second_look');
+    const strange = await photo((await visitOf(other.job.id)) ?? '', 'after');
+    expect((await page()).photos).toEqual([{ id: after, view: 'front', moment: 'after' }]);
+    const get = (id: string) => test.anonymous().get(`/api/customer-pages/${token}/photos/${id}`);
+    await get(after).expect(200).expect('content-type', 'image/jpeg');
+    await get(look).expect(404);
+    await get(strange).expect(404);
   });
 
   it('takes feedback once the work is done, the last word counts', async () => {

@@ -4,17 +4,19 @@ import { companyOf } from '../../db/company.ts';
 import { select } from '../../db/sequelize.ts';
 import { notFound } from '../../http/errors.ts';
 import { readVisits } from '../board/index.ts';
+import { listCustomerPhotos } from '../walk-round/index.ts';
 import { readBill } from './bill.presenter.ts';
 
 type Visits = Awaited<ReturnType<typeof readVisits>>;
 
 /** What a customer sees of a job. @throws 404 */
 export async function readCustomerPage(jobId: string, now: Date): Promise<CustomerPageDto> {
-  const [company, bill, visits, extras] = await Promise.all([
+  const [company, bill, visits, extras, photos] = await Promise.all([
     companyOf(),
     readBill(jobId, now),
     readVisits({ jobId }),
     readExtras(jobId),
+    listCustomerPhotos(jobId),
   ]);
   const visit = shownVisit(visits);
   if (!visit || !extras) throw notFound('That page');
@@ -29,6 +31,7 @@ export async function readCustomerPage(jobId: string, now: Date): Promise<Custom
     vanName: extras.vans[visit.vanId ?? ''] ?? '',
     crewNames: visit.crew.map((person) => person.name.split(/\s+/)[0] ?? ''),
     bill: shownBill,
+    photos: bill.isDone ? photos : [],
     ...{ tipCents: extras.tipCents, isPaying: extras.isPaying, feedback: extras.feedback },
   };
 }

@@ -3,6 +3,7 @@ import * as api from '@driprail/shared/contracts/customer-page.contract';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, publicRoute } from '../../http/route.ts';
+import { readCustomerPhoto } from '../walk-round/index.ts';
 import { openCardPage } from './card.service.ts';
 import type { BillingParts } from './billing.routes.ts';
 import { readCustomerPage } from './customer-page.queries.ts';
@@ -11,7 +12,7 @@ import { readInvoicePdf } from './invoice-pdf.ts';
 import { lookUpOpenPages } from './payment-events.service.ts';
 
 /** Pages that a customer opens by a signed link: whoever has the link sees that one job. */
-export function customerPageRoutes(table: RouteTable, { links, payments, baseUrlOf }: BillingParts): void {
+export function customerPageRoutes(table: RouteTable, { links, payments, store, baseUrlOf }: BillingParts): void {
   const jobOf = async (token: string, now: Date): Promise<string> => {
     const jobId = await links.jobOf(token, now);
     if (!jobId) throw notFound('That page');
@@ -28,6 +29,15 @@ export function customerPageRoutes(table: RouteTable, { links, payments, baseUrl
   publicRoute(table, api.getCustomerInvoice, async ({ params }, now) =>
     readInvoicePdf(await jobOf(params.token, now()), now()),
   );
+  publicRoute(table, api.getCustomerPhoto, async ({ params }, now, { res }) => {
+    const jobId = await jobOf(params.token, now());
+    // Photos come with the work done: before, they are the crew's record alone.
+    const { photos } = await readCustomerPage(jobId, now());
+    if (!photos.some((photo) => photo.id === params.id)) throw notFound('That photo');
+    res.setHeader('cache-control', 'private, no-cache');
+    res.setHeader('content-security-policy', "default-src 'none'; sandbox");
+    return readCustomerPhoto(store, params.id);
+  });
   publicRoute(table, api.payByCard, async ({ params, body }, now, { req }) => {
     const jobId = await jobOf(params.token, now());
     const returnUrl = `${pageUrl(req, params.token)}?returned=true`;

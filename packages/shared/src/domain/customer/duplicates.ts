@@ -6,9 +6,9 @@ export interface KnownCustomer {
   phone: string;
   email: string;
   /** Street and number with town, one an address. */
-  places: string[];
-  plates: string[];
-  vins: string[];
+  places: readonly string[];
+  plates: readonly string[];
+  vins: readonly string[];
 }
 
 export const likenesses = ['phone', 'email', 'plate', 'vin', 'name'] as const;
@@ -55,7 +55,7 @@ export function likelyDuplicates(customers: readonly KnownCustomer[]): LikelyPai
     'email',
     sharing(customers, ({ email }) => [folded(email)].filter(Boolean)),
   );
-  const written = (texts: string[]) => texts.map(tight).filter((text) => text.length >= FEWEST_LETTERS);
+  const written = (texts: readonly string[]) => texts.map(tight).filter((text) => text.length >= FEWEST_LETTERS);
   note(
     'plate',
     sharing(customers, ({ plates }) => written(plates)),

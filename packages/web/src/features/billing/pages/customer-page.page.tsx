@@ -10,6 +10,7 @@ import { money } from '../../../lib/format.ts';
 import { customerPageQuery, usePayByCard } from '../api/customer-page.queries.ts';
 import { BillLines } from '../components/bill-lines.tsx';
 import { CustomerFeedback } from '../components/customer-feedback.tsx';
+import { CustomerPhotos } from '../components/customer-photos.tsx';
 import { customerState } from '../components/customer-state.ts';
 import { TipField } from '../components/tip-field.tsx';
 import './customer-page.css';
@@ -51,10 +52,16 @@ function Page({ page, token, returned }: { page: CustomerPageDto; token: string;
         <h1 className="t-hang">{head}</h1>
         {time ? <p className="cust-time">{time}</p> : null}
         <p className="t-2 pb-2">{words}</p>
+        {page.photos.length > 0 ? <CustomerPhotos token={token} photos={page.photos} /> : null}
         {page.progress === 'called_off' && bill.payments.length === 0 ? null : (
           <>
             <h2 className="sec">{isOver ? 'Invoice' : 'What you booked'}</h2>
             <BillLines bill={bill} zone={page.zone} />
+            {bill.invoice ? (
+              <a className="link block py-3" href={`/api/customer-pages/${token}/invoice.pdf`}>
+                The invoice as a PDF
+              </a>
+            ) : null}
           </>
         )}
         {page.tipCents > 0 ? (
