@@ -134,6 +134,19 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
         </fieldset>
         <h2 className="sec">Invoices</h2>
         <SelectField
+          label="Discount that dispatch gives alone"
+          value={value.deskDiscountPercent}
+          error={fields['deskDiscountPercent']}
+          hint="More than that is for the owner."
+          onChange={(event) => setValue({ ...value, deskDiscountPercent: Number(event.target.value) })}
+        >
+          {withSet([0, 5, 10, 15, 20, 30, 50, 100], value.deskDiscountPercent).map((percent) => (
+            <option key={percent} value={percent}>
+              {percent === 100 ? 'Any' : `Up to ${percent} percent`}
+            </option>
+          ))}
+        </SelectField>
+        <SelectField
           label="Invoices are due"
           value={value.invoiceDueDays}
           error={fields['invoiceDueDays']}
