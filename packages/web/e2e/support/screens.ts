@@ -106,7 +106,7 @@ async function openChange(page: Page): Promise<void> {
 
 async function openSteps(page: Page): Promise<void> {
   await page.getByRole('button', { name: 'Steps of Two-step polish' }).click();
-  await page.getByRole('button', { name: 'Change', exact: true }).first().click();
+  await page.getByRole('dialog').getByRole('button', { name: 'Change', exact: true }).first().click();
 }
 
 const openFiles = (page: Page) => page.locator('.files-menu summary').click();
@@ -157,6 +157,7 @@ const office: Screen[] = [
   { name: 'person', role: 'owner', path: '/people', open: press('Edit') },
   { name: 'service', role: 'owner', path: '/service-menu', open: press('Edit') },
   { name: 'service-steps', role: 'owner', path: '/service-menu', open: openSteps },
+  { name: 'surcharge', role: 'owner', path: '/service-menu', open: press('Change') },
   { name: 'pay-week', role: 'owner', path: `/pay/${LAST_WEEK}` },
   { name: 'pay-week-locked', role: 'owner', path: `/pay/${LOCKED_WEEK}` },
   { name: 'pay-week-files', role: 'owner', path: `/pay/${LOCKED_WEEK}`, open: openFiles },
