@@ -4,6 +4,7 @@ import { taxesInForce } from '@driprail/shared/domain/billing/tax-rates';
 import type { TaxRate } from '@driprail/shared/domain/billing/tax-rates';
 import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
 import { ZONE, instant, minuteOf } from './calendar.ts';
+import { writeCashCounts } from './cash-rows.ts';
 import type { Book } from './job-rows.ts';
 import type { DemoPeople } from './people.ts';
 import type { Random } from './random.ts';
@@ -37,6 +38,7 @@ export function writeBilling(book: Book, people: DemoPeople): void {
     const amounts = writeInvoice(book, job, { number: 1001 + index, issuedAt, taxRates });
     writePayment(book, people, job, { issuedAt, totalCents: amounts.totalCents, random });
   });
+  writeCashCounts(book, people);
 }
 
 /** When the last of a job was finished; null while something of it is still to come, or when nothing was. */

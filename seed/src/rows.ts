@@ -58,6 +58,8 @@ export interface DemoRows {
   invoiceTaxes: Row<models.InvoiceTax>[];
   payments: Row<models.Payment>[];
   jobsPaid: Row<models.JobPaid>[];
+  cashCounts: Row<models.CashCount>[];
+  cashCountPayments: Row<models.CashCountPayment>[];
 }
 
 export function noRows(): DemoRows {
@@ -106,6 +108,8 @@ export function noRows(): DemoRows {
     invoiceTaxes: [],
     payments: [],
     jobsPaid: [],
+    cashCounts: [],
+    cashCountPayments: [],
   };
 }
 

@@ -12,6 +12,8 @@ export async function storeBilling(rows: DemoRows, transaction: Transaction): Pr
   await models.InvoiceTax.bulkCreate(rows.invoiceTaxes, options);
   await models.Payment.bulkCreate(rows.payments, options);
   await models.JobPaid.bulkCreate(rows.jobsPaid, options);
+  await models.CashCount.bulkCreate(rows.cashCounts, options);
+  await models.CashCountPayment.bulkCreate(rows.cashCountPayments, options);
   await run(
     `UPDATE document_counters SET last_number = :number WHERE kind = 'invoice'`,
     { number: Math.max(1000, ...rows.invoices.map((invoice) => invoice.number)) },
