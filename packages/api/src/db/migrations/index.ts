@@ -18,6 +18,7 @@ import { breakReminders } from './2026-12-01-016-break-reminders.ts';
 import { customers } from './2026-12-01-018-customers.ts';
 import { erasedBills } from './2026-12-01-018-erased-bills.ts';
 import { billing } from './2026-12-01-017-billing.ts';
+import { messages } from './2026-12-01-019-messages.ts';
 import { serviceNeeds } from './2026-12-01-021-service-needs.ts';
 
 /** In the order in which they are run. */
@@ -42,4 +43,5 @@ export const migrations: Migration[] = [
   billing,
   erasedBills,
   serviceNeeds,
+  messages,
 ];

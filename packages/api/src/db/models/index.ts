@@ -72,6 +72,10 @@ import { initCustomerLink } from './customer-link.model.ts';
 import { initFeedback } from './feedback.model.ts';
 import { initServiceInclude } from './service-include.model.ts';
 import { initConditionSurcharge } from './condition-surcharge.model.ts';
+import { initMessage } from './message.model.ts';
+import { initMessageKindRow } from './message-kind-row.model.ts';
+import { initMessageSettings } from './message-settings.model.ts';
+import { initEnquiry } from './enquiry.model.ts';
 
 /** Gives every model its connection. Reads across tables are SQL, so no associations are declared. */
 export function initModels(sequelize: Sequelize): void {
@@ -148,6 +152,10 @@ export function initModels(sequelize: Sequelize): void {
   initFeedback(sequelize);
   initServiceInclude(sequelize);
   initConditionSurcharge(sequelize);
+  initMessage(sequelize);
+  initMessageKindRow(sequelize);
+  initMessageSettings(sequelize);
+  initEnquiry(sequelize);
 }
 
 export { CompanySettings } from './company-settings.model.ts';
@@ -223,3 +231,7 @@ export { CustomerLink } from './customer-link.model.ts';
 export { Feedback } from './feedback.model.ts';
 export { ServiceInclude } from './service-include.model.ts';
 export { ConditionSurcharge } from './condition-surcharge.model.ts';
+export { Message } from './message.model.ts';
+export { MessageKindRow } from './message-kind-row.model.ts';
+export { MessageSettings } from './message-settings.model.ts';
+export { Enquiry } from './enquiry.model.ts';
