@@ -55,6 +55,38 @@ const checks: { what: string; sql: string }[] = [
     what: 'a mark of last time answers one of the same car',
     sql: `SELECT count(*) AS count FROM walk_marks m JOIN walk_marks o ON o.id = m.carried_from WHERE o.vehicle_id IS DISTINCT FROM m.vehicle_id`,
   },
+  {
+    what: 'numbers of invoices and credit notes run without a gap, up to their counters',
+    sql: `SELECT coalesce(sum(abs(c.last_number - c.first_number + 1 - c.there)), 0)::int AS count FROM (
+      SELECT k.last_number, CASE k.kind WHEN 'invoice' THEN 1001 ELSE 101 END AS first_number,
+             CASE k.kind WHEN 'invoice' THEN (SELECT count(*) FROM invoices) ELSE (SELECT count(*) FROM credit_notes) END AS there
+        FROM document_counters k) c`,
+  },
+  {
+    what: 'an invoice is the sum of its lines and taxes',
+    sql: `SELECT count(*) AS count FROM invoices i
+      WHERE i.net_cents <> coalesce((SELECT sum(l.price_cents - l.discount_cents) FROM invoice_lines l WHERE l.invoice_id = i.id), 0)
+         OR i.tax_cents <> coalesce((SELECT sum(t.tax_cents) FROM invoice_taxes t WHERE t.invoice_id = i.id), 0)`,
+  },
+  {
+    what: 'a credit note is the sum of its lines and taxes, and no line is credited beyond its price',
+    sql: `SELECT (SELECT count(*) FROM credit_notes c
+        WHERE c.net_cents <> coalesce((SELECT sum(l.net_cents) FROM credit_note_lines l WHERE l.credit_note_id = c.id), 0)
+           OR c.tax_cents <> coalesce((SELECT sum(t.tax_cents) FROM credit_note_taxes t WHERE t.credit_note_id = c.id), 0))
+      + (SELECT count(*) FROM invoice_lines i WHERE i.price_cents - i.discount_cents
+           < coalesce((SELECT sum(l.net_cents) FROM credit_note_lines l WHERE l.invoice_line_id = i.id), 0)) AS count`,
+  },
+  {
+    what: 'no more goes back of a payment than was received',
+    sql: `SELECT count(*) AS count FROM payments p
+      WHERE p.amount_cents < coalesce((SELECT sum(r.amount_cents) FROM refunds r WHERE r.payment_id = p.id AND r.state <> 'failed'), 0)`,
+  },
+  {
+    what: 'a count of cash names what should have been there',
+    sql: `SELECT count(*) AS count FROM cash_counts c WHERE c.expected_cents <> coalesce((
+      SELECT sum(p.amount_cents + coalesce((SELECT sum(t.amount_cents) FROM tips t WHERE t.payment_id = p.id AND NOT t.already_received), 0))
+        FROM cash_count_payments x JOIN payments p ON p.id = x.payment_id WHERE x.cash_count_id = c.id), 0)`,
+  },
 ];
 
 export interface DataFinding {
