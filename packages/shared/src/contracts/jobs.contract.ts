@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
 import { cents, id, instant, longText, minutes, planVersion, positiveCents, shortText, sizeClass } from './fields.ts';
 import { visitDto } from './visit.dto.ts';
+import { callBackCauses } from '../domain/board/call-back.ts';
 import { desk, everyone } from '../authz/actor.ts';
 
 const lineBody = z.strictObject({
@@ -58,6 +59,11 @@ export const jobDto = z.object({
     }),
   ),
   totalCents: cents,
+  /** The job that this one puts right. */
+  callBackOf: z.object({ id, number: z.int() }).nullable(),
+  callBackCause: z.enum(callBackCauses).nullable(),
+  /** Jobs that put something of this one right. */
+  callBacks: z.array(z.object({ id, number: z.int(), cause: z.enum(callBackCauses) })),
   tips: z.array(z.object({ id, amountCents: z.int(), method: z.string(), at: instant })),
   visits: z.array(visitDto),
   history: z.array(z.object({ at: instant, by: z.string(), text: z.string() })),
@@ -119,6 +125,24 @@ export const copyJob = endpoint({
   roles: desk,
   summary: 'Order the same again at today’s prices; lands on Unplaced.',
   params: z.object({ id }),
+  response: z.object({ job: jobDto }),
+});
+export const callBackJob = endpoint({
+  method: 'post',
+  path: '/api/jobs/:id/call-back',
+  roles: desk,
+  summary: 'Go back to put something of a past job right, free to the customer; lands on Unplaced.',
+  params: z.object({ id }),
+  body: z
+    .strictObject({
+      cause: z.enum(callBackCauses, 'Choose what is wrong.'),
+      lineIds: z.array(id).min(1, 'Choose what has to be put right.').max(100),
+      minutes,
+      notes: longText,
+      windowFrom: instant.nullable(),
+      windowTo: instant.nullable(),
+    })
+    .refine(windowInOrder.check, windowInOrder.message),
   response: z.object({ job: jobDto }),
 });
 export const callOffJob = endpoint({

@@ -67,6 +67,8 @@ export const visitDto = z.object({
   windowFrom: instant.nullable(),
   windowTo: instant.nullable(),
   notes: z.string(),
+  /** Something of a past job is put right, free to the customer. */
+  isCallBack: z.boolean(),
   lines: z.array(visitLineDto),
   skills: z.array(z.string()),
   equipment: z.array(z.string()),

@@ -20,6 +20,7 @@ import { erasedBills } from './2026-12-01-018-erased-bills.ts';
 import { billing } from './2026-12-01-017-billing.ts';
 import { messages } from './2026-12-01-019-messages.ts';
 import { serviceNeeds } from './2026-12-01-021-service-needs.ts';
+import { callBacks } from './2026-12-01-022-call-backs.ts';
 
 /** In the order in which they are run. */
 export const migrations: Migration[] = [
@@ -44,4 +45,5 @@ export const migrations: Migration[] = [
   erasedBills,
   serviceNeeds,
   messages,
+  callBacks,
 ];

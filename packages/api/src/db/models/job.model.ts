@@ -1,5 +1,6 @@
 import { DataTypes, Model } from 'sequelize';
 import type { CreationOptional, InferAttributes, InferCreationAttributes, Sequelize } from 'sequelize';
+import type { CallBackCause } from '@driprail/shared/domain/board/call-back';
 
 export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job>> {
   declare id: string;
@@ -12,6 +13,9 @@ export class Job extends Model<InferAttributes<Job>, InferCreationAttributes<Job
   declare discountCents: CreationOptional<number>;
   declare discountReason: CreationOptional<string>;
   declare calledOffReason: CreationOptional<string | null>;
+  /** The job that this one puts right, free to the customer. */
+  declare callBackOf: CreationOptional<string | null>;
+  declare callBackCause: CreationOptional<CallBackCause | null>;
   declare version: CreationOptional<number>;
   declare createdBy: CreationOptional<string | null>;
   declare createdAt: CreationOptional<Date>;
@@ -30,6 +34,8 @@ export function initJob(sequelize: Sequelize): void {
       discountCents: { type: DataTypes.BIGINT },
       discountReason: { type: DataTypes.TEXT },
       calledOffReason: { type: DataTypes.TEXT, allowNull: true },
+      callBackOf: { type: DataTypes.UUID, allowNull: true },
+      callBackCause: { type: DataTypes.TEXT, allowNull: true },
       version: { type: DataTypes.INTEGER },
       createdBy: { type: DataTypes.UUID, allowNull: true },
       createdAt: { type: DataTypes.DATE },

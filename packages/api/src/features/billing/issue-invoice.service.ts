@@ -72,7 +72,7 @@ const totalsOf = ({ netCents, taxCents, totalCents }: { netCents: number; taxCen
 export async function issueDueInvoices(now: Date): Promise<number> {
   const due = await select<{ jobId: string }>(
     `SELECT j.id AS "jobId" FROM jobs j CROSS JOIN company_settings s
-      WHERE EXISTS (SELECT 1 FROM job_lines l WHERE l.job_id = j.id AND l.finished_at >= s.bills_from)
+      WHERE j.call_back_of IS NULL AND EXISTS (SELECT 1 FROM job_lines l WHERE l.job_id = j.id AND l.finished_at >= s.bills_from)
         AND NOT EXISTS (SELECT 1 FROM invoices i WHERE i.job_id = j.id)
         AND NOT EXISTS (SELECT 1 FROM visits v WHERE v.job_id = j.id AND v.progress NOT IN ('part_done', 'done', 'called_off'))
         AND NOT EXISTS (SELECT 1 FROM visit_events e JOIN visits v ON v.id = e.visit_id WHERE v.job_id = j.id

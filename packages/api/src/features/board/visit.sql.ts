@@ -10,7 +10,7 @@ export const visitJson = `json_build_object(
   'customerId', c.id, 'customerName', c.name, 'phone', c.phone,
   'addressId', a.id, 'address', concat_ws(', ', a.line, nullif(a.city, '')), 'area', a.area, 'lat', a.lat, 'lng', a.lng,
   'hasGateCode', a.gate_code <> '', 'hasWater', a.has_water, 'hasPower', a.has_power,
-  'windowFrom', ${iso('j.window_from')}, 'windowTo', ${iso('j.window_to')}, 'notes', j.notes,
+  'windowFrom', ${iso('j.window_from')}, 'windowTo', ${iso('j.window_to')}, 'notes', j.notes, 'isCallBack', j.call_back_of IS NOT NULL,
   'lines', lines.list, 'skills', needs.skills, 'equipment', needs.equipment,
   'needsWater', needs.water, 'needsPower', needs.power,
   'crew', coalesce(worked.list, riding.list, '[]'::json), 'accepted', v.accepted,

@@ -35,6 +35,10 @@ export async function readJob(id: string, tx?: Transaction): Promise<JobDto | nu
                 'vehicle', concat_ws(' ', nullif(w.color, ''), w.label), 'sizeClass', l.size_class, 'priceCents', l.price_cents,
                 'minutes', l.minutes, 'isFinished', l.finished_at IS NOT NULL) ORDER BY l.position)
               FROM job_lines l JOIN services s ON s.id = l.service_id LEFT JOIN vehicles w ON w.id = l.vehicle_id WHERE l.job_id = j.id), '[]') AS lines,
+            (SELECT json_build_object('id', o.id, 'number', o.number) FROM jobs o WHERE o.id = j.call_back_of) AS "callBackOf",
+            j.call_back_cause AS "callBackCause",
+            coalesce((SELECT json_agg(json_build_object('id', b.id, 'number', b.number, 'cause', b.call_back_cause) ORDER BY b.number)
+              FROM jobs b WHERE b.call_back_of = j.id), '[]') AS "callBacks",
             coalesce((SELECT json_agg(json_build_object('id', t.id, 'amountCents', t.amount_cents, 'method', t.method,
                 'at', to_json(t.received_at) #>> '{}') ORDER BY t.received_at) FROM tips t WHERE t.job_id = j.id), '[]') AS tips,
             (SELECT json_agg(h ORDER BY h.at DESC) FROM (

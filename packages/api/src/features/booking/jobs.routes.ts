@@ -4,6 +4,7 @@ import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
+import { callBackJob } from './call-back.service.ts';
 import { findJobs, readJob } from './jobs.queries.ts';
 import { addVisit, callOffJob, copyJob, createJob, updateJob } from './jobs.service.ts';
 import { recordTip } from './tips.service.ts';
@@ -20,6 +21,9 @@ export function jobsRoutes(table: RouteTable): void {
     job: forAbility(ctx, await updateJob(ctx, params.id, body)),
   }));
   route(table, api.copyJob, async ({ params }, ctx) => ({ job: forAbility(ctx, await copyJob(ctx, params.id)) }));
+  route(table, api.callBackJob, async ({ params, body }, ctx) => ({
+    job: forAbility(ctx, await callBackJob(ctx, params.id, body)),
+  }));
   route(table, api.callOffJob, async ({ params, body }, ctx) => ({
     job: forAbility(ctx, await callOffJob(ctx, params.id, body.version, body.reason)),
   }));

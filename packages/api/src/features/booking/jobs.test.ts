@@ -184,3 +184,35 @@ test('a job that is billed takes notes, but neither lines nor another discount',
     .send(changeOf(now, { notes: 'Liked the shine' }))
     .expect(200);
 });
+
+test('a call-back puts finished lines right for nothing, and nobody is billed for it', async () => {
+  const owner = await company.owner();
+  const { job } = await aDoneJob(app, company, owner);
+  const back = (more: object = {}) =>
+    dispatcher.post(`/api/jobs/${job.id}/call-back`).send({
+      ...{ cause: 'streaks', lineIds: job.lines.map((line) => line.id), minutes: 30, notes: 'Hood only' },
+      ...{ windowFrom: '2026-05-15T13:00:00Z', windowTo: '2026-05-15T15:00:00Z', ...more },
+    });
+  await back({ windowTo: '2026-05-15T12:00:00Z' }).expect(400);
+  await back({ cause: 'bad luck' }).expect(400);
+  const made = jobIn((await back().expect(200)).body);
+  expect(made).toMatchObject({
+    ...{ totalCents: 0, callBackOf: { id: job.id, number: job.number }, callBackCause: 'streaks' },
+    ...{ notes: `Call-back of job ${job.number}: streaks or haze. Done by Sefa Lund in Gannet.\nHood only` },
+    visits: [{ progress: 'unplaced', minutes: 30, isCallBack: true }],
+  });
+  const past = jobIn((await dispatcher.get(`/api/jobs/${job.id}`).expect(200)).body);
+  expect(past.callBacks).toEqual([{ id: made.id, number: made.number, cause: 'streaks' }]);
+  const again = await dispatcher
+    .post(`/api/jobs/${made.id}/call-back`)
+    .send({
+      cause: 'other',
+      lineIds: made.lines.map((line) => line.id),
+      minutes: 30,
+      notes: '',
+      windowFrom: null,
+      windowTo: null,
+    })
+    .expect(422);
+  expect(again.body).toMatchObject({ error: { code: 'not_finished' } });
+});

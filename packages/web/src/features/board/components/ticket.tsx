@@ -24,6 +24,7 @@ export function Ticket({ visit, now, hasTrouble }: { visit: PlacedVisit; now: st
         <i>{vehiclesOf(visit)}</i>
       </p>
       <p className="sv">
+        {visit.isCallBack ? 'Call-back: ' : ''}
         {servicesOf(visit)}
         {visit.area ? `, ${visit.area}` : ''}
         {visit.parts > 1 ? `. Visit ${visit.part} of ${visit.parts}` : ''}
@@ -53,5 +54,5 @@ function statusWords(visit: PlacedVisit, now: string, late: number, clock: (inst
 /** All of a ticket in one sentence, for readers. */
 export function ticketLabel(visit: PlacedVisit, vanName: string, span: string): string {
   const notes = [visit.hasGateCode ? 'gate code' : '', visit.hasWater ? '' : 'no spigot'].filter(Boolean).join(', ');
-  return `${visit.customerName}, ${vanName}, ${span}, ${progressNames[visit.progress]}, ${servicesOf(visit)}${notes ? `, ${notes}` : ''}`;
+  return `${visit.customerName}, ${vanName}, ${span}, ${progressNames[visit.progress]}, ${visit.isCallBack ? 'call-back, ' : ''}${servicesOf(visit)}${notes ? `, ${notes}` : ''}`;
 }

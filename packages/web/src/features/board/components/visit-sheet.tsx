@@ -3,6 +3,7 @@ import { useQuery } from '@tanstack/react-query';
 import { getJob } from '@driprail/shared/contracts/jobs.contract';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { VisitDto } from '@driprail/shared/contracts/visit.dto';
+import { callBackCauseNames } from '@driprail/shared/domain/board/call-back';
 import type { Move } from '@driprail/shared/domain/board/plan';
 import { isEnded, isMovable, nextActions, progressNames } from '@driprail/shared/domain/board/progress';
 import { formatMinutes } from '@driprail/shared/domain/time/format';
@@ -33,6 +34,7 @@ interface VisitSheetProps {
   onCallOff: (jobId: string) => void;
   onAddVisit: (jobId: string) => void;
   onBill: (jobId: string) => void;
+  onCallBack: (jobId: string) => void;
 }
 
 /** The open ticket: its paper hangs over the board, which stays live beside it. */
@@ -49,6 +51,7 @@ export function VisitSheet({
   onCallOff,
   onAddVisit,
   onBill,
+  onCallBack,
 }: VisitSheetProps) {
   const format = useFormats();
   const job = useQuery({
@@ -125,6 +128,17 @@ export function VisitSheet({
             <Loaded query={job} what="the job">
               {({ job: data }) => (
                 <>
+                  {data.callBackOf && data.callBackCause ? (
+                    <p className="tape my-2">
+                      <b>Call-back of job {data.callBackOf.number}.</b> {callBackCauseNames[data.callBackCause]}. Free
+                      to the customer.
+                    </p>
+                  ) : null}
+                  {data.callBacks.map((one) => (
+                    <p key={one.id} className="t-2">
+                      Put right by job {one.number}: {callBackCauseNames[one.cause].toLowerCase()}
+                    </p>
+                  ))}
                   {data.discountCents > 0 ? (
                     <p className="ln">
                       <span>{data.discountReason}</span>
@@ -212,6 +226,11 @@ export function VisitSheet({
               <Icon name="pay" /> Bill
             </Button>
             <Button onClick={() => onAddVisit(visit.jobId)}>Add visit</Button>
+            {visit.progress === 'done' || visit.progress === 'part_done' ? (
+              <Button onClick={() => onCallBack(visit.jobId)}>
+                <Icon name="undo" /> Call-back
+              </Button>
+            ) : null}
             {isEnded(visit.progress) ? null : <Button onClick={() => onCallOff(visit.jobId)}>Call off</Button>}
             {isMovable(visit.progress) && visit.vanId ? (
               <Button

@@ -1,6 +1,7 @@
 import { Suspense, useCallback, useEffect, useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
 import { useNavigate, useParams, useSearchParams } from 'react-router';
+import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
 import type { BoardDto } from '@driprail/shared/contracts/board.contract';
 import type { Move } from '@driprail/shared/domain/board/plan';
 import { formatClock } from '@driprail/shared/domain/time/format';
@@ -12,7 +13,7 @@ import { useNow } from '../../../lib/now.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { useMedia } from '../../../lib/use-media.ts';
 import { BillSheet } from '../../billing/index.ts';
-import { AddVisitSheet, CallOffSheet, JobSheet } from '../../booking/index.ts';
+import { AddVisitSheet, CallBackSheet, CallOffSheet, JobSheet } from '../../booking/index.ts';
 import { CustomerForm } from '../../customers/index.ts';
 import { VisitWork, useWorkNeeds } from '../../job-work/index.ts';
 import { boardQuery } from '../api/board.queries.ts';
@@ -31,7 +32,8 @@ import { useHeld } from '../components/use-held.ts';
 import { VisitSheet } from '../components/visit-sheet.tsx';
 import './board.css';
 
-type JobTask = { kind: 'new' } | { kind: 'edit' | 'copy' | 'callOff' | 'addVisit' | 'bill'; jobId: string };
+type JobTask =
+  { kind: 'new' } | { kind: 'edit' | 'copy' | 'callOff' | 'addVisit' | 'bill' | 'callBack'; jobId: string };
 
 /** The day by vans. */
 export function BoardPage() {
@@ -146,6 +148,7 @@ function Board({ board }: { board: BoardDto }) {
             onCopy={(jobId) => setTask({ kind: 'copy', jobId })}
             onCallOff={(jobId) => setTask({ kind: 'callOff', jobId })}
             onAddVisit={(jobId) => setTask({ kind: 'addVisit', jobId })}
+            onCallBack={(jobId) => setTask({ kind: 'callBack', jobId })}
             onBill={(jobId) => setTask({ kind: 'bill', jobId })}
           />
         ) : null}
@@ -202,6 +205,12 @@ function JobTasks({
   if (task.kind === 'callOff') return <CallOffSheet jobId={task.jobId} onClose={onClose} />;
   if (task.kind === 'addVisit')
     return <AddVisitSheet jobId={task.jobId} visits={[...visits.visits, ...visits.unplaced]} onClose={onClose} />;
+  const show = (job: JobDto) => {
+    onClose();
+    const visit = job.visits.find((v) => v.progress === 'unplaced') ?? job.visits[0];
+    if (visit) onMade(visit.id);
+  };
+  if (task.kind === 'callBack') return <CallBackSheet jobId={task.jobId} day={day} onClose={onClose} onMade={show} />;
   return (
     <JobSheet
       jobId={task.kind === 'new' ? null : task.jobId}
@@ -211,11 +220,7 @@ function JobTasks({
         <CustomerForm customer={null} name={name} onSaved={onSaved} onCancel={onCancel} />
       )}
       onClose={onClose}
-      onSaved={(job) => {
-        onClose();
-        const visit = job.visits.find((v) => v.progress === 'unplaced') ?? job.visits[0];
-        if (visit) onMade(visit.id);
-      }}
+      onSaved={show}
     />
   );
 }

@@ -1,8 +1,16 @@
 import { queryOptions, useMutation } from '@tanstack/react-query';
 import type { QueryClient } from '@tanstack/react-query';
 import { getCustomer, listCustomers } from '@driprail/shared/contracts/customers.contract';
-import { addVisit, callOffJob, createJob, getJob, updateJob } from '@driprail/shared/contracts/jobs.contract';
+import {
+  addVisit,
+  callBackJob,
+  callOffJob,
+  createJob,
+  getJob,
+  updateJob,
+} from '@driprail/shared/contracts/jobs.contract';
 import type { JobBody } from '@driprail/shared/contracts/jobs.contract';
+import type { RequestOf } from '@driprail/shared/contracts/endpoint';
 import { listServices } from '@driprail/shared/contracts/services.contract';
 import { call } from '../../../lib/call.ts';
 
@@ -35,6 +43,14 @@ export function useSaveJob() {
 export function useCallOff(id: string) {
   return useMutation({
     mutationFn: (body: { version: number; reason: string }) => call(callOffJob, { params: { id }, body }),
+    onSuccess: (_data, _vars, _saved, { client }) => refresh(client),
+  });
+}
+
+export function useCallBack(id: string) {
+  return useMutation({
+    mutationFn: (body: NonNullable<RequestOf<typeof callBackJob>['body']>) =>
+      call(callBackJob, { params: { id }, body }),
     onSuccess: (_data, _vars, _saved, { client }) => refresh(client),
   });
 }

@@ -90,6 +90,11 @@ export function NextCard({
           </li>
         ) : null}
       </ul>
+      {visit.isCallBack ? (
+        <p className="tape my-2">
+          <b>Call-back.</b> Something is put right; it costs the customer nothing.
+        </p>
+      ) : null}
       {visit.notes ? <p className="notes">{visit.notes}</p> : null}
       <WalkLine visit={visit} />
       <div className="card-acts">
