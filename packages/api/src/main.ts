@@ -2,16 +2,19 @@ import type { Server } from 'node:http';
 import { createApp } from './app.ts';
 import { createClock } from './clock.ts';
 import { readConfig } from './config.ts';
+import { deliveryParts } from './deliveries.ts';
 import { analyze, migrate } from './db/migrate.ts';
 import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
 import { issueDueInvoices, lookUpOpenPages, settleAskedRefunds } from './features/billing/index.ts';
+import { sendDueMessages, takeUpLeft } from './features/messages/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
 import { removeErasedFiles } from './features/walk-round/index.ts';
 import { startFakePayments } from './integrations/payments/fake/fake-payments.ts';
 import { paymentsFor } from './integrations/payments/index.ts';
 import { pushKeys } from './integrations/push/index.ts';
 import { storeFor } from './integrations/storage/index.ts';
+import { localTexts } from './integrations/texts/index.ts';
 import { listenHost, originOf } from './http/listen-host.ts';
 import { every } from './jobs/every.ts';
 import { createLogger } from './log.ts';
@@ -45,6 +48,11 @@ async function main(): Promise<void> {
   const webhookUrl = () => `${originOf(config.host, port)}/api/webhooks/payments`;
   const localPayments = config.hasLocalPayments ? await startFakePayments({ webhookUrl, now }) : null;
   const payments = paymentsFor(localPayments?.place ?? config.payments);
+  const texts = localTexts(now);
+  const deliveries = deliveryParts({
+    ...{ secret, sendMail: send, texts, mailKnowsRepeats: mail !== null },
+    baseUrl: () => config.publicUrl?.replace(/\/$/, '') ?? originOf(config.host, port),
+  });
   const app = createApp({
     config,
     now,
@@ -59,6 +67,15 @@ async function main(): Promise<void> {
     5,
     () => sendWaitingMails(send, now),
     (error) => log.warn({ err: error }, 'mail outbox'),
+  );
+
+  const messages = every(
+    5,
+    async () => {
+      await takeUpLeft(deliveries, now());
+      await sendDueMessages(deliveries, now);
+    },
+    (error) => log.warn({ err: error }, 'messages'),
   );
 
   const billing = every(
@@ -89,7 +106,7 @@ async function main(): Promise<void> {
   const stop = (): void => {
     if (isStopping) return;
     isStopping = true;
-    void Promise.all([outbox.stop(), billing.stop(), files.stop()])
+    void Promise.all([outbox.stop(), messages.stop(), billing.stop(), files.stop()])
       .then(() => app.close())
       .then(() => localPayments?.stop())
       .then(() => disconnect())

@@ -2,8 +2,7 @@ import type { Transaction } from 'sequelize';
 import { OutboxMail } from '../db/models/index.ts';
 import { inTransaction, run, select } from '../db/sequelize.ts';
 import type { SendMail } from '../mail/transport.ts';
-
-const RETRY_SECONDS = [30, 120, 600, 3600, 21_600];
+import { RETRY_SECONDS } from './retry.ts';
 
 /**
  * Sends what waits, one mail a transaction; a row that another process holds is left to it.

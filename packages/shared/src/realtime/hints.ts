@@ -14,7 +14,8 @@ export type HintEntity =
   | 'settings'
   | 'pay'
   | 'bill'
-  | 'login';
+  | 'login'
+  | 'message';
 
 export interface Hint {
   entity: HintEntity;

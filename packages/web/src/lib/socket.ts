@@ -19,6 +19,7 @@ const touched: Record<HintEntity, string[]> = {
   pay: ['pay'],
   bill: ['bills', 'money', 'customers'],
   login: ['logins'],
+  message: ['messages', 'customers'],
 };
 
 let isLive = false;

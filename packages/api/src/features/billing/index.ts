@@ -1,3 +1,4 @@
+export { readBill } from './bill.presenter.ts';
 export { billingRoutes } from './billing.routes.ts';
 export type { BillingParts } from './billing.routes.ts';
 export { CustomerLinks } from './customer-links.ts';

@@ -9,6 +9,7 @@ import { Invoice, InvoiceLine, InvoiceTax, Job } from '../../db/models/index.ts'
 import { inTransaction, select } from '../../db/sequelize.ts';
 import { notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { queueMessage } from '../messages/index.ts';
 import { billableLines, isOver } from './bill.presenter.ts';
 import { readJobRow, readTaxRates } from './bill.queries.ts';
 import { noteIfPaid } from './note-paid.ts';
@@ -58,6 +59,7 @@ export async function issueInvoice(tx: Transaction, jobId: string, { userId, at 
   await audit(tx, { userId, at }, 'invoice', id, 'issued', { number, jobNumber: job.jobNumber, ...totalsOf(amounts) });
   // A deposit may have covered it all.
   await noteIfPaid(tx, { id: jobId, number: job.jobNumber }, { userId, at });
+  await queueMessage(tx, at, { kind: 'done', jobId, causeId: id, eventKey: `invoice:${id}` });
   hintAfterCommit(tx, ['everyone'], 'bill', jobId);
   return id;
 }

@@ -14,6 +14,7 @@ import { notFound, unprocessable } from '../../http/errors.ts';
 import { takeOnce } from '../../http/once.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { keepTip } from '../booking/index.ts';
+import { queueMessage } from '../messages/index.ts';
 import { authorizeBill } from './bill-access.ts';
 import { isOver, readBill } from './bill.presenter.ts';
 import { readJobRow } from './bill.queries.ts';
@@ -111,6 +112,9 @@ export async function keepPayment(
     ...{ jobNumber: job.number, method: fields.method, amountCents: fields.amountCents },
   });
   await noteIfPaid(tx, job, by);
+  await queueMessage(tx, fields.recordedAt, {
+    ...{ kind: 'receipt', jobId: job.id, causeId: id, eventKey: `payment:${id}`, amountCents: fields.amountCents },
+  });
   hintAfterCommit(tx, ['everyone'], 'bill', job.id);
   return id;
 }

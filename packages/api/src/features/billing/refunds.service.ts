@@ -16,6 +16,7 @@ import { takeOnce } from '../../http/once.ts';
 import { PaymentError } from '../../integrations/payments/index.ts';
 import type { Payments } from '../../integrations/payments/index.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
+import { queueMessage } from '../messages/index.ts';
 import { readBill } from './bill.presenter.ts';
 import { creditLines } from './credit-notes.service.ts';
 import { noteIfPaid } from './note-paid.ts';
@@ -53,6 +54,16 @@ export async function refundPayment(
       state: found.method === 'card' ? 'asked' : 'done',
     });
     await Refund.create(row, { transaction: tx });
+    if (fields.kind === 'refund')
+      await queueMessage(tx, by.at, {
+        ...{
+          kind: 'refund',
+          jobId: job.id,
+          causeId: row.id,
+          eventKey: `refund:${row.id}`,
+          amountCents: fields.amountCents,
+        },
+      });
     await audit(tx, by, 'refund', row.id, fields.kind, { jobNumber: job.number, amountCents: fields.amountCents });
     hintAfterCommit(tx, ['everyone'], 'bill', job.id);
     return { answer: { ok: true } };

@@ -14,6 +14,7 @@ import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { wakeAfterCommit } from '../../realtime/wake.ts';
 import { createVisit, lockVisit, setVisitLines } from '../board/index.ts';
+import { queueMessage, queueWindow } from '../messages/index.ts';
 import { refuseGoneCustomer } from './job-customer.service.ts';
 import type { LineFields, PricedLine } from './job-lines.ts';
 import { keepLines, priceLines } from './job-lines.ts';
@@ -53,6 +54,7 @@ export async function orderJob(tx: Transaction, ctx: Ctx, fields: JobFields, id 
     1,
   );
   await createVisit(tx, { jobId: id, addressId: fields.addressId, minutes, lineIds: ids });
+  if (windows.windowFrom) await queueWindow(tx, ctx.now(), { jobId: id, version: 0 });
   return saved(tx, ctx, id, 'booked');
 }
 
@@ -69,6 +71,7 @@ export function updateJob(
     const isPriceMoved = fields.discountCents !== job.discountCents;
     if (isPriceMoved) refuseLargeDiscount(ctx, company, fields.discountCents, lines);
     const { lines: _asked, windowFrom, windowTo, ...columns } = fields;
+    const isWindowMoved = !isSameTime(job.windowFrom, windowFrom) || !isSameTime(job.windowTo, windowTo);
     await job.update(
       { ...columns, windowFrom: date(windowFrom), windowTo: date(windowTo), version: version + 1 },
       { transaction: tx },
@@ -76,6 +79,7 @@ export function updateJob(
     const { newIds, goneIds } = await keepLines(tx, id, lines);
     if (isPriceMoved || newIds.length > 0 || goneIds.length > 0) await refuseBilled(tx, id);
     if (newIds.length > 0 || goneIds.length > 0) await giveToVisit(tx, job, newIds);
+    if (isWindowMoved && windowFrom) await queueWindow(tx, ctx.now(), { jobId: id, version: version + 1 });
     return saved(tx, ctx, id, 'changed');
   });
 }
@@ -176,6 +180,13 @@ export function callOffJob(ctx: Ctx, id: string, version: number, reason: string
       );
     }
     await job.update({ calledOffReason: reason, version: version + 1 }, { transaction: tx });
+    const eventKey = `job:${id}:v${version + 1}`;
+    await queueMessage(tx, ctx.now(), {
+      kind: 'called_off',
+      jobId: id,
+      ...(open[0] && { visitId: open[0].id }),
+      eventKey,
+    });
     return saved(tx, ctx, id, 'called off', { reason });
   });
 }
@@ -254,6 +265,10 @@ async function saved(
     job.visits.map((visit) => visit.from),
   );
   return job;
+}
+
+function isSameTime(was: Date | null, instant: string | null): boolean {
+  return (was?.getTime() ?? null) === (instant ? Date.parse(instant) : null);
 }
 
 function date(instant: string | null): Date | null {

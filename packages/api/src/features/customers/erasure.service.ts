@@ -17,6 +17,7 @@ import { hintAfterCommit } from '../../realtime/hints.ts';
 import { eraseFromBills } from '../billing/index.ts';
 import { eraseJobNotes } from '../booking/index.ts';
 import { eraseSaidYes } from '../job-work/index.ts';
+import { eraseMessages } from '../messages/index.ts';
 import { eraseWalkRounds, removeErasedFiles } from '../walk-round/index.ts';
 import { eraseFromAnswers } from './erase-answers.service.ts';
 import { lockCustomer } from './customers.service.ts';
@@ -73,6 +74,7 @@ export async function eraseCustomer(
       (one) => one.id,
     );
     await dropMails(tx, ids);
+    await eraseMessages(tx, ids);
     await eraseFromAnswers(tx, ids);
     await eraseWalkRounds(tx, ids, at);
     await eraseFromBills(tx, ids, { name: nameAfter, at });

@@ -10,6 +10,7 @@ import type { Ctx } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { moveJobs } from '../booking/index.ts';
+import { moveMessages } from '../messages/index.ts';
 import { findCustomer } from './customers.queries.ts';
 import { lockCustomer } from './customers.service.ts';
 import { keepConsents } from './keep-parts.ts';
@@ -38,6 +39,7 @@ export function mergeCustomers(
     await moveParts(tx, staysId, goesId);
     await moveConsents(tx, ctx, stays, goes);
     await moveJobs(tx, goesId, staysId);
+    await moveMessages(tx, goesId, staysId);
     await stays.update({ ...plan.fields, version: version + 1 }, { transaction: tx });
     await Customer.update({ mergedInto: staysId }, { where: { mergedInto: goesId }, transaction: tx });
     await goes.update({ mergedInto: staysId, mergedAt: at, version: goesVersion + 1 }, { transaction: tx });

@@ -162,8 +162,12 @@ test('every table that names a customer has its place in a merge', async () => {
     'customers.merged_into',
     'customers_apart.customer_id',
     'customers_apart.other_id',
+    'enquiries.customer_id',
     'invoices.customer_id',
     'jobs.customer_id',
+    'mail_bounces.customer_id',
+    'message_stops.customer_id',
+    'messages.customer_id',
     'vehicles.customer_id',
   ]);
 });

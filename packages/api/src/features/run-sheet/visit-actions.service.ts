@@ -18,6 +18,7 @@ import { hintAfterCommit } from '../../realtime/hints.ts';
 import { authorizeVisit, lockVisit } from '../board/index.ts';
 import { followProgress } from '../clock/index.ts';
 import { fixChecklists, refuseUnconfirmed, refuseUnfinished } from '../job-work/index.ts';
+import { queueMessage } from '../messages/index.ts';
 import { isNews, movedAway, movedSince, tellDesk } from './clash.ts';
 import { readRunRows, toRunVisit } from './run-visits.queries.ts';
 import type { RunRow } from './run-visits.queries.ts';
@@ -103,8 +104,9 @@ async function perform(
     if (!step.ok) return clash(step.message);
     if (action.kind === 'start_work') refuseUnseen(row, action);
     await takeEffect(tx, ctx, visit, action.kind, action, times);
-    await record(tx, ctx, visit, action, times, step.to);
+    const eventId = await record(tx, ctx, visit, action, times, step.to);
     await setProgress(tx, visit, step.to, times.occurredAt, action.reason);
+    await tellCustomer(tx, ctx, visit, action.kind, eventId);
   }
   const answer = await shown();
   const personIds = answer.visit.crew.map((p) => p.personId);
@@ -146,6 +148,19 @@ async function takeEffect(
   }
 }
 
+/** Waits out the undo time; overtaken by then, it is dropped. */
+async function tellCustomer(
+  tx: Transaction,
+  ctx: Ctx,
+  { id: visitId, jobId }: Visit,
+  action: ProgressAction,
+  eventId: string,
+): Promise<void> {
+  const kind = action === 'set_off' ? 'on_the_way' : action === 'call_off' ? 'called_off' : null;
+  if (!kind) return;
+  await queueMessage(tx, ctx.now(), { kind, jobId, visitId, causeId: eventId, eventKey: `event:${eventId}` });
+}
+
 async function setProgress(tx: Transaction, visit: Visit, to: Progress, at: string, reason: string): Promise<void> {
   await visit.update(
     { progress: to, progressSince: new Date(at), reason, version: visit.version + 1 },
@@ -160,10 +175,11 @@ async function record(
   action: VisitAction,
   times: StampedTimes,
   to: Progress,
-): Promise<void> {
+): Promise<string> {
+  const id = uuid();
   await VisitEvent.create(
     {
-      id: uuid(),
+      id,
       visitId: visit.id,
       kind: action.kind,
       fromProgress: visit.progress,
@@ -176,4 +192,5 @@ async function record(
     },
     { transaction: tx },
   );
+  return id;
 }

@@ -1,0 +1,3 @@
+export { localTexts } from './local-texts.ts';
+export type { TakenText } from './local-texts.ts';
+export type { OutgoingText, Texts } from './texts.ts';
