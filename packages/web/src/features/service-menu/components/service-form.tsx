@@ -1,13 +1,6 @@
 import { useState } from 'react';
-import {
-  equipmentKinds,
-  equipmentNames,
-  sizeClassNames,
-  sizeClasses,
-  skillNames,
-  skills,
-} from '@driprail/shared/contracts/fields';
-import type { Equipment, SizeClass, Skill } from '@driprail/shared/contracts/fields';
+import { equipmentKinds, equipmentNames, skillNames, skills } from '@driprail/shared/contracts/fields';
+import type { Equipment, Skill } from '@driprail/shared/contracts/fields';
 import { serviceKinds } from '@driprail/shared/contracts/services.contract';
 import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { taxClassNames, taxClasses } from '@driprail/shared/domain/billing/tax-rates';
@@ -15,17 +8,18 @@ import { photoSetNames, photoSets, usualPhotoSet } from '@driprail/shared/domain
 import { Button } from '../../../components/button.tsx';
 import { CheckField, SelectField, TextArea, TextField } from '../../../components/field.tsx';
 import { SheetFoot } from '../../../components/sheet.tsx';
-import { parseMoney } from '../../../lib/format.ts';
 import { useSaveService } from '../api/services.queries.ts';
 import { IncludesField } from './includes-field.tsx';
 import { NeedsFields } from './needs-fields.tsx';
+import { PriceFields } from './price-fields.tsx';
+import type { PriceTexts } from './price-texts.ts';
+import { readPrices, textsOf } from './price-texts.ts';
 import { fieldsOf } from '../../../lib/fields.ts';
 
 export const kindNames = { package: 'Package', single: 'Single service', add_on: 'Add-on' } as const;
 const noNeeds: ServiceDto['needs'] = {
   ...{ water: false, power: false, dry: false, daylight: false, coldestTenths: null, hottestTenths: null },
 };
-type PriceTexts = Record<SizeClass, { price: string; minutes: string }>;
 
 /** A service by size class. A new price starts on a date; what was quoted keeps its own. */
 export function ServiceForm({
@@ -219,34 +213,7 @@ export function ServiceForm({
           onChange={(includes) => setValue({ ...value, includes })}
         />
       ) : null}
-      <h3 className="sec mt-4">Price and minutes by size class</h3>
-      <div className="grid gap-2 mt-2">
-        {sizeClasses.map((size) => (
-          <div
-            key={size}
-            role="group"
-            aria-label={sizeClassNames[size]}
-            className="grid grid-cols-[1fr_120px_120px] gap-3 items-end"
-          >
-            <span className="self-center">{sizeClassNames[size]}</span>
-            <TextField
-              label="Price"
-              inputMode="decimal"
-              placeholder="not sold"
-              value={prices[size].price}
-              error={fields[`price.${size}`]}
-              onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], price: event.target.value } })}
-            />
-            <TextField
-              label="Minutes"
-              inputMode="numeric"
-              value={prices[size].minutes}
-              error={fields[`minutes.${size}`]}
-              onChange={(event) => setPrices({ ...prices, [size]: { ...prices[size], minutes: event.target.value } })}
-            />
-          </div>
-        ))}
-      </div>
+      <PriceFields value={prices} fields={fields} onChange={setPrices} />
       <div className="grid grid-cols-2 gap-3 mt-3">
         <TextField
           label="These prices start on"
@@ -274,30 +241,4 @@ export function ServiceForm({
       </SheetFoot>
     </form>
   );
-}
-
-function textsOf(service: ServiceDto | null): PriceTexts {
-  const entries = sizeClasses.map((size) => {
-    const price = service?.prices.find((p) => p.sizeClass === size);
-    return [
-      size,
-      { price: price ? (price.priceCents / 100).toFixed(2) : '', minutes: price ? String(price.minutes) : '' },
-    ];
-  });
-  return Object.fromEntries(entries) as PriceTexts;
-}
-
-function readPrices(texts: PriceTexts) {
-  const fields: Record<string, string> = {};
-  const prices = sizeClasses.flatMap((size) => {
-    const { price, minutes } = texts[size];
-    if (price.trim() === '' && minutes.trim() === '') return [];
-    const priceCents = parseMoney(price);
-    const whole = /^\d{1,5}$/.test(minutes.trim()) ? Number(minutes) : 0;
-    if (priceCents === null || priceCents < 0) fields[`price.${size}`] = 'Give an amount like 240.00.';
-    if (whole < 5) fields[`minutes.${size}`] = 'At least 5 minutes.';
-    return [{ sizeClass: size, priceCents: priceCents ?? 0, minutes: whole }];
-  });
-  if (prices.length === 0) fields['prices'] = 'Give a price for at least one size class.';
-  return { prices, fields };
 }
