@@ -9,12 +9,11 @@ import type { RouteTable } from '../../http/route.ts';
 import { okay, publicRoute, route } from '../../http/route.ts';
 import { PaymentSignatureError } from '../../integrations/payments/index.ts';
 import type { PaymentEvent, Payments } from '../../integrations/payments/index.ts';
-import type { FileStore } from '../../integrations/storage/index.ts';
 import { authorizeBill } from './bill-access.ts';
 import { readBill } from './bill.presenter.ts';
+import type { BillingParts } from './billing-parts.ts';
 import { readCounts, readHolders } from './cash.queries.ts';
 import * as cash from './cash.service.ts';
-import type { CustomerLinks } from './customer-links.ts';
 import { customerPageRoutes } from './customer-page.routes.ts';
 import { readDayBills } from './day-bills.queries.ts';
 import { readInvoicePdf } from './invoice-pdf.ts';
@@ -26,14 +25,6 @@ import { takeEvent } from './payment-events.service.ts';
 import { recordPayment } from './payments.service.ts';
 import { creditBill, refundPayment } from './refunds.service.ts';
 import * as taxes from './taxes.service.ts';
-
-export interface BillingParts {
-  payments: Payments;
-  links: CustomerLinks;
-  /** Where photos are kept. */
-  store: FileStore;
-  baseUrlOf: (req: Request) => string;
-}
 
 export function billingRoutes(table: RouteTable, parts: BillingParts): void {
   const { payments, links, baseUrlOf } = parts;

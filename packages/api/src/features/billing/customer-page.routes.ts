@@ -5,7 +5,7 @@ import type { RouteTable } from '../../http/route.ts';
 import { okay, publicRoute } from '../../http/route.ts';
 import { readCustomerPhoto } from '../walk-round/index.ts';
 import { openCardPage } from './card.service.ts';
-import type { BillingParts } from './billing.routes.ts';
+import type { BillingParts } from './billing-parts.ts';
 import { readCustomerPage } from './customer-page.queries.ts';
 import { giveFeedback } from './feedback.service.ts';
 import { readInvoicePdf } from './invoice-pdf.ts';
