@@ -65,6 +65,7 @@ export const visitActionBody = z.strictObject({
     .max(7 * 24 * 60)
     .optional(),
 });
+export type VisitAction = z.infer<typeof visitActionBody>;
 export const postVisitAction = endpoint({
   method: 'post',
   path: '/api/visits/:id/actions',

@@ -1,5 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
+import type { VisitAction } from '@driprail/shared/contracts/run-sheet.contract';
 import type { Progress } from '@driprail/shared/domain/board/progress';
 import { actionNames } from '@driprail/shared/domain/board/progress';
 import type { StampedTimes } from '@driprail/shared/domain/time/device';
@@ -11,7 +12,6 @@ import { select } from '../../db/sequelize.ts';
 import type { Ctx } from '../../http/context.ts';
 import { AppError } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
-import type { VisitAction } from './visit-actions.service.ts';
 
 /** States that only the board brings about: a press that does not fit them was made in ignorance of the board. */
 const BY_BOARD: readonly Progress[] = ['unplaced', 'called_off'];

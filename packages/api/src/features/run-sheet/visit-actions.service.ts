@@ -1,7 +1,6 @@
 import type { Transaction } from 'sequelize';
 import { v7 as uuid } from 'uuid';
-import type { z } from 'zod';
-import type { RunVisitDto, visitActionBody } from '@driprail/shared/contracts/run-sheet.contract';
+import type { RunVisitDto, VisitAction } from '@driprail/shared/contracts/run-sheet.contract';
 import type { Progress, ProgressAction } from '@driprail/shared/domain/board/progress';
 import { takeStep } from '@driprail/shared/domain/board/progress';
 import { stamp } from '@driprail/shared/domain/time/device';
@@ -24,8 +23,6 @@ import { readRunRows, toRunVisit } from './run-visits.queries.ts';
 import type { RunRow } from './run-visits.queries.ts';
 import { undoLast } from './undo.ts';
 import { clearCrew, finishLines, openLineIds, recordCrew, recordPresser, splitRest } from './visit-steps.ts';
-
-export type VisitAction = z.infer<typeof visitActionBody>;
 
 /**
  * One press on a visit, taken once: progress, undo, or a report of trouble.
