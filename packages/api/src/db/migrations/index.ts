@@ -19,6 +19,7 @@ import { customers } from './2026-12-01-018-customers.ts';
 import { erasedBills } from './2026-12-01-018-erased-bills.ts';
 import { billing } from './2026-12-01-017-billing.ts';
 import { messages } from './2026-12-01-019-messages.ts';
+import { onlineBooking } from './2026-12-01-020-online-booking.ts';
 import { serviceNeeds } from './2026-12-01-021-service-needs.ts';
 import { callBacks } from './2026-12-01-022-call-backs.ts';
 
@@ -46,4 +47,5 @@ export const migrations: Migration[] = [
   serviceNeeds,
   messages,
   callBacks,
+  onlineBooking,
 ];

@@ -13,7 +13,7 @@ import { rangeOf } from '../../db/models/columns.ts';
 import { Visit, VisitEvent } from '../../db/models/index.ts';
 import { inTransaction, run } from '../../db/sequelize.ts';
 import { authorize } from '../../authz/authorize.ts';
-import type { Ctx } from '../../http/context.ts';
+import type { Ctx, Doer } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { wakeAfterCommit } from '../../realtime/wake.ts';
@@ -68,7 +68,7 @@ export function moveVisits(ctx: Ctx, moves: MoveRequest[], accept: Acceptance[])
     for (const move of moves) {
       const visit = rows.find((row) => row.id === move.visitId);
       const was = before.get(move.visitId);
-      if (visit && was) await save(tx, ctx, visit, was, move, { accept, judgement, zone });
+      if (visit && was) await savePlan(tx, ctx, visit, was, move, { accept, judgement, zone });
     }
     await run('SET CONSTRAINTS visits_van_at_one_stop IMMEDIATE', {}, tx);
     return tell(tx, ids, before);
@@ -92,9 +92,9 @@ function refuseStale({ ability }: Ctx, move: MoveRequest, visit: VisitDto | unde
 }
 
 /** Judges each target day's moves on that day's board; what leaves the board is judged on the day it leaves. */
-async function judge(
+export async function judge(
   tx: Transaction,
-  { now }: Ctx,
+  { now }: Doer,
   moves: MoveRequest[],
   before: Map<string, VisitDto>,
 ): Promise<Judgement> {
@@ -131,9 +131,9 @@ interface Around {
   zone: string;
 }
 
-async function save(
+export async function savePlan(
   tx: Transaction,
-  ctx: Ctx,
+  ctx: Doer,
   visit: Visit,
   was: VisitDto,
   move: MoveRequest,
@@ -189,7 +189,7 @@ async function save(
 }
 
 /** Every open board and the phones of the crews before and after hear of it. */
-async function tell(tx: Transaction, ids: string[], before: Map<string, VisitDto>): Promise<VisitDto[]> {
+export async function tell(tx: Transaction, ids: string[], before: Map<string, VisitDto>): Promise<VisitDto[]> {
   const after = await readVisits({ ids }, tx);
   for (const visit of after) {
     const personIds = [...(before.get(visit.id)?.crew ?? []), ...visit.crew].map((p) => p.personId);

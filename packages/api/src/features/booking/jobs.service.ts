@@ -9,7 +9,7 @@ import { companyOf } from '../../db/company.ts';
 import type { CompanySettings } from '../../db/models/index.ts';
 import { Address, Invoice, Job, JobLine, Visit, VisitLine } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
-import type { Ctx } from '../../http/context.ts';
+import type { Ctx, Doer } from '../../http/context.ts';
 import { conflict, notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { wakeAfterCommit } from '../../realtime/wake.ts';
@@ -37,7 +37,7 @@ export function createJob(ctx: Ctx, fields: JobFields, id = uuid()): Promise<Job
 }
 
 /** The same inside a caller's transaction. */
-export async function orderJob(tx: Transaction, ctx: Ctx, fields: JobFields, id = uuid()): Promise<JobDto> {
+export async function orderJob(tx: Transaction, ctx: Doer, fields: JobFields, id = uuid()): Promise<JobDto> {
   await refuseGoneCustomer(tx, fields.customerId);
   const company = await companyOf(tx);
   const lines = await check(tx, fields, dayOf(fields.windowFrom ?? ctx.now().toISOString(), company.zone));
@@ -95,7 +95,7 @@ async function refuseBilled(tx: Transaction, jobId: string): Promise<void> {
 }
 
 /** The owner sets how much the desk gives alone. @throws 422 at the discount */
-function refuseLargeDiscount(ctx: Ctx, company: CompanySettings, discountCents: number, lines: PricedLine[]): void {
+function refuseLargeDiscount(ctx: Doer, company: CompanySettings, discountCents: number, lines: PricedLine[]): void {
   if (ctx.actor.role === 'owner' || discountCents === 0) return;
   const gross = lines.reduce((sum, line) => sum + line.priceCents, 0);
   const most = Math.floor((gross * company.deskDiscountPercent) / 100);
@@ -154,41 +154,50 @@ export async function copyJob(ctx: Ctx, id: string): Promise<JobDto> {
 
 /** Visits that have not been worked are called off with the job; what was done stays. */
 export function callOffJob(ctx: Ctx, id: string, version: number, reason: string): Promise<JobDto> {
-  return inTransaction(async (tx) => {
-    const job = await lockJob(tx, id, version);
-    const visits = await Visit.findAll({
-      where: { jobId: id },
-      order: [['id', 'ASC']],
-      transaction: tx,
-      lock: tx.LOCK.UPDATE,
-    });
-    if (visits.some((visit) => visit.progress === 'working')) {
-      throw unprocessable('working', 'A crew is at work on this job. They end it from the run sheet.');
-    }
-    const open = visits.filter((visit) => ['unplaced', 'placed', 'on_the_way', 'on_site'].includes(visit.progress));
-    if (open.length === 0) throw conflict('ended', 'This job has ended already.');
-    for (const visit of open) {
-      await visit.update(
-        {
-          progress: 'called_off',
-          progressSince: ctx.now(),
-          reason,
-          planVersion: visit.planVersion + 1,
-          version: visit.version + 1,
-        },
-        { transaction: tx },
-      );
-    }
-    await job.update({ calledOffReason: reason, version: version + 1 }, { transaction: tx });
-    const eventKey = `job:${id}:v${version + 1}`;
-    await queueMessage(tx, ctx.now(), {
-      kind: 'called_off',
-      jobId: id,
-      ...(open[0] && { visitId: open[0].id }),
-      eventKey,
-    });
-    return saved(tx, ctx, id, 'called off', { reason });
+  return inTransaction((tx) => callOff(tx, ctx, id, version, reason));
+}
+
+/** The same inside a caller's transaction. */
+export async function callOff(
+  tx: Transaction,
+  ctx: Doer,
+  id: string,
+  version: number,
+  reason: string,
+): Promise<JobDto> {
+  const job = await lockJob(tx, id, version);
+  const visits = await Visit.findAll({
+    where: { jobId: id },
+    order: [['id', 'ASC']],
+    transaction: tx,
+    lock: tx.LOCK.UPDATE,
   });
+  if (visits.some((visit) => visit.progress === 'working')) {
+    throw unprocessable('working', 'A crew is at work on this job. They end it from the run sheet.');
+  }
+  const open = visits.filter((visit) => ['unplaced', 'placed', 'on_the_way', 'on_site'].includes(visit.progress));
+  if (open.length === 0) throw conflict('ended', 'This job has ended already.');
+  for (const visit of open) {
+    await visit.update(
+      {
+        progress: 'called_off',
+        progressSince: ctx.now(),
+        reason,
+        planVersion: visit.planVersion + 1,
+        version: visit.version + 1,
+      },
+      { transaction: tx },
+    );
+  }
+  await job.update({ calledOffReason: reason, version: version + 1 }, { transaction: tx });
+  const eventKey = `job:${id}:v${version + 1}`;
+  await queueMessage(tx, ctx.now(), {
+    kind: 'called_off',
+    jobId: id,
+    ...(open[0] && { visitId: open[0].id }),
+    eventKey,
+  });
+  return saved(tx, ctx, id, 'called off', { reason });
 }
 
 /** Another going-out to the job: a second day, or a second crew side by side at the same parking place. */
@@ -249,7 +258,7 @@ async function check(tx: Transaction, fields: JobFields, on: string): Promise<Pr
 
 async function saved(
   tx: Transaction,
-  { actor, now }: Ctx,
+  { actor, now }: Doer,
   id: string,
   action: string,
   details: Record<string, unknown> = {},

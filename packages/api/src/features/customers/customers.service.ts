@@ -5,7 +5,7 @@ import type { CustomerBody } from '@driprail/shared/contracts/customers-record.c
 import { audit } from '../../db/audit.ts';
 import { Customer } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
-import type { Ctx } from '../../http/context.ts';
+import type { Ctx, Doer } from '../../http/context.ts';
 import { conflict, notFound } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { findCustomer } from './customers.queries.ts';
@@ -20,7 +20,7 @@ export function createCustomer(ctx: Ctx, fields: CustomerFields, id = uuid()): P
 /** The same inside a caller's transaction. */
 export async function addCustomer(
   tx: Transaction,
-  ctx: Ctx,
+  ctx: Doer,
   { addresses, vehicles, preferredCrew, consents, ...fields }: CustomerFields,
   id = uuid(),
 ): Promise<CustomerDto> {
@@ -58,7 +58,7 @@ type Parts = Pick<CustomerFields, 'addresses' | 'vehicles' | 'preferredCrew' | '
 
 async function keepParts(
   tx: Transaction,
-  ctx: Ctx,
+  ctx: Doer,
   id: string,
   { addresses, vehicles, preferredCrew, consents }: Parts,
 ): Promise<void> {
@@ -68,7 +68,7 @@ async function keepParts(
   if (consents) await keepConsents(tx, ctx, id, consents);
 }
 
-async function saved(tx: Transaction, { actor, now }: Ctx, id: string, action: string): Promise<CustomerDto> {
+export async function saved(tx: Transaction, { actor, now }: Doer, id: string, action: string): Promise<CustomerDto> {
   await audit(tx, { userId: actor.userId, at: now() }, 'customer', id, action);
   const customer = await findCustomer(id, tx);
   if (!customer) throw notFound('That customer');

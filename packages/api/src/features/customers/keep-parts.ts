@@ -6,7 +6,7 @@ import { nameFromLabel, vehicleLabel } from '@driprail/shared/domain/vehicle/veh
 import { readVin } from '@driprail/shared/domain/vehicle/vin';
 import { todayOf } from '../../db/company.ts';
 import { Address, CustomerConsent, CustomerCrew, Vehicle } from '../../db/models/index.ts';
-import type { Ctx } from '../../http/context.ts';
+import type { Doer } from '../../http/context.ts';
 import { unprocessable } from '../../http/errors.ts';
 
 /** Addresses left out go out of sight, but stay on record: past jobs name them. */
@@ -47,7 +47,7 @@ export async function keepVehicles(
 }
 
 /** Year, make and model where they are given, else what was typed in one piece. */
-function nameOf({ label = '', year = null, make = '', model = '' }: z.input<typeof vehicleBody>) {
+export function nameOf({ label = '', year = null, make = '', model = '' }: z.input<typeof vehicleBody>) {
   const name = make || model ? { year, make, model } : nameFromLabel(label);
   return { ...name, label: vehicleLabel(name) };
 }
@@ -73,7 +73,7 @@ export async function keepPreferredCrew(tx: Transaction, customerId: string, per
 /** Adds each answer that differs from the latest. @throws 422 at the field for a day to come */
 export async function keepConsents(
   tx: Transaction,
-  { actor, now }: Ctx,
+  { actor, now }: Doer,
   customerId: string,
   list: z.input<typeof consentBody>[],
 ): Promise<void> {
