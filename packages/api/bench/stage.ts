@@ -8,6 +8,7 @@ import type { Socket } from 'socket.io-client';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { seedDemo } from '../../../seed/src/seed-demo.ts';
 import { createApp } from '../src/app.ts';
+import { deliveryParts } from '../src/deliveries.ts';
 import { readConfig } from '../src/config.ts';
 import { analyze, migrate } from '../src/db/migrate.ts';
 import { connect, disconnect } from '../src/db/sequelize.ts';
@@ -63,6 +64,11 @@ export async function openApp(fill: (now: Date) => Promise<unknown>): Promise<Op
     secret: SECRET,
     setUpCode: new SetUpCode(),
     localMail: mail.taken,
+    deliveries: deliveryParts({
+      ...{ secret: SECRET, sendMail: mail.send, texts: null, mailKnowsRepeats: true },
+      baseUrl: () => 'http://127.0.0.1',
+    }),
+    localTexts: null,
     payments: paymentsFor(null),
     pushKeys: null,
   });

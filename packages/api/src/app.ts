@@ -7,6 +7,7 @@ import type { Clock } from './clock.ts';
 import type { Config } from './config.ts';
 import { registerLocalStrategy, wakePhones } from './features/access/index.ts';
 import { CustomerLinks } from './features/billing/index.ts';
+import type { DeliveryParts } from './features/messages/index.ts';
 import type { SetUpCode } from './features/settings/index.ts';
 import { errorHandler } from './http/error-handler.ts';
 import { forbidden, notFound } from './http/errors.ts';
@@ -18,6 +19,7 @@ import type { Payments } from './integrations/payments/index.ts';
 import type { PushKeys } from './integrations/push/index.ts';
 import { geocoderFor } from './integrations/maps/index.ts';
 import { storeFor } from './integrations/storage/index.ts';
+import type { TakenText } from './integrations/texts/index.ts';
 import type { Logger } from './log.ts';
 import type { TakenMail } from './mail/transport.ts';
 import { hub } from './realtime/hub.ts';
@@ -32,6 +34,9 @@ export interface AppParts {
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
   payments: Payments;
+  /** What messages to customers are made of; previews and links are made with it. */
+  deliveries: DeliveryParts;
+  localTexts: (() => TakenText[]) | null;
   /** Null: phones are not woken. */
   pushKeys: PushKeys | null;
 }
@@ -43,7 +48,8 @@ export interface App {
 }
 
 /** Puts the service together without listening. The database must be connected and migrated. */
-export function createApp({ config, now, log, secret, setUpCode, localMail, payments, pushKeys }: AppParts): App {
+export function createApp(parts: AppParts): App {
+  const { config, now, log, secret, setUpCode, localMail, payments, deliveries, pushKeys } = parts;
   const app = express();
   const server = createServer(app);
   const pool = new pg.Pool({ connectionString: config.databaseUrl, max: 4 });
@@ -82,6 +88,9 @@ export function createApp({ config, now, log, secret, setUpCode, localMail, paym
     hasLocalMail: config.hasLocalMail,
     setUpCode,
     localMail,
+    localTexts: parts.localTexts,
+    deliveries,
+    hookSecrets: config.hookSecrets,
     store: storeFor(config),
     geocoder: geocoderFor(config),
     push,

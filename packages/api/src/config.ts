@@ -21,6 +21,9 @@ const environment = z.object({
   SMTP_URL: z.string().optional(),
   MAIL_FROM: z.string().default('Driprail <no-reply@driprail.example>'),
   PUBLIC_URL: z.url().optional(),
+  /** Sign what a mail or text service posts back; without one its hook is off. */
+  MAIL_WEBHOOK_SECRET: z.string().min(16).optional(),
+  TEXTS_WEBHOOK_SECRET: z.string().min(16).optional(),
   TRUST_PROXY: flag,
   /** The key pair of web push; without it, made once in the data folder. */
   VAPID_PUBLIC_KEY: z.string().optional(),
@@ -69,6 +72,7 @@ export function readConfig(env: NodeJS.ProcessEnv) {
     smtpUrl: e.SMTP_URL ?? null,
     mailFrom: e.MAIL_FROM,
     publicUrl: e.PUBLIC_URL ?? null,
+    hookSecrets: { mail: e.MAIL_WEBHOOK_SECRET ?? null, texts: e.TEXTS_WEBHOOK_SECRET ?? null },
     s3: e.S3_BUCKET
       ? {
           bucket: e.S3_BUCKET,

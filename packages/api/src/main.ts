@@ -7,7 +7,7 @@ import { analyze, migrate } from './db/migrate.ts';
 import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
 import { issueDueInvoices, lookUpOpenPages, settleAskedRefunds } from './features/billing/index.ts';
-import { sendDueMessages, takeUpLeft } from './features/messages/index.ts';
+import { queueTimely, sendDueMessages, takeUpLeft } from './features/messages/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
 import { removeErasedFiles } from './features/walk-round/index.ts';
 import { startFakePayments } from './integrations/payments/fake/fake-payments.ts';
@@ -48,7 +48,8 @@ async function main(): Promise<void> {
   const webhookUrl = () => `${originOf(config.host, port)}/api/webhooks/payments`;
   const localPayments = config.hasLocalPayments ? await startFakePayments({ webhookUrl, now }) : null;
   const payments = paymentsFor(localPayments?.place ?? config.payments);
-  const texts = localTexts(now);
+  // Beyond this machine nobody can be shown the fake, or think that it sent something.
+  const texts = config.hasLocalMail ? localTexts(now) : null;
   const deliveries = deliveryParts({
     ...{ secret, sendMail: send, texts, mailKnowsRepeats: mail !== null },
     baseUrl: () => config.publicUrl?.replace(/\/$/, '') ?? originOf(config.host, port),
@@ -61,6 +62,8 @@ async function main(): Promise<void> {
     setUpCode,
     localMail: config.hasLocalMail && mail ? mail.taken : null,
     payments,
+    deliveries,
+    localTexts: texts?.taken ?? null,
     pushKeys: await pushKeys(config.push, config.dataDir, config.publicUrl ?? 'mailto:no-reply@driprail.example'),
   });
   const outbox = every(
@@ -73,6 +76,7 @@ async function main(): Promise<void> {
     5,
     async () => {
       await takeUpLeft(deliveries, now());
+      await queueTimely(now());
       await sendDueMessages(deliveries, now);
     },
     (error) => log.warn({ err: error }, 'messages'),

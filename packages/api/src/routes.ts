@@ -11,6 +11,8 @@ import { jobsRoutes } from './features/booking/index.ts';
 import { clockRoutes } from './features/clock/index.ts';
 import { customersRoutes } from './features/customers/index.ts';
 import { jobWorkRoutes } from './features/job-work/index.ts';
+import { messagesRoutes } from './features/messages/index.ts';
+import type { DeliveryParts, HookSecrets } from './features/messages/index.ts';
 import { payRoutes } from './features/pay/index.ts';
 import { peopleRoutes } from './features/people/index.ts';
 import { recordsRoutes } from './features/records/index.ts';
@@ -25,12 +27,16 @@ import type { RouteTable } from './http/route.ts';
 import { publicRoute, route } from './http/route.ts';
 import type { Geocoder } from './integrations/maps/index.ts';
 import type { FileStore } from './integrations/storage/index.ts';
+import type { TakenText } from './integrations/texts/index.ts';
 import type { TakenMail } from './mail/transport.ts';
 
 export interface RouteParts {
   hasLocalMail: boolean;
   setUpCode: SetUpCode;
   localMail: (() => TakenMail[]) | null;
+  localTexts: (() => TakenText[]) | null;
+  deliveries: DeliveryParts;
+  hookSecrets: HookSecrets;
   store: FileStore;
   geocoder: Geocoder | null;
   push: PushRules | null;
@@ -48,7 +54,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   publicRoute(table, getOpenApi, () => Promise.resolve(openApiOf(table.endpoints)));
   route(table, listLocalMail, () => {
     if (!parts.localMail) throw notFound('Local mail');
-    return Promise.resolve({ mails: parts.localMail() });
+    return Promise.resolve({ mails: parts.localMail(), texts: parts.localTexts?.() ?? [] });
   });
   accessRoutes(table, parts);
   loginsRoutes(table, parts);
@@ -57,6 +63,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   billingRoutes(table, parts);
   walkRoundRoutes(table, parts.store);
   customersRoutes(table, parts);
+  messagesRoutes(table, parts);
   settingsRoutes(table, { code: parts.setUpCode, hasLocalMail: parts.hasLocalMail });
   for (const mount of [
     peopleRoutes,

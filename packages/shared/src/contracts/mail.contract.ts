@@ -8,6 +8,14 @@ export const listLocalMail = endpoint({
   roles: ['owner'],
   summary: 'What the local mail fake took; only with the fake, on loopback.',
   response: z.object({
-    mails: z.array(z.object({ id, to: z.string(), subject: z.string(), text: z.string(), at: instant })),
+    mails: z.array(
+      z.object({
+        ...{ id, to: z.string(), subject: z.string(), text: z.string(), at: instant },
+        html: z.string().optional(),
+        /** The calendar file that came with it. */
+        calendar: z.string().optional(),
+      }),
+    ),
+    texts: z.array(z.object({ key: z.string(), to: z.string(), body: z.string(), at: instant })),
   }),
 });

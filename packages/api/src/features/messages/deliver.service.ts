@@ -6,7 +6,7 @@ import type { MessageStanding } from '@driprail/shared/domain/messages/standing'
 import { companyOf } from '../../db/company.ts';
 import { Message, MessageSettings } from '../../db/models/index.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
-import type { Texts } from '../../integrations/texts/index.ts';
+import type { OutgoingText, Texts } from '../../integrations/texts/index.ts';
 import type { OutgoingMail, SendMail } from '../../mail/transport.ts';
 import { RETRY_SECONDS } from '../../outbox/retry.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
@@ -18,7 +18,8 @@ import { readShownVisit, readStanding } from './standing.queries.ts';
 
 export interface DeliveryParts extends RenderParts {
   sendMail: SendMail;
-  texts: Texts;
+  /** Null: no text service is set up. */
+  texts: Texts | null;
   /** Whether a mail that is handed over twice under one id goes out once. SMTP servers do not promise it. */
   mailKnowsRepeats: boolean;
 }
@@ -60,7 +61,10 @@ async function claimNext(tx: Transaction, parts: DeliveryParts, now: Date): Prom
   const message = await Message.findByPk(row.id, { transaction: tx, rejectOnEmpty: true });
   const visit = await readShownVisit(tx, message);
   const [standing, reach] = [await readStanding(tx, message, visit), await readReach(tx, message.jobId, message.kind)];
-  const reason = closedBecause(reach, message.kind, message.channel) ?? overtakenBy(now.toISOString(), standing);
+  const reason =
+    (message.channel === 'text' && !parts.texts ? 'No text service is set up.' : null) ??
+    closedBecause(reach, message.kind, message.channel) ??
+    overtakenBy(now.toISOString(), standing);
   if (reason) {
     await message.update({ state: 'dropped', reason }, { transaction: tx });
     tell(tx, message);
@@ -84,9 +88,9 @@ async function claimNext(tx: Transaction, parts: DeliveryParts, now: Date): Prom
     },
     { transaction: tx },
   );
+  const sendText = async (text: OutgoingText) => parts.texts?.send(text);
   const whole: OutgoingMail = { id: message.id, ...mail };
-  const hand = () =>
-    isMail ? parts.sendMail(whole) : parts.texts.send({ to: reach.phone, body: text, key: message.id });
+  const hand = () => (isMail ? parts.sendMail(whole) : sendText({ to: reach.phone, body: text, key: message.id }));
   return { message, hand };
 }
 

@@ -39,7 +39,7 @@ export interface Rendered {
 type About = Pick<Message, 'kind' | 'jobId' | 'amountCents'>;
 
 /** The company's words for a kind, ours where it has none of its own. */
-export async function templateOf(tx: Transaction, kind: MessageKind): Promise<MessageTemplate> {
+async function templateOf(tx: Transaction, kind: MessageKind): Promise<MessageTemplate> {
   const row = await MessageKindRow.findByPk(kind, { transaction: tx });
   const ours = ourTemplates[kind];
   return { subject: row?.subject ?? ours.subject, body: row?.body ?? ours.body, text: row?.textBody ?? ours.text };
@@ -50,10 +50,10 @@ export async function renderMessage(
   tx: Transaction,
   parts: RenderParts,
   about: About,
-  { reach, visit, now }: { reach: Reach; visit: VisitDto | null; now: Date },
+  { reach, visit, now, ...given }: { reach: Reach; visit: VisitDto | null; now: Date; template?: MessageTemplate },
 ): Promise<Rendered> {
   const company = await companyOf(tx);
-  const template = await templateOf(tx, about.kind);
+  const template = given.template ?? (await templateOf(tx, about.kind));
   const link = `${parts.baseUrl()}/c/${await parts.pages.tokenFor(tx, about.jobId, now)}`;
   const values = messageValues({
     ...{ company, customer: reach, visit, link, now },
@@ -75,7 +75,8 @@ interface Composing {
   job: Pick<Job, 'number' | 'version'>;
 }
 
-function composed(parts: RenderParts, c: Composing): Rendered {
+/** Words, look and links put together. */
+export function composed(parts: RenderParts, c: Composing): Rendered {
   const { kind, company, values } = c;
   const subject = fillPlaceholders(c.template.subject, values).replace(/\s+/g, ' ').trim();
   const body = fillPlaceholders(c.template.body, values);
