@@ -1,6 +1,17 @@
 import { z } from 'zod';
 import { endpoint } from './endpoint.ts';
-import { cents, id, instant, longText, minutes, planVersion, positiveCents, shortText, sizeClass } from './fields.ts';
+import {
+  cents,
+  day,
+  id,
+  instant,
+  longText,
+  minutes,
+  planVersion,
+  positiveCents,
+  shortText,
+  sizeClass,
+} from './fields.ts';
 import { visitDto } from './visit.dto.ts';
 import { callBackCauses } from '../domain/board/call-back.ts';
 import { desk, everyone } from '../authz/actor.ts';
@@ -126,6 +137,32 @@ export const copyJob = endpoint({
   summary: 'Order the same again at today’s prices; lands on Unplaced.',
   params: z.object({ id }),
   response: z.object({ job: jobDto }),
+});
+/** How many days ahead a car is listed as due. */
+export const DUE_AHEAD_DAYS = 14;
+export const listDue = endpoint({
+  method: 'get',
+  path: '/api/due-again',
+  roles: desk,
+  summary:
+    'Cars whose service is due again by the menu’s interval, and that nothing is booked for; the longest overdue first.',
+  response: z.object({
+    due: z.array(
+      z.object({
+        /** The job that was done last. */
+        jobId: id,
+        jobNumber: z.int(),
+        customerId: id,
+        customerName: z.string(),
+        phone: z.string(),
+        vehicle: z.string(),
+        serviceName: z.string(),
+        doneOn: day,
+        dueOn: day,
+        priceCents: z.int(),
+      }),
+    ),
+  }),
 });
 export const callBackJob = endpoint({
   method: 'post',

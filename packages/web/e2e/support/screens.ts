@@ -141,6 +141,7 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
   { name: 'customer-edit', role, path: customerPath, open: press('Edit') },
   { name: 'customer-duplicates', role, path: '/customers', open: press(/^Likely duplicates/) },
   { name: 'customer-data', role, path: async (context) => `${await customerPath(context)}/data` },
+  { name: 'due-again', role, path: '/due-again' },
   { name: 'service-menu', role, path: '/service-menu' },
   { name: 'vans', role, path: '/vans' },
   { name: 'people', role, path: '/people' },

@@ -20,6 +20,7 @@ export const paths = {
   customers: '/customers',
   customer: (id: string) => `/customers/${id}`,
   customerData: (id: string) => `/customers/${id}/data`,
+  dueAgain: '/due-again',
   services: '/service-menu',
   vans: '/vans',
   people: '/people',

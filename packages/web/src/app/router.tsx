@@ -44,6 +44,7 @@ const CustomerDataPage = lazyPage(
 const ServiceMenuPage = lazyPage(
   async () => (await import('../features/service-menu/pages/service-menu.page.tsx')).ServiceMenuPage,
 );
+const DuePage = lazyPage(async () => (await import('../features/booking/pages/due.page.tsx')).DuePage);
 const VansPage = lazyPage(async () => (await import('../features/people/pages/vans.page.tsx')).VansPage);
 const PeoplePage = lazyPage(async () => (await import('../features/people/pages/people.page.tsx')).PeoplePage);
 const HoursPage = lazyPage(async () => (await import('../features/people/pages/hours.page.tsx')).HoursPage);
@@ -102,6 +103,7 @@ export function Router() {
                 <Route path={paths.customers} element={<CustomersPage />} />
                 <Route path={`${paths.customers}/:id`} element={<CustomersPage />} />
                 <Route path={paths.customerData(':id')} element={<CustomerDataPage />} />
+                <Route path={paths.dueAgain} element={<DuePage />} />
                 <Route path={paths.services} element={<ServiceMenuPage />} />
                 <Route path={paths.vans} element={<VansPage />} />
                 <Route path={paths.people} element={<PeoplePage />} />

@@ -4,6 +4,8 @@ import type { Ctx } from '../../http/context.ts';
 import { notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { okay, route } from '../../http/route.ts';
+import { todayOf } from '../../db/company.ts';
+import { carsDue } from './due.queries.ts';
 import { callBackJob } from './call-back.service.ts';
 import { findJobs, readJob } from './jobs.queries.ts';
 import { addVisit, callOffJob, copyJob, createJob, updateJob } from './jobs.service.ts';
@@ -11,6 +13,7 @@ import { recordTip } from './tips.service.ts';
 
 export function jobsRoutes(table: RouteTable): void {
   route(table, api.findJobs, async ({ query }) => ({ jobs: await findJobs(query.find) }));
+  route(table, api.listDue, async (_input, ctx) => ({ due: await carsDue(await todayOf(ctx.now())) }));
   route(table, api.getJob, async ({ params }, ctx) => {
     const job = await readJob(params.id);
     if (!job) throw notFound('That job');

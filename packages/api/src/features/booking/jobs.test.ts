@@ -1,6 +1,7 @@
 import { beforeAll, expect, test } from 'vitest';
 import type TestAgent from 'supertest/lib/agent.js';
 import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
+import type { ServiceDto } from '@driprail/shared/contracts/services.contract';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
@@ -215,4 +216,27 @@ test('a call-back puts finished lines right for nothing, and nobody is billed fo
     })
     .expect(422);
   expect(again.body).toMatchObject({ error: { code: 'not_finished' } });
+});
+
+test('a car is due again by the menu’s interval, until something is booked for it', async () => {
+  const owner = await company.owner();
+  const { services } = (await owner.get('/api/services').expect(200)).body as { services: ServiceDto[] };
+  const wash = services.find((one) => one.id === company.wash.id);
+  if (!wash) throw new Error('the wash is on the menu');
+  const { name, kind, description, skills, equipment, isActive, position, version } = wash;
+  const fields = { name, kind, description, skills, equipment, isActive, position, version, intervalDays: 30 };
+  await owner.put(`/api/services/${wash.id}`).send(fields).expect(200);
+  const due = async () =>
+    ((await dispatcher.get('/api/due-again').expect(200)).body as { due: { doneOn: string; dueOn: string }[] }).due;
+  // Jobs of the tests above are still to come for the same car.
+  expect(await due()).toEqual([]);
+  const found = await dispatcher.get('/api/jobs?find=Naka').expect(200);
+  for (const { id } of (found.body as { jobs: { id: string }[] }).jobs) {
+    const job = jobIn((await dispatcher.get(`/api/jobs/${id}`).expect(200)).body);
+    await dispatcher.post(`/api/jobs/${id}/call-off`).send({ version: job.version, reason: 'Test' });
+  }
+  app.time.now = '2026-05-29T15:00:00Z';
+  expect(await due()).toEqual([]);
+  app.time.now = '2026-05-30T15:00:00Z';
+  expect(await due()).toMatchObject([{ doneOn: '2026-05-14', dueOn: '2026-06-13', serviceName: 'Wash and wax' }]);
 });

@@ -5,8 +5,10 @@ import {
   addVisit,
   callBackJob,
   callOffJob,
+  copyJob,
   createJob,
   getJob,
+  listDue,
   updateJob,
 } from '@driprail/shared/contracts/jobs.contract';
 import type { JobBody } from '@driprail/shared/contracts/jobs.contract';
@@ -28,6 +30,11 @@ export const menuQuery = queryOptions({
   queryFn: ({ signal }) => call(listServices, {}, signal),
 });
 
+export const dueQuery = queryOptions({
+  queryKey: ['jobs', 'due'],
+  queryFn: ({ signal }) => call(listDue, {}, signal),
+});
+
 const refresh = (client: QueryClient) =>
   Promise.all(['board', 'jobs', 'run-sheet', 'customers'].map((key) => client.invalidateQueries({ queryKey: [key] })));
 
@@ -43,6 +50,14 @@ export function useSaveJob() {
 export function useCallOff(id: string) {
   return useMutation({
     mutationFn: (body: { version: number; reason: string }) => call(callOffJob, { params: { id }, body }),
+    onSuccess: (_data, _vars, _saved, { client }) => refresh(client),
+  });
+}
+
+/** The same again at today's prices. */
+export function useBookAgain() {
+  return useMutation({
+    mutationFn: (jobId: string) => call(copyJob, { params: { id: jobId } }),
     onSuccess: (_data, _vars, _saved, { client }) => refresh(client),
   });
 }

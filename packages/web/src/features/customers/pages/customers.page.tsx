@@ -1,6 +1,6 @@
 import { useState } from 'react';
 import { useQuery } from '@tanstack/react-query';
-import { useNavigate, useParams } from 'react-router';
+import { Link, useNavigate, useParams } from 'react-router';
 import type { CustomerDto } from '@driprail/shared/contracts/customers.contract';
 import { paths } from '../../../app/paths.ts';
 import { Button } from '../../../components/button.tsx';
@@ -45,6 +45,9 @@ export function CustomersPage() {
         above="Households and fleets"
         actions={
           <>
+            <Link className="btn" to={paths.dueAgain}>
+              Due again
+            </Link>
             <Button onClick={() => setOpen({ kind: 'duplicates' })}>
               Likely duplicates{pairs > 0 ? ` (${pairs})` : ''}
             </Button>
