@@ -1,0 +1,2 @@
+export { onlineBookingRoutes } from './online-booking.routes.ts';
+export { removeOverHolds } from './holds.service.ts';
