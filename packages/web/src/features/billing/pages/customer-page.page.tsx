@@ -34,7 +34,9 @@ function Page({ page, token, returned }: { page: CustomerPageDto; token: string;
   const { head, time, words } = customerState(page);
   const { bill } = page;
   const isOver = page.progress === 'done' || bill.isDone;
-  const mayPay = isOver && bill.owedCents > 0;
+  // The crew at the car may show this page before the last step is ticked.
+  const isAtTheCar = page.progress === 'on_site' || page.progress === 'working';
+  const mayPay = (isOver || isAtTheCar) && bill.owedCents > 0;
   const day = bill.invoice?.issuedAt ?? page.windowFrom;
   return (
     <>
