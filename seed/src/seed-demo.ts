@@ -3,6 +3,7 @@ import { isSetUpNeeded } from '@driprail/api/features/settings/index';
 import { buildDemo } from './build-demo.ts';
 import { handOverWeeks } from './hand-over.ts';
 import { lockWeeks } from './lock-weeks.ts';
+import { openOnlineBooking } from './store-online.ts';
 import { storeRows } from './store.ts';
 
 export const DEMO_PASSWORD = 'driprail-demo';
@@ -16,6 +17,7 @@ export async function seedDemo({ now }: { now: Date }): Promise<boolean> {
   if (!(await isSetUpNeeded())) return false;
   const demo = buildDemo(now);
   await storeRows(demo.rows, await hashPassword(DEMO_PASSWORD));
+  await openOnlineBooking(demo.rows, now);
   await lockWeeks(demo);
   await handOverWeeks(demo);
   return true;

@@ -8,6 +8,7 @@ import { connect, disconnect } from './db/sequelize.ts';
 import { printLinks, useCheapHashes } from './features/access/index.ts';
 import { issueDueInvoices, lookUpOpenPages, settleAskedRefunds } from './features/billing/index.ts';
 import { queueTimely, sendDueMessages, takeUpLeft } from './features/messages/index.ts';
+import { removeOverHolds } from './features/online-booking/index.ts';
 import { SetUpCode, hasDemoLogins, isSetUpNeeded } from './features/settings/index.ts';
 import { removeErasedFiles } from './features/walk-round/index.ts';
 import { startFakePayments } from './integrations/payments/fake/fake-payments.ts';
@@ -98,6 +99,12 @@ async function main(): Promise<void> {
     (error) => log.warn({ err: error }, 'files of erased customers'),
   );
 
+  const holds = every(
+    60,
+    () => removeOverHolds(now()),
+    (error) => log.warn({ err: error }, 'holds of online booking'),
+  );
+
   await listen(app.server, config.port, listenHost(config.host));
   const address = app.server.address();
   port = typeof address === 'object' && address ? address.port : config.port;
@@ -110,7 +117,7 @@ async function main(): Promise<void> {
   const stop = (): void => {
     if (isStopping) return;
     isStopping = true;
-    void Promise.all([outbox.stop(), messages.stop(), billing.stop(), files.stop()])
+    void Promise.all([outbox.stop(), messages.stop(), billing.stop(), files.stop(), holds.stop()])
       .then(() => app.close())
       .then(() => localPayments?.stop())
       .then(() => disconnect())

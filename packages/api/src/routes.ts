@@ -13,6 +13,7 @@ import { customersRoutes } from './features/customers/index.ts';
 import { jobWorkRoutes } from './features/job-work/index.ts';
 import { messagesRoutes } from './features/messages/index.ts';
 import type { DeliveryParts, HookSecrets } from './features/messages/index.ts';
+import { onlineBookingRoutes } from './features/online-booking/index.ts';
 import { payRoutes } from './features/pay/index.ts';
 import { peopleRoutes } from './features/people/index.ts';
 import { recordsRoutes } from './features/records/index.ts';
@@ -61,6 +62,7 @@ export function mountRoutes(table: RouteTable, parts: RouteParts): void {
   pushRoutes(table, parts.push);
   payRoutes(table, parts);
   billingRoutes(table, parts);
+  onlineBookingRoutes(table, parts);
   walkRoundRoutes(table, parts.store);
   customersRoutes(table, parts);
   messagesRoutes(table, parts);
