@@ -13,6 +13,10 @@ export const paths = {
   collect: (day: string, visitId: string) => `/run-sheet/${day}/job/${visitId}/pay`,
   /** A customer's own page of a job. */
   customerPage: '/c/:token',
+  /** Where the link at a mail's foot leads. */
+  unsubscribe: '/u/:token',
+  messages: '/messages',
+  messageSettings: '/messages/words',
   walkRound: (visitId: string) => `/walk-round/${visitId}`,
   /** The same at the desk, to read. */
   walkRecord: (visitId: string) => `/visits/${visitId}/walk-round`,

@@ -28,6 +28,13 @@ const CollectPage = lazyPage(async () => (await import('../features/billing/page
 const CustomerPage = lazyPage(
   async () => (await import('../features/billing/pages/customer-page.page.tsx')).CustomerPage,
 );
+const MessagesPage = lazyPage(async () => (await import('../features/messages/pages/messages.page.tsx')).MessagesPage);
+const MessageSettingsPage = lazyPage(
+  async () => (await import('../features/messages/pages/message-settings.page.tsx')).MessageSettingsPage,
+);
+const UnsubscribePage = lazyPage(
+  async () => (await import('../features/messages/pages/unsubscribe.page.tsx')).UnsubscribePage,
+);
 const MoneyPage = lazyPage(async () => (await import('../features/billing/pages/money.page.tsx')).MoneyPage);
 const CashPage = lazyPage(async () => (await import('../features/billing/pages/cash.page.tsx')).CashPage);
 const MoneyDayPage = lazyPage(async () => (await import('../features/billing/pages/money-day.page.tsx')).MoneyDayPage);
@@ -88,6 +95,7 @@ export function Router() {
             <Route path={paths.link} element={<LinkPage />} />
             <Route path={paths.setUp} element={<SetUpPage />} />
             <Route path={paths.customerPage} element={<CustomerPage />} />
+            <Route path={paths.unsubscribe} element={<UnsubscribePage />} />
             <Route element={<Gate />}>
               <Route path={paths.runSheet} element={<RunSheetPage />} />
               <Route path={`${paths.runSheet}/:day`} element={<RunSheetPage />} />
@@ -104,6 +112,8 @@ export function Router() {
                 <Route path={`${paths.customers}/:id`} element={<CustomersPage />} />
                 <Route path={paths.customerData(':id')} element={<CustomerDataPage />} />
                 <Route path={paths.dueAgain} element={<DuePage />} />
+                <Route path={paths.messages} element={<MessagesPage />} />
+                <Route path={paths.messageSettings} element={<MessageSettingsPage />} />
                 <Route path={paths.services} element={<ServiceMenuPage />} />
                 <Route path={paths.vans} element={<VansPage />} />
                 <Route path={paths.people} element={<PeoplePage />} />

@@ -12,6 +12,7 @@ export function navItems(ability: AppAbility, rides: boolean): NavItem[] {
     ability.can('plan', 'Visit') && { to: paths.board, label: 'Board' },
     rides && { to: paths.runSheet, label: 'Run sheet' },
     ability.can('read', 'Customer') && { to: paths.customers, label: 'Customers' },
+    ability.can('read', 'Customer') && { to: paths.messages, label: 'Messages' },
     ability.can('read', 'Service') && { to: paths.services, label: 'Service menu' },
     ability.can('update', 'Van') && { to: paths.vans, label: 'Vans' },
     ability.can('update', 'Person') && { to: paths.people, label: 'People' },

@@ -1,3 +1,4 @@
+import type { ReactNode } from 'react';
 import { useAbility } from '@casl/react';
 import { useQuery } from '@tanstack/react-query';
 import { Link } from 'react-router';
@@ -19,13 +20,15 @@ import { RecordVehicles } from './record-vehicles.tsx';
 
 interface RecordProps {
   id: string;
+  /** What was written to the customer and came back. */
+  messages: ReactNode;
   onEdit: (customer: CustomerDto) => void;
   onMerge: (customer: CustomerDto) => void;
   onErase: (customer: CustomerDto) => void;
 }
 
 /** One customer's whole record, hung beside the list. */
-export function CustomerRecord({ id, onEdit, onMerge, onErase }: RecordProps) {
+export function CustomerRecord({ id, messages, onEdit, onMerge, onErase }: RecordProps) {
   const { zone } = useFormats();
   const ability = useAbility<AppAbility>();
   const one = useQuery(customerQuery(id));
@@ -97,6 +100,7 @@ export function CustomerRecord({ id, onEdit, onMerge, onErase }: RecordProps) {
                 </>
               )}
               <RecordHistory history={history} />
+              {erasedAt ? null : messages}
             </div>
             <div>
               {erasedAt ? null : <RecordSide customer={customer} />}

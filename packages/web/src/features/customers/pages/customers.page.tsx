@@ -7,6 +7,7 @@ import { Button } from '../../../components/button.tsx';
 import { Icon } from '../../../components/icon.tsx';
 import { PageHead, RailPage } from '../../../components/page-head.tsx';
 import { Sheet } from '../../../components/sheet.tsx';
+import { CustomerMessages } from '../../messages/index.ts';
 import { duplicatesQuery } from '../api/merge.queries.ts';
 import { CustomerForm } from '../components/customer-form.tsx';
 import { CustomerList } from '../components/customer-list.tsx';
@@ -64,6 +65,7 @@ export function CustomersPage() {
             <CustomerRecord
               key={id}
               id={id}
+              messages={<CustomerMessages customerId={id} />}
               onEdit={(customer) => setOpen({ kind: 'form', customer, name: customer.name })}
               onErase={(customer) => setOpen({ kind: 'erase', id: customer.id })}
               onMerge={(customer) => setOpen({ kind: 'other', customer })}

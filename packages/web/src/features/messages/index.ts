@@ -1,0 +1,1 @@
+export { CustomerMessages } from './components/customer-messages.tsx';
