@@ -17,6 +17,8 @@ export const paths = {
   unsubscribe: '/u/:token',
   messages: '/messages',
   messageSettings: '/messages/words',
+  /** Where a stranger books without an account. */
+  book: '/book',
   walkRound: (visitId: string) => `/walk-round/${visitId}`,
   /** The same at the desk, to read. */
   walkRecord: (visitId: string) => `/visits/${visitId}/walk-round`,

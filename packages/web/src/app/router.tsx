@@ -35,6 +35,7 @@ const MessageSettingsPage = lazyPage(
 const UnsubscribePage = lazyPage(
   async () => (await import('../features/messages/pages/unsubscribe.page.tsx')).UnsubscribePage,
 );
+const BookPage = lazyPage(async () => (await import('../features/online-booking/pages/book.page.tsx')).BookPage);
 const MoneyPage = lazyPage(async () => (await import('../features/billing/pages/money.page.tsx')).MoneyPage);
 const CashPage = lazyPage(async () => (await import('../features/billing/pages/cash.page.tsx')).CashPage);
 const MoneyDayPage = lazyPage(async () => (await import('../features/billing/pages/money-day.page.tsx')).MoneyDayPage);
@@ -95,6 +96,7 @@ export function Router() {
             <Route path={paths.link} element={<LinkPage />} />
             <Route path={paths.setUp} element={<SetUpPage />} />
             <Route path={paths.customerPage} element={<CustomerPage />} />
+            <Route path={paths.book} element={<BookPage />} />
             <Route path={paths.unsubscribe} element={<UnsubscribePage />} />
             <Route element={<Gate />}>
               <Route path={paths.runSheet} element={<RunSheetPage />} />
