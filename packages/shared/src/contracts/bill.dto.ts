@@ -86,5 +86,7 @@ export const billDto = z.object({
   owedCents: cents,
   /** The work is done: it can be billed. */
   isDone: z.boolean(),
+  /** Nothing was done and nothing is to come; only a fee can be billed. */
+  isCalledOff: z.boolean(),
 });
 export type BillDto = z.infer<typeof billDto>;

@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { billDto, billStates } from './bill.dto.ts';
 import { endpoint } from './endpoint.ts';
 import { bytes, day, done, id, instant, positiveCents, shortText } from './fields.ts';
+import { taxClasses } from '../domain/billing/tax-rates.ts';
 import { desk, everyone } from '../authz/actor.ts';
 
 const bill = z.object({ bill: billDto });
@@ -38,6 +39,26 @@ export const getInvoicePdf = endpoint({
   params: z.object({ id }),
   response: bytes,
   format: 'pdf',
+});
+export const feeKinds = ['late_call_off', 'no_show'] as const;
+/** As they stand on the invoice. */
+export const feeNames: Record<(typeof feeKinds)[number], string> = {
+  late_call_off: 'Fee for calling off late',
+  no_show: 'Fee for a visit where nobody was there',
+};
+export const billFee = endpoint({
+  method: 'post',
+  path: '/api/jobs/:id/fee',
+  roles: desk,
+  summary: 'Bill a fee for a job that was called off, by the policy that the customer knew.',
+  params: z.object({ id }),
+  body: z.strictObject({
+    kind: z.enum(feeKinds, 'Choose what the fee is for.'),
+    amountCents: positiveCents.min(1, 'Give the amount of the fee.'),
+    taxClass: z.enum(taxClasses, 'Choose how it is taxed.'),
+    note: shortText,
+  }),
+  response: bill,
 });
 /** Cash, checks and transfers are recorded by a person; card payments come from the payments service alone. */
 export const handMethods = ['cash', 'check', 'transfer'] as const;

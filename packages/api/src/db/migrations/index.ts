@@ -22,6 +22,7 @@ import { messages } from './2026-12-01-019-messages.ts';
 import { onlineBooking } from './2026-12-01-020-online-booking.ts';
 import { serviceNeeds } from './2026-12-01-021-service-needs.ts';
 import { callBacks } from './2026-12-01-022-call-backs.ts';
+import { fees } from './2026-12-01-024-fees.ts';
 
 /** In the order in which they are run. */
 export const migrations: Migration[] = [
@@ -48,4 +49,5 @@ export const migrations: Migration[] = [
   messages,
   callBacks,
   onlineBooking,
+  fees,
 ];

@@ -5,7 +5,8 @@ import type { TaxClass } from '@driprail/shared/domain/billing/tax-rates';
 export class InvoiceLine extends Model<InferAttributes<InvoiceLine>, InferCreationAttributes<InvoiceLine>> {
   declare id: string;
   declare invoiceId: string;
-  declare jobLineId: string;
+  /** Null for a fee. */
+  declare jobLineId: CreationOptional<string | null>;
   declare label: string;
   declare detail: CreationOptional<string>;
   declare taxClass: TaxClass;
@@ -19,7 +20,7 @@ export function initInvoiceLine(sequelize: Sequelize): void {
     {
       id: { type: DataTypes.UUID, primaryKey: true },
       invoiceId: { type: DataTypes.UUID, allowNull: false },
-      jobLineId: { type: DataTypes.UUID, allowNull: false },
+      jobLineId: { type: DataTypes.UUID, allowNull: true },
       label: { type: DataTypes.TEXT, allowNull: false },
       detail: { type: DataTypes.TEXT },
       taxClass: { type: DataTypes.TEXT, allowNull: false },

@@ -20,6 +20,11 @@ export function isOver({ lines, openVisits }: JobRow): boolean {
   return openVisits === 0 && lines.some((line) => line.isFinished);
 }
 
+/** Every visit is called off, and nothing was done. */
+export function isCalledOff({ lines, openVisits }: JobRow): boolean {
+  return openVisits === 0 && !lines.some((line) => line.isFinished);
+}
+
 /** A job's bill: its invoice as issued, else what it would cost by today's taxes. @throws 404 */
 export async function readBill(jobId: string, now: Date, tx?: Transaction): Promise<BillDto> {
   const job = await readJobRow(jobId, tx);
@@ -29,10 +34,9 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
   const shown = invoice ?? (await draftOf(job, today, tx));
   const sum = (values: number[]): number => values.reduce((total, value) => total + value, 0);
   const credited = sum(ledger.creditNotes.map((note) => note.totalCents));
-  const isCalledOff = !isOver(job) && job.openVisits === 0;
   const owed = owedCents({
     // A draft counts as if it were billed, so that a deposit already shows against it.
-    invoicedCents: ledger.invoicedCents + (invoice || isCalledOff ? 0 : shown.totalCents),
+    invoicedCents: ledger.invoicedCents + (invoice || isCalledOff(job) ? 0 : shown.totalCents),
     creditedCents: credited,
     paidCents: sum(ledger.payments.map((payment) => payment.amountCents)),
     refundedCents: sum(ledger.payments.map((payment) => payment.refundedCents)),
@@ -52,6 +56,7 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
     ...{ payments: ledger.payments, refunds: ledger.refunds, creditNotes: ledger.creditNotes },
     owedCents: owed,
     isDone: isOver(job),
+    isCalledOff: isCalledOff(job),
   };
 }
 

@@ -17,6 +17,7 @@ import * as cash from './cash.service.ts';
 import { customerPageRoutes } from './customer-page.routes.ts';
 import { readDayBills } from './day-bills.queries.ts';
 import { readInvoicePdf } from './invoice-pdf.ts';
+import { billFee } from './fees.service.ts';
 import { findInvoices } from './invoices.queries.ts';
 import { issueInvoice } from './issue-invoice.service.ts';
 import { moneyDayCsv } from './money-day-csv.ts';
@@ -42,6 +43,10 @@ export function billingRoutes(table: RouteTable, parts: BillingParts): void {
   route(table, api.getInvoicePdf, async ({ params }, ctx) => {
     await authorizeBill(ctx, 'read', params.id);
     return readInvoicePdf(params.id, ctx.now());
+  });
+  route(table, api.billFee, async ({ params, body }, ctx) => {
+    await billFee(ctx, params.id, body);
+    return { bill: await readBill(params.id, ctx.now()) };
   });
   route(table, api.recordPayment, async ({ params, body }, ctx) => ({
     bill: await recordPayment(ctx, params.id, body),

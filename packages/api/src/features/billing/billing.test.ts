@@ -252,6 +252,31 @@ describe('money back', () => {
   });
 });
 
+describe('a fee', () => {
+  const fee = { kind: 'no_show', amountCents: 4000, taxClass: 'untaxed', note: 'Waited 15 minutes' };
+
+  it('is billed for a job that was called off, once, and paid like any bill', async () => {
+    const { job } = await company.aJob();
+    await owner.post(`/api/jobs/${job.id}/fee`).send(fee).expect(422);
+    await owner.post(`/api/jobs/${job.id}/call-off`).send({ version: job.version, reason: 'Nobody home' }).expect(200);
+    await owner
+      .post(`/api/jobs/${job.id}/fee`)
+      .send({ ...fee, amountCents: 0 })
+      .expect(400);
+    const answers = await Promise.all([1, 2].map(() => owner.post(`/api/jobs/${job.id}/fee`).send(fee)));
+    expect(answers.map(({ status }) => status).sort()).toEqual([200, 409]);
+    expect(await billOf(owner, job.id)).toMatchObject({
+      state: 'open',
+      owedCents: 4000,
+      taxCents: 0,
+      isCalledOff: true,
+    });
+    await pay(owner, { amountCents: 4000 }, job.id).expect(200);
+    expect(await billOf(owner, job.id)).toMatchObject({ state: 'paid', owedCents: 0 });
+    lastNumber += 1;
+  });
+});
+
 describe('the list of invoices', () => {
   it('finds by number and customer, and sums what is owed', async () => {
     const all = await owner.get('/api/invoices').query({ state: 'all', find: 'naka' }).expect(200);

@@ -1,20 +1,14 @@
 import type { Transaction } from 'sequelize';
-import { v7 as uuid } from 'uuid';
-import { invoiceAmounts } from '@driprail/shared/domain/billing/invoice-amounts';
-import { taxesInForce } from '@driprail/shared/domain/billing/tax-rates';
-import { addDays, dayOf } from '@driprail/shared/domain/time/zone';
-import { audit } from '../../db/audit.ts';
-import { companyOf } from '../../db/company.ts';
-import { Invoice, InvoiceLine, InvoiceTax, Job } from '../../db/models/index.ts';
+import { Invoice, Job } from '../../db/models/index.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
 import { notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { queueMessage } from '../messages/index.ts';
 import { billableLines, isOver } from './bill.presenter.ts';
-import { readJobRow, readTaxRates } from './bill.queries.ts';
+import { readJobRow } from './bill.queries.ts';
 import { noteIfPaid } from './note-paid.ts';
 import type { By } from './note-paid.ts';
-import { nextNumber } from './numbers.ts';
+import { writeInvoice } from './write-invoice.ts';
 
 /**
  * Bills the finished lines of a job that is over, once; one that is billed stays as it is.
@@ -30,45 +24,15 @@ export async function issueInvoice(tx: Transaction, jobId: string, { userId, at 
   if (!job) throw notFound('That job');
   if (!isOver(job))
     throw unprocessable('not_over', `Job ${job.jobNumber} is not done yet. It can be billed when its work is.`);
-  const company = await companyOf(tx);
-  const today = dayOf(at.toISOString(), company.zone);
-  const lines = billableLines(job);
-  const amounts = invoiceAmounts(lines, job.discountCents, taxesInForce(await readTaxRates(tx), today, job.place));
-  const id = uuid();
-  const number = await nextNumber(tx, 'invoice');
-  await Invoice.create(
-    {
-      ...{ id, number, jobId, customerId: job.customerId, issuedAt: at, issuedBy: userId },
-      dueOn: addDays(today, company.invoiceDueDays),
-      ...{ billTo: job.billTo, place: job.place, discountReason: job.discountReason },
-      ...{ netCents: amounts.netCents, taxCents: amounts.taxCents, totalCents: amounts.totalCents },
-    },
-    { transaction: tx },
-  );
-  await InvoiceLine.bulkCreate(
-    amounts.lines.map(({ id: jobLineId, taxClass, priceCents, discountCents }, position) => ({
-      ...{ id: uuid(), invoiceId: id, jobLineId, taxClass, priceCents, discountCents, position },
-      ...{ label: lines[position]?.label ?? '', detail: lines[position]?.detail ?? '' },
-    })),
-    { transaction: tx },
-  );
-  await InvoiceTax.bulkCreate(
-    amounts.taxes.map((tax, position) => ({ id: uuid(), invoiceId: id, ...tax, position })),
-    { transaction: tx },
-  );
-  await audit(tx, { userId, at }, 'invoice', id, 'issued', { number, jobNumber: job.jobNumber, ...totalsOf(amounts) });
+  const lines = billableLines(job).map(({ id: jobLineId, isFinished: _done, ...line }) => ({ jobLineId, ...line }));
+  const discount = { cents: job.discountCents, reason: job.discountReason };
+  const id = await writeInvoice(tx, job, lines, discount, { userId, at });
   // A deposit may have covered it all.
   await noteIfPaid(tx, { id: jobId, number: job.jobNumber }, { userId, at });
   await queueMessage(tx, at, { kind: 'done', jobId, causeId: id, eventKey: `invoice:${id}` });
   hintAfterCommit(tx, ['everyone'], 'bill', jobId);
   return id;
 }
-
-const totalsOf = ({ netCents, taxCents, totalCents }: { netCents: number; taxCents: number; totalCents: number }) => ({
-  netCents,
-  taxCents,
-  totalCents,
-});
 
 /** Jobs that are over and past the time in which Done may be taken back are billed, oldest first, each in its own transaction. */
 export async function issueDueInvoices(now: Date): Promise<number> {

@@ -2,6 +2,7 @@ import { infiniteQueryOptions, queryOptions, useMutation } from '@tanstack/react
 import type { QueryClient } from '@tanstack/react-query';
 import type { BillDto } from '@driprail/shared/contracts/bill.dto';
 import {
+  billFee,
   creditBill,
   getBill,
   issueInvoice,
@@ -54,6 +55,14 @@ async function keepBill(client: QueryClient, data: { bill: BillDto }): Promise<v
   await Promise.all(
     ['money', 'customers', 'bills'].map((key) => client.invalidateQueries({ queryKey: [key], refetchType: 'active' })),
   );
+}
+
+export function useBillFee(jobId: string) {
+  return useMutation({
+    mutationFn: (body: NonNullable<RequestOf<typeof billFee>['body']>) =>
+      call(billFee, { params: { id: jobId }, body }),
+    onSuccess: (data, _vars, _saved, { client }) => keepBill(client, data),
+  });
 }
 
 export function useIssueInvoice(jobId: string) {

@@ -11,12 +11,13 @@ import { Loaded } from '../../../components/states.tsx';
 import { billQuery, useIssueInvoice } from '../api/money.queries.ts';
 import { BillHead } from './bill-head.tsx';
 import { BillLedger } from './bill-ledger.tsx';
+import { FeeForm } from './fee-form.tsx';
 import { GiveBackForm } from './give-back-form.tsx';
 import { PayLink } from './pay-link.tsx';
 import { PaymentForm } from './payment-form.tsx';
 import './bill-panel.css';
 
-type Task = 'link' | 'payment' | 'back';
+type Task = 'link' | 'payment' | 'back' | 'fee';
 
 /**
  * A job's bill with all that one may do about it. It knows neither list nor board around it.
@@ -46,6 +47,8 @@ function Bill({ bill, isTitled }: { bill: BillDto; isTitled: boolean }) {
         <PayLink jobId={bill.jobId} onDone={close} />
       ) : task === 'payment' ? (
         <PaymentForm bill={bill} onDone={close} />
+      ) : task === 'fee' ? (
+        <FeeForm bill={bill} onDone={close} />
       ) : (
         <GiveBackForm bill={bill} onDone={close} />
       )}
@@ -64,6 +67,7 @@ function Actions({ bill, canGiveBack, onTask }: { bill: BillDto; canGiveBack: bo
           Bill now
         </Button>
       ) : null}
+      {bill.invoice === null && bill.isCalledOff ? <Button onClick={() => onTask('fee')}>Bill a fee</Button> : null}
       {bill.owedCents > 0 ? (
         <Button look={canIssue ? 'plain' : 'main'} onClick={() => onTask('payment')}>
           Record a payment

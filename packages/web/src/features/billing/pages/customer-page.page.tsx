@@ -36,7 +36,7 @@ function Page({ page, token, returned }: { page: CustomerPageDto; token: string;
   const isOver = page.progress === 'done' || bill.isDone;
   // The crew at the car may show this page before the last step is ticked.
   const isAtTheCar = page.progress === 'on_site' || page.progress === 'working';
-  const mayPay = (isOver || isAtTheCar) && bill.owedCents > 0;
+  const mayPay = (isOver || isAtTheCar || bill.invoice !== null) && bill.owedCents > 0;
   const day = bill.invoice?.issuedAt ?? page.windowFrom;
   return (
     <>
@@ -55,7 +55,7 @@ function Page({ page, token, returned }: { page: CustomerPageDto; token: string;
         {time ? <p className="cust-time">{time}</p> : null}
         <p className="t-2 pb-2">{words}</p>
         {page.photos.length > 0 ? <CustomerPhotos token={token} photos={page.photos} /> : null}
-        {page.progress === 'called_off' && bill.payments.length === 0 ? null : (
+        {page.progress === 'called_off' && bill.payments.length === 0 && !bill.invoice ? null : (
           <>
             <h2 className="sec">{isOver ? 'Invoice' : 'What you booked'}</h2>
             <BillLines bill={bill} zone={page.zone} />
