@@ -81,6 +81,8 @@ describe('the day', () => {
       await ticket(board, 'Sten Verrall')
         .getByText(/^Done 11:\d\d am$/)
         .waitFor();
+    // The bill is shown to the customer next.
+    await technician.getByRole('link', { name: 'Pay later' }).click();
     await technician.getByRole('article', { name: 'Rosalind Merrow' }).waitFor();
   });
 
