@@ -19,6 +19,7 @@ export const paths = {
   messageSettings: '/messages/words',
   /** Where a stranger books without an account. */
   book: '/book',
+  onlineBooking: '/settings/online-booking',
   walkRound: (visitId: string) => `/walk-round/${visitId}`,
   /** The same at the desk, to read. */
   walkRecord: (visitId: string) => `/visits/${visitId}/walk-round`,

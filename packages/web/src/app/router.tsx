@@ -36,6 +36,9 @@ const UnsubscribePage = lazyPage(
   async () => (await import('../features/messages/pages/unsubscribe.page.tsx')).UnsubscribePage,
 );
 const BookPage = lazyPage(async () => (await import('../features/online-booking/pages/book.page.tsx')).BookPage);
+const OnlineSettingsPage = lazyPage(
+  async () => (await import('../features/online-booking/pages/online-settings.page.tsx')).OnlineSettingsPage,
+);
 const MoneyPage = lazyPage(async () => (await import('../features/billing/pages/money.page.tsx')).MoneyPage);
 const CashPage = lazyPage(async () => (await import('../features/billing/pages/cash.page.tsx')).CashPage);
 const MoneyDayPage = lazyPage(async () => (await import('../features/billing/pages/money-day.page.tsx')).MoneyDayPage);
@@ -131,6 +134,7 @@ export function Router() {
                 <Route path={paths.cash} element={<CashPage />} />
                 <Route path={paths.moneyDay(':day')} element={<MoneyDayPage />} />
                 <Route path={paths.taxes} element={<TaxesPage />} />
+                <Route path={paths.onlineBooking} element={<OnlineSettingsPage />} />
                 <Route path={paths.settings} element={<SettingsPage />} />
                 <Route path={paths.logins} element={<LoginsPage />} />
                 <Route path={paths.account} element={<AccountPage />} />

@@ -162,6 +162,9 @@ function SettingsForm({ settings }: { settings: SettingsDto }) {
         <p className="t-2">
           <Link to={paths.taxes}>Sales taxes</Link> stand on invoices by place and day.
         </p>
+        <p className="t-2">
+          <Link to={paths.onlineBooking}>Online booking</Link> is what customers book by themselves.
+        </p>
         <BreakFields value={value} fields={fields} onChange={(breaks) => setValue({ ...value, ...breaks })} />
         <fieldset>
           <legend className="sec w-full">Mail when a pay week is locked</legend>
