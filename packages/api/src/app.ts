@@ -83,6 +83,7 @@ export function createApp(parts: AppParts): App {
   const push = pushKeys && { keys: pushKeys, mayBeLocal: config.isTest };
   wakeWith(push && ((personIds, times) => wakePhones(personIds, times, push, now())));
 
+  const links = new CustomerLinks(secret);
   const table: RouteTable = { router: express.Router(), endpoints: [], now };
   mountRoutes(table, {
     hasLocalMail: config.hasLocalMail,
@@ -95,14 +96,19 @@ export function createApp(parts: AppParts): App {
     geocoder: geocoderFor(config),
     push,
     payments,
-    links: new CustomerLinks(secret),
+    links,
     baseUrlOf: (req) => config.publicUrl ?? `${req.protocol}://${req.get('host') ?? ''}`,
   });
   app.use(table.router);
   app.use('/api', (req, _res, next) => next(notFound(`${req.method} ${req.originalUrl.split('?')[0]}`)));
   if (config.webDist) serveWeb(app, config.webDist);
   app.use(errorHandler(log));
-  hub.attach(server, sessions.chain, (req) => isOwnOrigin(req, config.publicUrl));
+  hub.attach(
+    server,
+    sessions.chain,
+    (req) => isOwnOrigin(req, config.publicUrl),
+    (token) => links.jobOf(token, now()),
+  );
 
   return {
     server,

@@ -1,18 +1,26 @@
 import type { IncomingMessage, Server as HttpServer } from 'node:http';
 import type { RequestHandler } from 'express';
 import { Server } from 'socket.io';
-import { hintEvent, signedOutEvent } from '@driprail/shared/realtime/hints';
+import { changedEvent, customerNamespace, hintEvent, signedOutEvent } from '@driprail/shared/realtime/hints';
 import type { Hint, HintEntity } from '@driprail/shared/realtime/hints';
 import type { SignedIn } from '../http/route.ts';
 
-/** Who hears of a change: those at the desk, owners alone, or one person of a crew. */
-export type Audience = 'desk' | 'owners' | 'everyone' | { personIds: string[] };
+/** Who hears of a change: those at the desk, owners alone, one person of a crew, or whoever has a job's own page open. */
+export type Audience = 'desk' | 'owners' | 'everyone' | { personIds: string[] } | { jobId: string };
+
+/** The job of a customer's link; null for one that is not signed here or has run out. */
+export type JobOfToken = (token: string) => Promise<string | null>;
 
 /** Open screens. A hint carries no data: who hears it fetches through the API and gets what they may see. */
 export class Hub {
   private io: Server | null = null;
 
-  attach(server: HttpServer, chain: RequestHandler[], isAllowed: (req: IncomingMessage) => boolean): void {
+  attach(
+    server: HttpServer,
+    chain: RequestHandler[],
+    isAllowed: (req: IncomingMessage) => boolean,
+    jobOf: JobOfToken,
+  ): void {
     const io = new Server(server, { serveClient: false, allowRequest: (req, done) => done(null, isAllowed(req)) });
     for (const step of chain) {
       io.engine.use((req: { _query?: { sid?: string } }, res: unknown, next: () => void) =>
@@ -29,14 +37,21 @@ export class Hub {
       if (user.role === 'owner') void socket.join('owners');
       if (user.personId) void socket.join(`person:${user.personId}`);
     });
+    openToCustomers(io, jobOf);
     this.io = io;
   }
 
   hint(audiences: Audience[], entity: HintEntity, id: string, version = 0): void {
-    const rooms = audiences.flatMap((audience) =>
-      typeof audience === 'string' ? [audience] : audience.personIds.map((p) => `person:${p}`),
-    );
+    const rooms = audiences.flatMap((audience) => {
+      if (typeof audience === 'string') return [audience];
+      return 'personIds' in audience ? audience.personIds.map((p) => `person:${p}`) : [];
+    });
     if (rooms.length > 0) this.io?.to(rooms).emit(hintEvent, { entity, id, version } satisfies Hint);
+    // Bills are named by their job.
+    const jobIds = entity === 'job' || entity === 'bill' ? [id] : [];
+    for (const audience of audiences)
+      if (typeof audience !== 'string' && 'jobId' in audience) jobIds.push(audience.jobId);
+    if (jobIds.length > 0) this.io?.of(customerNamespace).to(jobIds).emit(changedEvent);
   }
 
   /** Whether a person has the app open somewhere. */
@@ -54,6 +69,22 @@ export class Hub {
     await this.io?.close();
     this.io = null;
   }
+}
+
+/** A customer's page is let in by its link alone, hears that its job changed, and is listened to in nothing. */
+function openToCustomers(io: Server, jobOf: JobOfToken): void {
+  const pages = io.of(customerNamespace);
+  pages.use((socket, next) => {
+    const token: unknown = socket.handshake.auth['token'];
+    void (typeof token === 'string' && token.length <= 80 ? jobOf(token) : Promise.resolve(null)).then(
+      (jobId) => {
+        if (!jobId) return next(new Error('unauthorized'));
+        void socket.join(jobId);
+        next();
+      },
+      () => next(new Error('unauthorized')),
+    );
+  });
 }
 
 function userOf(request: unknown): SignedIn | undefined {

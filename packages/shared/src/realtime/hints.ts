@@ -23,5 +23,10 @@ export interface Hint {
   version: number;
 }
 
+/** Where a customer's own page listens: opened by the link's token, without a session. */
+export const customerNamespace = '/customer';
+/** All that such a page hears, and nothing with it: its job changed, fetch the page again. */
+export const changedEvent = 'changed';
+
 /** Sent when the session ends elsewhere: the screen goes to sign-in. */
 export const signedOutEvent = 'signed_out';

@@ -109,7 +109,7 @@ async function perform(
   const personIds = answer.visit.crew.map((p) => p.personId);
   if (action.kind !== 'trouble')
     await followProgress(tx, personIds, answer.visit.progress, visit.id, new Date(times.occurredAt));
-  hintAfterCommit(tx, ['desk', { personIds }], 'visit', visit.id, visit.version);
+  hintAfterCommit(tx, ['desk', { personIds }, { jobId: visit.jobId }], 'visit', visit.id, visit.version);
   return { answer };
 }
 

@@ -9,7 +9,8 @@ export const customerPageQuery = (token: string, returned: boolean) =>
     queryFn: ({ signal }) =>
       call(getCustomerPage, { params: { token }, query: { returned: returned ? 'true' : 'false' } }, signal),
     retry: 1,
-    refetchInterval: 15_000,
+    // The line tells of changes at once; this finds what it lost.
+    refetchInterval: 60_000,
   });
 
 /** Goes to the payments service's own page. */

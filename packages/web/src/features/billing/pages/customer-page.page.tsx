@@ -8,6 +8,7 @@ import { Icon } from '../../../components/icon.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { money } from '../../../lib/format.ts';
 import { customerPageQuery, usePayByCard } from '../api/customer-page.queries.ts';
+import { useLivePage } from '../api/use-live-page.ts';
 import { BillLines } from '../components/bill-lines.tsx';
 import { CustomerFeedback } from '../components/customer-feedback.tsx';
 import { CustomerPhotos } from '../components/customer-photos.tsx';
@@ -21,6 +22,7 @@ export function CustomerPage() {
   const [search] = useSearchParams();
   const returned = search.get('returned') === 'true';
   const query = useQuery(customerPageQuery(token, returned));
+  useLivePage(token);
   return (
     <main className="ph cust" id="main">
       <Loaded query={query} what="your page">
