@@ -125,6 +125,15 @@ export const creditBill = endpoint({
   }),
   response: bill,
 });
+export const listHeld = endpoint({
+  method: 'get',
+  path: '/api/bills/held',
+  roles: desk,
+  summary: 'Jobs that were called off and still hold money: to be given back, or billed as a fee.',
+  response: z.object({
+    held: z.array(z.object({ jobId: id, jobNumber: z.int(), customerName: z.string(), cents: z.int() })),
+  }),
+});
 export const listInvoices = endpoint({
   method: 'get',
   path: '/api/invoices',

@@ -18,6 +18,7 @@ import { customerPageRoutes } from './customer-page.routes.ts';
 import { readDayBills } from './day-bills.queries.ts';
 import { readInvoicePdf } from './invoice-pdf.ts';
 import { billFee } from './fees.service.ts';
+import { moneyHeld } from './held.queries.ts';
 import { findInvoices } from './invoices.queries.ts';
 import { issueInvoice } from './issue-invoice.service.ts';
 import { moneyDayCsv } from './money-day-csv.ts';
@@ -60,6 +61,7 @@ export function billingRoutes(table: RouteTable, parts: BillingParts): void {
     bill: await refundPayment(payments, ctx, params.id, body),
   }));
   route(table, api.creditBill, async ({ params, body }, ctx) => ({ bill: await creditBill(ctx, params.id, body) }));
+  route(table, api.listHeld, async () => ({ held: await moneyHeld() }));
   route(table, api.listInvoices, ({ query }, ctx) => findInvoices(query, ctx.now()));
   route(table, getCash, readCash);
   route(table, countCash, async ({ body }, ctx) => {

@@ -252,6 +252,22 @@ describe('money back', () => {
   });
 });
 
+describe('money of a job that is called off', () => {
+  it('is named until it went back', async () => {
+    const { job } = await company.aJob();
+    await pay(owner, { amountCents: 5000, method: 'check' }, job.id).expect(200);
+    const held = async () =>
+      ((await owner.get('/api/bills/held').expect(200)).body as { held: { jobId: string; cents: number }[] }).held;
+    expect(await held()).toEqual([]);
+    await owner.post(`/api/jobs/${job.id}/call-off`).send({ version: job.version, reason: 'Weather' }).expect(200);
+    expect(await held()).toMatchObject([{ jobId: job.id, cents: 5000 }]);
+    const [payment] = (await billOf(owner, job.id)).payments;
+    const back = { key: key(), kind: 'refund', lines: [], amountCents: 5000, reasonId: null, note: 'Called off' };
+    await owner.post(`/api/payments/${payment?.id}/refunds`).send(back).expect(200);
+    expect(await held()).toEqual([]);
+  });
+});
+
 describe('a fee', () => {
   const fee = { kind: 'no_show', amountCents: 4000, taxClass: 'untaxed', note: 'Waited 15 minutes' };
 

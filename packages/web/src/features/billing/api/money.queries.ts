@@ -6,6 +6,7 @@ import {
   creditBill,
   getBill,
   issueInvoice,
+  listHeld,
   listInvoices,
   openPayLink,
   recordPayment,
@@ -36,6 +37,12 @@ export const invoicesQuery = (ask: InvoiceAsk) =>
 export const owedQuery = queryOptions({
   queryKey: ['money', 'owed'],
   queryFn: ({ signal }) => call(listInvoices, { query: { state: 'unpaid', limit: 1 } }, signal),
+});
+
+/** Called-off jobs that hold money. */
+export const heldQuery = queryOptions({
+  queryKey: ['money', 'held'],
+  queryFn: ({ signal }) => call(listHeld, {}, signal),
 });
 
 export const billQuery = (jobId: string) =>

@@ -8,6 +8,7 @@ import { useMedia } from '../../../lib/use-media.ts';
 import { owedQuery } from '../api/money.queries.ts';
 import { BillPanel } from '../components/bill-panel.tsx';
 import { BillSheet } from '../components/bill-sheet.tsx';
+import { HeldTape } from '../components/held-tape.tsx';
 import { InvoiceList } from '../components/invoice-list.tsx';
 import { MoneyTabs } from '../components/money-tabs.tsx';
 import './money.css';
@@ -39,6 +40,7 @@ export function MoneyPage() {
         actions={<MoneyTabs />}
       />
       <RailPage>
+        <HeldTape />
         <div className={jobId && isWide ? 'mo is-open' : 'mo'}>
           <InvoiceList chosenJobId={jobId} />
           {jobId && isWide ? (
