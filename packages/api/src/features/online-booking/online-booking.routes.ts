@@ -1,6 +1,6 @@
 import { rateLimit } from 'express-rate-limit';
 import * as api from '@driprail/shared/contracts/online-booking.contract';
-import { AppError } from '../../http/errors.ts';
+import { AppError, notFound } from '../../http/errors.ts';
 import type { RouteTable } from '../../http/route.ts';
 import { publicRoute, route } from '../../http/route.ts';
 import type { Geocoder } from '../../integrations/maps/index.ts';
@@ -9,6 +9,7 @@ import { resolveAsk } from './ask.ts';
 import { bookHeld } from './book-held.service.ts';
 import { holdWindow } from './holds.service.ts';
 import { readOnlineMenu } from './menu.queries.ts';
+import { callOffOwn, readOwnBooking } from './own-booking.service.ts';
 import { sendCode } from './proof.service.ts';
 import { readOnlineSettings } from './settings.queries.ts';
 import { updateOnlineSettings } from './settings.service.ts';
@@ -57,6 +58,17 @@ export function onlineBookingRoutes(table: RouteTable, { geocoder, links }: Onli
   }));
   publicRoute(table, api.bookHeld, async ({ params, body }, now) => ({
     booked: await bookHeld(links, params.id, body.code, now()),
+  }));
+  const jobOf = async (token: string, now: Date): Promise<string> => {
+    const jobId = await links.jobOf(token, now);
+    if (!jobId) throw notFound('That page');
+    return jobId;
+  };
+  publicRoute(table, api.getOwnBooking, async ({ params }, now) => ({
+    booking: await readOwnBooking(await jobOf(params.token, now()), now()),
+  }));
+  publicRoute(table, api.callOffOwn, async ({ params, body }, now) => ({
+    booking: await callOffOwn(await jobOf(params.token, now()), body.feeCents, now()),
   }));
   route(table, api.getOnlineSettings, async () => ({ settings: await readOnlineSettings() }));
   route(table, api.updateOnlineSettings, async ({ body }, ctx) => ({

@@ -1,34 +1,20 @@
 import { beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import type { Response } from 'supertest';
 import type { ErrorBody } from '@driprail/shared/contracts/error.contract';
-import type { JobDto } from '@driprail/shared/contracts/jobs.contract';
 import type { OfferedDays, OnlineMenuDto, OnlineSettingsDto } from '@driprail/shared/contracts/online-booking.contract';
 import { select } from '../../db/sequelize.ts';
-import { sendWaitingMails } from '../../outbox/send-mails.ts';
 import { createCustomer } from '../customers/index.ts';
 import { NOON, useApp } from '../../testing/app.ts';
 import { aCompany, aCustomer, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
 import { removeOverHolds } from './index.ts';
+import { WINDOW, jobByNumber, openOnline, settings, strangers, who } from './testing/book-online.ts';
 
 const test = useApp();
 let company: TestCompany;
-const settings = {
-  ...{ isOn: true, places: ['Ternmouth', '02000'], noticeHours: 1, farthestDays: 3 },
-  ...{ starts: ['12:30', '14:30'], windowMinutes: 60, policyWords: 'Please be there.' },
-  ...{ freeUntilHours: 2, lateFeeCents: 5000 },
-};
-/** 12:30 in New York, today: an hour and a half ahead. */
-const WINDOW = '2026-05-14T16:30:00.000Z';
-
 beforeAll(async () => {
   company = await aCompany(test);
-  await (
-    await company.owner()
-  )
-    .put('/api/online-booking/settings')
-    .send({ ...settings, serviceIds: [company.wash.id], version: 0 })
-    .expect(200);
+  await openOnline(company);
 });
 beforeEach(async () => {
   test.time.now = NOON;
@@ -36,56 +22,10 @@ beforeEach(async () => {
   await select(`UPDATE visits SET progress = 'called_off'`);
 });
 
-const ask = (more: object = {}) => ({
-  ...{ sizeClass: 'sedan', serviceIds: [company.wash.id], line: '3 Brine Street', city: 'ternmouth', postcode: '' },
-  ...{ hasWater: true, hasPower: true },
-  ...more,
-});
-const who = {
-  ...{ name: 'Ada Quill', phone: '555-0177', email: 'ada@mail.example', vehicle: '2019 hatchback', notes: 'Blue door' },
-  policyVersion: 2,
-};
-const windows = async (more: object = {}) =>
-  (
-    (await test.anonymous().post('/api/online-booking/windows').send(ask(more)).expect(200)).body as {
-      days: OfferedDays;
-    }
-  ).days;
-const hold = (more: object = {}) =>
-  test
-    .anonymous()
-    .post('/api/online-booking/holds')
-    .send({ ...ask(), from: WINDOW, ...more });
-const holdIdOf = (answer: Response) => (answer.body as { hold: { id: string } }).hold.id;
+const { windows, hold, heldId, prove, bookWith, codeFor, bookOne } = strangers(test, () => company);
+const daysOf = (answer: Response) => (answer.body as { days: OfferedDays }).days;
 const faultOf = (answer: Response) => (answer.body as ErrorBody).error;
-const prove = (id: string, more: object = {}) =>
-  test
-    .anonymous()
-    .post(`/api/online-booking/holds/${id}/code`)
-    .send({ ...who, ...more });
-const codeFor = async (email: string) => {
-  await sendWaitingMails(test.send, () => new Date(test.time.now));
-  return test
-    .taken()
-    .filter((mail) => mail.to === email.toLowerCase() && /^\d{6} is your code/.test(mail.subject))
-    .at(0)
-    ?.subject.slice(0, 6);
-};
-const bookWith = (id: string, code = '') =>
-  test.anonymous().post(`/api/online-booking/holds/${id}/booking`).send({ code });
-/** All the way, as one person does it. */
-async function bookOne(more: object = {}, holding: object = {}) {
-  const id = holdIdOf(await hold(holding).expect(200));
-  await prove(id, more).expect(200);
-  const answer = await bookWith(id, await codeFor({ ...who, ...more }.email)).expect(200);
-  return (answer.body as { booked: { jobNumber: number; path: string } }).booked;
-}
-const jobOf = async (number: number) => {
-  const dispatcher = await company.dispatcher();
-  const [found] = ((await dispatcher.get(`/api/jobs?find=${number}`).expect(200)).body as { jobs: { id: string }[] })
-    .jobs;
-  return ((await dispatcher.get(`/api/jobs/${found?.id ?? ''}`).expect(200)).body as { job: JobDto }).job;
-};
+const jobOf = (number: number) => jobByNumber(company, number);
 
 it('tells nobody but the owner how it is set, and strangers only what they need', async () => {
   const owner = await company.owner();
@@ -112,7 +52,7 @@ it('accepted terms are never changed', async () => {
 
 describe('windows', () => {
   it('are free while a van with a crew is, from the notice on', async () => {
-    const [today, ...later] = await windows();
+    const [today, ...later] = daysOf(await windows());
     expect(today?.windows).toMatchObject([
       { from: WINDOW, isFree: true, minutes: 90 },
       { from: '2026-05-14T18:30:00.000Z', isFree: true },
@@ -120,32 +60,16 @@ describe('windows', () => {
     // Nobody rides on the days after.
     expect(later.flatMap((day) => day.windows).filter(({ isFree }) => isFree)).toEqual([]);
     test.time.now = '2026-05-14T16:00:00.000Z';
-    expect((await windows())[0]?.windows).toHaveLength(1);
+    expect(daysOf(await windows())[0]?.windows).toHaveLength(1);
   });
 
   it('a place outside the area, a service that is not offered and a size that is not priced are said at the field', async () => {
-    const far = await test
-      .anonymous()
-      .post('/api/online-booking/windows')
-      .send(ask({ city: 'Elsewhere' }))
-      .expect(422);
+    const far = await windows({ city: 'Elsewhere' }).expect(422);
     expect(faultOf(far).fields?.['city']).toContain('Elsewhere');
-    await test
-      .anonymous()
-      .post('/api/online-booking/windows')
-      .send(ask({ city: 'x', postcode: '02000-1234' }))
-      .expect(200);
-    const size = await test
-      .anonymous()
-      .post('/api/online-booking/windows')
-      .send(ask({ sizeClass: 'van' }))
-      .expect(422);
+    await windows({ city: 'x', postcode: '02000-1234' }).expect(200);
+    const size = await windows({ sizeClass: 'van' }).expect(422);
     expect(faultOf(size).fields?.['serviceIds']).toContain('Wash and wax');
-    const bare = await test
-      .anonymous()
-      .post('/api/online-booking/windows')
-      .send(ask({ line: ' ' }))
-      .expect(400);
+    const bare = await windows({ line: ' ' }).expect(400);
     expect(faultOf(bare).fields).toEqual({ line: 'Give the street and number.' });
   });
 });
@@ -156,24 +80,24 @@ describe('a hold', () => {
     // Two vans, each with room for one wash that starts within the hour.
     expect(answers.map(({ status }) => status).sort()).toEqual([200, 200, 409, 409, 409, 409]);
     expect(faultOf(answers.find(({ status }) => status === 409)!).code).toBe('window_gone');
-    expect((await windows())[0]?.windows[0]?.isFree).toBe(false);
+    expect(daysOf(await windows())[0]?.windows[0]?.isFree).toBe(false);
   });
 
   it('is let go after ten minutes, and sooner for another time', async () => {
-    const id = holdIdOf(await hold().expect(200));
+    const id = await heldId();
     await hold().expect(200);
     await hold().expect(409);
     await hold({ insteadOf: id, from: '2026-05-14T18:30:00.000Z' }).expect(200);
     await hold().expect(200);
     test.time.now = '2026-05-14T15:10:00.000Z';
-    expect((await windows())[0]?.windows[0]?.isFree).toBe(true);
+    expect(daysOf(await windows())[0]?.windows[0]?.isFree).toBe(true);
     expect(faultOf(await prove(id).expect(409)).code).toBe('hold_over');
     await removeOverHolds(new Date(test.time.now));
     expect(await select('SELECT id FROM booking_holds')).toEqual([]);
   });
 
   it('is no job before the code is typed; five wrong ones end it', async () => {
-    const id = holdIdOf(await hold().expect(200));
+    const id = await heldId();
     await bookWith(id, '123456').expect(409);
     expect(faultOf(await prove(id, { policyVersion: 1 }).expect(409)).code).toBe('new_terms');
     await prove(id).expect(200);
@@ -186,7 +110,7 @@ describe('a hold', () => {
   });
 
   it('a program that fills in what nobody sees gets no mail', async () => {
-    const id = holdIdOf(await hold().expect(200));
+    const id = await heldId();
     await prove(id, { email: 'robot@mail.example', website: 'https://spam.example' }).expect(200);
     expect(await codeFor('robot@mail.example')).toBeUndefined();
   });
@@ -223,7 +147,7 @@ describe('a booked job', () => {
   });
 
   it('goes to Unplaced with its promise when dispatch has used up the places', async () => {
-    const id = holdIdOf(await hold().expect(200));
+    const id = await heldId();
     await prove(id).expect(200);
     await select(`UPDATE vans SET is_active = false`);
     const booked = (await bookWith(id, await codeFor(who.email)).expect(200)).body as { booked: { jobNumber: number } };
