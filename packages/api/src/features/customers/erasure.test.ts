@@ -10,6 +10,8 @@ import { jpegFile } from '@driprail/shared/domain/walk-round/testing/jpeg-file';
 import { queueMail } from '../../outbox/mails.ts';
 import { inTransaction, select } from '../../db/sequelize.ts';
 import { createJob } from '../booking/index.ts';
+import { sendDueMessages } from '../messages/index.ts';
+import { Enquiry } from '../../db/models/index.ts';
 import { useApp } from '../../testing/app.ts';
 import { aCompany, aCustomer, first } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
@@ -159,6 +161,13 @@ describe('an erasure', () => {
     await inTransaction((tx) =>
       queueMail(tx, new Date(app.time.now), { to: secrets.email, subject: SECRET, body: SECRET }),
     );
+    // What was written to the customer, with words and address, and what came back.
+    const afterUndo = new Date(Date.parse(app.time.now) + 600_000);
+    expect(await sendDueMessages(app.deliveries, () => afterUndo)).toBeGreaterThan(0);
+    await Enquiry.create({
+      ...{ id: uuid(), customerId: fresh.id, sender: SECRET, body: SECRET, providerKey: 'reply-1' },
+      receivedAt: afterUndo,
+    });
     const photos = async () =>
       (await readdir(join(app.dataDir, 'photos'), { recursive: true })).filter((name) => name.includes(photoId));
     expect(await photos()).toHaveLength(1);
