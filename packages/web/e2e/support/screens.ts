@@ -142,6 +142,7 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
   { name: 'customer-duplicates', role, path: '/customers', open: press(/^Likely duplicates/) },
   { name: 'customer-data', role, path: async (context) => `${await customerPath(context)}/data` },
   { name: 'due-again', role, path: '/due-again' },
+  { name: 'messages', role, path: '/messages' },
   { name: 'service-menu', role, path: '/service-menu' },
   { name: 'vans', role, path: '/vans' },
   { name: 'people', role, path: '/people' },
@@ -154,6 +155,7 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
 ]);
 
 const office: Screen[] = [
+  { name: 'message-words', role: 'owner', path: '/messages/words', open: press('Show how it reads') },
   { name: 'van', role: 'owner', path: '/vans', open: press('Edit Plover') },
   { name: 'person', role: 'owner', path: '/people', open: press('Edit') },
   { name: 'service', role: 'owner', path: '/service-menu', open: press('Edit') },

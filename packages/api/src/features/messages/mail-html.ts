@@ -26,7 +26,7 @@ export function mailHtml({ company, aside, subject, body, link, footer, stop }: 
     .join('');
   return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width, initial-scale=1"><title>${escaped(subject)}</title></head>
 <body style="margin:0;background:${GROUND}"><table ${TABLE} bgcolor="${GROUND}" style="background:${GROUND}"><tr><td align="center"><table ${TABLE} style="max-width:560px"><tr><td style="padding:18px 0 22px 18px">
-<table ${TABLE}><tr><td dir="auto" style="${HANG};font-size:28px;line-height:28px;color:${INK}">${escaped(company)}</td><td align="right" valign="bottom" style="${FACE};font-size:13px;line-height:17px;color:${INK_2};padding-right:18px">${escaped(aside)}</td></tr></table>
+<table ${TABLE}><tr><td dir="auto" style="${HANG};font-size:28px;line-height:28px;color:${INK}">${escaped(company)}</td><td align="right" valign="bottom" style="${FACE};font-size:13px;line-height:17px;color:${INK_2};padding:0 18px 0 12px;white-space:nowrap">${escaped(aside)}</td></tr></table>
 <table ${TABLE} style="margin-top:12px"><tr><td style="border-top:5px double ${INK};border-left:5px double ${INK};border-top-left-radius:28px;padding:16px 18px 6px 0"><table ${TABLE}><tr><td width="34" valign="top" style="width:34px;padding-top:10px"><div style="width:17px;height:17px;margin-left:-11px;border-radius:50%;background:${CLAY};font-size:0;line-height:0">&nbsp;</div></td><td dir="auto">
 <h1 style="${HANG};margin:0 0 12px;font-size:36px;line-height:36px;color:${INK}">${escaped(subject)}</h1>
 ${paragraphs}

@@ -1,5 +1,6 @@
 import { beforeAll, beforeEach, describe, expect, test } from 'vitest';
 import type TestAgent from 'supertest/lib/agent.js';
+import { v4 as uuid } from 'uuid';
 import { CompanySettings, Message } from '../../db/models/index.ts';
 import { inTransaction } from '../../db/sequelize.ts';
 import { NOON, useApp } from '../../testing/app.ts';
@@ -264,6 +265,27 @@ describe('what the time causes', () => {
     await dispatcher.post(`/api/jobs/${job.id}/invoice`).send({}).expect(200);
     await deliver();
     expect(first(mailsTo(who)).text).toContain('To pay: 240.00');
+    const pay = (key: string, amountCents: number) =>
+      dispatcher
+        .post(`/api/jobs/${job.id}/payments`)
+        .send({ key, method: 'check', amountCents, reference: '1043', deviceAt: app.time.now })
+        .expect(200);
+    await pay(uuid(), 14_000);
+    const paid = await pay(uuid(), 10_000);
+    await settle();
+    expect(mailsTo(who).filter(({ subject }) => subject.startsWith('Received: '))).toHaveLength(2);
+    const { payments, lines } = (paid.body as { bill: { payments: { id: string }[]; lines: { id: string }[] } }).bill;
+    await (
+      await company.owner()
+    )
+      .post(`/api/payments/${first(payments).id}/refunds`)
+      .send({
+        ...{ key: uuid(), kind: 'refund', amountCents: 2000, reasonId: null, note: 'A spot stayed' },
+        lines: [{ id: first(lines).id, netCents: 2000 }],
+      })
+      .expect(200);
+    await deliver();
+    expect(first(mailsTo(who)).subject).toBe('Given back: 20.00');
     later(4 * 3600);
     await queueTimely(now());
     await deliver();
