@@ -7,6 +7,7 @@ import { dayOf } from '@driprail/shared/domain/time/zone';
 import { Icon } from '../../../components/icon.tsx';
 import { Loaded } from '../../../components/states.tsx';
 import { money } from '../../../lib/format.ts';
+import { OwnBooking } from '../../online-booking/index.ts';
 import { customerPageQuery, usePayByCard } from '../api/customer-page.queries.ts';
 import { useLivePage } from '../api/use-live-page.ts';
 import { BillLines } from '../components/bill-lines.tsx';
@@ -74,6 +75,7 @@ function Page({ page, token, returned }: { page: CustomerPageDto; token: string;
           </p>
         ) : null}
         {mayPay ? <Pay page={page} token={token} returned={returned} /> : null}
+        {isOver ? null : <OwnBooking token={token} zone={page.zone} clock={page.clock} />}
         {isOver ? <CustomerFeedback key={page.feedback?.stars} token={token} given={page.feedback} /> : null}
       </div>
       {!mayPay && page.companyPhone ? (

@@ -6,18 +6,25 @@ import { CheckField, TextArea, TextField } from '../../../components/field.tsx';
 import { FormFault } from '../../../components/form-fault.tsx';
 import { fieldsOf } from '../../../lib/fields.ts';
 import { money, parseMoney } from '../../../lib/format.ts';
-import { useSaveOnlineSettings } from '../api/online-settings.queries.ts';
+import type { useSaveOnlineSettings } from '../api/online-settings.queries.ts';
 import { listOf, timesOf } from './lists.ts';
 import { policyWords } from './policy-words.ts';
 
 /** What strangers may book, where, when and on which terms. */
-export function OnlineSettingsForm({ settings, services }: { settings: OnlineSettingsDto; services: ServiceDto[] }) {
+export function OnlineSettingsForm({
+  settings,
+  services,
+  save,
+}: {
+  settings: OnlineSettingsDto;
+  services: ServiceDto[];
+  save: ReturnType<typeof useSaveOnlineSettings>;
+}) {
   const { policyVersion, ...known } = settings;
   const [value, setValue] = useState(known);
   const [places, setPlaces] = useState(settings.places.join(', '));
   const [starts, setStarts] = useState(settings.starts.join(', '));
   const [fee, setFee] = useState(money(settings.lateFeeCents));
-  const save = useSaveOnlineSettings();
   const fields = fieldsOf(save.error);
   const fault = (name: string) => Object.entries(fields).find(([path]) => path.split('.')[0] === name)?.[1];
   const feeCents = parseMoney(fee);

@@ -1,0 +1,1 @@
+export { OwnBooking } from './components/own-booking.tsx';
