@@ -155,7 +155,7 @@ const desk: Screen[] = (['owner', 'dispatcher'] as const).flatMap((role) => [
 ]);
 
 const office: Screen[] = [
-  { name: 'message-words', role: 'owner', path: '/messages/words', open: press('Show how it reads') },
+  { name: 'message-words', role: 'owner', path: '/messages/words' },
   { name: 'van', role: 'owner', path: '/vans', open: press('Edit Plover') },
   { name: 'person', role: 'owner', path: '/people', open: press('Edit') },
   { name: 'service', role: 'owner', path: '/service-menu', open: press('Edit') },
