@@ -1,3 +1,4 @@
+import { benchAvailability } from './availability.bench.ts';
 import { benchBoard } from './board.bench.ts';
 import { benchDrag } from './drag.bench.ts';
 import { benchHistory } from './history.bench.ts';
@@ -9,7 +10,8 @@ import { openStage } from './stage.ts';
 async function main(): Promise<void> {
   const stage = await openStage();
   try {
-    for (const bench of [() => benchBoard(stage), () => benchDrag(stage), benchPay]) print(await bench());
+    for (const bench of [() => benchBoard(stage), () => benchDrag(stage), benchPay, () => benchAvailability(stage)])
+      print(await bench());
   } finally {
     await stage.close();
   }

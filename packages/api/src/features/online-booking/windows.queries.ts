@@ -25,12 +25,12 @@ export async function readWindows(work: WantedWork, now: Date, own: Own = {}): P
   const hours = (day: string) => hoursOf(day, company);
   const { vans, promises } = await readVanDays(asked(first.day, last.day, company, now, own));
   const left = keepPromises(vans, promises, (instant) => hours(dayOf(instant, company.zone)));
+  const vansOn = byDay(left, company.zone);
   return days.map(({ day, windows }) => {
     const open = hours(day);
-    const near = left.map((van) => onDay(van, day, company.zone));
     return {
       day,
-      windows: openWindows(near, work, windows, open).map(({ from, to, place }) => ({
+      windows: openWindows(vansOn(day), work, windows, open).map(({ from, to, place }) => ({
         ...{ from, to, isFree: place !== null },
         minutes: place && minutesBetween(place.from, place.to),
       })),
@@ -104,9 +104,24 @@ function bookableDays(
     .filter(({ windows }) => windows.length > 0);
 }
 
-/** Only what touches a day is looked at for each of its windows. */
-function onDay(van: FreeVan, day: string, zone: string): FreeVan {
-  const { startsAt, endsAt } = dayBounds(day, zone);
-  const touches = (span: Span) => isBefore(span.from, endsAt) && isBefore(startsAt, span.to);
-  return { ...van, crew: van.crew.filter(touches), busy: van.busy.filter(touches) };
+/** What touches a day, and no more, is looked at for each of its windows; each instant is read once. */
+function byDay(vans: readonly FreeVan[], zone: string): (day: string) => FreeVan[] {
+  const read = vans.map((van) => ({ ...van, crew: van.crew.map(inTime), busy: van.busy.map(inTime) }));
+  return (day) => {
+    const { startsAt, endsAt } = dayBounds(day, zone);
+    const [start, end] = [Date.parse(startsAt), Date.parse(endsAt)];
+    const near = <T extends Span>(spans: Timed<T>[]) =>
+      spans.filter(({ begins, ends }) => begins < end && ends > start).map(({ span }) => span);
+    return read.map((van) => ({ ...van, crew: near(van.crew), busy: near(van.busy) }));
+  };
+}
+
+interface Timed<T extends Span> {
+  span: T;
+  begins: number;
+  ends: number;
+}
+
+function inTime<T extends Span>(span: T): Timed<T> {
+  return { span, begins: Date.parse(span.from), ends: Date.parse(span.to) };
 }
