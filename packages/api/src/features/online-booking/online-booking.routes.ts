@@ -42,7 +42,8 @@ const slowDown = (limit: number) =>
 export function onlineBookingRoutes(table: RouteTable, { geocoder, links }: OnlineBookingParts): void {
   table.router.post('/api/online-booking/windows', slowDown(60));
   table.router.post('/api/online-booking/holds', slowDown(20));
-  table.router.post('/api/online-booking/holds/:id/:step', slowDown(40));
+  const onHold = slowDown(40);
+  for (const { path } of [api.proveEmail, api.bookHeld]) table.router.post(path, onHold);
 
   publicRoute(table, api.getOnlineMenu, async (_input, now) => ({ menu: await readOnlineMenu(now()) }));
   publicRoute(table, api.findWindows, async ({ body }, now) => {
