@@ -174,6 +174,7 @@ const office: Screen[] = [
   },
   { name: 'settings', role: 'owner', path: '/settings' },
   { name: 'taxes', role: 'owner', path: '/settings/taxes' },
+  { name: 'online-booking', role: 'owner', path: '/settings/online-booking' },
   { name: 'logins', role: 'owner', path: '/logins' },
   { name: 'local-mail', role: 'owner', path: '/local-mail' },
 ];
@@ -184,6 +185,7 @@ const own: Screen[] = (['dispatcher', 'technician'] as const).flatMap((role) => 
 ]);
 
 const phone: Screen[] = [
+  { name: 'book', role: 'nobody', path: '/book', hasGrounds: true },
   { name: 'first-help', role: 'nobody', path: '/first-aid', hasGrounds: true },
   { name: 'run-sheet', role: 'technician', path: '/run-sheet', isPhoneOnly: true, hasGrounds: true },
   { name: 'run-sheet-tomorrow', role: 'technician', path: '/run-sheet/2026-05-15', isPhoneOnly: true },

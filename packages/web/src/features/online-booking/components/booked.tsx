@@ -17,7 +17,7 @@ export function Booked({
     <div className="book-leg">
       <div className="rail" />
       <i className="bead" aria-hidden />
-      <h1 className="t-hang">It is booked</h1>
+      <h2 className="t-hang">It is booked</h2>
       <p className="book-at">{formatSpan(booked.from, booked.to, zone, clock)}</p>
       <p className="pb-3">
         {formatDate(dayOf(booked.from, zone))}. We arrive within this window. Your job is number {booked.jobNumber}.

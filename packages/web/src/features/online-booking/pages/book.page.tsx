@@ -27,7 +27,7 @@ export function BookPage() {
         {({ menu }) => (
           <>
             <header className="book-top">
-              <p className="t-hang">{menu.companyName}</p>
+              <h1 className="t-hang">{menu.companyName}</h1>
             </header>
             {menu.isOn && menu.services.length > 0 ? <Booking menu={menu} /> : <Closed menu={menu} />}
           </>
@@ -42,7 +42,7 @@ function Closed({ menu: { companyPhone } }: { menu: OnlineMenuDto }) {
     <div className="book-leg">
       <div className="rail" />
       <i className="bead" aria-hidden />
-      <h1 className="t-hang">Call us to book</h1>
+      <h2 className="t-hang">Call us to book</h2>
       <p className="py-2">Booking online is closed just now.</p>
       {companyPhone ? (
         <a className="btn w-full" href={`tel:${companyPhone}`}>
