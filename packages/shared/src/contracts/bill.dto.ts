@@ -88,5 +88,7 @@ export const billDto = z.object({
   isDone: z.boolean(),
   /** Nothing was done and nothing is to come; only a fee can be billed. */
   isCalledOff: z.boolean(),
+  /** By the policy that the customer agreed to; nobody has billed it yet. */
+  proposedFeeCents: z.int().nullable(),
 });
 export type BillDto = z.infer<typeof billDto>;

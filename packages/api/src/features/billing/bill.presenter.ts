@@ -57,6 +57,7 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
     owedCents: owed,
     isDone: isOver(job),
     isCalledOff: isCalledOff(job),
+    proposedFeeCents: job.proposedFeeCents,
   };
 }
 

@@ -15,8 +15,8 @@ export interface JobRow {
   lines: { id: string; label: string; detail: string; taxClass: TaxClass; priceCents: number; isFinished: boolean }[];
   /** Visits that are still to come or under way. */
   openVisits: number;
-  /** When the server learned of the last finish. */
-  lastFinishAt: string | null;
+  /** What the policy asks for a call-off that the customer made late; null for none. */
+  proposedFeeCents: number | null;
 }
 
 /** A job as it would be billed; `lock` keeps two from billing it at once. */
@@ -31,8 +31,7 @@ export async function readJobRow(jobId: string, tx?: Transaction): Promise<JobRo
              WHERE l.job_id = j.id), '[]') AS lines,
             (SELECT count(*)::int FROM visits v WHERE v.job_id = j.id
                AND v.progress NOT IN ('part_done', 'done', 'called_off')) AS "openVisits",
-            (SELECT to_json(max(e.received_at)) #>> '{}' FROM visit_events e JOIN visits v ON v.id = e.visit_id
-              WHERE v.job_id = j.id AND e.kind IN ('finish', 'part_done') AND NOT e.is_undone) AS "lastFinishAt"
+            (SELECT nullif(o.proposed_fee_cents, 0) FROM online_bookings o WHERE o.job_id = j.id) AS "proposedFeeCents"
        FROM jobs j JOIN customers c ON c.id = j.customer_id JOIN addresses a ON a.id = j.address_id WHERE j.id = :jobId`,
     { jobId },
     tx,

@@ -14,7 +14,9 @@ import { useBillFee } from '../api/money.queries.ts';
 export function FeeForm({ bill, onDone }: { bill: BillDto; onDone: () => void }) {
   const fee = useBillFee(bill.jobId);
   const [kind, setKind] = useState<(typeof feeKinds)[number]>('late_call_off');
-  const [amount, setAmount] = useState('');
+  const [amount, setAmount] = useState(() =>
+    bill.proposedFeeCents === null ? '' : (bill.proposedFeeCents / 100).toFixed(2),
+  );
   const [taxClass, setTaxClass] = useState<TaxClass>('untaxed');
   const [note, setNote] = useState('');
   const [isUnread, setUnread] = useState(false);
@@ -50,6 +52,7 @@ export function FeeForm({ bill, onDone }: { bill: BillDto; onDone: () => void })
         </SelectField>
         <TextField
           label="Amount before tax"
+          hint={bill.proposedFeeCents === null ? undefined : 'What the customer was shown when calling off.'}
           inputMode="decimal"
           value={amount}
           error={isUnread ? 'Give an amount like 40.00.' : fields['amountCents']}
