@@ -88,6 +88,8 @@ export const billDto = z.object({
   isDone: z.boolean(),
   /** Nothing was done and nothing is to come; only a fee can be billed. */
   isCalledOff: z.boolean(),
+  /** What is asked before the work and has not come in yet. */
+  depositCents: z.int(),
   /** By the policy that the customer agreed to; nobody has billed it yet. */
   proposedFeeCents: z.int().nullable(),
 });

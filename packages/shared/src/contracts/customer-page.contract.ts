@@ -80,6 +80,8 @@ export const payByCard = endpoint({
   summary: 'The payment service’s page for what is owed, with a tip for the crew.',
   params: token,
   body: z.strictObject({
+    /** What is asked before the work, or all that is owed. */
+    part: z.enum(['deposit', 'all']).default('all'),
     tipCents: positiveCents.max(1_000_000, 'That tip looks like a slip. Give at most 10,000.'),
   }),
   response: z.object({ url: z.url() }),

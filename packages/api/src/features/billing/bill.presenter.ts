@@ -41,6 +41,8 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
     paidCents: sum(ledger.payments.map((payment) => payment.amountCents)),
     refundedCents: sum(ledger.payments.map((payment) => payment.refundedCents)),
   });
+  const kept = sum(ledger.payments.map((payment) => payment.amountCents - payment.refundedCents));
+  const isToCome = job.openVisits > 0 && !invoice;
   const netCents = sum(shown.lines.map((line) => line.priceCents - line.discountCents));
   return {
     ...{ jobId, jobNumber: job.jobNumber, customerId: job.customerId, customerName: job.customerName },
@@ -58,6 +60,7 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
     isDone: isOver(job),
     isCalledOff: isCalledOff(job),
     proposedFeeCents: job.proposedFeeCents,
+    depositCents: isToCome ? Math.max(0, Math.min(job.depositCents - kept, owed)) : 0,
   };
 }
 

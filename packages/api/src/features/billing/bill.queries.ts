@@ -15,6 +15,8 @@ export interface JobRow {
   lines: { id: string; label: string; detail: string; taxClass: TaxClass; priceCents: number; isFinished: boolean }[];
   /** Visits that are still to come or under way. */
   openVisits: number;
+  /** What the menu asks beforehand, of the lines' prices before tax. */
+  depositCents: number;
   /** What the policy asks for a call-off that the customer made late; null for none. */
   proposedFeeCents: number | null;
 }
@@ -31,6 +33,8 @@ export async function readJobRow(jobId: string, tx?: Transaction): Promise<JobRo
              WHERE l.job_id = j.id), '[]') AS lines,
             (SELECT count(*)::int FROM visits v WHERE v.job_id = j.id
                AND v.progress NOT IN ('part_done', 'done', 'called_off')) AS "openVisits",
+            (SELECT coalesce(sum(ceil(l.price_cents * s.deposit_percent / 100.0)), 0)::bigint FROM job_lines l
+               JOIN services s ON s.id = l.service_id WHERE l.job_id = j.id) AS "depositCents",
             (SELECT nullif(o.proposed_fee_cents, 0) FROM online_bookings o WHERE o.job_id = j.id) AS "proposedFeeCents"
        FROM jobs j JOIN customers c ON c.id = j.customer_id JOIN addresses a ON a.id = j.address_id WHERE j.id = :jobId`,
     { jobId },

@@ -6,6 +6,7 @@ import type { BillDto } from '@driprail/shared/contracts/bill.dto';
 import type { CustomerPageDto } from '@driprail/shared/contracts/customer-page.contract';
 import type { ErrorBody } from '@driprail/shared/contracts/error.contract';
 import { JobPaid, Photo, Tip } from '../../db/models/index.ts';
+import { select } from '../../db/sequelize.ts';
 import { storeFor } from '../../integrations/storage/index.ts';
 import { aCompany } from '../../testing/company.ts';
 import type { TestCompany } from '../../testing/company.ts';
@@ -249,6 +250,23 @@ describe('money back', () => {
     await refund(owner, payment?.id ?? '', { kind: 'mistake', amountCents: 10_000 }).expect(200);
     await refund(owner, payment?.id ?? '', { kind: 'mistake', amountCents: 10_000 }).expect(422);
     expect(await billOf(owner, job.id)).toMatchObject({ owedCents: 26_160 });
+  });
+});
+
+describe('a deposit', () => {
+  it('is asked by the menu’s percent until it has come in, and stands against the bill', async () => {
+    await select(`UPDATE services SET deposit_percent = 25 WHERE id = :id RETURNING id`, { id: company.wash.id });
+    const { job } = await company.aJob();
+    expect(await billOf(owner, job.id)).toMatchObject({ depositCents: 6000, owedCents: 26_160 });
+    const { url } = (await owner.post(`/api/jobs/${job.id}/pay-link`).expect(200)).body as { url: string };
+    const own = `/api/customer-pages/${url.split('/c/')[1]}`;
+    const card = await test.anonymous().post(`${own}/card`).send({ part: 'deposit', tipCents: 0 }).expect(200);
+    await test.press((card.body as { url: string }).url, 'pay');
+    await vi.waitFor(async () =>
+      expect(await billOf(owner, job.id)).toMatchObject({ depositCents: 0, owedCents: 20_160, invoice: null }),
+    );
+    await test.anonymous().post(`${own}/card`).send({ part: 'deposit', tipCents: 0 }).expect(422);
+    await select(`UPDATE services SET deposit_percent = 0 WHERE id = :id RETURNING id`, { id: company.wash.id });
   });
 });
 

@@ -13,6 +13,8 @@ import { billIfOver, lockJob } from './payments.service.ts';
 
 export interface CardAsk {
   jobId: string;
+  /** What is asked beforehand, or all that is owed. */
+  part: 'deposit' | 'all';
   /** For the crew, on top of what is owed. */
   tipCents: number;
   /** Where the customer comes back to. */
@@ -47,26 +49,29 @@ export async function openCardPage(payments: Payments, ask: CardAsk, by: By): Pr
   return { url: link.url };
 }
 
-function beginAttempt({ jobId, tipCents }: CardAsk, by: By) {
+function beginAttempt({ jobId, part, tipCents }: CardAsk, by: By) {
   return inTransaction(async (tx) => {
     const job = await lockJob(tx, jobId);
     await billIfOver(tx, jobId, by);
     const bill = await readBill(jobId, by.at, tx);
-    if (bill.owedCents <= 0) throw unprocessable('nothing_owed', `Nothing is owed on job ${job.number} any more.`);
+    const amountCents = part === 'deposit' ? bill.depositCents : bill.owedCents;
+    if (amountCents <= 0) throw unprocessable('nothing_owed', `Nothing is owed on job ${job.number} any more.`);
     const open = await CardAttempt.findAll({ where: { jobId, state: 'open' }, transaction: tx });
     const isSame = (one: CardAttempt) =>
-      one.amountCents === bill.owedCents &&
+      one.amountCents === amountCents &&
       one.tipCents === tipCents &&
       by.at.getTime() - one.createdAt.getTime() < LINK_LIVES_MS;
     const same = open.find(isSame);
     const attempt =
       same ??
       (await CardAttempt.create(
-        { id: uuid(), jobId, amountCents: bill.owedCents, tipCents, createdAt: by.at, createdBy: by.userId },
+        { id: uuid(), jobId, amountCents, tipCents, createdAt: by.at, createdBy: by.userId },
         { transaction: tx },
       ));
     if (!same) await audit(tx, by, 'card_attempt', attempt.id, 'opened', { jobNumber: job.number, tipCents });
-    const what = bill.invoice ? `Invoice ${bill.invoice.number}` : `Job ${job.number}`;
+    const what = bill.invoice
+      ? `Invoice ${bill.invoice.number}`
+      : `${part === 'deposit' ? 'Deposit for job' : 'Job'} ${job.number}`;
     return {
       ...{ attempt, outdated: open.filter((one) => one !== same) },
       label: `${what}, ${(await companyOf(tx)).name}`,

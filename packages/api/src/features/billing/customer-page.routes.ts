@@ -41,7 +41,11 @@ export function customerPageRoutes(table: RouteTable, { links, payments, store, 
   publicRoute(table, api.payByCard, async ({ params, body }, now, { req }) => {
     const jobId = await jobOf(params.token, now());
     const returnUrl = `${pageUrl(req, params.token)}?returned=true`;
-    return openCardPage(payments, { jobId, tipCents: body.tipCents, returnUrl }, { userId: null, at: now() });
+    return openCardPage(
+      payments,
+      { jobId, part: body.part, tipCents: body.tipCents, returnUrl },
+      { userId: null, at: now() },
+    );
   });
   publicRoute(table, api.giveFeedback, async ({ params, body }, now) => {
     await giveFeedback(await jobOf(params.token, now()), body, now());

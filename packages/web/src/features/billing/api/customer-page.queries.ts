@@ -16,7 +16,8 @@ export const customerPageQuery = (token: string, returned: boolean) =>
 /** Goes to the payments service's own page. */
 export function usePayByCard(token: string) {
   return useMutation({
-    mutationFn: (tipCents: number) => call(payByCard, { params: { token }, body: { tipCents } }),
+    mutationFn: (ask: { part: 'deposit' | 'all'; tipCents: number }) =>
+      call(payByCard, { params: { token }, body: ask }),
     onSuccess: ({ url }) => window.location.assign(url),
     // What is owed may have changed on another tab.
     onError: (_e, _v, _r, { client }) => client.invalidateQueries({ queryKey: ['customer-page', token] }),

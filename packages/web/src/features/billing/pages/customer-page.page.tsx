@@ -78,13 +78,43 @@ function Page({ page, token, returned }: { page: CustomerPageDto; token: string;
         {isOver ? null : <OwnBooking token={token} zone={page.zone} clock={page.clock} />}
         {isOver ? <CustomerFeedback key={page.feedback?.stars} token={token} given={page.feedback} /> : null}
       </div>
-      {!mayPay && page.companyPhone ? (
+      {!mayPay && bill.depositCents > 0 ? <PayDeposit page={page} token={token} /> : null}
+      {!mayPay && bill.depositCents === 0 && page.companyPhone ? (
         <footer className="ph-act">
           <a className="btn w-full" href={`tel:${page.companyPhone}`}>
             <Icon name="phone" /> Call us
           </a>
         </footer>
       ) : null}
+    </>
+  );
+}
+
+/** What is asked before the work; the rest is paid when it is done. */
+function PayDeposit({ page, token }: { page: CustomerPageDto; token: string }) {
+  const pay = usePayByCard(token);
+  const { depositCents } = page.bill;
+  return (
+    <>
+      {pay.error ? (
+        <p className="tape my-2" role="alert">
+          <b>{pay.error.message}</b>
+        </p>
+      ) : null}
+      <footer className="ph-act cust-pay">
+        <dl>
+          <dt>Deposit</dt>
+          <dd>{money(depositCents)}</dd>
+        </dl>
+        <button
+          type="button"
+          className="ph-main seal"
+          disabled={pay.isPending || pay.isSuccess}
+          onClick={() => pay.mutate({ part: 'deposit', tipCents: 0 })}
+        >
+          {pay.isPending || pay.isSuccess ? 'Opening' : 'Pay deposit'}
+        </button>
+      </footer>
     </>
   );
 }
@@ -122,7 +152,7 @@ function Pay({ page, token, returned }: { page: CustomerPageDto; token: string; 
           type="button"
           className="ph-main seal"
           disabled={tipCents === null || pay.isPending || pay.isSuccess}
-          onClick={() => pay.mutate(tipCents ?? 0)}
+          onClick={() => pay.mutate({ part: 'all', tipCents: tipCents ?? 0 })}
         >
           {pay.isPending || pay.isSuccess ? 'Opening' : 'Pay by card'}
         </button>
