@@ -6,14 +6,14 @@ import type { RunVisitDto } from '@driprail/shared/contracts/run-sheet.contract'
 import { paths } from '../../../app/paths.ts';
 import { Mark } from '../../../components/icon.tsx';
 import { PhonePageHead } from '../../../components/phone-page-head.tsx';
-import { Empty, Loaded } from '../../../components/states.tsx';
+import { Loaded } from '../../../components/states.tsx';
 import { money, useFormats } from '../../../lib/format.ts';
 import type { KeptPress } from '../../../lib/outbox/store.ts';
 import { useOutbox } from '../../../lib/outbox/outbox.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { useIsLive } from '../../../lib/socket.ts';
 import { useOnline } from '../../../lib/use-online.ts';
-import { OutboxLine, runSheetQuery } from '../../run-sheet/index.ts';
+import { NotYours, OutboxLine, runSheetQuery } from '../../run-sheet/index.ts';
 import { dayBillsQuery } from '../api/collect.queries.ts';
 import { BillLines } from '../components/bill-lines.tsx';
 import { CollectCard } from '../components/collect-card.tsx';
@@ -37,21 +37,10 @@ export function CollectPage() {
       <Loaded query={sheet} what="the job">
         {({ visits }) => {
           const visit = visits.find((one) => one.id === visitId);
-          return visit ? <Bill visit={visit} day={day} isOnline={isOnline} /> : <Gone />;
+          return visit ? <Bill visit={visit} day={day} isOnline={isOnline} /> : <NotYours />;
         }}
       </Loaded>
     </main>
-  );
-}
-
-function Gone() {
-  return (
-    <>
-      <h1 className="t-hang">Not yours</h1>
-      <Empty>
-        This visit is not on your run sheet any more. <Link to={paths.runSheet}>Back to the run sheet</Link>
-      </Empty>
-    </>
   );
 }
 
@@ -66,7 +55,7 @@ function Bill({ visit, day, isOnline }: { visit: RunVisitDto; day: string; isOnl
       <Loaded query={query} what="the bill">
         {({ bills }) => {
           const bill = bills.find((one) => one.jobId === visit.jobId);
-          return bill ? <Collect bill={bill} visit={visit} day={day} isOnline={isOnline} /> : <Gone />;
+          return bill ? <Collect bill={bill} visit={visit} day={day} isOnline={isOnline} /> : <NotYours />;
         }}
       </Loaded>
     </>

@@ -5,13 +5,13 @@ import { progressNames } from '@driprail/shared/domain/board/progress';
 import { minutesBetween } from '@driprail/shared/domain/time/zone';
 import { paths } from '../../../app/paths.ts';
 import { PhonePageHead } from '../../../components/phone-page-head.tsx';
-import { Empty, Loaded } from '../../../components/states.tsx';
+import { Loaded } from '../../../components/states.tsx';
 import { useNow } from '../../../lib/now.ts';
 import { useOutbox } from '../../../lib/outbox/outbox.ts';
 import { useSession } from '../../../lib/session.tsx';
 import { useIsLive } from '../../../lib/socket.ts';
 import { useOnline } from '../../../lib/use-online.ts';
-import { OutboxLine } from '../../run-sheet/index.ts';
+import { NotYours, OutboxLine } from '../../run-sheet/index.ts';
 import { dayWorkQuery } from '../api/work.queries.ts';
 import { ChangePart } from '../components/change-part.tsx';
 import { DonePart } from '../components/done-part.tsx';
@@ -42,22 +42,11 @@ export function WorkPage() {
           return work ? (
             <Work data={data} work={work} part={parts.find((one) => one.part === part)?.part ?? 'steps'} />
           ) : (
-            <Gone />
+            <NotYours />
           );
         }}
       </Loaded>
     </main>
-  );
-}
-
-function Gone() {
-  return (
-    <>
-      <h1 className="t-hang">Not yours</h1>
-      <Empty>
-        This visit is not on your run sheet any more. <Link to={paths.runSheet}>Back to the run sheet</Link>
-      </Empty>
-    </>
   );
 }
 
