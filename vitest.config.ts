@@ -15,6 +15,7 @@ export default defineConfig({
             'packages/api/bin/lib/*.test.mjs',
             'seed/**/*.test.ts',
           ],
+          setupFiles: ['packages/shared/src/testing/same-draws.setup.ts'],
           testTimeout: 20_000,
         },
       },
