@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { billDto } from './bill.dto.ts';
+import { billDto, billPaymentDto } from './bill.dto.ts';
 import { endpoint } from './endpoint.ts';
 import { bytes, done, id, instant, positiveCents } from './fields.ts';
 import { progressStates } from '../domain/board/progress.ts';
@@ -35,7 +35,10 @@ export const customerPageDto = z.object({
   expectedAt: instant.nullable(),
   vanName: z.string(),
   crewNames: z.array(z.string()),
-  bill: billDto.omit({ customerId: true, billTo: true, refunds: true }),
+  /** Who took a payment stays with the company. */
+  bill: billDto
+    .omit({ customerId: true, billTo: true, refunds: true })
+    .extend({ payments: z.array(billPaymentDto.omit({ by: true, reference: true })) }),
   /** What was given to the crew so far. */
   tipCents: z.int(),
   /** A payment page is open, or has just been left: the money may be under way. */

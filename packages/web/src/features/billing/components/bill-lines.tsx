@@ -7,8 +7,8 @@ import './bill-lines.css';
 
 type Shown = Pick<
   BillDto,
-  'lines' | 'discountCents' | 'discountReason' | 'taxes' | 'payments' | 'creditNotes' | 'owedCents' | 'totalCents'
->;
+  'lines' | 'discountCents' | 'discountReason' | 'taxes' | 'creditNotes' | 'owedCents' | 'totalCents'
+> & { payments: Omit<BillDto['payments'][number], 'by' | 'reference'>[] };
 
 /** A bill as a customer reads it: what was done, tax, what was paid, what is to pay. */
 export function BillLines({ bill, zone, waitingCents = 0 }: { bill: Shown; zone: string; waitingCents?: number }) {
