@@ -33,15 +33,14 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
   const [invoice, ledger] = [await readInvoiceRow(jobId, tx), await readLedger(jobId, tx)];
   const shown = invoice ?? (await draftOf(job, today, tx));
   const sum = (values: number[]): number => values.reduce((total, value) => total + value, 0);
-  const credited = sum(ledger.creditNotes.map((note) => note.totalCents));
+  const creditedCents = sum(ledger.creditNotes.map((note) => note.totalCents));
+  const paidCents = sum(ledger.payments.map((payment) => payment.amountCents));
+  const refundedCents = sum(ledger.payments.map((payment) => payment.refundedCents));
   const owed = owedCents({
     // A draft counts as if it were billed, so that a deposit already shows against it.
     invoicedCents: ledger.invoicedCents + (invoice || isCalledOff(job) ? 0 : shown.totalCents),
-    creditedCents: credited,
-    paidCents: sum(ledger.payments.map((payment) => payment.amountCents)),
-    refundedCents: sum(ledger.payments.map((payment) => payment.refundedCents)),
+    ...{ creditedCents, paidCents, refundedCents },
   });
-  const kept = sum(ledger.payments.map((payment) => payment.amountCents - payment.refundedCents));
   const isToCome = job.openVisits > 0 && !invoice;
   const netCents = sum(shown.lines.map((line) => line.priceCents - line.discountCents));
   return {
@@ -54,13 +53,13 @@ export async function readBill(jobId: string, now: Date, tx?: Transaction): Prom
     netCents,
     taxCents: sum(shown.taxes.map((tax) => tax.taxCents)),
     totalCents: shown.totalCents,
-    creditedCents: credited,
+    creditedCents,
     ...{ payments: ledger.payments, refunds: ledger.refunds, creditNotes: ledger.creditNotes },
     owedCents: owed,
     isDone: isOver(job),
     isCalledOff: isCalledOff(job),
     proposedFeeCents: job.proposedFeeCents,
-    depositCents: isToCome ? Math.max(0, Math.min(job.depositCents - kept, owed)) : 0,
+    depositCents: isToCome ? Math.max(0, Math.min(job.depositCents - (paidCents - refundedCents), owed)) : 0,
   };
 }
 

@@ -3,6 +3,9 @@ import type { BillDto, BillTo } from '@driprail/shared/contracts/bill.dto';
 import type { TaxClass, TaxRate } from '@driprail/shared/domain/billing/tax-rates';
 import { select } from '../../db/sequelize.ts';
 
+/** A visit `v` that is still to come or under way. */
+export const isOpenVisit = `v.progress NOT IN ('part_done', 'done', 'called_off')`;
+
 export interface JobRow {
   jobId: string;
   jobNumber: number;
@@ -21,7 +24,7 @@ export interface JobRow {
   proposedFeeCents: number | null;
 }
 
-/** A job as it would be billed; `lock` keeps two from billing it at once. */
+/** A job as it would be billed. */
 export async function readJobRow(jobId: string, tx?: Transaction): Promise<JobRow | null> {
   const [row] = await select<JobRow>(
     `SELECT j.id AS "jobId", j.number AS "jobNumber", c.id AS "customerId", c.name AS "customerName",
@@ -31,8 +34,7 @@ export async function readJobRow(jobId: string, tx?: Transaction): Promise<JobRo
                 'taxClass', s.tax_class, 'priceCents', l.price_cents, 'isFinished', l.finished_at IS NOT NULL) ORDER BY l.position, l.id)
               FROM job_lines l JOIN services s ON s.id = l.service_id LEFT JOIN vehicles w ON w.id = l.vehicle_id
              WHERE l.job_id = j.id), '[]') AS lines,
-            (SELECT count(*)::int FROM visits v WHERE v.job_id = j.id
-               AND v.progress NOT IN ('part_done', 'done', 'called_off')) AS "openVisits",
+            (SELECT count(*)::int FROM visits v WHERE v.job_id = j.id AND ${isOpenVisit}) AS "openVisits",
             (SELECT coalesce(sum(ceil(l.price_cents * s.deposit_percent / 100.0)), 0)::bigint FROM job_lines l
                JOIN services s ON s.id = l.service_id WHERE l.job_id = j.id) AS "depositCents",
             (SELECT nullif(o.proposed_fee_cents, 0) FROM online_bookings o WHERE o.job_id = j.id) AS "proposedFeeCents"

@@ -1,11 +1,13 @@
-import type { CustomerPageDto } from '@driprail/shared/contracts/customer-page.contract';
+import type { CustomerPageDto, CustomerPhotoDto } from '@driprail/shared/contracts/customer-page.contract';
+import { isEnded } from '@driprail/shared/domain/board/progress';
 import { dayOf } from '@driprail/shared/domain/time/zone';
 import { companyOf } from '../../db/company.ts';
 import { select } from '../../db/sequelize.ts';
 import { notFound } from '../../http/errors.ts';
 import { readVisits } from '../board/index.ts';
 import { listCustomerPhotos } from '../walk-round/index.ts';
-import { readBill } from './bill.presenter.ts';
+import { isOver, readBill } from './bill.presenter.ts';
+import { readJobRow } from './bill.queries.ts';
 
 type Visits = Awaited<ReturnType<typeof readVisits>>;
 
@@ -16,7 +18,7 @@ export async function readCustomerPage(jobId: string, now: Date): Promise<Custom
     readBill(jobId, now),
     readVisits({ jobId }),
     readExtras(jobId),
-    listCustomerPhotos(jobId),
+    readShownPhotos(jobId),
   ]);
   const visit = shownVisit(visits);
   if (!visit || !extras) throw notFound('That page');
@@ -31,14 +33,20 @@ export async function readCustomerPage(jobId: string, now: Date): Promise<Custom
     vanName: extras.vans[visit.vanId ?? ''] ?? '',
     crewNames: visit.crew.map((person) => person.name.split(/\s+/)[0] ?? ''),
     bill: shownBill,
-    photos: bill.isDone ? photos : [],
+    photos,
     ...{ tipCents: extras.tipCents, isPaying: extras.isPaying, feedback: extras.feedback },
   };
 }
 
+/** Before and after come with the work done: earlier, they are the crew's record alone. */
+export async function readShownPhotos(jobId: string): Promise<CustomerPhotoDto[]> {
+  const job = await readJobRow(jobId);
+  return job && isOver(job) ? listCustomerPhotos(jobId) : [];
+}
+
 /** The one under way, else the next to come, else the last. */
 function shownVisit(visits: Visits): Visits[number] | undefined {
-  const open = visits.filter((visit) => !['part_done', 'done', 'called_off'].includes(visit.progress));
+  const open = visits.filter((visit) => !isEnded(visit.progress));
   const underWay = open.find((visit) => ['on_the_way', 'on_site', 'working'].includes(visit.progress));
   const next = open.toSorted((a, b) => (a.from ?? '9').localeCompare(b.from ?? '9'))[0];
   return underWay ?? next ?? visits.at(-1);

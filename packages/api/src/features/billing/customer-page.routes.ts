@@ -6,7 +6,7 @@ import { okay, publicRoute } from '../../http/route.ts';
 import { readCustomerPhoto } from '../walk-round/index.ts';
 import { openCardPage } from './card.service.ts';
 import type { BillingParts } from './billing-parts.ts';
-import { readCustomerPage } from './customer-page.queries.ts';
+import { readCustomerPage, readShownPhotos } from './customer-page.queries.ts';
 import { giveFeedback } from './feedback.service.ts';
 import { readInvoicePdf } from './invoice-pdf.ts';
 import { lookUpOpenPages } from './payment-events.service.ts';
@@ -31,8 +31,7 @@ export function customerPageRoutes(table: RouteTable, { links, payments, store, 
   );
   publicRoute(table, api.getCustomerPhoto, async ({ params }, now, { res }) => {
     const jobId = await jobOf(params.token, now());
-    // Photos come with the work done: before, they are the crew's record alone.
-    const { photos } = await readCustomerPage(jobId, now());
+    const photos = await readShownPhotos(jobId);
     if (!photos.some((photo) => photo.id === params.id)) throw notFound('That photo');
     res.setHeader('cache-control', 'private, no-cache');
     res.setHeader('content-security-policy', "default-src 'none'; sandbox");

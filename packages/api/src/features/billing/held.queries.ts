@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import type { listHeld as contract } from '@driprail/shared/contracts/billing.contract';
 import { select } from '../../db/sequelize.ts';
+import { isOpenVisit } from './bill.queries.ts';
 
 type Held = z.infer<(typeof contract)['response']>['held'];
 
@@ -12,7 +13,7 @@ export function moneyHeld(): Promise<Held> {
       CROSS JOIN LATERAL (SELECT coalesce(sum(r.amount_cents), 0) AS cents FROM refunds r
                            WHERE r.payment_id = p.id AND r.state <> 'failed') back
       WHERE NOT EXISTS (SELECT 1 FROM invoices i WHERE i.job_id = j.id AND i.voided_at IS NULL)
-        AND NOT EXISTS (SELECT 1 FROM visits v WHERE v.job_id = j.id AND v.progress NOT IN ('part_done', 'done', 'called_off'))
+        AND NOT EXISTS (SELECT 1 FROM visits v WHERE v.job_id = j.id AND ${isOpenVisit})
         AND NOT EXISTS (SELECT 1 FROM job_lines l WHERE l.job_id = j.id AND l.finished_at IS NOT NULL)
       GROUP BY j.id, c.name HAVING sum(p.amount_cents - back.cents) > 0 ORDER BY j.number`,
   );

@@ -5,7 +5,7 @@ import { notFound, unprocessable } from '../../http/errors.ts';
 import { hintAfterCommit } from '../../realtime/hints.ts';
 import { queueMessage } from '../messages/index.ts';
 import { billableLines, isOver } from './bill.presenter.ts';
-import { readJobRow } from './bill.queries.ts';
+import { isOpenVisit, readJobRow } from './bill.queries.ts';
 import { noteIfPaid } from './note-paid.ts';
 import type { By } from './note-paid.ts';
 import { writeInvoice } from './write-invoice.ts';
@@ -40,7 +40,7 @@ export async function issueDueInvoices(now: Date): Promise<number> {
     `SELECT j.id AS "jobId" FROM jobs j CROSS JOIN company_settings s
       WHERE j.call_back_of IS NULL AND EXISTS (SELECT 1 FROM job_lines l WHERE l.job_id = j.id AND l.finished_at >= s.bills_from)
         AND NOT EXISTS (SELECT 1 FROM invoices i WHERE i.job_id = j.id)
-        AND NOT EXISTS (SELECT 1 FROM visits v WHERE v.job_id = j.id AND v.progress NOT IN ('part_done', 'done', 'called_off'))
+        AND NOT EXISTS (SELECT 1 FROM visits v WHERE v.job_id = j.id AND ${isOpenVisit})
         AND NOT EXISTS (SELECT 1 FROM visit_events e JOIN visits v ON v.id = e.visit_id WHERE v.job_id = j.id
               AND e.kind IN ('finish', 'part_done') AND NOT e.is_undone
               AND e.received_at > :now::timestamptz - make_interval(secs => s.undo_seconds))
